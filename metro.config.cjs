@@ -1,0 +1,21 @@
+const path = require('node:path');
+
+const { getDefaultConfig } = require('expo/metro-config');
+
+const config = getDefaultConfig(__dirname);
+const zodLocales = path.resolve(__dirname, 'shared/ui/theme/stubs/zodLocales.js');
+const paperIcon = path.resolve(__dirname, 'shared/ui/theme/PaperIcon.tsx');
+
+config.resolver.resolveRequest = (context, moduleName, platform) => {
+  // zod re-exports every language as a namespace; only English is used, and the rest is 40 KB gzipped
+  if (moduleName === '../locales/index.js' && /[\\/]zod[\\/]v4[\\/]/.test(context.originModulePath)) {
+    return { type: 'sourceFile', filePath: zodLocales };
+  }
+  // Paper asks for an icon font by this name; it gets our own drawn icons and ships no font
+  if (moduleName === '@react-native-vector-icons/material-design-icons') {
+    return { type: 'sourceFile', filePath: paperIcon };
+  }
+  return context.resolveRequest(context, moduleName, platform);
+};
+
+module.exports = config;

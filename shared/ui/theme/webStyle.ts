@@ -1,0 +1,12 @@
+/** Styles and attributes that exist only on the web, typed for React Native's components. */
+import type { ViewStyle } from 'react-native';
+
+/** Style properties that react-native-web passes on and React Native's types do not name. */
+export function webStyle(style: Record<string, string | number>): ViewStyle {
+  return style;
+}
+
+/** Attributes (`data-…`, events) that react-native-web passes on and React Native's types do not name. */
+export function webProps(props: Record<string, unknown>): object {
+  return props;
+}
