@@ -116,7 +116,7 @@ export const profileShape = z.strictObject({
   supplyKind: z.enum(['linear', 'switched-from-raw', 'switch-mode']),
   mains,
   /** the raw node that a bench supply can feed */
-  raw: z.strictObject({ name, volts: positive, ratedAmps: positive }).nullable(),
+  raw: z.strictObject({ name, volts: positive, ratedAmps: positive, point: idSchema }).nullable(),
   sources: z.array(otherSource).max(8),
   rails: z.array(rail).min(1).max(16),
   conductors: z.array(conductor).max(64),
@@ -129,6 +129,8 @@ export const profileShape = z.strictObject({
   }),
   heatsinks: z.array(heatsink).max(32),
   points: z.array(point).max(128),
+  /** the point that the black probe goes to when a step does not name one */
+  zeroPoint: idSchema,
   /** least load of a switch-mode supply, a rail at a time */
   minimumLoad: z.array(z.strictObject({ rail: idSchema, amps: positive })).max(16),
   hazards: z.array(z.enum(['crt', 'beryllium-oxide', 'pcb', 'selenium', 'asbestos', 'mercury', 'x-ray', 'lead-solder', 'heavy'])).max(9),
@@ -169,6 +171,8 @@ export const profileSchema = profileShape.superRefine((p, ctx) => {
     b.draws.forEach((d, j) => wantRail(d.rail, ['boards', 'fitted', i, 'draws', j, 'rail']));
     wantRail(b.biasFirst, ['boards', 'fitted', i, 'biasFirst']);
   });
+  if (!points.has(p.zeroPoint)) ctx.addIssue({ code: 'custom', path: ['zeroPoint'], message: `no point "${p.zeroPoint}"` });
+  if (p.raw && !points.has(p.raw.point)) ctx.addIssue({ code: 'custom', path: ['raw', 'point'], message: `no point "${p.raw.point}"` });
   p.stores.forEach((s, i) => {
     if (!points.has(s.point)) ctx.addIssue({ code: 'custom', path: ['stores', i, 'point'], message: `no point "${s.point}"` });
     if (s.voltsWorked > s.voltsRated) ctx.addIssue({ code: 'custom', path: ['stores', i, 'voltsWorked'], message: 'works above its rating' });
@@ -189,4 +193,26 @@ export function sourceIds(profile: Profile): string[] {
 /** Rails whose over-voltage trip has to be proved. */
 export function tripRails(profile: Profile): Rail[] {
   return profile.rails.filter((r) => r.trip !== null);
+}
+
+/** Names by which a tree speaks of points that every profile has, so that it fits any machine. */
+export const GENERIC_POINTS = ['each-rail', 'each-return', 'each-store', 'zero', 'raw'] as const;
+
+/** The point of the profile that a tree names, generic names included; `row` is the row's own id. Null when the profile has none. */
+export function resolvePoint(profile: Profile, name: string, row: string | null): Point | null {
+  const byId = (id: string | undefined) => profile.points.find((p) => p.id === id) ?? null;
+  switch (name) {
+    case 'each-rail':
+      return profile.points.find((p) => p.rail !== null && p.rail === row) ?? null;
+    case 'each-store':
+      return byId(profile.stores.find((s) => s.id === row)?.point);
+    case 'each-return':
+      return null;
+    case 'zero':
+      return byId(profile.zeroPoint);
+    case 'raw':
+      return byId(profile.raw?.point);
+    default:
+      return byId(name);
+  }
 }
