@@ -1,0 +1,119 @@
+/** The common form of every bench calculation: typed inputs in SI, one answer line, its formula with the numbers in it. */
+import { z } from 'zod';
+
+import { formatQuantity } from '@/shared/quantity/formatQuantity';
+import type { Unit } from '@/shared/quantity/units';
+import { UNITS } from '@/shared/quantity/units';
+
+/** What a form needs to know about one input besides its schema; read it with `fieldInfo`. */
+export interface FieldInfo {
+  readonly title: string;
+  readonly description: string;
+  /** Null for a plain number, a choice or a yes/no. */
+  readonly unit: Unit | null;
+}
+
+/** A worked answer. Nothing in `result` is rounded. */
+export interface SheetAnswer<Result> {
+  readonly ok: true;
+  readonly result: Result;
+  /** The answer in one big line. */
+  readonly headline: string;
+  /** The formulas with the numbers in them, one a line. */
+  readonly formula: readonly string[];
+  readonly caution?: string;
+  readonly validity: string;
+  readonly source: string;
+}
+
+/** A refused input: the field that it belongs to and a sentence for the person who typed it. */
+export interface SheetRefusal {
+  readonly ok: false;
+  readonly field: string;
+  readonly say: string;
+}
+
+/** One bench calculation. */
+export interface Sheet<Inputs extends z.ZodObject = z.ZodObject, Result = unknown> {
+  readonly id: string;
+  readonly title: string;
+  /** The question that it answers, in one sentence. */
+  readonly question: string;
+  readonly inputs: Inputs;
+  /** The formulas in symbols, one a line. */
+  readonly law: readonly string[];
+  readonly validity: string;
+  readonly source: string;
+  readonly caution: string;
+  /** What its numbers were held against outside the project, one a line. */
+  readonly checks: readonly string[];
+  /** A sensible set of inputs, for the first look at the sheet and for its page. */
+  readonly example: z.input<Inputs>;
+  compute(inputs: z.output<Inputs>): SheetAnswer<Result> | SheetRefusal;
+}
+
+/** Keeps the exact types of a sheet while checking that it has the common form. */
+export function defineSheet<Inputs extends z.ZodObject, Result>(sheet: Sheet<Inputs, Result>): Sheet<Inputs, Result> {
+  return sheet;
+}
+
+interface NumberFieldOptions {
+  readonly title: string;
+  readonly description: string;
+  readonly unit: Unit | null;
+  readonly min: number;
+  readonly max: number;
+  /** True when `min` itself is refused, as with "more than zero". */
+  readonly aboveMin?: boolean;
+}
+
+const show = (value: number, unit: Unit | null): string => (unit === null ? String(value) : formatQuantity(value, unit, { digits: 6 }));
+
+/**
+ * A number in SI with its bounds said in a sentence.
+ * @returns a schema whose every refusal names the field and what it takes
+ */
+export function numberField(options: NumberFieldOptions): z.ZodNumber {
+  const { title, description, unit, min, max, aboveMin = false } = options;
+  const inUnit = unit === null ? '' : ` in ${UNITS[unit].plural}`;
+  const low = aboveMin ? `${title} must be more than ${show(min, unit)}.` : `${title} must be ${show(min, unit)} or more.`;
+  const number = z.number({ error: (issue) => (issue.input === undefined ? `${title} is missing.` : `${title} must be a number${inUnit}.`) });
+  const bounded = aboveMin ? number.gt(min, low) : number.gte(min, low);
+  return bounded.lte(max, `${title} must be ${show(max, unit)} or less.`).meta({ title, description, unit });
+}
+
+/** One of a few named choices, with a sentence that lists them. */
+export function choiceField<const Choice extends readonly [string, ...string[]]>(
+  title: string,
+  description: string,
+  choices: Choice,
+): z.ZodEnum<{ [K in Choice[number]]: K }> {
+  return z.enum(choices, `${title} must be one of: ${choices.join(', ')}.`).meta({ title, description, unit: null });
+}
+
+/** Title, description and unit of every input of a sheet, in the order of its form. */
+export function fieldsOf(inputs: z.ZodObject): readonly (readonly [string, FieldInfo])[] {
+  return Object.entries(inputs.shape).map(([name, schema]) => {
+    const meta = z.globalRegistry.get(schema as z.ZodType) ?? {};
+    const unit = typeof meta['unit'] === 'string' && meta['unit'] in UNITS ? (meta['unit'] as Unit) : null;
+    return [name, { title: meta.title ?? name, description: meta.description ?? '', unit }] as const;
+  });
+}
+
+/**
+ * Parses raw inputs and works the sheet out.
+ * @param input anything: a form's values, a query string's, a JSON file's
+ * @returns the answer, or the first field that is wrong with a sentence
+ */
+export function runSheet<Inputs extends z.ZodObject, Result>(sheet: Sheet<Inputs, Result>, input: unknown): SheetAnswer<Result> | SheetRefusal {
+  const parsed = sheet.inputs.safeParse(input);
+  if (parsed.success) return sheet.compute(parsed.data);
+  const [issue] = parsed.error.issues;
+  if (issue === undefined) return { ok: false, field: '', say: 'The inputs cannot be read.' };
+  if (issue.code === 'unrecognized_keys') {
+    const [key = ''] = issue.keys;
+    return { ok: false, field: key, say: `${sheet.title} has no input “${key}”.` };
+  }
+  const field = issue.path.map(String).join('.');
+  return { ok: false, field, say: field === '' ? `${sheet.title} takes an object with its inputs.` : issue.message };
+}
