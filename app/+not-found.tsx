@@ -1,11 +1,5 @@
-import { Link } from 'expo-router';
-import { Text, View } from 'react-native';
+import { NotFoundScreen } from '@/shared/ui/screens/parts/NotFoundScreen';
 
 export default function NotFound() {
-  return (
-    <View role="main">
-      <Text role="heading">No such page</Text>
-      <Link href="/">To the Bench</Link>
-    </View>
-  );
+  return <NotFoundScreen />;
 }

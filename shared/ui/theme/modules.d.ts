@@ -7,3 +7,9 @@ declare module '*.ttf' {
 declare module 'react-native-paper/lib/module/styles/themes' {
   export { MD3DarkTheme, MD3LightTheme } from 'react-native-paper';
 }
+
+declare module 'react-dom' {
+  import type { ReactNode, ReactPortal } from 'react';
+
+  export function createPortal(children: ReactNode, container: Element): ReactPortal;
+}

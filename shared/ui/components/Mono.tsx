@@ -1,0 +1,31 @@
+/** Numbers and codes, in the face with the slashed zero. */
+import type { ReactNode } from 'react';
+import { Text } from 'react-native';
+
+import { face, type } from '@/shared/ui/theme/type';
+import { useTheme } from '@/shared/ui/theme/useTheme';
+
+interface Props {
+  children: ReactNode;
+  bold?: boolean | undefined;
+  soft?: boolean | undefined;
+  /** takes the size of the text around it */
+  inline?: boolean | undefined;
+  size?: 'mono' | 'reading' | undefined;
+}
+
+/** A quantity, serial, time or hash. */
+export function Mono({ children, bold = false, soft = false, inline = false, size = 'mono' }: Props) {
+  const { colors } = useTheme();
+  return (
+    <Text
+      style={[
+        inline ? { fontFamily: face.mono } : type[size],
+        inline && !soft ? null : { color: soft ? colors.inkSoft : colors.ink },
+        bold ? { fontFamily: face.monoBold } : null,
+      ]}
+    >
+      {children}
+    </Text>
+  );
+}
