@@ -13,6 +13,8 @@ export type ToolRun = {
   user?: ToolUser | undefined;
   /** 'show' lets the program write to this terminal; 'keep' (the default) collects its output. */
   output?: 'keep' | 'show';
+  /** Ends the program when aborted. */
+  signal?: AbortSignal | undefined;
 };
 
 export type ToolResult = { code: number; output: string };
@@ -24,6 +26,7 @@ export function tryTool(command: string, args: readonly string[], run: ToolRun =
       ...(run.cwd === undefined ? {} : { cwd: run.cwd }),
       ...(run.env === undefined ? {} : { env: run.env }),
       ...(run.user === undefined ? {} : { uid: run.user.uid, gid: run.user.gid }),
+      ...(run.signal === undefined ? {} : { signal: run.signal }),
       stdio: run.output === 'show' ? ['ignore', 'inherit', 'inherit'] : ['ignore', 'pipe', 'pipe'],
     });
     const chunks: Buffer[] = [];
