@@ -166,9 +166,9 @@ export interface EntriesTable {
   workshop: Fixed<string>;
   run: Fixed<string>;
   seq: Fixed<number>;
-  at: Fixed<number>;
+  at: FixedTime;
   monotonic: Fixed<number>;
-  received_at: Fixed<number>;
+  received_at: FixedTime;
   actor: Fixed<string>;
   kind: Fixed<string>;
   body: FixedJson<Record<string, unknown>>;

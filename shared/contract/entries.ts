@@ -1,41 +1,28 @@
 /** Entries of a record, and posting them. */
 import { z } from 'zod';
 
-import { entryIdSchema, hashSchema, personIdSchema, runIdSchema, seqSchema } from './ids';
+import { machineEventSchema, SIGNED_EVENTS } from '@/flows/machine/events';
+import { recordEntrySchema } from '@/shared/record/recordEntry';
+import type { RecordEntry } from '@/shared/record/recordEntry';
+
+import { entryIdSchema, seqSchema } from './ids';
 import { headSchema } from './runSummary';
 
-export const ENTRY_KINDS = [
-  'opened', 'answer', 'reading', 'photo', 'part', 'tag', 'warning-read', 'energised', 'isolated', 'lapsed', 'hold-asked', 'hold-given', 'hold-refused', 'deviation',
-  'paused', 'resumed', 'handed-over', 'taken-over', 'conflict', 'stopped', 'correction', 'closed', 'submitted', 'returned', 'reply', 'finding', 'accepted', 'addendum',
-  'released', 'void',
-] as const;
+/** One entry as the server holds it. */
+export const entrySchema = recordEntrySchema.meta({ id: 'Entry' });
+export type Entry = RecordEntry;
 
-/** One entry as the server holds it: epoch milliseconds, hash made by the server on receipt. */
-export const entrySchema = z
-  .strictObject({
-    id: entryIdSchema,
-    run: runIdSchema,
-    seq: seqSchema,
-    at: z.number().int(),
-    monotonic: z.number(),
-    receivedAt: z.number().int(),
-    actor: personIdSchema,
-    kind: z.enum(ENTRY_KINDS),
-    body: z.record(z.string(), z.unknown()),
-    prev: hashSchema,
-    hash: hashSchema,
-  })
-  .meta({ id: 'Entry' });
-export type Entry = z.infer<typeof entrySchema>;
+/** The last millisecond that has a four-figure year. */
+const LAST_TIME_MS = 253_402_300_799_999;
+
+/** An event as a device sends it: not one of those that only the server may bring in, and at a time that can be written down. */
+const sentEventSchema = machineEventSchema
+  .refine((event) => !SIGNED_EVENTS.includes(event.type), { path: ['type'], message: 'is signed by its person and does not come from this device' })
+  .refine((event) => event.at <= LAST_TIME_MS, { path: ['at'], message: 'is not a time' })
+  .refine((event) => event.monotonic <= Number.MAX_SAFE_INTEGER, { path: ['monotonic'], message: 'is not a time' });
 
 /** What the restorer's device sends for one event of the machine; the time is the event's own `at` and `monotonic`. */
-export const sentEntrySchema = z
-  .strictObject({
-    id: entryIdSchema,
-    seq: seqSchema,
-    event: z.looseObject({ type: z.string(), at: z.number().int().nonnegative(), monotonic: z.number().nonnegative() }),
-  })
-  .meta({ id: 'SentEntry' });
+export const sentEntrySchema = z.strictObject({ id: entryIdSchema, seq: seqSchema, event: sentEventSchema }).meta({ id: 'SentEntry' });
 export type SentEntry = z.infer<typeof sentEntrySchema>;
 
 export const postEntriesBody = z.strictObject({ entries: z.array(sentEntrySchema).min(1, 'there is no entry in the request').max(200) });

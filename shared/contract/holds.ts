@@ -42,4 +42,13 @@ export const answerHoldBody = z
   })
   .refine((b) => b.answer === 'given' || b.reason !== undefined, { path: ['reason'], message: 'say why you refuse' });
 
+/** A second person who is present signs in at the restorer's device, for live work above the limits. */
+export const secondPersonBody = z.strictObject({
+  id: entryIdSchema,
+  seq: seqSchema,
+  person: personIdSchema,
+  /** the second person's own */
+  password: z.string().min(1, 'the password is missing').max(200),
+});
+
 export const answeredHoldSchema = z.object({ entry: entrySchema, head: headSchema });

@@ -1,15 +1,16 @@
 /** Records under review: findings, return and reply, acceptance, export. */
 import { z } from 'zod';
 
+import { profileShape } from '@/flows/document/profile';
+import { settingsSchema } from '@/flows/document/settings';
+import { treeShape } from '@/flows/document/tree';
+
 import { entrySchema } from './entries';
-import { entryIdSchema, sentence } from './ids';
+import { entryIdSchema, instantSchema, personIdSchema, sentence } from './ids';
 import { instrumentSchema } from './instruments';
 import { personSchema } from './people';
 import { headSchema, runSummarySchema, RUN_STATES } from './runSummary';
 import { pinsSchema, startSchema } from './runs';
-import { profileShape } from '@/flows/document/profile';
-import { settingsSchema } from '@/flows/document/settings';
-import { treeShape } from '@/flows/document/tree';
 
 export const recordsQuery = z.strictObject({ state: z.enum(RUN_STATES).optional() });
 export const recordsSchema = z.object({ records: z.array(runSummarySchema) });
@@ -25,8 +26,8 @@ export const findingSchema = z
     entry: entryIdSchema,
     grade: gradeSchema,
     text: z.string(),
-    by: z.string(),
-    at: z.number(),
+    by: personIdSchema,
+    at: instantSchema,
   })
   .meta({ id: 'Finding' });
 export type Finding = z.infer<typeof findingSchema>;

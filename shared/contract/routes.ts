@@ -3,7 +3,7 @@ import { z } from 'zod';
 
 import { defineRoute } from './defineRoute';
 import { entriesQuery, entriesSchema, postedEntriesSchema, postEntriesBody } from './entries';
-import { answeredHoldSchema, answerHoldBody, holdsSchema } from './holds';
+import { answeredHoldSchema, answerHoldBody, holdsSchema, secondPersonBody } from './holds';
 import { machineIdSchema, runIdSchema, treeIdSchema, versionSchema } from './ids';
 import { instrumentsSchema } from './instruments';
 import { dossierSchema, machinesSchema } from './machines';
@@ -42,6 +42,7 @@ export const routes = {
 
   holds: defineRoute({ method: 'get', path: '/api/holds', summary: 'Hold points that await a countersign', who: ['senior'], status: 200, answer: holdsSchema, problems: [] }),
   answerHold: defineRoute({ method: 'post', path: '/api/runs/:run/holds', summary: 'Give or refuse a countersign', who: ['senior'], params: runParams, body: answerHoldBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'own-run', 'wrong-password', 'no-hold', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  secondPerson: defineRoute({ method: 'post', path: '/api/runs/:run/second-person', summary: 'A second person who is present signs in at the restorer’s device', who: ['restorer', 'senior'], params: runParams, body: secondPersonBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'not-your-run', 'own-run', 'wrong-password', 'wrong-state', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
 
   submit: defineRoute({ method: 'post', path: '/api/runs/:run/submit', summary: 'Submit a closed run for review', who: ['restorer', 'senior'], params: runParams, body: submitBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'not-your-run', 'wrong-state', 'id-taken'] }),
   records: defineRoute({ method: 'get', path: '/api/records', summary: 'Records; a restorer sees the own ones only', who: 'member', query: recordsQuery, status: 200, answer: recordsSchema, problems: [] }),

@@ -1,0 +1,28 @@
+/** The job queue in PostgreSQL: a job is stored in the same transaction as what it is about, and done once that is committed. */
+import { Logger as QueueLogger, run } from 'graphile-worker';
+import type { TaskList } from 'graphile-worker';
+import { sql } from 'kysely';
+import type { Logger } from 'pino';
+
+import type { Tx } from '@/db/createDb';
+
+/** Stores a job in the caller's transaction. The same `key` twice is one job. */
+export async function addJob(tx: Tx, task: string, payload: object, key: string): Promise<void> {
+  await sql`select graphile_worker.add_job(${task}, payload => ${JSON.stringify(payload)}::json, job_key => ${key}, max_attempts => 12)`.execute(tx);
+}
+
+/** Starts working on jobs; failed ones are tried again, later each time. */
+export async function startJobs(databaseUrl: string, taskList: TaskList, log: Logger): Promise<{ stop: () => Promise<void> }> {
+  const levels = { error: 'error', warning: 'warn', info: 'debug', debug: 'trace' } as const;
+  const runner = await run({
+    connectionString: databaseUrl,
+    taskList,
+    concurrency: 2,
+    maxPoolSize: 3,
+    pollInterval: 2_000,
+    noHandleSignals: true,
+    parsedCronItems: [],
+    logger: new QueueLogger(() => (level, message) => log[levels[level]](message)),
+  });
+  return { stop: () => runner.stop() };
+}

@@ -1,0 +1,33 @@
+/** Sending mail over SMTP. */
+import { createTransport } from 'nodemailer';
+import type { Logger } from 'pino';
+
+import type { Config } from '../config';
+
+export interface Letter {
+  to: { name: string; address: string };
+  subject: string;
+  text: string;
+  html: string;
+}
+
+export interface Mailer {
+  /** Resolves when the mail server has taken it; throws when it has not, so that the job is tried again. */
+  send(letter: Letter): Promise<void>;
+  close(): void;
+}
+
+export function createMailer(config: Pick<Config, 'smtpUrl' | 'mailFrom'>, log: Logger): Mailer {
+  const { smtpUrl, mailFrom } = config;
+  if (smtpUrl === null) {
+    log.warn('SMTP_URL is not set: letters wait in the queue until it is');
+    return { send: () => Promise.reject(new Error('SMTP_URL is not set')), close: () => undefined };
+  }
+  const transport = createTransport(smtpUrl, { from: mailFrom, connectionTimeout: 10_000, greetingTimeout: 10_000, socketTimeout: 30_000 });
+  return {
+    send: async (letter) => {
+      await transport.sendMail({ ...letter, disableFileAccess: true, disableUrlAccess: true });
+    },
+    close: () => transport.close(),
+  };
+}

@@ -1,0 +1,13 @@
+/** The description of the interface for machines. */
+import type { Router } from 'express';
+
+import { routes } from '@/shared/contract/routes';
+
+import { bindRoute } from '../http/bindRoute';
+import type { Parts } from '../parts';
+import { openApiDocument } from './openApiDocument';
+
+export function addOpenApiRoutes(router: Router, parts: Parts): void {
+  let made: ReturnType<typeof openApiDocument> | undefined;
+  bindRoute(router, parts, routes.openApi, () => Promise.resolve((made ??= openApiDocument())));
+}
