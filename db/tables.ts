@@ -153,9 +153,9 @@ export interface RunHeadsTable {
   hash: string;
   heard_at: Time;
   band: string;
-  step_id: string | null;
+  step_key: string | null;
   step_title: string | null;
-  step_number: number;
+  step_stud: string | null;
   step_total: number;
   /** the `hold-asked` entry that waits for an answer */
   hold_entry: string | null;

@@ -20,6 +20,7 @@ import { addPeopleRoutes } from './people/routes';
 import { answerProblems, ProblemError } from './problems';
 import { addRecordRoutes } from './records/routes';
 import { addRunRoutes } from './runs/routes';
+import { makeConfirmPassword } from './session/confirmPassword';
 import { addSessionRoutes } from './session/routes';
 import { addSettingsRoutes } from './settings/routes';
 import { addTreeRoutes } from './trees/routes';
@@ -70,6 +71,7 @@ export function createApp(parts: Parts): Express {
   app.use(cookieParser());
   app.use(refuseCrossSite(config.publicUrl));
 
+  const confirm = makeConfirmPassword(parts);
   const router = Router();
   addHealthRoutes(router, parts);
   addSessionRoutes(router, parts);
@@ -80,8 +82,8 @@ export function createApp(parts: Parts): Express {
   addSettingsRoutes(router, parts);
   addRunRoutes(router, parts);
   addEntryRoutes(router, parts);
-  addHoldRoutes(router, parts);
-  addRecordRoutes(router, parts);
+  addHoldRoutes(router, parts, confirm);
+  addRecordRoutes(router, parts, confirm);
   addKeyRoutes(router, parts);
   addOpenApiRoutes(router, parts);
   app.use(router);

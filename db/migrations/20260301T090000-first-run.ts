@@ -162,9 +162,9 @@ create table run_heads (
   hash text not null,
   heard_at timestamptz not null,
   band text not null,
-  step_id text,
+  step_key text,
   step_title text,
-  step_number integer not null,
+  step_stud text,
   step_total integer not null,
   hold_entry uuid,
   foreign key (workshop, run) references runs (workshop, id)
@@ -211,7 +211,8 @@ create table snapshots (
   workshop uuid not null,
   program text not null,
   seq integer not null,
-  state jsonb not null,
+  -- json and not jsonb: the text comes back as it was, and with it the order of keys that the engine compares by
+  state json not null,
   foreign key (workshop, run) references runs (workshop, id)
 );
 

@@ -23,7 +23,7 @@ export function createMailer(config: Pick<Config, 'smtpUrl' | 'mailFrom'>, log: 
     log.warn('SMTP_URL is not set: letters wait in the queue until it is');
     return { send: () => Promise.reject(new Error('SMTP_URL is not set')), close: () => undefined };
   }
-  const transport = createTransport(smtpUrl, { from: mailFrom, connectionTimeout: 10_000, greetingTimeout: 10_000, socketTimeout: 30_000 });
+  const transport = createTransport({ url: smtpUrl, connectionTimeout: 10_000, greetingTimeout: 10_000, socketTimeout: 30_000 }, { from: mailFrom });
   return {
     send: async (letter) => {
       await transport.sendMail({ ...letter, disableFileAccess: true, disableUrlAccess: true });

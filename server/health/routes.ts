@@ -9,7 +9,7 @@ import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
 
 export function addHealthRoutes(router: Router, parts: Parts): void {
-  bindRoute(router, parts, routes.health, () => Promise.resolve({ ok: true }));
+  bindRoute(router, parts, routes.health, () => Promise.resolve({ ok: true as const }));
   bindRoute(router, parts, routes.ready, async () => {
     try {
       await sql`select 1`.execute(parts.db);
@@ -17,6 +17,6 @@ export function addHealthRoutes(router: Router, parts: Parts): void {
       parts.log.warn({ err: error }, 'the database does not answer');
       throw new ProblemError('not-ready');
     }
-    return { ok: true };
+    return { ok: true as const };
   });
 }

@@ -5,7 +5,7 @@ import { routes } from '@/shared/contract/routes';
 
 import { bindRoute } from '../http/bindRoute';
 import type { Parts } from '../parts';
-import { publicJwk } from './signer';
+import { publicJwk } from './publicJwk';
 
 export function addKeyRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.jwks, async () => ({ keys: [await publicJwk(parts.config.signingKey)] }));

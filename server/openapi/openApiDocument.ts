@@ -35,7 +35,8 @@ function operation(name: string, route: RouteDef): ZodOpenApiOperationObject {
   if (route.body !== undefined) problems.push('bad-json', 'not-json', 'too-large', 'bad-input');
   if (route.query !== undefined) problems.push('bad-input');
   if (route.params !== undefined) problems.push('not-found');
-  const byStatus = Map.groupBy(new Set(problems), statusOf);
+  const byStatus = new Map<number, ProblemCode[]>();
+  for (const code of new Set(problems)) byStatus.set(statusOf(code), [...(byStatus.get(statusOf(code)) ?? []), code]);
   const failures = Object.fromEntries(
     [...byStatus].map(([status, codes]) => [String(status), { description: codes.join(', '), content: { 'application/problem+json': { schema: problemSchema } } }]),
   );

@@ -9,5 +9,8 @@ import { openApiDocument } from './openApiDocument';
 
 export function addOpenApiRoutes(router: Router, parts: Parts): void {
   let made: ReturnType<typeof openApiDocument> | undefined;
-  bindRoute(router, parts, routes.openApi, () => Promise.resolve((made ??= openApiDocument())));
+  bindRoute(router, parts, routes.openApi, () => {
+    made ??= openApiDocument();
+    return Promise.resolve({ ...made });
+  });
 }

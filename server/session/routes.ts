@@ -6,7 +6,7 @@ import { routes } from '@/shared/contract/routes';
 import { bindRoute } from '../http/bindRoute';
 import type { Parts } from '../parts';
 import { clearSessionCookies, REFRESH_COOKIE, setSessionCookies } from './cookies';
-import { limitSignIn } from './limitTries';
+import { limitSignIn } from './limitSignIn';
 import { readMe, refreshSession, signIn, signOut } from './service';
 
 export function addSessionRoutes(router: Router, parts: Parts): void {
@@ -31,7 +31,7 @@ export function addSessionRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.signOut, async ({ req, res }) => {
     await signOut(parts, refreshCookie(req));
     clearSessionCookies(res, secure);
-    return { done: true };
+    return { done: true as const };
   });
   bindRoute(router, parts, routes.me, ({ who }) => readMe(parts, who));
 }

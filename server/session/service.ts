@@ -12,7 +12,7 @@ import { ProblemError } from '../problems';
 import type { SignedIn } from './access';
 import { REFRESH_MS } from './cookies';
 import { checkPassword } from './passwords';
-import { findLiveSession, findMemberships, findPasswordHash, findSignIn, insertSession, lockSession, revokeSession, rotateSession } from './queries';
+import { findLiveSession, findMemberships, findSignIn, insertSession, lockSession, revokeSession, rotateSession } from './queries';
 import { hashToken, makeAccessToken, makeRefreshToken, readRefreshToken } from './tokens';
 
 export interface Tokens {
@@ -85,12 +85,6 @@ export async function readMe(parts: Parts, who: SignedIn): Promise<Me> {
     if (found === undefined) throw new ProblemError('session-expired');
     return toMe(who, found, workshops, who.expiresAt);
   });
-}
-
-/** Asks for the password again before something is signed. Throws `wrong-password`. */
-export async function confirmPassword(parts: Parts, person: string, password: string): Promise<void> {
-  const found = await asPerson(parts.db, { id: person }, (tx) => findPasswordHash(tx, person));
-  if (!(await checkPassword(password, found?.password_hash, parts.config.bcryptCost))) throw new ProblemError('wrong-password');
 }
 
 type Workshops = { id: string; name: string }[];

@@ -12,7 +12,7 @@ export const holdSchema = z
     entry: entryIdSchema,
     /** sequence that the answer has to take */
     nextSeq: seqSchema,
-    step: z.object({ id: z.string(), title: z.string(), asks: z.string() }),
+    step: z.object({ key: z.string(), title: z.string(), asks: z.string() }),
     /** what kind of power the countersign opens, in words */
     reason: z.string(),
     askedBy: personIdSchema,

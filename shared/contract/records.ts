@@ -12,7 +12,10 @@ import { personSchema } from './people';
 import { headSchema, runSummarySchema, RUN_STATES } from './runSummary';
 import { pinsSchema, startSchema } from './runs';
 
-export const recordsQuery = z.strictObject({ state: z.enum(RUN_STATES).optional() });
+/** A record can be read once its run is closed. */
+export const RECORD_STATES = RUN_STATES.filter((state) => state !== 'open');
+
+export const recordsQuery = z.strictObject({ state: z.enum(RECORD_STATES).optional() });
 export const recordsSchema = z.object({ records: z.array(runSummarySchema) });
 
 export const GRADES = ['note', 'minor', 'major'] as const;

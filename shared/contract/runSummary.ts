@@ -33,7 +33,7 @@ export const runSummarySchema = z
     head: headSchema,
     band: bandSchema,
     /** the step that it stands at, or null once it has ended */
-    step: z.object({ id: z.string(), title: z.string(), number: z.number().int(), total: z.number().int() }).nullable(),
+    step: z.object({ key: z.string(), title: z.string(), stud: z.string(), total: z.number().int() }).nullable(),
     /** true while a senior's countersign is awaited */
     awaitsHold: z.boolean(),
   })

@@ -28,7 +28,7 @@ export const startRunBody = z.strictObject({
   tree: treeIdSchema,
   version: versionSchema,
   /** milliseconds of the device's clock that never goes back */
-  monotonic: z.number().nonnegative(),
+  monotonic: z.int().nonnegative(),
 });
 
 /** What a run starts from; with the entries it gives the state again, at any time and on any side. */
@@ -39,7 +39,6 @@ export const startSchema = z
     restorerIsSenior: z.boolean(),
     /** epoch milliseconds */
     at: z.number(),
-    monotonic: z.number(),
     release: z.boolean(),
     fitted: z.array(fittedSchema),
     killers: z.array(z.object({ part: idSchema, killer: idSchema })),

@@ -1,4 +1,4 @@
-/** Limits how often a password can be tried, by address and account, over 15 minutes. */
+/** Limits how often signing in can fail. */
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
 import type { RequestHandler } from 'express';
 
@@ -17,16 +17,4 @@ export function limitSignIn(tries: number): RequestHandler {
     keyGenerator: (req) => ipKeyGenerator(req.ip ?? ''),
     handler: (_req, _res, next) => next(new ProblemError('too-many', 'Too many tries to sign in. Wait 15 minutes, then try again.')),
   });
-}
-
-/** Counts wrong passwords of one person who signs something while signed in. */
-export function makeConfirmLimit(tries: number, clock: () => number): { check(person: string): void; missed(person: string): void } {
-  const missed = new Map<string, number[]>();
-  const recent = (person: string) => (missed.get(person) ?? []).filter((at) => at > clock() - WINDOW_MS);
-  return {
-    check: (person) => {
-      if (recent(person).length >= tries) throw new ProblemError('too-many', 'Too many wrong passwords. Wait 15 minutes, then try again.');
-    },
-    missed: (person) => missed.set(person, [...recent(person), clock()]),
-  };
 }

@@ -1,0 +1,43 @@
+/** Hold points: what waits for a senior, and the answers. */
+import type { Router } from 'express';
+
+import { inWorkshop } from '@/db/createDb';
+import type { Hold } from '@/shared/contract/holds';
+import { routes } from '@/shared/contract/routes';
+
+import { bindRoute } from '../http/bindRoute';
+import type { Parts } from '../parts';
+import { getRunFor, wantOtherThanRestorer, wantRestorer } from '../runs/access';
+import type { ConfirmPassword } from '../session/confirmPassword';
+import { holdOf } from './holdOf';
+import { findWaitingRuns } from './queries';
+import { addSecondPerson, answerHold } from './service';
+
+export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPassword): void {
+  bindRoute(router, parts, routes.holds, ({ who }) =>
+    inWorkshop(parts.db, who.workshop, async (tx) => {
+      const holds: Hold[] = [];
+      for (const row of await findWaitingRuns(tx)) {
+        const hold = await holdOf(tx, parts, row, who.person);
+        if (hold !== null) holds.push(hold);
+      }
+      return { holds };
+    }),
+  );
+  bindRoute(router, parts, routes.answerHold, async ({ who, params, body }) => {
+    await inWorkshop(parts.db, who.workshop, async (tx) =>
+      wantOtherThanRestorer(who, await getRunFor(tx, params.run), 'This is your own run: another senior has to countersign it.'),
+    );
+    await confirm(who.person, body.password);
+    return inWorkshop(parts.db, who.workshop, (tx) => answerHold(tx, parts, who, params.run, body));
+  });
+  bindRoute(router, parts, routes.secondPerson, async ({ who, params, body }) => {
+    await inWorkshop(parts.db, who.workshop, async (tx) => {
+      const run = await getRunFor(tx, params.run);
+      wantRestorer(who, run);
+      wantOtherThanRestorer({ person: body.person }, run, 'The second person has to be somebody else than the restorer.');
+    });
+    await confirm(body.person, body.password);
+    return inWorkshop(parts.db, who.workshop, (tx) => addSecondPerson(tx, parts, params.run, body));
+  });
+}

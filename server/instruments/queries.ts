@@ -1,0 +1,7 @@
+/** Queries of instruments. */
+import type { Tx } from '@/db/createDb';
+import type { InstrumentRow } from '@/db/tables';
+
+export function findInstruments(tx: Tx): Promise<InstrumentRow[]> {
+  return tx.selectFrom('instruments').selectAll().orderBy('tag').execute();
+}

@@ -1,0 +1,42 @@
+/** Queries of runs. */
+import { sql } from 'kysely';
+
+import type { Tx } from '@/db/createDb';
+import type { InsertableRunRow, RunRow } from '@/db/tables';
+
+export const OPEN_RUN_INDEX = 'runs_one_open_per_machine';
+export const RUN_ID_KEY = 'runs_pkey';
+
+/** Runs as lists show them, newest first; the caller narrows it down. */
+export function findRunSummaries(tx: Tx) {
+  return tx
+    .selectFrom('runs')
+    .innerJoin('run_heads', 'run_heads.run', 'runs.id')
+    .innerJoin('machines', 'machines.id', 'runs.machine')
+    .innerJoin('tree_versions', (join) =>
+      join.onRef('tree_versions.workshop', '=', 'runs.workshop').onRef('tree_versions.tree', '=', 'runs.tree').onRef('tree_versions.version', '=', 'runs.tree_version'),
+    )
+    .select([
+      'runs.id', 'runs.machine', 'machines.name as machine_name', 'machines.serial', 'runs.tree', 'runs.tree_version', 'runs.restorer', 'runs.state', 'runs.ended',
+      'runs.started_at', 'runs.closed_at', 'run_heads.seq', 'run_heads.hash', 'run_heads.heard_at', 'run_heads.band', 'run_heads.step_key', 'run_heads.step_title',
+      'run_heads.step_stud', 'run_heads.step_total', 'run_heads.hold_entry',
+    ])
+    // The title alone: a document may be large, and lists show many runs.
+    .select(sql<string>`tree_versions.document ->> 'title'`.as('tree_title'))
+    .orderBy('runs.started_at', 'desc')
+    .orderBy('runs.id', 'desc');
+}
+
+export type RunSummaryRow = Awaited<ReturnType<ReturnType<typeof findRunSummaries>['executeTakeFirstOrThrow']>>;
+
+export function findRun(tx: Tx, run: string): Promise<RunRow | undefined> {
+  return tx.selectFrom('runs').selectAll().where('id', '=', run).executeTakeFirst();
+}
+
+export async function insertRun(tx: Tx, row: InsertableRunRow): Promise<void> {
+  await tx.insertInto('runs').values(row).execute();
+}
+
+export async function setRunState(tx: Tx, run: string, set: Partial<Pick<RunRow, 'state' | 'ended'>> & { closed_at?: Date }): Promise<void> {
+  await tx.updateTable('runs').set(set).where('id', '=', run).execute();
+}

@@ -1,0 +1,18 @@
+/** A version of a tree as the contract shows it. */
+import type { TreeVersionRow } from '@/db/tables';
+import type { TreeVersion } from '@/shared/contract/trees';
+
+export function treeVersionToWire(row: TreeVersionRow): TreeVersion {
+  return {
+    tree: row.tree,
+    version: row.version,
+    title: row.document.title,
+    symptom: row.document.symptom,
+    state: row.state,
+    hash: row.hash,
+    steps: row.document.steps.length,
+    author: row.author,
+    checker: row.checker,
+    issuedAt: row.issued_at?.toISOString() ?? null,
+  };
+}
