@@ -18,10 +18,13 @@ const rooms = {
   '^shared/quantity/': { may: ['^shared/quantity/'], as: 'quantities know nothing else' },
   '^shared/workings/': { may: ['^shared/(workings|quantity)/'], as: 'the sheets know quantities only' },
   '^shared/record/': { may: ['^shared/(record|quantity)/'], as: 'the record knows its own form only' },
-  '^shared/contract/': { may: ['^shared/contract/', '^flows/document/'], as: 'the contract knows the documents' },
+  '^shared/contract/': { may: ['^shared/contract/', '^flows/document/', '^flows/machine/events\\.ts$', '^shared/record/recordEntry\\.ts$'], as: 'the contract knows the documents, the events and the form of an entry' },
   '^flows/': { may: ['^flows/', '^shared/(quantity|workings)/'], as: 'the engine knows quantities and workings' },
   '^db/(?!seeds/)': { may: ['^db/(?!seeds/)', '^flows/document/'], as: 'tables know the documents' },
-  '^db/seeds/': { may: ['^db/', '^flows/', '^shared/(record|quantity|contract|workings)/'], as: 'the demo is played through the engine into the record' },
+  '^db/seeds/': {
+    may: ['^db/', '^flows/', '^shared/(record|quantity|contract|workings)/', '^server/(?!cli/|adapters/)'],
+    as: 'the demo is played through the engine and the services of the server, so that it holds no row that the server would not write',
+  },
   '^server/(?!cli/|adapters/fakes/)': {
     may: ['^server/(?!cli/|adapters/fakes/)', '^db/(?!seeds/)', '^flows/', '^shared/(contract|record|quantity|workings)/'],
     as: 'the server that goes into production knows neither fakes nor demo data',

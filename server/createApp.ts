@@ -25,6 +25,7 @@ import { addSessionRoutes } from './session/routes';
 import { addSettingsRoutes } from './settings/routes';
 import { addTreeRoutes } from './trees/routes';
 
+/** Puts the application together. It listens to nothing and starts nothing by itself. */
 export function createApp(parts: Parts): Express {
   const { config } = parts;
   const https = config.publicUrl?.startsWith('https:') === true;

@@ -17,6 +17,7 @@ export interface Mailer {
   close(): void;
 }
 
+/** A mailer for the SMTP server of the configuration. Without one it refuses every letter, so that letters wait in the queue. */
 export function createMailer(config: Pick<Config, 'smtpUrl' | 'mailFrom'>, log: Logger): Mailer {
   const { smtpUrl, mailFrom } = config;
   if (smtpUrl === null) {

@@ -11,10 +11,12 @@ export function lockHead(tx: Tx, run: string): Promise<RunHeadRow> {
   return tx.selectFrom('run_heads').selectAll().where('run', '=', run).forUpdate().executeTakeFirstOrThrow();
 }
 
+/** The run's head without a lock. Throws when there is none. */
 export function getHead(tx: Tx, run: string): Promise<RunHeadRow> {
   return tx.selectFrom('run_heads').selectAll().where('run', '=', run).executeTakeFirstOrThrow();
 }
 
+/** Moves the head; only behind `lockHead`. */
 export async function setHead(tx: Tx, run: string, set: UpdateableRunHeadRow): Promise<void> {
   await tx.updateTable('run_heads').set(set).where('run', '=', run).execute();
 }
@@ -25,11 +27,13 @@ export async function findEntries(tx: Tx, run: string, after = 0): Promise<Recor
   return rows.map(entryOf);
 }
 
+/** Entries of a run that have one of these ids, in their order. */
 export async function findEntriesById(tx: Tx, run: string, ids: readonly string[]): Promise<RecordEntry[]> {
   const rows = await tx.selectFrom('entries').selectAll().where('run', '=', run).where('id', 'in', ids).orderBy('seq').execute();
   return rows.map(entryOf);
 }
 
+/** Stores sealed entries. A place or an id that is taken is a unique violation. */
 export async function insertEntries(tx: Tx, workshop: string, entries: readonly RecordEntry[]): Promise<void> {
   if (entries.length > 0) await tx.insertInto('entries').values(entries.map((entry) => rowOf(workshop, entry))).execute();
 }

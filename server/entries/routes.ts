@@ -10,6 +10,7 @@ import { getRunFor, wantRestorer } from '../runs/access';
 import { postEntries } from './postEntries';
 import { findEntries, getHead, lockHead } from './queries';
 
+/** Adds the routes of entries. */
 export function addEntryRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.entries, ({ who, params, query }) =>
     inWorkshop(parts.db, who.workshop, async (tx) => {

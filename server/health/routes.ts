@@ -8,6 +8,7 @@ import { bindRoute } from '../http/bindRoute';
 import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
 
+/** Adds the routes that watch the server. */
 export function addHealthRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.health, () => Promise.resolve({ ok: true as const }));
   bindRoute(router, parts, routes.ready, async () => {

@@ -20,6 +20,7 @@ const KINDS: Readonly<Record<PowerKind, string>> = {
 /** How many readings a senior is shown before the whole record. */
 const READINGS = 10;
 
+/** The hold at which the run of `row` waits, as `person` is shown it; null when it waits no more. */
 export async function holdOf(tx: Tx, parts: Parts, row: RunSummaryRow, person: string): Promise<Hold | null> {
   const run = await findRun(tx, row.id);
   if (run === undefined || row.hold_entry === null) return null;

@@ -13,6 +13,7 @@ import { holdOf } from './holdOf';
 import { findWaitingRuns } from './queries';
 import { addSecondPerson, answerHold } from './service';
 
+/** Adds the routes of hold points and second persons. */
 export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPassword): void {
   bindRoute(router, parts, routes.holds, ({ who }) =>
     inWorkshop(parts.db, who.workshop, async (tx) => {

@@ -9,6 +9,7 @@ import type { Parts } from '../parts';
 import { findInstruments } from './queries';
 import { instrumentToWire } from './toWire';
 
+/** Adds the routes of instruments. */
 export function addInstrumentRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.instruments, async ({ who }) => {
     const rows = await inWorkshop(parts.db, who.workshop, findInstruments);

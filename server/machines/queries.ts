@@ -1,6 +1,7 @@
 /** Queries of machines, their profiles, releases and what stays fitted. */
 import type { Tx } from '@/db/createDb';
 
+/** Machines with their newest profile revision, by name; the caller narrows it down. */
 export function findMachines(tx: Tx) {
   return tx
     .selectFrom('machines')
@@ -16,6 +17,7 @@ export function findMachines(tx: Tx) {
     .orderBy('machines.serial');
 }
 
+/** Releases of the workshop or of one machine, newest first, void ones too. */
 export function findReleases(tx: Tx, machine?: string) {
   return tx
     .selectFrom('releases')
@@ -26,6 +28,7 @@ export function findReleases(tx: Tx, machine?: string) {
     .execute();
 }
 
+/** What earlier runs have left on the machine, oldest first. */
 export function findMachineTags(tx: Tx, machine: string) {
   return tx.selectFrom('machine_tags').selectAll().where('machine', '=', machine).orderBy('id').execute();
 }

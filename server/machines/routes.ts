@@ -13,6 +13,7 @@ import { getSettings } from '../settings/queries';
 import { findMachines, findMachineTags, findReleases } from './queries';
 import { machineToWire, releaseToWire, tagToWire } from './toWire';
 
+/** Adds the routes of machines. */
 export function addMachineRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.machines, ({ who }) =>
     inWorkshop(parts.db, who.workshop, async (tx) => {

@@ -26,6 +26,7 @@ export function releaseToWire(row: ReleaseRow, now: number, releaseDays: number)
   };
 }
 
+/** A machine with its newest release. */
 export function machineToWire(row: MachineRow, release: Release | undefined): Machine {
   return {
     id: row.id,
@@ -40,6 +41,7 @@ export function machineToWire(row: MachineRow, release: Release | undefined): Ma
   };
 }
 
+/** One thing that stays on a machine, or one killer that is owed. */
 export function tagToWire(row: Selectable<MachineTagsTable>): MachineTag {
   const common = { since: row.since.toISOString(), run: row.run };
   if (row.is === 'fitted') return { is: 'fitted', thing: row.body as FittedThing, ...common };

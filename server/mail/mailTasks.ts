@@ -11,6 +11,7 @@ import { countersignWanted } from './countersignWanted';
 
 const jobSchema = z.object({ workshop: z.uuid(), run: z.uuid(), entry: z.uuid(), step: z.string(), to: z.uuid() });
 
+/** The tasks of the job queue by name. One that throws is tried again later. */
 export function mailTasks({ db, mailer, publicUrl }: { db: Db; mailer: Mailer; publicUrl: string }): TaskList {
   return {
     [COUNTERSIGN_WANTED]: async (payload) => {

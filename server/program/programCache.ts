@@ -8,6 +8,7 @@ export interface ProgramCache {
   get(key: string, make: () => Promise<Program>): Promise<Program>;
 }
 
+/** An empty cache. */
 export function createProgramCache(): ProgramCache {
   const programs = new Map<string, Program>();
   return {

@@ -10,6 +10,7 @@ import type { Parts } from '../parts';
 import { hashOf } from '../program/hashOf';
 import { getRunBundle } from '../runs/runBundle';
 
+/** The record with all that it names, signed over exactly the bytes of its payload. */
 export async function exportRecord(tx: Tx, parts: Parts, run: RunRow): Promise<ExportFile> {
   const bundle = await getRunBundle(tx, parts, run);
   const workshop = await tx.selectFrom('workshops').select(['id', 'name']).where('id', '=', run.workshop).executeTakeFirstOrThrow();

@@ -3,6 +3,7 @@ import { gradeSchema } from '@/shared/contract/records';
 import type { Finding } from '@/shared/contract/records';
 import type { RecordEntry } from '@/shared/record/recordEntry';
 
+/** In the order in which they were made. */
 export function findingsOf(entries: readonly RecordEntry[]): Finding[] {
   return entries
     .filter((entry) => entry.kind === 'finding')

@@ -1,8 +1,7 @@
 /** One act of a review: an entry behind the head, and the state that it leads to. */
 import type { Tx } from '@/db/createDb';
 import type { RunHeadRow, RunRow } from '@/db/tables';
-import type { RunSummary } from '@/shared/contract/runSummary';
-import type { Head, RunState } from '@/shared/contract/runSummary';
+import type { Head, RunState, RunSummary } from '@/shared/contract/runSummary';
 import type { Json } from '@/shared/record/canonical';
 import { canonicalJson } from '@/shared/record/canonical';
 import type { EntryKind, RecordEntry } from '@/shared/record/recordEntry';

@@ -20,6 +20,7 @@ import { exportRecord } from './exportRecord';
 import { findingsOf } from './findingsOf';
 import { acceptRecord, addFinding, replyToReview, returnRecord, submitRecord } from './service';
 
+/** Adds the routes of records and their review. */
 export function addRecordRoutes(router: Router, parts: Parts, confirm: ConfirmPassword): void {
   bindRoute(router, parts, routes.records, ({ who, query }) =>
     inWorkshop(parts.db, who.workshop, async (tx) => {

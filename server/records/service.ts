@@ -18,11 +18,13 @@ import type { Acted } from './recordAct';
 type Who = Pick<SignedIn, 'person'>;
 const UNDER_REVIEW = ['submitted'] as const;
 
+/** Hands a closed run in for review; its restorer alone does that. */
 export function submitRecord(tx: Tx, now: number, who: Who, run: string, body: BodyOf<typeof routes.submit>): Promise<Acted> {
   const act = { id: body.id, kind: 'submitted', body: body.remark === undefined ? {} : { remark: body.remark }, from: ['closed'], to: 'submitted', otherwise: 'Only a run that has just been closed can be submitted.' } as const;
   return recordAct(tx, now, who.person, run, act, (row) => wantRestorer(who, row));
 }
 
+/** Remarks on one entry of a record under review. */
 export function addFinding(tx: Tx, now: number, who: Who, run: string, body: BodyOf<typeof routes.addFinding>): Promise<Acted> {
   const act = { id: body.id, kind: 'finding', body: { entry: body.entry, grade: body.grade, text: body.text }, from: UNDER_REVIEW, to: 'submitted', otherwise: 'Findings are made while the record is under review.' } as const;
   return recordAct(tx, now, who.person, run, act, async (row) => {
@@ -33,6 +35,7 @@ export function addFinding(tx: Tx, now: number, who: Who, run: string, body: Bod
   });
 }
 
+/** Sends a record back to its restorer with questions. */
 export function returnRecord(tx: Tx, now: number, who: Who, run: string, body: BodyOf<typeof routes.returnRecord>): Promise<Acted> {
   const act = { id: body.id, kind: 'returned', body: { questions: body.questions }, from: UNDER_REVIEW, to: 'returned', otherwise: 'Only a record under review can be returned.' } as const;
   return recordAct(tx, now, who.person, run, act, (row) => wantReviewer(who, row));

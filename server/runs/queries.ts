@@ -29,14 +29,17 @@ export function findRunSummaries(tx: Tx) {
 
 export type RunSummaryRow = Awaited<ReturnType<ReturnType<typeof findRunSummaries>['executeTakeFirstOrThrow']>>;
 
+/** The run, if it is in this workshop. */
 export function findRun(tx: Tx, run: string): Promise<RunRow | undefined> {
   return tx.selectFrom('runs').selectAll().where('id', '=', run).executeTakeFirst();
 }
 
+/** Stores a run. A second open one on its machine is a violation of `OPEN_RUN_INDEX`. */
 export async function insertRun(tx: Tx, row: InsertableRunRow): Promise<void> {
   await tx.insertInto('runs').values(row).execute();
 }
 
+/** Moves the run's state; only behind `lockHead`. */
 export async function setRunState(tx: Tx, run: string, set: Partial<Pick<RunRow, 'state' | 'ended'>> & { closed_at?: Date }): Promise<void> {
   await tx.updateTable('runs').set(set).where('id', '=', run).execute();
 }

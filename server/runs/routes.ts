@@ -12,6 +12,7 @@ import { getRunBundle } from './runBundle';
 import { startRun } from './startRun';
 import { runSummaryToWire } from './toWire';
 
+/** Adds the routes of runs. */
 export function addRunRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.runs, ({ who, query }) =>
     inWorkshop(parts.db, who.workshop, async (tx) => {

@@ -14,6 +14,7 @@ import { getRunDocuments } from '../program/runDocuments';
 import { findRunSummaries } from './queries';
 import { runSummaryToWire } from './toWire';
 
+/** Reads it all in the caller's transaction. Throws `not-found` once the record has been purged. */
 export async function getRunBundle(tx: Tx, parts: Parts, run: RunRow): Promise<RunBundle> {
   const summary = runSummaryToWire(await findRunSummaries(tx).where('runs.id', '=', run.id).executeTakeFirstOrThrow());
   const entries = await findEntries(tx, run.id);

@@ -19,7 +19,6 @@ import { findMachines, findMachineTags, findReleases } from '../machines/queries
 import { releaseToWire } from '../machines/toWire';
 import type { Parts } from '../parts';
 import { isUniqueViolation, ProblemError } from '../problems';
-import { hashOf } from '../program/hashOf';
 import { headOf } from '../program/headOf';
 import type { SignedIn } from '../session/access';
 import { getSettings } from '../settings/queries';

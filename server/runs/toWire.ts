@@ -4,6 +4,7 @@ import type { RunSummary } from '@/shared/contract/runSummary';
 
 import type { RunSummaryRow } from './queries';
 
+/** A row of `findRunSummaries` in the form of the contract. */
 export function runSummaryToWire(row: RunSummaryRow): RunSummary {
   return {
     id: row.id,

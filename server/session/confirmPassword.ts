@@ -11,6 +11,7 @@ const WINDOW_MS = 15 * 60_000;
 /** Throws `wrong-password`, or `too-many` after too many wrong ones of that person in 15 minutes. */
 export type ConfirmPassword = (person: string, password: string) => Promise<void>;
 
+/** The check with its own count of wrong tries, kept in memory. */
 export function makeConfirmPassword(parts: Parts): ConfirmPassword {
   const missed = new Map<string, number[]>();
   return async (person, password) => {

@@ -45,6 +45,7 @@ export function findLiveSession(tx: Tx, session: string, person: string, now: Da
     .executeTakeFirst();
 }
 
+/** Stores a new session. */
 export async function insertSession(tx: Tx, row: InsertableSessionRow): Promise<void> {
   await tx.insertInto('sessions').values(row).execute();
 }
@@ -54,6 +55,7 @@ export function lockSession(tx: Tx, session: string) {
   return tx.selectFrom('sessions').selectAll().where('id', '=', session).forUpdate().executeTakeFirst();
 }
 
+/** Puts the next refresh token in force. */
 export async function rotateSession(tx: Tx, session: string, next: { generation: number; tokenHash: string; now: Date; expiresAt: Date }): Promise<void> {
   await tx
     .updateTable('sessions')
@@ -62,6 +64,7 @@ export async function rotateSession(tx: Tx, session: string, next: { generation:
     .execute();
 }
 
+/** Ends a session; one that has ended already keeps its first reason. */
 export async function revokeSession(tx: Tx, session: string, now: Date, why: string): Promise<void> {
   await tx.updateTable('sessions').set({ revoked_at: now, revoked_why: why }).where('id', '=', session).where('revoked_at', 'is', null).execute();
 }

@@ -9,6 +9,7 @@ import { clearSessionCookies, REFRESH_COOKIE, setSessionCookies } from './cookie
 import { limitSignIn } from './limitSignIn';
 import { readMe, refreshSession, signIn, signOut } from './service';
 
+/** Adds the routes of signing in and out. */
 export function addSessionRoutes(router: Router, parts: Parts): void {
   const secure = parts.config.publicUrl?.startsWith('https:') === true;
 

@@ -23,6 +23,7 @@ export interface Tokens {
 /** The same old token may come again this long after its rotation: the answer may have been lost, or two tabs asked at once. */
 export const GRACE_MS = 60_000;
 
+/** Opens a session. An unknown address and a wrong password are one answer, in the same time. */
 export async function signIn(parts: Parts, input: { mail: string; password: string; workshop?: string | undefined }): Promise<{ me: Me; tokens: Tokens }> {
   const found = await asPerson(parts.db, { mail: input.mail }, (tx) => findSignIn(tx, input.mail));
   const fits = await checkPassword(input.password, found?.password_hash, parts.config.bcryptCost);
@@ -72,12 +73,14 @@ async function nextRefresh(parts: Parts, tx: Tx, row: SessionRow, token: string,
   return null;
 }
 
+/** Ends the session of the refresh token; without a good one there is nothing to end. */
 export async function signOut(parts: Parts, token: string | undefined): Promise<void> {
   const claims = token === undefined ? null : readRefreshToken(parts.config.sessionSecret, token);
   if (claims === null) return;
   await inWorkshop(parts.db, claims.workshop, (tx) => revokeSession(tx, claims.session, new Date(parts.clock()), 'signed out'));
 }
 
+/** Who is signed in, with the workshops that could be chosen instead. */
 export async function readMe(parts: Parts, who: SignedIn): Promise<Me> {
   const workshops = await asPerson(parts.db, { id: who.person }, (tx) => findMemberships(tx, who.person));
   return inWorkshop(parts.db, who.workshop, async (tx) => {

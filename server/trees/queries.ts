@@ -2,10 +2,12 @@
 import type { Tx } from '@/db/createDb';
 import type { TreeVersionRow } from '@/db/tables';
 
+/** All versions of all trees, the newest of each first. */
 export function findTreeVersions(tx: Tx): Promise<TreeVersionRow[]> {
   return tx.selectFrom('tree_versions').selectAll().orderBy('tree').orderBy('version', 'desc').execute();
 }
 
+/** One version, whatever its state. */
 export function findTreeVersion(tx: Tx, tree: string, version: number): Promise<TreeVersionRow | undefined> {
   return tx.selectFrom('tree_versions').selectAll().where('tree', '=', tree).where('version', '=', version).executeTakeFirst();
 }

@@ -13,6 +13,7 @@ import { findCallees } from './callees';
 import { findTreeVersion, findTreeVersions } from './queries';
 import { treeVersionToWire } from './toWire';
 
+/** Adds the routes of fault trees. */
 export function addTreeRoutes(router: Router, parts: Parts): void {
   bindRoute(router, parts, routes.trees, async ({ who }) => {
     const rows = await inWorkshop(parts.db, who.workshop, findTreeVersions);

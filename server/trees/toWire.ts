@@ -2,6 +2,7 @@
 import type { TreeVersionRow } from '@/db/tables';
 import type { TreeVersion } from '@/shared/contract/trees';
 
+/** A version without its document. */
 export function treeVersionToWire(row: TreeVersionRow): TreeVersion {
   return {
     tree: row.tree,
