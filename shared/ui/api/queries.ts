@@ -1,0 +1,102 @@
+/** Reading from the server, one hook a route. Each fails with `ApiError`, whose problem carries the sentence to show. */
+import { useQuery } from '@tanstack/react-query';
+import type { UseQueryResult } from '@tanstack/react-query';
+
+import type { RouteName } from '@/shared/contract/routes';
+import { unwrap } from '@/shared/ui/api/answer';
+import type { ApiError } from '@/shared/ui/api/answer';
+import { client } from '@/shared/ui/api/client';
+import type { CallAnswer, CallInput } from '@/shared/ui/api/client';
+
+export type Fetched<N extends RouteName> = UseQueryResult<CallAnswer<N>, ApiError>;
+
+interface Options {
+  /** false: not yet */
+  enabled?: boolean;
+  /** asked again this often, in milliseconds */
+  everyMs?: number;
+}
+
+/** Name under which an answer is kept: the route, then what it was asked. */
+export function queryKeyOf(name: RouteName, input?: { params?: unknown; query?: unknown }): readonly unknown[] {
+  return [name, ...(input?.params === undefined ? [] : [input.params]), ...(input?.query === undefined ? [] : [input.query])];
+}
+
+/** Fetches a route that only reads. */
+export function useRoute<N extends RouteName>(name: N, input: CallInput<N>, { enabled = true, everyMs }: Options = {}): Fetched<N> {
+  return useQuery<CallAnswer<N>, ApiError>({
+    queryKey: queryKeyOf(name, input),
+    queryFn: () => unwrap(client.call(name, input)),
+    enabled,
+    ...(everyMs === undefined ? {} : { refetchInterval: everyMs }),
+  });
+}
+
+/** Who is signed in; `signed-out` as a problem when nobody is. */
+export function useMe(): Fetched<'me'> {
+  return useRoute('me', {});
+}
+
+const BENCH_EVERY_MS = 15_000;
+
+/** My open runs. */
+export function useBench(): Fetched<'runs'> {
+  return useRoute('runs', { query: { mine: '1', open: '1' } }, { everyMs: BENCH_EVERY_MS });
+}
+
+/** Everything that this device needs to go on with a run. */
+export function useRun(run: string): Fetched<'run'> {
+  return useRoute('run', { params: { run } });
+}
+
+const HOLDS_EVERY_MS = 3_000;
+
+/** Countersigns that are wanted; only for seniors. */
+export function useHolds(enabled = true): Fetched<'holds'> {
+  return useRoute('holds', {}, { enabled, everyMs: HOLDS_EVERY_MS });
+}
+
+/** Machines of the workshop. */
+export function useMachines(): Fetched<'machines'> {
+  return useRoute('machines', {});
+}
+
+/** One machine with its profile, runs and releases. */
+export function useMachine(machine: string): Fetched<'machine'> {
+  return useRoute('machine', { params: { machine } });
+}
+
+/** Fault trees and their versions. */
+export function useTrees(): Fetched<'trees'> {
+  return useRoute('trees', {});
+}
+
+/** One version of a tree with its callees. */
+export function useTreeVersion(tree: string, version: number): Fetched<'treeVersion'> {
+  return useRoute('treeVersion', { params: { tree, version } });
+}
+
+/** Instruments of the workshop. */
+export function useInstruments(): Fetched<'instruments'> {
+  return useRoute('instruments', {});
+}
+
+/** Members of the workshop. */
+export function usePeople(): Fetched<'people'> {
+  return useRoute('people', {});
+}
+
+/** Settings of the workshop. */
+export function useSettings(): Fetched<'settings'> {
+  return useRoute('settings', {});
+}
+
+/** Records, all or of one state. */
+export function useRecords(query: CallInput<'records'>['query'] = {}): Fetched<'records'> {
+  return useRoute('records', { query });
+}
+
+/** One record. */
+export function useRecord(record: string): Fetched<'record'> {
+  return useRoute('record', { params: { record } });
+}
