@@ -5,12 +5,18 @@ import { formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { Unit } from '@/shared/quantity/units';
 import { UNITS } from '@/shared/quantity/units';
 
-/** What a form needs to know about one input besides its schema; read it with `fieldInfo`. */
+/** What a form needs to know about one input besides its schema; read it with `fieldsOf`. */
 export interface FieldInfo {
   readonly title: string;
   readonly description: string;
-  /** Null for a plain number, a choice or a yes/no. */
+  /** Null for a plain number or a choice. */
   readonly unit: Unit | null;
+  /** The choices of a choice, else null. */
+  readonly choices: readonly string[] | null;
+  /** Whether it may be left empty (null). */
+  readonly mayBeEmpty: boolean;
+  /** What stands in when it is not given; undefined where it must be given. */
+  readonly fallback: unknown;
 }
 
 /** A worked answer. Nothing in `result` is rounded. */
@@ -91,13 +97,26 @@ export function choiceField<const Choice extends readonly [string, ...string[]]>
   return z.enum(choices, `${title} must be one of: ${choices.join(', ')}.`).meta({ title, description, unit: null });
 }
 
-/** Title, description and unit of every input of a sheet, in the order of its form. */
+function fieldInfo(name: string, schema: z.core.$ZodType): FieldInfo {
+  let [inner, mayBeEmpty, fallback]: [z.core.$ZodType, boolean, unknown] = [schema, false, undefined];
+  for (;;) {
+    if (inner instanceof z.ZodDefault) {
+      fallback = inner.def.defaultValue;
+      inner = inner.def.innerType;
+    } else if (inner instanceof z.ZodNullable) {
+      mayBeEmpty = true;
+      inner = inner.def.innerType;
+    } else break;
+  }
+  const meta = z.globalRegistry.get(inner as z.ZodType) ?? {};
+  const unit = typeof meta['unit'] === 'string' && meta['unit'] in UNITS ? (meta['unit'] as Unit) : null;
+  const choices = inner instanceof z.ZodEnum ? inner.options.map(String) : null;
+  return { title: meta.title ?? name, description: meta.description ?? '', unit, choices, mayBeEmpty, fallback };
+}
+
+/** What a form needs to know about every input of a sheet, in the order of the form. */
 export function fieldsOf(inputs: z.ZodObject): readonly (readonly [string, FieldInfo])[] {
-  return Object.entries(inputs.shape).map(([name, schema]) => {
-    const meta = z.globalRegistry.get(schema as z.ZodType) ?? {};
-    const unit = typeof meta['unit'] === 'string' && meta['unit'] in UNITS ? (meta['unit'] as Unit) : null;
-    return [name, { title: meta.title ?? name, description: meta.description ?? '', unit }] as const;
-  });
+  return Object.entries(inputs.shape).map(([name, schema]) => [name, fieldInfo(name, schema)] as const);
 }
 
 /**

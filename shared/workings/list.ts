@@ -1,0 +1,17 @@
+/** Every sheet, in the order in which a list shows them. */
+import { sheet as bleedDown } from '@/shared/workings/bleedDown';
+import { sheet as railLimits } from '@/shared/workings/railLimits';
+import { sheet as readingLimit } from '@/shared/workings/readingLimit';
+import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
+import type { Sheet } from '@/shared/workings/sheet';
+
+/** A sheet whose own types are not known where it is listed; feed it through `runSheet`, which parses first. */
+export type AnySheet = Sheet;
+
+// A list forgets each sheet's own input type; only runSheet, which parses by that sheet's schema, may call compute.
+export const SHEETS: readonly AnySheet[] = [seriesLamp, bleedDown, railLimits, readingLimit] as readonly unknown[] as readonly AnySheet[];
+
+/** The sheet of that id, or undefined. */
+export function sheetById(id: string): AnySheet | undefined {
+  return SHEETS.find((sheet) => sheet.id === id);
+}

@@ -1,0 +1,125 @@
+/** Rail limits: between which readings a supply rail is good, by size, so that −12 V is judged like +12 V. */
+import { z } from 'zod';
+
+import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
+import type { Decision } from '@/shared/workings/readingLimit';
+import { decide } from '@/shared/workings/readingLimit';
+import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
+import { defineSheet, numberField } from '@/shared/workings/sheet';
+
+/** What a reading on a rail says: low and high go by size, and a wrong sign is its own answer. */
+export type RailReading = Decision | 'reversed';
+
+/** Limits of one rail in volts, signed as the meter shows them; `low` is the one nearer to zero. */
+export interface RailLimits {
+  readonly lowVolts: number;
+  readonly highVolts: number;
+}
+
+/**
+ * Limits of a rail by size.
+ * @param nominalVolts signed, not zero
+ * @param tolerancePercent of the nominal size
+ */
+export function railLimits(nominalVolts: number, tolerancePercent: number): RailLimits {
+  const band = (nominalVolts * tolerancePercent) / 100;
+  return { lowVolts: nominalVolts - band, highVolts: nominalVolts + band };
+}
+
+/**
+ * Volts of wrong sign that still count as nothing: the meter's doubt, or 1 % of nominal up to 0.1 V, well below the drop of
+ * any diode through which one rail can pull another over. Common practice, no source.
+ */
+function reversedAboveVolts(nominalVolts: number, guardVolts: number): number {
+  return Math.max(guardVolts, Math.min(0.1, Math.abs(nominalVolts) / 100));
+}
+
+/**
+ * Judges a reading against rail limits by size.
+ * @param readingVolts as the meter shows it, signed; ±Infinity for over range
+ * @param guardVolts uncertainty of the reading, zero or more
+ */
+export function classifyRail(readingVolts: number, limits: RailLimits, guardVolts: number): RailReading {
+  const sign = limits.highVolts < 0 ? -1 : 1;
+  const size = sign * readingVolts;
+  const nominal = (limits.lowVolts + limits.highVolts) / 2;
+  if (size < -reversedAboveVolts(nominal, guardVolts)) return 'reversed';
+  return decide(size, { low: sign * limits.lowVolts, high: sign * limits.highVolts }, guardVolts);
+}
+
+/** Result of the sheet, in volts. */
+export interface RailLimitsResult extends RailLimits {
+  /** Between these the rail is good beyond doubt; null when the guard band is wider than the tolerance. */
+  readonly acceptLowVolts: number | null;
+  readonly acceptHighVolts: number | null;
+  readonly reading: RailReading | null;
+}
+
+const WORDS: Readonly<Record<RailReading, string>> = {
+  in: 'in',
+  'close-in': 'in, but close',
+  'close-out': 'out, but close',
+  low: 'low',
+  high: 'high',
+  reversed: 'reversed: the sign is wrong. Take the power off at once',
+};
+
+const inputs = z.strictObject({
+  nominalVolts: numberField({ title: 'Nominal volts', description: 'Of the rail, with its sign', unit: 'V', min: -10_000, max: 10_000 }),
+  tolerancePercent: numberField({ title: 'Tolerance', description: 'Allowed either way, of the nominal', unit: '%', min: 0, max: 50 }),
+  guardVolts: numberField({ title: 'Guard band', description: 'Uncertainty of the meter at this reading', unit: 'V', min: 0, max: 1000 }).default(0),
+  readingVolts: numberField({ title: 'Reading', description: 'As the meter shows it, with its sign; empty for the limits alone', unit: 'V', min: -20_000, max: 20_000 })
+    .nullable()
+    .default(null),
+});
+
+const law = [
+  'low = nominal × (1 − tolerance),  high = nominal × (1 + tolerance); by size, so that low is the one nearer to zero',
+  'good beyond doubt: low + guard … high − guard, by size',
+  'reversed: wrong sign by more than the guard band, at least 1 % of nominal or 0.1 V, whichever is less',
+];
+const validity =
+  'D.c. at the point where it is read, steady while it is read. Ripple and spikes are not in it, nor the drop between the supply and the board. The maker’s own limits come first.';
+const source =
+  'Tolerance as the maker gives it; 74-series logic wants 4.75 to 5.25 V (data sheets, recommended conditions) and is damaged above 7 V (absolute maximum). Guard band: ILAC-G8:09/2019. Threshold for a wrong sign: common practice, no source.';
+
+/** Rail limits. */
+export const sheet = defineSheet({
+  id: 'rail-limits',
+  title: 'Rail limits',
+  question: 'Between which readings is this rail good?',
+  inputs,
+  law,
+  validity,
+  source,
+  caution: 'Reading a live rail: one insulated probe, one hand, or clipped on while dead. Local codes, the maker’s data and licensed practice come first.',
+  checks: ['5 V ± 5 %: recommended VCC of the 74 series (data sheets)', '±12 V, ±5 V rails: ATX power supply design guide (from memory)'],
+  example: { nominalVolts: -12, tolerancePercent: 10, guardVolts: 0.08, readingVolts: -11.6 },
+  compute(given): SheetAnswer<RailLimitsResult> | SheetRefusal {
+    const { nominalVolts, tolerancePercent, guardVolts, readingVolts } = given;
+    if (Math.abs(nominalVolts) < 0.1) return { ok: false, field: 'nominalVolts', say: 'Nominal volts must be 0.1 V or more, either sign.' };
+    const limits = railLimits(nominalVolts, tolerancePercent);
+    const { lowVolts, highVolts } = limits;
+    const guard = Math.sign(nominalVolts) * guardVolts;
+    const roomy = Math.abs(highVolts - lowVolts) >= 2 * guardVolts;
+    const reading = readingVolts === null ? null : classifyRail(readingVolts, limits, guardVolts);
+    const print = (value: number): string => formatQuantity(value, 'V', { digits: 4 });
+    const formula = [
+      `low = ${print(nominalVolts)} × (1 − ${formatNumber(tolerancePercent)} %) = ${print(lowVolts)}`,
+      `high = ${print(nominalVolts)} × (1 + ${formatNumber(tolerancePercent)} %) = ${print(highVolts)}`,
+      roomy
+        ? `good beyond doubt: ${print(lowVolts + guard)} … ${print(highVolts - guard)} with a guard band of ${print(guardVolts)}`
+        : `The guard band of ${print(guardVolts)} is wider than the tolerance: no reading with this meter is beyond doubt.`,
+    ];
+    const verdict = reading === null || readingVolts === null ? '' : `; ${print(readingVolts)} is ${WORDS[reading]}`;
+    return {
+      ok: true,
+      result: { lowVolts, highVolts, acceptLowVolts: roomy ? lowVolts + guard : null, acceptHighVolts: roomy ? highVolts - guard : null, reading },
+      headline: `${print(lowVolts)} to ${print(highVolts)}${verdict}.`,
+      formula,
+      ...(reading === 'reversed' && { caution: 'A reversed rail destroys parts within moments, and the cause is often a lifted return. Isolate, then look for it dead.' }),
+      validity,
+      source,
+    };
+  },
+});
