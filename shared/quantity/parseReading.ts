@@ -58,7 +58,12 @@ function tidy(text: string): string {
     .trim();
 }
 
-const refuse = (why: ReadingFault, say: string, choices: readonly ReadingChoice[] = []): ParsedReading => ({ ok: false, why, say, choices });
+const refuse = (why: ReadingFault, say: string, choices: readonly ReadingChoice[] = []): ParsedReading => ({
+  ok: false,
+  why,
+  say,
+  choices,
+});
 
 /** `4.970` has four significant figures; the echo shows as many as were typed. */
 const figuresTyped = (digits: string): number => Math.max(1, digits.replace('.', '').replace(/^0+/, '').length);
@@ -84,7 +89,8 @@ function readFigures(body: string): readonly string[] {
   const grouped = /^(\d{1,3})(?:([.,'’ ])\d{3})(?:\2\d{3})*(?:([.,])\d+)?$/.exec(body);
   if (grouped !== null && grouped[2] !== grouped[3]) {
     const mark = grouped[3];
-    const [whole = '', decimals] = mark === undefined ? [body] : [body.slice(0, body.lastIndexOf(mark)), body.slice(body.lastIndexOf(mark) + 1)];
+    const [whole = '', decimals] =
+      mark === undefined ? [body] : [body.slice(0, body.lastIndexOf(mark)), body.slice(body.lastIndexOf(mark) + 1)];
     const joined = whole.replace(/[.,'’ ]/g, '');
     // Listed twice: a grouped number is never taken without asking.
     const digits = decimals === undefined ? joined : `${joined}.${decimals}`;
@@ -147,7 +153,10 @@ function settle(readings: readonly string[], suffix: string, negative: boolean, 
   }
   const { absurdAbove } = UNITS[asked.unit];
   if (!(Math.abs(value) <= absurdAbove)) {
-    return refuse('absurd', `${echo} is more than any bench reading (${formatQuantity(absurdAbove, asked.unit)} at most). Check the figures and the prefix.`);
+    return refuse(
+      'absurd',
+      `${echo} is more than any bench reading (${formatQuantity(absurdAbove, asked.unit)} at most). Check the figures and the prefix.`,
+    );
   }
   return { ok: true, kind: 'value', value, echo };
 }
@@ -160,7 +169,8 @@ function readOverRange(text: string, asked: Asked): ParsedReading | null {
   if (meaning === null) return null;
   const wrong = refuseUnit(meaning, asked);
   if (wrong !== null) return wrong;
-  if (sign === '-' && !asked.signed) return refuse('negative', `Over range with a minus sign cannot be right: ${asked.name} have none. Check the leads.`);
+  if (sign === '-' && !asked.signed)
+    return refuse('negative', `Over range with a minus sign cannot be right: ${asked.name} have none. Check the leads.`);
   return { ok: true, kind: 'over-range', sign: sign === '-' ? -1 : 1, echo: sign === '-' ? '\u2212over range' : 'over range' };
 }
 

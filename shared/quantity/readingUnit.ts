@@ -14,18 +14,49 @@ export interface SuffixMeaning {
 
 const PREFIX_SPELLINGS: readonly (readonly [string, Prefix])[] = [
   ['', ''],
-  ['p', 'p'], ['n', 'n'], ['u', 'μ'], ['μ', 'μ'], ['m', 'm'], ['k', 'k'], ['K', 'k'], ['M', 'M'], ['G', 'G'],
-  ['pico', 'p'], ['nano', 'n'], ['micro', 'μ'], ['milli', 'm'], ['kilo', 'k'], ['mega', 'M'], ['meg', 'M'], ['giga', 'G'],
+  ['p', 'p'],
+  ['n', 'n'],
+  ['u', 'μ'],
+  ['μ', 'μ'],
+  ['m', 'm'],
+  ['k', 'k'],
+  ['K', 'k'],
+  ['M', 'M'],
+  ['G', 'G'],
+  ['pico', 'p'],
+  ['nano', 'n'],
+  ['micro', 'μ'],
+  ['milli', 'm'],
+  ['kilo', 'k'],
+  ['mega', 'M'],
+  ['meg', 'M'],
+  ['giga', 'G'],
 ];
 
 /** Minutes and hours are taken for seconds; a lone `m` never is. */
 const TIME_SPELLINGS: Readonly<Record<string, number>> = {
-  min: 60, mins: 60, minute: 60, minutes: 60, h: 3600, hr: 3600, hrs: 3600, hour: 3600, hours: 3600,
+  min: 60,
+  mins: 60,
+  minute: 60,
+  minutes: 60,
+  h: 3600,
+  hr: 3600,
+  hrs: 3600,
+  hour: 3600,
+  hours: 3600,
 };
 
 /** Markings of old capacitors: MFD is microfarads, MMF and UUF are picofarads. Common practice, no source. */
 const OLD_CAPACITOR_SPELLINGS: Readonly<Record<string, Prefix>> = {
-  mfd: 'μ', ufd: 'μ', μfd: 'μ', mmf: 'p', mmfd: 'p', uuf: 'p', μμf: 'p', uufd: 'p', μμfd: 'p',
+  mfd: 'μ',
+  ufd: 'μ',
+  μfd: 'μ',
+  mmf: 'p',
+  mmfd: 'p',
+  uuf: 'p',
+  μμf: 'p',
+  uufd: 'p',
+  μμfd: 'p',
 };
 
 function isUnit(text: string, unit: Unit): boolean {

@@ -85,12 +85,22 @@ function faultAt(entries: readonly RecordEntry[], at: number, prev: string): Cha
   if (entry.seq !== expected) {
     const elsewhere = entries.some((other) => other.seq === expected);
     if (elsewhere) return bad('reordered', entry, `${called(entry)} stands where entry ${expected} belongs: the order was changed.`);
-    return { ok: false, fault: 'missing', seq: expected, entryId: null, what: `Entry ${expected} is missing: entry ${entry.seq} stands in its place.` };
+    return {
+      ok: false,
+      fault: 'missing',
+      seq: expected,
+      entryId: null,
+      what: `Entry ${expected} is missing: entry ${entry.seq} stands in its place.`,
+    };
   }
   if (entry.prev === prev) return null;
   const previous = entries[at - 1];
   if (previous === undefined) return bad('altered', entry, `${called(entry)} is not the start of a record: something stood before it.`);
-  return bad('altered', previous, `${called(previous)} is not the one that entry ${entry.seq} was chained to: one of the two was replaced.`);
+  return bad(
+    'altered',
+    previous,
+    `${called(previous)} is not the one that entry ${entry.seq} was chained to: one of the two was replaced.`,
+  );
 }
 
 /**
@@ -109,7 +119,13 @@ export function verifyChain(entries: readonly RecordEntry[], expected: ExpectedC
   const count = entries.length;
   if (expected.count !== undefined && count < expected.count) {
     const seq = count + 1;
-    return { ok: false, fault: 'missing', seq, entryId: null, what: `The record ends at entry ${count}; it should have ${expected.count} entries.` };
+    return {
+      ok: false,
+      fault: 'missing',
+      seq,
+      entryId: null,
+      what: `The record ends at entry ${count}; it should have ${expected.count} entries.`,
+    };
   }
   const last = entries[count - 1];
   if (last !== undefined && expected.count !== undefined && count > expected.count) {

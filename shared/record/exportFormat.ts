@@ -29,7 +29,9 @@ export const recordHeadSchema = z.strictObject({
   settings: z.strictObject(pinned),
   engine: z.strictObject({ hash: sha256Hex }),
   people: z.array(z.strictObject({ id: idText, name, roles: z.array(z.string().max(40)) })),
-  instruments: z.array(z.strictObject({ id: idText, name, serial: z.string().max(200).nullable(), calibrationDue: z.iso.date().nullable() })),
+  instruments: z.array(
+    z.strictObject({ id: idText, name, serial: z.string().max(200).nullable(), calibrationDue: z.iso.date().nullable() }),
+  ),
   exportedAt: wallTime,
   /** Hash of the last entry and number of entries: a cut-off tail shows. */
   head: sha256Hex,
@@ -131,6 +133,12 @@ export function readExport(text: string): ReadExport | UnreadableExport {
   const chain: ChainVerdict =
     stray === undefined
       ? verifyChain(entries, { head: record.head, count: record.count })
-      : { ok: false, fault: 'foreign', seq: stray.seq, entryId: stray.id, what: `Entry ${stray.seq} belongs to another run than the record.` };
+      : {
+          ok: false,
+          fault: 'foreign',
+          seq: stray.seq,
+          entryId: stray.id,
+          what: `Entry ${stray.seq} belongs to another run than the record.`,
+        };
   return { ok: true, file: file.data, record, entries, chain, sha256: sha256HexOf(bytes) };
 }

@@ -37,13 +37,19 @@ async function checkSignature(file: ExportFile, keys: JSONWebKeySet): Promise<Si
   const kid = kidOf(file);
   if (kid === null) return { state: 'bad', kid, say: 'The signature names no key.' };
   const named = keys.keys.filter((key) => key.kid === kid);
-  if (named.length === 0) return { state: 'unknown-key', kid, say: `The key “${kid}” is not among the published keys, so nothing can be said about the signature.` };
+  if (named.length === 0)
+    return {
+      state: 'unknown-key',
+      kid,
+      say: `The key “${kid}” is not among the published keys, so nothing can be said about the signature.`,
+    };
   try {
     const { protectedHeader } = await flattenedVerify(file, createLocalJWKSet({ keys: named }), { algorithms: ['EdDSA', 'Ed25519'] });
     if (protectedHeader?.typ !== EXPORT_TYPE) return { state: 'bad', kid, say: 'This was signed as something else than a record.' };
     return { state: 'good', kid, say: `Signed with the published key “${kid}”; not a byte has changed since.` };
   } catch (error) {
-    if (error instanceof errors.JOSEError) return { state: 'bad', kid, say: 'The signature does not fit: the file was changed after it was signed.' };
+    if (error instanceof errors.JOSEError)
+      return { state: 'bad', kid, say: 'The signature does not fit: the file was changed after it was signed.' };
     // What is left is a published key that the platform cannot import.
     return { state: 'unknown-key', kid, say: `The published key “${kid}” is damaged, so nothing can be said about the signature.` };
   }

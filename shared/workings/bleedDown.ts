@@ -90,14 +90,52 @@ export function chooseResistor(farads: number, volts: number, safeVolts: number,
 }
 
 const inputs = z.strictObject({
-  farads: numberField({ title: 'Capacitance', description: 'As marked; for capacitors in parallel their sum', unit: 'F', min: 1e-12, max: 10 }),
-  volts: numberField({ title: 'Volts', description: 'D.c. volts on it at the start; when not measured, the most that the circuit can put there', unit: 'V', min: 0.1, max: 30_000 }),
-  safeVolts: numberField({ title: 'Safe volts', description: 'Volts to come down to; 5 V counts as dead here', unit: 'V', min: 0.1, max: 60 }).default(DEAD_VOLTS),
-  bleederOhms: numberField({ title: 'Bleeder', description: 'Fitted bleeder resistor, measured today; empty for none or not sure', unit: 'Ω', min: 0.1, max: 1e9 })
+  farads: numberField({
+    title: 'Capacitance',
+    description: 'As marked; for capacitors in parallel their sum',
+    unit: 'F',
+    min: 1e-12,
+    max: 10,
+  }),
+  volts: numberField({
+    title: 'Volts',
+    description: 'D.c. volts on it at the start; when not measured, the most that the circuit can put there',
+    unit: 'V',
+    min: 0.1,
+    max: 30_000,
+  }),
+  safeVolts: numberField({
+    title: 'Safe volts',
+    description: 'Volts to come down to; 5 V counts as dead here',
+    unit: 'V',
+    min: 0.1,
+    max: 60,
+  }).default(DEAD_VOLTS),
+  bleederOhms: numberField({
+    title: 'Bleeder',
+    description: 'Fitted bleeder resistor, measured today; empty for none or not sure',
+    unit: 'Ω',
+    min: 0.1,
+    max: 1e9,
+  })
     .nullable()
     .default(null),
-  toolOhms: numberField({ title: 'Tool resistor', description: 'Discharge resistor in your hand; empty for none', unit: 'Ω', min: 0.1, max: 1e9 }).nullable().default(null),
-  toolWatts: numberField({ title: 'Tool watts', description: 'Rated watts of the tool resistor, wire-wound', unit: 'W', min: 0.1, max: 1000 }).default(10),
+  toolOhms: numberField({
+    title: 'Tool resistor',
+    description: 'Discharge resistor in your hand; empty for none',
+    unit: 'Ω',
+    min: 0.1,
+    max: 1e9,
+  })
+    .nullable()
+    .default(null),
+  toolWatts: numberField({
+    title: 'Tool watts',
+    description: 'Rated watts of the tool resistor, wire-wound',
+    unit: 'W',
+    min: 0.1,
+    max: 1000,
+  }).default(10),
   tolerancePercent: numberField({
     title: 'Tolerance',
     description: 'How far the capacitance may be above its marking; 50 % for old electrolytics unless marked',
@@ -138,9 +176,15 @@ function verdictLine(result: BleedDownResult, toolWatts: number): string | null 
 type Inputs = z.output<typeof inputs>;
 
 function headlineOf(given: Inputs, result: BleedDownResult): string {
-  const time = result.worstSecondsToSafe === 0 ? `already at or below ${v(given.safeVolts)}` : `${formatDuration(result.worstSecondsToSafe)} to ${v(given.safeVolts)}, worst case`;
+  const time =
+    result.worstSecondsToSafe === 0
+      ? `already at or below ${v(given.safeVolts)}`
+      : `${formatDuration(result.worstSecondsToSafe)} to ${v(given.safeVolts)}, worst case`;
   const { suggestion } = result;
-  const better = suggestion === null ? 'Discharge it in stages with a proper discharge set.' : `Take ${r(suggestion.ohms)}, ${w(suggestion.watts)}, wire-wound.`;
+  const better =
+    suggestion === null
+      ? 'Discharge it in stages with a proper discharge set.'
+      : `Take ${r(suggestion.ohms)}, ${w(suggestion.watts)}, wire-wound.`;
   const tool = result.toolVerdict === 'too-small' ? ` The tool resistor is too small. ${better}` : '';
   return `${j(result.joules)}: ${time}.${tool}`;
 }
@@ -153,16 +197,23 @@ function formulaOf(given: Inputs, result: BleedDownResult): readonly string[] {
     `τ = ${r(result.ohms)} × ${f(farads)} = ${formatDuration(result.timeConstantSeconds)}`,
     `t = ${formatDuration(result.timeConstantSeconds)} × ln(${v(volts)} ÷ ${v(safeVolts)}) = ${formatDuration(result.secondsToSafe)}; at +${formatNumber(tolerancePercent)} % ${formatDuration(result.worstSecondsToSafe)}`,
   ];
-  if (result.bleederSeconds !== null && given.toolOhms !== null) lines.push(`through the bleeder alone: ${formatDuration(result.bleederSeconds)}`);
+  if (result.bleederSeconds !== null && given.toolOhms !== null)
+    lines.push(`through the bleeder alone: ${formatDuration(result.bleederSeconds)}`);
   const tool = verdictLine(result, given.toolWatts);
   if (tool !== null) lines.push(tool);
   const { suggestion } = result;
-  if (suggestion !== null) lines.push(`E24: ${r(suggestion.ohms)}, ${w(suggestion.watts)} wire-wound does it alone in ${formatDuration(suggestion.secondsToSafe)}, worst case`);
+  if (suggestion !== null)
+    lines.push(
+      `E24: ${r(suggestion.ohms)}, ${w(suggestion.watts)} wire-wound does it alone in ${formatDuration(suggestion.secondsToSafe)}, worst case`,
+    );
   lines.push(`rebound: may come back to ${v(result.reboundVolts)}; wait, read again, leave the link on`);
   for (const { limit, worstSeconds } of result.thresholds) {
     const time = worstSeconds === 0 ? 'below it from the start' : `after ${formatDuration(worstSeconds)}`;
     const { withinSeconds } = limit;
-    const met = withinSeconds === null ? '' : `; that standard wants ${formatDuration(withinSeconds)}: ${worstSeconds <= withinSeconds ? 'met' : 'not met'}`;
+    const met =
+      withinSeconds === null
+        ? ''
+        : `; that standard wants ${formatDuration(withinSeconds)}: ${worstSeconds <= withinSeconds ? 'met' : 'not met'}`;
     lines.push(`${v(limit.volts)} (${limit.name}): ${time}${met}`);
   }
   return lines;
@@ -187,7 +238,11 @@ export const sheet = defineSheet({
   compute(given): SheetAnswer<BleedDownResult> | SheetRefusal {
     const { farads, volts, safeVolts, bleederOhms, toolOhms, toolWatts } = given;
     if (bleederOhms === null && toolOhms === null) {
-      return { ok: false, field: 'toolOhms', say: 'Without a bleeder and without a tool resistor the charge has no way out: give one of them.' };
+      return {
+        ok: false,
+        field: 'toolOhms',
+        say: 'Without a bleeder and without a tool resistor the charge has no way out: give one of them.',
+      };
     }
     const ohms = 1 / ((bleederOhms === null ? 0 : 1 / bleederOhms) + (toolOhms === null ? 0 : 1 / toolOhms));
     const worstFarads = farads * (1 + given.tolerancePercent / 100);

@@ -14,13 +14,32 @@ function whenNotGiven({ fallback }: FieldInfo): string {
 function section(sheet: AnySheet): readonly string[] {
   const answer = runSheet(sheet, sheet.example);
   if (!answer.ok) throw new Error(`The example of ${sheet.id} is refused at ${answer.field}: ${answer.say}`);
-  const lines = [`## ${sheet.title} (\`${sheet.id}\`)`, '', sheet.question, '', '| input | what it is | unit | when not given |', '| --- | --- | --- | --- |'];
+  const lines = [
+    `## ${sheet.title} (\`${sheet.id}\`)`,
+    '',
+    sheet.question,
+    '',
+    '| input | what it is | unit | when not given |',
+    '| --- | --- | --- | --- |',
+  ];
   for (const [name, field] of fieldsOf(sheet.inputs)) {
-    const what = field.choices === null ? field.description : `${field.description}: ${field.choices.map((choice) => `\`${choice}\``).join(', ')}`;
+    const what =
+      field.choices === null ? field.description : `${field.description}: ${field.choices.map((choice) => `\`${choice}\``).join(', ')}`;
     lines.push(`| ${field.title} (\`${name}\`) | ${cell(what)} | ${field.unit ?? ''} | ${whenNotGiven(field)} |`);
   }
   lines.push('', '**Formula**', '', ...sheet.law.map((line) => `- ${line}`));
-  lines.push('', '**Example**', '', '```json', JSON.stringify(sheet.example), '```', '', `> ${answer.headline}`, '', ...answer.formula.map((line) => `- ${line}`));
+  lines.push(
+    '',
+    '**Example**',
+    '',
+    '```json',
+    JSON.stringify(sheet.example),
+    '```',
+    '',
+    `> ${answer.headline}`,
+    '',
+    ...answer.formula.map((line) => `- ${line}`),
+  );
   lines.push('', `**Valid.** ${sheet.validity}`, '', `**Source.** ${sheet.source}`);
   if (sheet.caution !== '') lines.push('', `**Caution.** ${sheet.caution}`);
   lines.push('', '**Checked against**', '', ...sheet.checks.map((line) => `- ${line}`), '');

@@ -67,8 +67,20 @@ const WORDS: Readonly<Record<RailReading, string>> = {
 const inputs = z.strictObject({
   nominalVolts: numberField({ title: 'Nominal volts', description: 'Of the rail, with its sign', unit: 'V', min: -10_000, max: 10_000 }),
   tolerancePercent: numberField({ title: 'Tolerance', description: 'Allowed either way, of the nominal', unit: '%', min: 0, max: 50 }),
-  guardVolts: numberField({ title: 'Guard band', description: 'Uncertainty of the meter at this reading', unit: 'V', min: 0, max: 1000 }).default(0),
-  readingVolts: numberField({ title: 'Reading', description: 'As the meter shows it, with its sign; empty for the limits alone', unit: 'V', min: -20_000, max: 20_000 })
+  guardVolts: numberField({
+    title: 'Guard band',
+    description: 'Uncertainty of the meter at this reading',
+    unit: 'V',
+    min: 0,
+    max: 1000,
+  }).default(0),
+  readingVolts: numberField({
+    title: 'Reading',
+    description: 'As the meter shows it, with its sign; empty for the limits alone',
+    unit: 'V',
+    min: -20_000,
+    max: 20_000,
+  })
     .nullable()
     .default(null),
 });
@@ -92,7 +104,8 @@ export const sheet = defineSheet({
   law,
   validity,
   source,
-  caution: 'Reading a live rail: one insulated probe, one hand, or clipped on while dead. Local codes, the maker’s data and licensed practice come first.',
+  caution:
+    'Reading a live rail: one insulated probe, one hand, or clipped on while dead. Local codes, the maker’s data and licensed practice come first.',
   checks: ['5 V ± 5 %: recommended VCC of the 74 series (data sheets)', '±12 V, ±5 V rails: ATX power supply design guide (from memory)'],
   example: { nominalVolts: -12, tolerancePercent: 10, guardVolts: 0.08, readingVolts: -11.6 },
   compute(given): SheetAnswer<RailLimitsResult> | SheetRefusal {
@@ -114,10 +127,18 @@ export const sheet = defineSheet({
     const verdict = reading === null || readingVolts === null ? '' : `; ${print(readingVolts)} is ${WORDS[reading]}`;
     return {
       ok: true,
-      result: { lowVolts, highVolts, acceptLowVolts: roomy ? lowVolts + guard : null, acceptHighVolts: roomy ? highVolts - guard : null, reading },
+      result: {
+        lowVolts,
+        highVolts,
+        acceptLowVolts: roomy ? lowVolts + guard : null,
+        acceptHighVolts: roomy ? highVolts - guard : null,
+        reading,
+      },
       headline: `${print(lowVolts)} to ${print(highVolts)}${verdict}.`,
       formula,
-      ...(reading === 'reversed' && { caution: 'A reversed rail destroys parts within moments, and the cause is often a lifted return. Isolate, then look for it dead.' }),
+      ...(reading === 'reversed' && {
+        caution: 'A reversed rail destroys parts within moments, and the cause is often a lifted return. Isolate, then look for it dead.',
+      }),
       validity,
       source,
     };

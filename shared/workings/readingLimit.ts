@@ -65,8 +65,10 @@ function gradeAgainst(value: number, limit: number, guard: number): Grade {
  */
 export function decide(value: number, limits: Limits, uncertainty: number): Decision {
   const { low, high } = limits;
-  if (Number.isNaN(value) || !(uncertainty >= 0) || uncertainty === Infinity) throw new RangeError('decide: value and uncertainty must be numbers');
-  if (Number.isNaN(low) || Number.isNaN(high) || (low !== null && high !== null && low > high)) throw new RangeError('decide: low must not be above high');
+  if (Number.isNaN(value) || !(uncertainty >= 0) || uncertainty === Infinity)
+    throw new RangeError('decide: value and uncertainty must be numbers');
+  if (Number.isNaN(low) || Number.isNaN(high) || (low !== null && high !== null && low > high))
+    throw new RangeError('decide: low must not be above high');
   const atHigh: Grade = high === null ? 'in' : gradeAgainst(value, high, uncertainty);
   // Mirrored, so that both limits go through the very same arithmetic.
   const atLow: Grade = low === null ? 'in' : gradeAgainst(-value, -low, uncertainty);
@@ -78,11 +80,28 @@ export function decide(value: number, limits: Limits, uncertainty: number): Deci
 const inputs = z.strictObject({
   quantity: choiceField('Quantity', 'What is read', QUANTITY_IDS).default('volts-dc'),
   reading: numberField({ title: 'Reading', description: 'The reading as the instrument shows it', unit: null, min: -1e12, max: 1e12 }),
-  low: numberField({ title: 'Low limit', description: 'Lowest allowed value, or empty for none', unit: null, min: -1e12, max: 1e12 }).nullable().default(null),
-  high: numberField({ title: 'High limit', description: 'Highest allowed value, or empty for none', unit: null, min: -1e12, max: 1e12 }).nullable().default(null),
-  percent: numberField({ title: 'Percent of reading', description: 'The instrument’s ± percent of reading on this range', unit: '%', min: 0, max: 50 }),
+  low: numberField({ title: 'Low limit', description: 'Lowest allowed value, or empty for none', unit: null, min: -1e12, max: 1e12 })
+    .nullable()
+    .default(null),
+  high: numberField({ title: 'High limit', description: 'Highest allowed value, or empty for none', unit: null, min: -1e12, max: 1e12 })
+    .nullable()
+    .default(null),
+  percent: numberField({
+    title: 'Percent of reading',
+    description: 'The instrument’s ± percent of reading on this range',
+    unit: '%',
+    min: 0,
+    max: 50,
+  }),
   counts: numberField({ title: 'Counts', description: 'The instrument’s ± counts of the last digit', unit: null, min: 0, max: 1000 }),
-  resolution: numberField({ title: 'Resolution', description: 'Value of one count on this range', unit: null, min: 0, max: 1e9, aboveMin: true }),
+  resolution: numberField({
+    title: 'Resolution',
+    description: 'Value of one count on this range',
+    unit: null,
+    min: 0,
+    max: 1e9,
+    aboveMin: true,
+  }),
 });
 
 /** Result of the sheet; all in the unit of the reading. */
@@ -131,7 +150,8 @@ export const sheet = defineSheet({
   compute(given): SheetAnswer<ReadingLimitResult> | SheetRefusal {
     const { quantity, reading, low, high } = given;
     if (low === null && high === null) return { ok: false, field: 'low', say: 'Give a low limit, a high limit, or both.' };
-    if (low !== null && high !== null && low > high) return { ok: false, field: 'high', say: 'The high limit must not be below the low limit.' };
+    if (low !== null && high !== null && low > high)
+      return { ok: false, field: 'high', say: 'The high limit must not be below the low limit.' };
     const { unit } = QUANTITIES[quantity];
     const print = (value: number): string => formatQuantity(value, unit, { digits: 5 });
     const errorLimit = errorLimitOf(given, reading);

@@ -93,7 +93,13 @@ export function operatingPoints(lamp: Lamp, supplyVolts: number, load: LampLoad)
 const inputs = z.strictObject({
   supplyVolts: numberField({ title: 'Mains volts', description: 'Mains volts, rms', unit: 'V', min: 6, max: 480 }),
   lampVolts: numberField({ title: 'Lamp volts', description: 'Rated volts of the lamp', unit: 'V', min: 6, max: 480 }),
-  lampWatts: numberField({ title: 'Lamp watts', description: 'Rated watts of the lamp; for lamps in parallel their sum', unit: 'W', min: 1, max: 10_000 }),
+  lampWatts: numberField({
+    title: 'Lamp watts',
+    description: 'Rated watts of the lamp; for lamps in parallel their sum',
+    unit: 'W',
+    min: 1,
+    max: 10_000,
+  }),
   coldRatio: numberField({
     title: 'Hot-to-cold ratio',
     description: 'Hot resistance divided by cold resistance; 15 for a mains lamp, 6 to 7 for a small one',
@@ -108,7 +114,13 @@ const inputs = z.strictObject({
     'short',
   ]),
   loadOhms: numberField({ title: 'Load ohms', description: 'For a resistance', unit: 'Ω', min: 0.001, max: 10e6 }).nullable().default(null),
-  loadWatts: numberField({ title: 'Load watts', description: 'Plate watts of the supply, or what it draws as it stands', unit: 'W', min: 0.01, max: 100_000 })
+  loadWatts: numberField({
+    title: 'Load watts',
+    description: 'Plate watts of the supply, or what it draws as it stands',
+    unit: 'W',
+    min: 0.01,
+    max: 100_000,
+  })
     .nullable()
     .default(null),
 });
@@ -144,7 +156,8 @@ const volts = (value: number): string => formatQuantity(value, 'V', { digits: 3 
 const amps = (value: number): string => formatQuantity(value, 'A', { digits: 3 });
 const watts = (value: number): string => formatQuantity(value, 'W', { digits: 3 });
 const ohms = (value: number): string => formatQuantity(value, 'Ω', { digits: 3 });
-const lampsInWords = ({ count, eachWatts }: LampChoice): string => (count === 1 ? `a lamp of ${watts(eachWatts)}` : `${count} lamps of ${watts(eachWatts)} in parallel`);
+const lampsInWords = ({ count, eachWatts }: LampChoice): string =>
+  count === 1 ? `a lamp of ${watts(eachWatts)}` : `${count} lamps of ${watts(eachWatts)} in parallel`;
 
 function headlineOf(given: Inputs, result: SeriesLampResult): string {
   const { settled, deadShort, willTick, recommended } = result;
@@ -174,10 +187,14 @@ function formulaOf(given: Inputs, load: LampLoad, result: SeriesLampResult): rea
     lines.push(`most that this lamp lets through: ${watts(result.mostLoadWatts)}; wanted: ${watts(load.watts)}`);
     const [first] = result.points;
     if (result.willTick && first !== undefined) {
-      lines.push(`${volts(first.loadVolts)} is less than ${formatNumber(GIVES_UP_SHARE * 100)} % of the mains, where such a supply gives up (common practice, no source)`);
+      lines.push(
+        `${volts(first.loadVolts)} is less than ${formatNumber(GIVES_UP_SHARE * 100)} % of the mains, where such a supply gives up (common practice, no source)`,
+      );
     }
   }
-  lines.push(`dead short: lamp ${volts(deadShort.lampVolts)}, ${deadShort.brightness}, ${amps(deadShort.amps)}; first moment up to ${amps(result.coldPeakAmps)}`);
+  lines.push(
+    `dead short: lamp ${volts(deadShort.lampVolts)}, ${deadShort.brightness}, ${amps(deadShort.amps)}; first moment up to ${amps(result.coldPeakAmps)}`,
+  );
   if (result.recommended !== null) lines.push(`lamp to take: ${lampsInWords(result.recommended)}`);
   return lines;
 }

@@ -83,7 +83,9 @@ export function numberField(options: NumberFieldOptions): z.ZodNumber {
   const { title, description, unit, min, max, aboveMin = false } = options;
   const inUnit = unit === null ? '' : ` in ${UNITS[unit].plural}`;
   const low = aboveMin ? `${title} must be more than ${show(min, unit)}.` : `${title} must be ${show(min, unit)} or more.`;
-  const number = z.number({ error: (issue) => (issue.input === undefined ? `${title} is missing.` : `${title} must be a number${inUnit}.`) });
+  const number = z.number({
+    error: (issue) => (issue.input === undefined ? `${title} is missing.` : `${title} must be a number${inUnit}.`),
+  });
   const bounded = aboveMin ? number.gt(min, low) : number.gte(min, low);
   return bounded.lte(max, `${title} must be ${show(max, unit)} or less.`).meta({ title, description, unit });
 }
@@ -124,7 +126,10 @@ export function fieldsOf(inputs: z.ZodObject): readonly (readonly [string, Field
  * @param input anything: a form's values, a query string's, a JSON file's
  * @returns the answer, or the first field that is wrong with a sentence
  */
-export function runSheet<Inputs extends z.ZodObject, Result>(sheet: Sheet<Inputs, Result>, input: unknown): SheetAnswer<Result> | SheetRefusal {
+export function runSheet<Inputs extends z.ZodObject, Result>(
+  sheet: Sheet<Inputs, Result>,
+  input: unknown,
+): SheetAnswer<Result> | SheetRefusal {
   const parsed = sheet.inputs.safeParse(input);
   if (parsed.success) return sheet.compute(parsed.data);
   const [issue] = parsed.error.issues;

@@ -55,7 +55,13 @@ describe('charge and energy thresholds', () => {
   });
 
   it('names no single touch limit for all standards: 60 V (IEC 61010-1, 60204-1), 50 V (NEC 460.6), 42.4 V and 34 V (IEC 60335-1)', () => {
-    expect(TOUCH_LIMITS.map(({ volts, withinSeconds }) => [volts, withinSeconds])).toEqual([[60, null], [60, 5], [50, 60], [42.4, null], [34, 1]]);
+    expect(TOUCH_LIMITS.map(({ volts, withinSeconds }) => [volts, withinSeconds])).toEqual([
+      [60, null],
+      [60, 5],
+      [50, 60],
+      [42.4, null],
+      [34, 1],
+    ]);
     for (const { name } of TOUCH_LIMITS) expect(name).toMatch(/^(IEC|NEC) \d/);
   });
 });

@@ -29,10 +29,17 @@ describe('canonicalJson against RFC 8785', () => {
   });
 
   it('sorts by UTF-16 code units, the sample of section 3.2.3', () => {
-    const sample = '{"\\u20ac":"Euro Sign","\\r":"Carriage Return","\\ufb33":"Hebrew Letter Dalet With Dagesh","1":"One","\\ud83d\\ude00":"Emoji: Grinning Face","\\u0080":"Control","\\u00f6":"Latin Small Letter O With Diaeresis"}';
+    const sample =
+      '{"\\u20ac":"Euro Sign","\\r":"Carriage Return","\\ufb33":"Hebrew Letter Dalet With Dagesh","1":"One","\\ud83d\\ude00":"Emoji: Grinning Face","\\u0080":"Control","\\u00f6":"Latin Small Letter O With Diaeresis"}';
     expect(Object.values(JSON.parse(canonicalJson(JSON.parse(sample))) as object)).toEqual([
       // A reader that keeps insertion order shows the integer-like key first.
-      'One', 'Carriage Return', 'Control', 'Latin Small Letter O With Diaeresis', 'Euro Sign', 'Emoji: Grinning Face', 'Hebrew Letter Dalet With Dagesh',
+      'One',
+      'Carriage Return',
+      'Control',
+      'Latin Small Letter O With Diaeresis',
+      'Euro Sign',
+      'Emoji: Grinning Face',
+      'Hebrew Letter Dalet With Dagesh',
     ]);
     expect(canonicalJson(JSON.parse(sample)).indexOf('Carriage')).toBeLessThan(canonicalJson(JSON.parse(sample)).indexOf('One'));
   });

@@ -5,7 +5,12 @@ import { sampleExport } from '@/tests/shared/record/sampleExport';
 import { signExport, verifyExport } from '@/shared/record/verifyExport';
 
 // RFC 8037, appendix A.1, A.3 and A.4 (strings first written from memory, then recomputed: they fit each other).
-const privateJwk = { kty: 'OKP', crv: 'Ed25519', d: 'nWGxne_9WmC6hEr0kuwsxERJxWl7MmkZcDusAxyuf2A', x: '11qYAYKxCrfVS_7TyWQHOg7hcvPapiMlrwIaaPcHURo' };
+const privateJwk = {
+  kty: 'OKP',
+  crv: 'Ed25519',
+  d: 'nWGxne_9WmC6hEr0kuwsxERJxWl7MmkZcDusAxyuf2A',
+  x: '11qYAYKxCrfVS_7TyWQHOg7hcvPapiMlrwIaaPcHURo',
+};
 const publicJwk = { kty: 'OKP', crv: 'Ed25519', x: privateJwk.x };
 const thumbprint = 'kPrK_qmxVWaYVA9wwBF6Iuo3vVzz7TxHCTwXBygrS4k';
 const signed =
@@ -13,7 +18,9 @@ const signed =
 
 describe('Ed25519 in JOSE against RFC 8037, appendix A', () => {
   it('makes the published signature', async () => {
-    const jws = await new CompactSign(Buffer.from('Example of Ed25519 signing')).setProtectedHeader({ alg: 'EdDSA' }).sign(await importJWK(privateJwk, 'EdDSA'));
+    const jws = await new CompactSign(Buffer.from('Example of Ed25519 signing'))
+      .setProtectedHeader({ alg: 'EdDSA' })
+      .sign(await importJWK(privateJwk, 'EdDSA'));
     expect(jws).toBe(signed);
   });
 

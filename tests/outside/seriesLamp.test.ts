@@ -21,7 +21,12 @@ describe('lamp re-rating: I = I₀ (V/V₀)^0.55, Fink & Beaty, Standard Handboo
   });
 
   it('keeps to the other published exponent, watts ~ V^1.6, within 1.5 % near full volts and 3.6 % at half', () => {
-    for (const [ratio, watts] of [[0.5, 0.32988], [0.75, 0.6311], [0.9, 0.84487], [1.1, 1.16474]] as const) {
+    for (const [ratio, watts] of [
+      [0.5, 0.32988],
+      [0.75, 0.6311],
+      [0.9, 0.84487],
+      [1.1, 1.16474],
+    ] as const) {
       const ours = ratio * ratio ** CURRENT_EXPONENT;
       expect(Math.abs(ours / watts - 1)).toBeLessThan(ratio < 0.6 ? 0.036 : 0.015);
     }

@@ -44,7 +44,7 @@ describe('formatQuantity', () => {
     fc.assert(
       fc.property(fc.double({ min: 1e-12, max: 1e9, noNaN: true }), (value) => {
         const [figures = '', unit = ''] = formatQuantity(value, 'Ω', { digits: 4 }).split(' ');
-        const factor = { 'μΩ': 1e-6, 'mΩ': 1e-3, Ω: 1, 'kΩ': 1e3, 'MΩ': 1e6, 'GΩ': 1e9 }[unit] ?? Number.NaN;
+        const factor = { μΩ: 1e-6, mΩ: 1e-3, Ω: 1, kΩ: 1e3, MΩ: 1e6, GΩ: 1e9 }[unit] ?? Number.NaN;
         expect(Math.abs(Number(figures) * factor - value)).toBeLessThanOrEqual(value * 5.01e-4);
       }),
     );
@@ -54,7 +54,10 @@ describe('formatQuantity', () => {
 describe('formatNumber', () => {
   it('prints a ratio without exponent', () => {
     expect([formatNumber(1e-9), formatNumber(-0.55), formatNumber(1e21), formatNumber(Number.NaN)]).toEqual([
-      '0.000000001', '\u22120.55', '1000000000000000000000', 'no value',
+      '0.000000001',
+      '\u22120.55',
+      '1000000000000000000000',
+      'no value',
     ]);
   });
 });

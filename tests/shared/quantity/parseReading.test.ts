@@ -146,7 +146,11 @@ describe('parseReading', () => {
       const exponents = prefixes.map((prefix) => PREFIXES[prefix].exponent);
       return fc
         .tuple(fc.integer({ min: 1, max: 9999 }), fc.constantFrom(...exponents), fc.boolean())
-        .map(([figures, exponent, minus]) => ({ quantity, unit, value: (minus && signed ? -1 : 1) * Number(`${figures}e${exponent - 3}`) }));
+        .map(([figures, exponent, minus]) => ({
+          quantity,
+          unit,
+          value: (minus && signed ? -1 : 1) * Number(`${figures}e${exponent - 3}`),
+        }));
     });
     fc.assert(
       fc.property(readings, ({ quantity, unit, value }) => {
@@ -160,11 +164,12 @@ describe('parseReading', () => {
   });
 
   it('never gives NaN and always a sentence, whatever is typed', () => {
-    const alphabet = fc.constantFrom(...'0123456789.,-+ kKmMuμnpGRVAΩFsCOLe\'~%°−');
+    const alphabet = fc.constantFrom(..."0123456789.,-+ kKmMuμnpGRVAΩFsCOLe'~%°−");
     fc.assert(
       fc.property(fc.constantFrom(...QUANTITY_IDS), fc.string({ unit: alphabet, maxLength: 12 }), (quantity, text) => {
         const parsed = parseReading(text, { quantity });
-        if (!parsed.ok) return parsed.say.length > 10 && /[.?]$/.test(parsed.say) && parsed.choices.every(({ value }) => Number.isFinite(value));
+        if (!parsed.ok)
+          return parsed.say.length > 10 && /[.?]$/.test(parsed.say) && parsed.choices.every(({ value }) => Number.isFinite(value));
         return parsed.kind === 'over-range' || Number.isFinite(parsed.value);
       }),
       { numRuns: 3000 },

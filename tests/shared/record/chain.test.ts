@@ -49,7 +49,11 @@ describe('verifyChain', () => {
   it.each(fields)('finds and names any entry whose %s was changed, taken out or given another type', (field) => {
     for (const [at, entry] of whole.entries()) {
       const others: readonly unknown[] = [
-        typeof entry[field] === 'number' ? Number(entry[field]) + 1 : typeof entry[field] === 'string' ? `${entry[field]}0` : { step: 's-0' },
+        typeof entry[field] === 'number'
+          ? Number(entry[field]) + 1
+          : typeof entry[field] === 'string'
+            ? `${entry[field]}0`
+            : { step: 's-0' },
         null,
         undefined,
         Number.NaN,

@@ -17,7 +17,11 @@ describe('verifyExport', () => {
     const { privateKey, jwks } = await keyed('k1');
     const file = await signExport(sampleExport(), privateKey, 'k1');
     expect(Object.keys(file)).toEqual(['payload', 'protected', 'signature']);
-    expect(await verifyExport(JSON.stringify(file), jwks)).toMatchObject({ ok: true, trusted: true, signature: { state: 'good', kid: 'k1' } });
+    expect(await verifyExport(JSON.stringify(file), jwks)).toMatchObject({
+      ok: true,
+      trusted: true,
+      signature: { state: 'good', kid: 'k1' },
+    });
   });
 
   it('can be checked without this program: plain Ed25519 over protected.payload', async () => {
@@ -45,7 +49,11 @@ describe('verifyExport', () => {
     const { privateKey, jwks } = await keyed('k1');
     const exported = sampleExport();
     const file = await signExport({ ...exported, entries: exported.entries.toSpliced(2, 1) }, privateKey, 'k1');
-    expect(await verifyExport(JSON.stringify(file), jwks)).toMatchObject({ trusted: false, signature: { state: 'good' }, chain: { ok: false, seq: 3 } });
+    expect(await verifyExport(JSON.stringify(file), jwks)).toMatchObject({
+      trusted: false,
+      signature: { state: 'good' },
+      chain: { ok: false, seq: 3 },
+    });
   });
 
   it('says when the key is not published, and when the key under that name is another one', async () => {
@@ -63,7 +71,9 @@ describe('verifyExport', () => {
     expect(await verifyExport(JSON.stringify(hs), jwks)).toMatchObject({ trusted: false, signature: { state: 'bad' } });
 
     const { privateKey, jwks: good } = await keyed('k1');
-    const other = await new FlattenedSign(exportBytes(sampleExport())).setProtectedHeader({ alg: 'EdDSA', kid: 'k1', typ: 'jwt' }).sign(privateKey);
+    const other = await new FlattenedSign(exportBytes(sampleExport()))
+      .setProtectedHeader({ alg: 'EdDSA', kid: 'k1', typ: 'jwt' })
+      .sign(privateKey);
     expect(await verifyExport(JSON.stringify(other), good)).toMatchObject({ trusted: false, signature: { state: 'bad' } });
   });
 

@@ -5,7 +5,8 @@ import { chooseResistor, judgeResistor, needsDischarge, PEAK_OVERLOAD, secondsTo
 import { E24, nextE24 } from '@/shared/workings/preferred';
 import { runSheet } from '@/shared/workings/sheet';
 
-const wide = (low: number, high: number): fc.Arbitrary<number> => fc.double({ min: Math.log(low), max: Math.log(high), noNaN: true }).map(Math.exp);
+const wide = (low: number, high: number): fc.Arbitrary<number> =>
+  fc.double({ min: Math.log(low), max: Math.log(high), noNaN: true }).map(Math.exp);
 const farads = wide(1.1e-12, 9.9);
 const volts = wide(0.11, 29_000);
 const ohms = wide(0.11, 9.9e8);
@@ -42,7 +43,17 @@ describe('needsDischarge', () => {
 });
 
 describe('nextE24', () => {
-  it.each([[4.7, 4.7], [4.71, 5.1], [4700, 4700], [9.2, 10], [9100.1, 10_000], [0.33, 0.33], [0.95, 1], [1e6, 1e6], [2.6e5, 2.7e5]])('takes %d Ω up to %d Ω', (from, to) => {
+  it.each([
+    [4.7, 4.7],
+    [4.71, 5.1],
+    [4700, 4700],
+    [9.2, 10],
+    [9100.1, 10_000],
+    [0.33, 0.33],
+    [0.95, 1],
+    [1e6, 1e6],
+    [2.6e5, 2.7e5],
+  ])('takes %d Ω up to %d Ω', (from, to) => {
     expect(nextE24(from)).toBe(to);
   });
 
@@ -85,7 +96,9 @@ describe('sheet', () => {
   it('says that a tool resistor is too small and which to take', () => {
     const answer = runSheet(sheet, { farads: 1000e-6, volts: 450, toolOhms: 100, toolWatts: 5 });
     expect(answer).toMatchObject({ ok: true, result: { toolVerdict: 'too-small', needsDischarge: true } });
-    expect(answer.ok && answer.headline).toBe('101 J: 675 ms to 5 V, worst case. The tool resistor is too small. Take 3 kΩ, 7 W, wire-wound.');
+    expect(answer.ok && answer.headline).toBe(
+      '101 J: 675 ms to 5 V, worst case. The tool resistor is too small. Take 3 kΩ, 7 W, wire-wound.',
+    );
   });
 
   it('gives up on a single resistor where none is large enough', () => {
@@ -105,7 +118,13 @@ describe('sheet', () => {
   });
 
   it('never gets quicker with more capacitance, more volts, more ohms, more tolerance or a lower safe voltage', () => {
-    const input = fc.record({ farads: wide(1e-9, 1), volts: wide(1, 5000), toolOhms: wide(1, 1e6), tolerancePercent: fc.double({ min: 0, max: 100, noNaN: true }), safeVolts: wide(2, 30) });
+    const input = fc.record({
+      farads: wide(1e-9, 1),
+      volts: wide(1, 5000),
+      toolOhms: wide(1, 1e6),
+      tolerancePercent: fc.double({ min: 0, max: 100, noNaN: true }),
+      safeVolts: wide(2, 30),
+    });
     const seconds = (given: object): number => {
       const answer = runSheet(sheet, given);
       if (!answer.ok) throw new Error(answer.say);
@@ -114,14 +133,23 @@ describe('sheet', () => {
     fc.assert(
       fc.property(input, fc.double({ min: 1, max: 2, noNaN: true }), (given, times) => {
         const base = seconds(given) * (1 - 1e-12);
-        for (const field of ['farads', 'volts', 'toolOhms', 'tolerancePercent'] as const) expect(seconds({ ...given, [field]: given[field] * times })).toBeGreaterThanOrEqual(base);
+        for (const field of ['farads', 'volts', 'toolOhms', 'tolerancePercent'] as const)
+          expect(seconds({ ...given, [field]: given[field] * times })).toBeGreaterThanOrEqual(base);
         expect(seconds({ ...given, safeVolts: given.safeVolts / times })).toBeGreaterThanOrEqual(base);
       }),
     );
   });
 
   it('has no NaN in its answer for any input that the form admits', () => {
-    const input = fc.record({ farads, volts, safeVolts: wide(0.11, 59), bleederOhms: fc.option(ohms), toolOhms: fc.option(ohms), toolWatts: wide(0.11, 990), tolerancePercent: fc.double({ min: 0, max: 200, noNaN: true }) });
+    const input = fc.record({
+      farads,
+      volts,
+      safeVolts: wide(0.11, 59),
+      bleederOhms: fc.option(ohms),
+      toolOhms: fc.option(ohms),
+      toolWatts: wide(0.11, 990),
+      tolerancePercent: fc.double({ min: 0, max: 200, noNaN: true }),
+    });
     fc.assert(
       fc.property(input, (given) => {
         const answer = runSheet(sheet, given);

@@ -13,19 +13,22 @@ describe('SHEETS', () => {
     expect(sheetById('none')).toBeUndefined();
   });
 
-  it.each(SHEETS.map((sheet) => [sheet.id, sheet] as const))('%s has a title and a description at every field, and works its example out', (_, sheet) => {
-    for (const [name, field] of fieldsOf(sheet.inputs)) {
-      expect(field.title, name).not.toBe(name);
-      expect(field.description.length, name).toBeGreaterThan(5);
-    }
-    const answer = runSheet(sheet, sheet.example);
-    if (!answer.ok) throw new Error(answer.say);
-    expect(answer.headline).toMatch(/\.$/);
-    expect(answer.formula.length).toBeGreaterThan(1);
-    expect(answer.validity).not.toBe('');
-    expect(answer.source).not.toBe('');
-    expect(JSON.stringify(answer)).not.toMatch(/NaN|undefined|\u00b5|\u2126/);
-  });
+  it.each(SHEETS.map((sheet) => [sheet.id, sheet] as const))(
+    '%s has a title and a description at every field, and works its example out',
+    (_, sheet) => {
+      for (const [name, field] of fieldsOf(sheet.inputs)) {
+        expect(field.title, name).not.toBe(name);
+        expect(field.description.length, name).toBeGreaterThan(5);
+      }
+      const answer = runSheet(sheet, sheet.example);
+      if (!answer.ok) throw new Error(answer.say);
+      expect(answer.headline).toMatch(/\.$/);
+      expect(answer.formula.length).toBeGreaterThan(1);
+      expect(answer.validity).not.toBe('');
+      expect(answer.source).not.toBe('');
+      expect(JSON.stringify(answer)).not.toMatch(/NaN|undefined|\u00b5|\u2126/);
+    },
+  );
 
   it.each(SHEETS.map((sheet) => [sheet.id, sheet] as const))('%s refuses nonsense with a sentence at the field', (_, sheet) => {
     for (const name of Object.keys(sheet.inputs.shape)) {

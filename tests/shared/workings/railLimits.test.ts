@@ -35,9 +35,17 @@ describe('classifyRail', () => {
   it('judges a negative rail like its mirror', () => {
     const value = fc.double({ min: -40, max: 40, noNaN: true });
     fc.assert(
-      fc.property(fc.double({ min: 1, max: 24, noNaN: true }), fc.double({ min: 0, max: 20, noNaN: true }), value, fc.double({ min: 0, max: 1, noNaN: true }), (nominal, tolerance, reading, guard) => {
-        expect(classifyRail(-reading, railLimits(-nominal, tolerance), guard)).toBe(classifyRail(reading, railLimits(nominal, tolerance), guard));
-      }),
+      fc.property(
+        fc.double({ min: 1, max: 24, noNaN: true }),
+        fc.double({ min: 0, max: 20, noNaN: true }),
+        value,
+        fc.double({ min: 0, max: 1, noNaN: true }),
+        (nominal, tolerance, reading, guard) => {
+          expect(classifyRail(-reading, railLimits(-nominal, tolerance), guard)).toBe(
+            classifyRail(reading, railLimits(nominal, tolerance), guard),
+          );
+        },
+      ),
     );
   });
 
@@ -69,6 +77,10 @@ describe('sheet', () => {
   });
 
   it('refuses a rail of nothing', () => {
-    expect(runSheet(sheet, { nominalVolts: 0, tolerancePercent: 5 })).toEqual({ ok: false, field: 'nominalVolts', say: 'Nominal volts must be 0.1 V or more, either sign.' });
+    expect(runSheet(sheet, { nominalVolts: 0, tolerancePercent: 5 })).toEqual({
+      ok: false,
+      field: 'nominalVolts',
+      say: 'Nominal volts must be 0.1 V or more, either sign.',
+    });
   });
 });

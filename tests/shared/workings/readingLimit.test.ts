@@ -60,7 +60,10 @@ describe('decide', () => {
     fc.assert(
       fc.property(fc.double({ min: 0, max: 50, noNaN: true }), fc.double({ min: 0, max: 50, noNaN: true }), guard, (a, b, w) => {
         const [near, far] = [Math.min(a, b), Math.max(a, b)];
-        return rank[decide(5 + near, rail, w)] <= rank[decide(5 + far, rail, w)] && rank[decide(5 - near, rail, w)] <= rank[decide(5 - far, rail, w)];
+        return (
+          rank[decide(5 + near, rail, w)] <= rank[decide(5 + far, rail, w)] &&
+          rank[decide(5 - near, rail, w)] <= rank[decide(5 - far, rail, w)]
+        );
       }),
     );
   });
@@ -96,11 +99,27 @@ describe('sheet', () => {
   });
 
   it('names the field that is wrong', () => {
-    expect(runSheet(sheet, { ...sheet.example, low: 6 })).toEqual({ ok: false, field: 'high', say: 'The high limit must not be below the low limit.' });
+    expect(runSheet(sheet, { ...sheet.example, low: 6 })).toEqual({
+      ok: false,
+      field: 'high',
+      say: 'The high limit must not be below the low limit.',
+    });
     expect(runSheet(sheet, { ...sheet.example, low: null, high: null })).toMatchObject({ ok: false, field: 'low' });
-    expect(runSheet(sheet, { ...sheet.example, reading: 'five' })).toEqual({ ok: false, field: 'reading', say: 'Reading must be a number.' });
-    expect(runSheet(sheet, { ...sheet.example, resolution: 0 })).toEqual({ ok: false, field: 'resolution', say: 'Resolution must be more than 0.' });
-    expect(runSheet(sheet, { ...sheet.example, range: 2 })).toEqual({ ok: false, field: 'range', say: 'Reading against a limit has no input “range”.' });
+    expect(runSheet(sheet, { ...sheet.example, reading: 'five' })).toEqual({
+      ok: false,
+      field: 'reading',
+      say: 'Reading must be a number.',
+    });
+    expect(runSheet(sheet, { ...sheet.example, resolution: 0 })).toEqual({
+      ok: false,
+      field: 'resolution',
+      say: 'Resolution must be more than 0.',
+    });
+    expect(runSheet(sheet, { ...sheet.example, range: 2 })).toEqual({
+      ok: false,
+      field: 'range',
+      say: 'Reading against a limit has no input “range”.',
+    });
     expect(runSheet(sheet, null)).toMatchObject({ ok: false, field: '' });
   });
 });

@@ -16,7 +16,8 @@ const lamps: fc.Arbitrary<Lamp> = fc.record({
   coldRatio: fc.double({ min: 2, max: 25, noNaN: true }),
 });
 const supply = fc.double({ min: 6, max: 480, noNaN: true });
-const wide = (low: number, high: number): fc.Arbitrary<number> => fc.double({ min: Math.log(low), max: Math.log(high), noNaN: true }).map(Math.exp);
+const wide = (low: number, high: number): fc.Arbitrary<number> =>
+  fc.double({ min: Math.log(low), max: Math.log(high), noNaN: true }).map(Math.exp);
 const loads: fc.Arbitrary<LampLoad> = fc.oneof(
   fc.constant<LampLoad>({ kind: 'short' }),
   wide(0.001, 1e7).map((ohms): LampLoad => ({ kind: 'resistance', ohms })),
@@ -92,14 +93,21 @@ describe('sheet', () => {
   });
 
   it('gives the lamp everything in a dead short', () => {
-    expect(runSheet(sheet, { ...bench, load: 'short' })).toMatchObject({ ok: true, result: { deadShort: { lampVolts: 120, lampWatts: 100, loadWatts: 0 } } });
+    expect(runSheet(sheet, { ...bench, load: 'short' })).toMatchObject({
+      ok: true,
+      result: { deadShort: { lampVolts: 120, lampWatts: 100, loadWatts: 0 } },
+    });
   });
 
   it('says that a switch-mode supply will tick on too small a lamp, and names the lamp to take', () => {
     const answer = runSheet(sheet, { ...bench, load: 'switch-mode', loadWatts: 60 });
     expect(answer).toMatchObject({ ok: true, result: { willTick: true, settled: null } });
-    expect(answer.ok && answer.headline).toBe('Will tick: 100 W of lamp cannot carry a switch-mode supply of 60 W. Take a lamp of 200 W or more.');
-    expect(runSheet(sheet, { ...bench, lampWatts: 200, load: 'switch-mode', loadWatts: 60 })).toMatchObject({ result: { willTick: false } });
+    expect(answer.ok && answer.headline).toBe(
+      'Will tick: 100 W of lamp cannot carry a switch-mode supply of 60 W. Take a lamp of 200 W or more.',
+    );
+    expect(runSheet(sheet, { ...bench, lampWatts: 200, load: 'switch-mode', loadWatts: 60 })).toMatchObject({
+      result: { willTick: false },
+    });
   });
 
   it('says what a plate rating of a small or a huge supply needs', () => {
@@ -138,7 +146,8 @@ describe('sheet', () => {
       fc.property(input, (given) => {
         const answer = runSheet(sheet, given);
         // JSON writes NaN and the infinities as null.
-        if (answer.ok) for (const point of [...answer.result.points, answer.result.deadShort]) expect(JSON.stringify(point)).not.toContain('null');
+        if (answer.ok)
+          for (const point of [...answer.result.points, answer.result.deadShort]) expect(JSON.stringify(point)).not.toContain('null');
         expect(JSON.stringify(answer)).not.toMatch(/NaN|Infinity|no value|over range/);
       }),
       { numRuns: 500 },
