@@ -1,5 +1,5 @@
 /** The answer to a step: big enough for a glove. */
-import { Text } from 'react-native';
+import { Text, View } from 'react-native';
 
 import { Press } from '@/shared/ui/components/Press';
 import type { PressProps } from '@/shared/ui/components/Press';
@@ -17,14 +17,14 @@ interface Props extends Omit<PressProps, 'kind'> {
 }
 
 /** One answer; stack them with `AnswerStack`, which keeps the gap between them. */
-export function BigAnswer({ label, kind = 'plain', detail, half = false, ...press }: Props) {
+export function BigAnswer({ label, kind = 'plain', detail, half = false, name, ...press }: Props) {
   return (
-    <Press {...press} kind={kind} minHeight={target.answer} style={half ? { flexGrow: 1, flexShrink: 1, flexBasis: 130, paddingHorizontal: 10 } : { alignSelf: 'stretch' }}>
+    <Press {...press} name={name ?? (detail ? `${label}: ${detail}` : undefined)} kind={kind} minHeight={target.answer} style={half ? { flexGrow: 1, flexShrink: 1, flexBasis: 130, paddingHorizontal: 10 } : { alignSelf: 'stretch' }}>
       {(word) => (
-        <Text style={[type.answer, { color: word, textAlign: 'center', flexShrink: 1 }]}>
-          {label}
-          {detail ? <Text style={[type.small, { color: word }]}>{`\n${detail}`}</Text> : null}
-        </Text>
+        <View style={{ flexShrink: 1 }}>
+          <Text style={[type.answer, { color: word, textAlign: 'center' }]}>{label}</Text>
+          {detail ? <Text style={[type.small, { color: word, textAlign: 'center' }]}>{detail}</Text> : null}
+        </View>
       )}
     </Press>
   );

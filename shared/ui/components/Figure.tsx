@@ -17,13 +17,14 @@ interface Props {
   points: readonly FigurePoint[];
 }
 
-const pitchLeast = 56;
 const rowHeight = 84;
 
 /** Every screw is drawn; a lead is told by its letter and its ring, not by colour alone. */
 export function Figure({ title, points }: Props) {
   const [width, setWidth] = useState(320);
-  const rows = figureRows(points, Math.max(1, Math.floor(width / pitchLeast)));
+  // the names stand below the screws without touching: a mono figure is 10 px wide
+  const pitchLeast = Math.max(44, ...points.map((point) => point.name.length * 10 + 8));
+  const rows = figureRows(points, Math.max(1, Math.floor((width - 2) / pitchLeast)));
   const widest = Math.max(1, ...rows.map((row) => row.length));
   const pitch = Math.min(84, (width - 2) / widest);
   const words = figureWords(points);

@@ -35,8 +35,8 @@ export function PlacesBar({ places, current }: Props) {
             key={place.name}
             href={place.href}
             current={here}
-            style={(s) => [
-              { backgroundColor: here ? colors.ink : s.hovered || s.pressed ? colors.tint : 'transparent', alignItems: 'center', gap: wide ? space.m : 2 },
+            style={(hovered) => [
+              { backgroundColor: here ? colors.ink : hovered ? colors.tint : 'transparent', alignItems: 'center', gap: wide ? space.m : 2 },
               wide
                 ? { flexDirection: 'row', minHeight: 52, paddingHorizontal: space.l, borderTopWidth: line.hair, borderTopColor: colors.rule }
                 : { flex: 1, minHeight: 60, justifyContent: 'center', borderLeftWidth: index === 0 ? 0 : line.hair, borderLeftColor: colors.rule },

@@ -19,13 +19,14 @@ const height = 82;
 const base = 52;
 const bandTop = 25;
 const bandHeight = 18;
-const margin = 22;
+const margin = 26;
+/** room for a label of six figures */
+const labelPitch = 66;
 
 /** Takes the width it is given; labels keep their size and get fewer when it is narrow. */
 export function ReadingScale({ unit, format, ...input }: Props) {
   const [width, setWidth] = useState(320);
-  const majors = Math.max(2, Math.floor((width - 2 * margin) / 78));
-  const model = scaleModel(input, majors);
+  const model = scaleModel(input, Math.floor((width - 2 * margin) / labelPitch));
   const x = (n: number) => margin + ((n - model.min) / (model.max - model.min)) * (width - 2 * margin);
   return (
     <View role="img" aria-label={scaleWords(input, unit, format)} style={{ alignSelf: 'stretch', height }} onLayout={(e) => setWidth(e.nativeEvent.layout.width || 320)}>

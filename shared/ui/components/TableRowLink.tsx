@@ -23,7 +23,7 @@ export function TableRowLink({ to, children }: { to: RowTarget; children: ReactN
   const box = { minHeight: target.control, justifyContent: 'center' } as const;
   if ('href' in to) {
     return (
-      <RouteLink href={to.href} name={to.name} style={(s) => [box, s.hovered ? { backgroundColor: colors.tint } : null]}>
+      <RouteLink href={to.href} name={to.name} style={(hovered) => [box, hovered ? { backgroundColor: colors.tint } : null]}>
         {content}
       </RouteLink>
     );

@@ -17,7 +17,8 @@ import { useTheme } from '@/shared/ui/theme/useTheme';
 export interface Hazard {
   id: string;
   signal: SignalWord;
-  sign: SignName;
+  /** null where nobody can be hurt */
+  sign: SignName | null;
   /** what can hurt, as "230 V mains on the inlet" */
   hazard: string;
   /** what it does, as "Shock can kill" */
@@ -84,7 +85,7 @@ function SignalPanel({ signal }: { signal: SignalVisual }) {
 function HazardRow({ hazard: h }: { hazard: Hazard }) {
   return (
     <View style={{ flexDirection: 'row', gap: space.l, padding: space.l }}>
-      <SafetySign name={h.sign} size={56} />
+      {h.sign ? <SafetySign name={h.sign} size={56} /> : null}
       <View style={{ flex: 1, minWidth: 0, gap: space.xs }}>
         <BodyText size="instruction" bold>
           {h.hazard}

@@ -28,18 +28,19 @@ export interface ScaleModel {
   needle: { at: number; off: 'low' | 'high' | null } | null;
 }
 
-/** A step of 1, 2 or 5 times a power of ten, at least as big as asked. */
+/** A step of 1, 2, 2.5 or 5 times a power of ten, at least as big as asked. */
 export function roundStep(atLeast: number): number {
   if (!(atLeast > 0) || !Number.isFinite(atLeast)) return 1;
   const power = 10 ** Math.floor(Math.log10(atLeast));
-  const m = atLeast / power;
-  const nice = m <= 1.000001 ? 1 : m <= 2 ? 2 : m <= 5 ? 5 : 10;
+  // a hair of room, so that 0.1 * 3 / 3 is still 0.1
+  const m = (atLeast / power) * 0.999999;
+  const nice = m <= 1 ? 1 : m <= 2 ? 2 : m <= 2.5 ? 2.5 : m <= 5 ? 5 : 10;
   return nice * power;
 }
 
 function extent({ value, low, high, guard, nominal }: ScaleInput): [number, number] {
   if (low !== null && high !== null) {
-    const room = Math.max(high - low, 4 * guard) * 0.8 || Math.abs(low) * 0.1 || 1;
+    const room = Math.max(high - low, 4 * guard, Math.abs(low) * 1e-3) * 0.7 || 1;
     return [low - room, high + room];
   }
   const anchor = low ?? high;
@@ -52,7 +53,8 @@ function extent({ value, low, high, guard, nominal }: ScaleInput): [number, numb
     const [down, up] = low !== null ? [short, room] : [room, short];
     // a lower end of zero keeps a positive scale from showing values that cannot be
     const from = anchor - down;
-    return [anchor > 0 && from < 0 && (value ?? 0) >= 0 ? 0 : from, anchor + up];
+    const positive = anchor > 0 && (value ?? 0) >= 0 && (low === null || from < 0);
+    return [positive ? 0 : from, anchor + up];
   }
   const about = value ?? nominal ?? 0;
   const reach = Math.abs(about) * 1.25 || 1;
@@ -61,18 +63,43 @@ function extent({ value, low, high, guard, nominal }: ScaleInput): [number, numb
 
 const minorsPerMajor = 5;
 
-/** Lays out a scale with at most `majors` labelled spans. */
-export function scaleModel(input: ScaleInput, majors: number): ScaleModel {
-  const [from, to] = extent(input);
-  let step = roundStep((to - from) / Math.max(1, majors));
-  // widening the ends to whole steps may add one span too many
-  while (Math.ceil(to / step) - Math.floor(from / step) > Math.max(1, majors)) step = roundStep(step * 1.01);
-  const first = Math.floor(from / step);
-  const last = Math.ceil(to / step);
-  const [min, max] = [first * step, last * step];
-  const ticks = Array.from({ length: (last - first) * minorsPerMajor + 1 }, (_, i) => ({
-    at: (first + i / minorsPerMajor) * step,
-    major: i % minorsPerMajor === 0,
+interface Ruling {
+  step: number;
+  minor: number;
+  /** first and last small tick, counted from zero in small ticks */
+  first: number;
+  last: number;
+}
+
+function rulingOf(from: number, to: number, step: number): Ruling {
+  const minor = step / minorsPerMajor;
+  // a thousandth of a small tick is lost in drawing, and keeps 0.3 / 0.1 from costing a tick
+  return { step, minor, first: Math.floor(from / minor + 1e-3), last: Math.ceil(to / minor - 1e-3) };
+}
+
+function majorsOf({ first, last }: Ruling): number {
+  return Math.floor(last / minorsPerMajor) - Math.ceil(first / minorsPerMajor) + 1;
+}
+
+function decimalsOf(step: number): number {
+  const power = Math.floor(Math.log10(step) + 1e-9);
+  const twoFigures = Math.abs(step / 10 ** power - 2.5) < 1e-6;
+  return Math.max(0, (twoFigures ? 1 : 0) - power);
+}
+
+/** Lays out a scale with at most `labels` labelled ticks; its ends fall on small ticks. */
+export function scaleModel(input: ScaleInput, labels: number): ScaleModel {
+  const [from, asked] = extent(input);
+  // nothing that a meter shows is this small; a scale without length cannot be ruled
+  const to = asked - from > Math.max(1, Math.abs(from)) * 1e-9 ? asked : from + 1;
+  const most = Math.max(2, labels);
+  let ruling = rulingOf(from, to, roundStep((to - from) / most));
+  while (majorsOf(ruling) > most) ruling = rulingOf(from, to, roundStep(ruling.step * 1.01));
+  const { step, minor, first, last } = ruling;
+  const [min, max] = [first * minor, last * minor];
+  const ticks = Array.from({ length: last - first + 1 }, (_, i) => ({
+    at: (first + i) * minor,
+    major: (first + i) % minorsPerMajor === 0,
   }));
   const clip = (n: number) => Math.min(max, Math.max(min, n));
   const { value, low, high, guard } = input;
@@ -81,7 +108,7 @@ export function scaleModel(input: ScaleInput, majors: number): ScaleModel {
     min,
     max,
     ticks,
-    decimals: Math.max(0, -Math.floor(Math.log10(step) + 1e-9)),
+    decimals: decimalsOf(step),
     band: limits.length === 0 ? null : { from: clip(low ?? min), to: clip(high ?? max) },
     guards: guard > 0 ? limits.map((n) => ({ from: clip(n - guard), to: clip(n + guard) })) : [],
     needle: value === null || Number.isNaN(value) ? null : { at: clip(value), off: value < min ? 'low' : value > max ? 'high' : null },

@@ -14,7 +14,7 @@ export const iconPaths = {
   workings: { stroke: 'M4 3h16v18H4zM7.5 8h4M9.5 6v4M14 8h3M7 12.5h10M7.5 17h3M14 16h3M14 18.5h3' },
   workshop: { stroke: 'M3 10l9-6 9 6M5 9v11h14V9M9 20v-7h6v7' },
   // power
-  'power-proved-dead': { stroke: 'M3 12h3M6 8v8h4M10 9.5h2M10 14.5h2M21 12h-2.5M18.5 8v8M15 20l2 2 4-5M18.5 8h-2v8h2' },
+  'power-proved-dead': { stroke: 'M1.5 12H5M5 7h5.5v10H5zM10.5 9.5H14M10.5 14.5H14M18.5 6v12M18.5 12h4' },
   'power-off': { stroke: 'M2 15h6M16 15h6M8.5 14.5l8-7M8 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2zM16 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2z' },
   'power-lamp': { stroke: 'M12 2.5a6.5 6.5 0 100 13 6.5 6.5 0 000-13zM7.4 4.4l9.2 9.2M16.6 4.4l-9.2 9.2M9 18.5h6M9.5 21.5h5' },
   'power-bench': { stroke: 'M2.5 5h19v14h-19zM6 9h5v3.5H6zM14.5 10.7h4M16.5 8.7v4M14.5 16h4M6 16h5' },
