@@ -41,6 +41,7 @@ export function unmetNeeds(placed: ProgramStep, facts: Facts): Need[] {
 export function arriveAt(layout: Layout, context: RunContext, key: string): Judged {
   const placed = layout.steps.get(key);
   if (placed === undefined) return refuse('not-now', 'This tree leads to a step that it does not have.');
+  if (placed.step.kind === 'call') return arriveAt(layout, context, layout.calleeFirst.get(key) ?? '');
   if (placed.step.kind === 'end') return arriveAtEnd(layout, context, key, placed.step);
   const unmet = unmetNeeds(placed, context.facts);
   if (unmet.length === 0) return accept({ ...context, goto: key, purpose: { is: 'none' } });

@@ -83,7 +83,7 @@ function machineOf(layout: Layout): RunMachine {
     };
     const leads = leadsOf(layout, placed);
     const answers: Move[] = [{ guard: goes(null), actions: apply }, ...leads.map((to) => ({ guard: goes(to), actions: apply, target: `#${to}` })), ...away];
-    const held: Move[] = [{ guard: (args) => step.kind !== 'hold' && goes(null)(args), actions: apply, target: 'guard' }, ...answers];
+    const held: Move[] = power ? [{ guard: goes(null), actions: apply, target: 'guard' }, ...answers] : answers;
     const states: Record<string, Node> = {
       gate: { always: placed.hazards.length > 0 ? [{ target: 'warning' }] : onward() },
       warning: { entry: phase('warning'), on: { WARNING_READ: onward(taken, [apply]) } },

@@ -118,6 +118,8 @@ export class Bench {
   state: RunState;
   at = Date.UTC(2026, 0, 5, 9, 0, 0);
   boot = 'boot-1';
+  /** how far the wall clock has been put forward against the steady one, in ms */
+  skewMs = 0;
   readonly program: Program;
 
   constructor(program: Program, senior = false, carried: { release?: boolean } = {}) {
@@ -130,7 +132,7 @@ export class Bench {
   }
 
   stamp(event: BareEvent): MachineEvent {
-    return { ...event, at: this.at, monotonic: this.at, boot: this.boot } as MachineEvent;
+    return { ...event, at: this.at + this.skewMs, monotonic: this.at, boot: this.boot } as MachineEvent;
   }
 
   try(event: BareEvent): Advanced {
