@@ -34,6 +34,7 @@ export default defineConfig({
           alias: [
             ...alias,
             { find: /^react-native$/, replacement: 'react-native-web' },
+            { find: /^expo-router$/, replacement: `${root}tests/shared/ui/routerDouble.tsx` },
             { find: '@react-native-vector-icons/material-design-icons', replacement: `${root}shared/ui/theme/PaperIcon.tsx` },
           ],
           mainFields: ['browser', 'module', 'jsnext:main', 'main'],
