@@ -25,7 +25,9 @@ export function serveWeb(webRoot: string): Router {
       return;
     }
     res.setHeader('Cache-Control', 'no-cache');
-    res.sendFile(join(root, 'index.html'), next);
+    res.sendFile(join(root, 'index.html'), (error?: Error) => {
+      if (error) next(error);
+    });
   });
   return router;
 }

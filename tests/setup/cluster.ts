@@ -1,8 +1,7 @@
 /** Once for the whole `api` project: a throw-away cluster with a migrated database that each test file copies. */
-import { existsSync } from 'node:fs';
-
 import type { TestProject } from 'vitest/node';
 
+import { migrateToLatest } from '@/db/migrate';
 import { createDatabase } from '@/server/cli/cluster';
 import { openThrowAwayCluster } from '@/server/cli/throwAwayCluster';
 
@@ -22,11 +21,7 @@ export default async function setup(project: TestProject): Promise<() => Promise
   const cluster = await openThrowAwayCluster({ durable: false, say: (line) => process.stderr.write(`${line}\n`) });
   try {
     await createDatabase(cluster.adminUrl, templateName);
-    const migrations = new URL('../../db/migrate.ts', import.meta.url);
-    if (existsSync(migrations)) {
-      const { migrateToLatest } = (await import(migrations.href)) as { migrateToLatest(ownerUrl: string): Promise<void> };
-      await migrateToLatest(cluster.urlsOf(templateName).ownerUrl);
-    }
+    await migrateToLatest(cluster.urlsOf(templateName).ownerUrl);
   } catch (error) {
     await cluster.stop();
     throw error;
