@@ -62,7 +62,7 @@ export function formatQuantity(value: number, unit: Unit, options: FormatOptions
   if (Number.isNaN(value)) return 'no value';
   if (!Number.isFinite(value)) return value > 0 ? 'over range' : `${MINUS}over range`;
   const { negative, figures, prefix } = scaleQuantity(value, unit, options);
-  return `${negative ? MINUS : ''}${figures} ${prefix}${unit}`;
+  return `${negative ? MINUS : ''}${figures} ${prefix}${unit}`.trimEnd();
 }
 
 /**

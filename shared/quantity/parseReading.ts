@@ -137,6 +137,9 @@ function twoMeanings(suffix: string, digits: string, asked: Asked): ParsedReadin
 function settle(readings: readonly string[], suffix: string, negative: boolean, asked: Asked, rkm: Prefix | null): ParsedReading | null {
   const [digits] = readings;
   if (digits === undefined) return null;
+  if (asked.unit === '°C' && /^(°\s*f|f|deg\s*f|fahrenheit)$/i.test(suffix)) {
+    return refuse('wrong-unit', `That is degrees Fahrenheit; ${asked.takes}.`);
+  }
   if (rkm === null) {
     const two = twoMeanings(suffix, digits, asked);
     if (two !== null) return two;

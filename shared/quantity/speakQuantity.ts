@@ -64,6 +64,6 @@ export function speakQuantity(value: number, unit: Unit, options: FormatOptions 
   const words = [wholeInWords(Number(whole))];
   if (decimals !== '') words.push('point', ...[...decimals].map((digit) => (digit === '0' ? 'oh' : (ONES[Number(digit)] ?? digit))));
   const info = UNITS[unit];
-  words.push(unitInWords(PREFIXES[prefix].word, figures === '1' ? info.singular : info.plural));
+  if (unit !== '') words.push(unitInWords(PREFIXES[prefix].word, figures === '1' ? info.singular : info.plural));
   return `${negative ? 'minus ' : ''}${words.join(' ')}`;
 }

@@ -15,8 +15,8 @@ export const PREFIXES: Readonly<Record<Prefix, { readonly exponent: number; read
   G: { exponent: 9, word: 'giga' },
 };
 
-/** Printed symbols of the units, always with Ω U+03A9. */
-export type Unit = 'V' | 'A' | 'Ω' | 'F' | 'W' | 'VA' | 'J' | 'C' | 'Hz' | 'H' | 's' | '°C' | '%';
+/** Printed symbols of the units, always with Ω U+03A9; the empty one is a plain number. */
+export type Unit = '' | 'V' | 'A' | 'Ω' | 'F' | 'W' | 'VA' | 'J' | 'C' | 'Hz' | 'H' | 's' | '°C' | '%';
 
 /** What is known about one unit. */
 export interface UnitInfo {
@@ -142,6 +142,15 @@ export const UNITS: Readonly<Record<Unit, UnitInfo>> = {
     anyCase: ['°c', 'degc', 'deg c', 'celsius', 'degrees celsius', 'degrees'],
     pointLetter: null,
     absurdAbove: 1500,
+  },
+  '': {
+    singular: 'plain number',
+    plural: 'plain numbers',
+    prefixes: [''],
+    exactCase: [],
+    anyCase: [],
+    pointLetter: null,
+    absurdAbove: 1e12,
   },
   '%': {
     singular: 'percent',

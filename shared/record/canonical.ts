@@ -35,7 +35,9 @@ function refuseUncanonical(value: unknown, path: string, level: number): void {
     for (let at = 0; at < value.length; at += 1) refuseUncanonical(value[at], `${path}[${at}]`, level + 1);
     return;
   }
-  const isPlain = typeof value === 'object' && [Object.prototype, null].includes(Object.getPrototypeOf(value) as object | null);
+  const prototype: unknown = typeof value === 'object' ? Object.getPrototypeOf(value) : undefined;
+  // The root prototype is asked for by its place and not by identity: an object may come from another window.
+  const isPlain = prototype === null || (typeof prototype === 'object' && Object.getPrototypeOf(prototype) === null);
   // A Date or a Map would be written as something that its reader cannot get back.
   if (!isPlain) throw new CanonicalError(path, `is ${value === undefined ? 'undefined' : 'not plain JSON'}`);
   for (const [key, member] of Object.entries(value as object)) {

@@ -61,6 +61,12 @@ function bad(fault: ChainFault, entry: RecordEntry, what: string): ChainVerdict 
   return { ok: false, fault, seq: entry.seq, entryId: entry.id, what };
 }
 
+/** What the entries before the one in hand were called. */
+interface Seen {
+  readonly bySeq: Map<number, RecordEntry>;
+  readonly byId: Map<string, RecordEntry>;
+}
+
 /** Two entries carry one number: the one that the next entry was chained to is the true one. */
 function sameNumber(first: RecordEntry, second: RecordEntry, all: readonly RecordEntry[]): ChainVerdict {
   const next = all.find((entry) => entry.seq === first.seq + 1);
@@ -68,39 +74,36 @@ function sameNumber(first: RecordEntry, second: RecordEntry, all: readonly Recor
   return bad('inserted', intruder, `Two entries carry number ${first.seq}; ${called(intruder)} was put in.`);
 }
 
-function faultAt(entries: readonly RecordEntry[], at: number, prev: string): ChainVerdict | null {
+function twinFault(entry: RecordEntry, seen: Seen, all: readonly RecordEntry[]): ChainVerdict | null {
+  const twin = seen.bySeq.get(entry.seq) ?? seen.byId.get(entry.id);
+  if (twin === undefined) return null;
+  if (twin.hash === entry.hash) return bad('duplicated', entry, `${called(entry)} stands here twice.`);
+  if (twin.seq === entry.seq) return sameNumber(twin, entry, all);
+  return bad('duplicated', entry, `${called(entry)} carries the id of entry ${twin.seq}.`);
+}
+
+function orderFault(entry: RecordEntry, expected: number, all: readonly RecordEntry[]): ChainVerdict | null {
+  if (entry.seq === expected) return null;
+  if (all.some((other) => other.seq === expected)) {
+    return bad('reordered', entry, `${called(entry)} stands where entry ${expected} belongs: the order was changed.`);
+  }
+  const what = `Entry ${expected} is missing: entry ${entry.seq} stands in its place.`;
+  return { ok: false, fault: 'missing', seq: expected, entryId: null, what };
+}
+
+function linkFault(entry: RecordEntry, previous: RecordEntry | undefined): ChainVerdict | null {
+  if (entry.prev === (previous?.hash ?? GENESIS)) return null;
+  if (previous === undefined) return bad('altered', entry, `${called(entry)} is not the start of a record: something stood before it.`);
+  const what = `${called(previous)} is not the one that entry ${entry.seq} was chained to: one of the two was replaced.`;
+  return bad('altered', previous, what);
+}
+
+function faultAt(entries: readonly RecordEntry[], at: number, seen: Seen): ChainVerdict | null {
   const entry = entries[at];
   if (entry === undefined) return null;
-  const before = entries.slice(0, at);
   if (!hashes(entry)) return bad('altered', entry, `${called(entry)} was altered: its contents do not give its hash.`);
-  const first = entries[0];
-  if (first !== undefined && entry.run !== first.run) return bad('foreign', entry, `${called(entry)} belongs to another run.`);
-  const twin = before.find((other) => other.id === entry.id || other.seq === entry.seq);
-  if (twin !== undefined) {
-    if (twin.hash === entry.hash) return bad('duplicated', entry, `${called(entry)} stands here twice.`);
-    if (twin.seq === entry.seq) return sameNumber(twin, entry, entries);
-    return bad('duplicated', entry, `${called(entry)} carries the id of entry ${twin.seq}.`);
-  }
-  const expected = at + 1;
-  if (entry.seq !== expected) {
-    const elsewhere = entries.some((other) => other.seq === expected);
-    if (elsewhere) return bad('reordered', entry, `${called(entry)} stands where entry ${expected} belongs: the order was changed.`);
-    return {
-      ok: false,
-      fault: 'missing',
-      seq: expected,
-      entryId: null,
-      what: `Entry ${expected} is missing: entry ${entry.seq} stands in its place.`,
-    };
-  }
-  if (entry.prev === prev) return null;
-  const previous = entries[at - 1];
-  if (previous === undefined) return bad('altered', entry, `${called(entry)} is not the start of a record: something stood before it.`);
-  return bad(
-    'altered',
-    previous,
-    `${called(previous)} is not the one that entry ${entry.seq} was chained to: one of the two was replaced.`,
-  );
+  if (entry.run !== entries[0]?.run) return bad('foreign', entry, `${called(entry)} belongs to another run.`);
+  return twinFault(entry, seen, entries) ?? orderFault(entry, at + 1, entries) ?? linkFault(entry, entries[at - 1]);
 }
 
 /**
@@ -110,11 +113,12 @@ function faultAt(entries: readonly RecordEntry[], at: number, prev: string): Cha
  * @returns the head hash, or the first fault with the entry and a sentence
  */
 export function verifyChain(entries: readonly RecordEntry[], expected: ExpectedChain = {}): ChainVerdict {
-  let prev = GENESIS;
+  const seen: Seen = { bySeq: new Map(), byId: new Map() };
   for (const [at, entry] of entries.entries()) {
-    const fault = faultAt(entries, at, prev);
+    const fault = faultAt(entries, at, seen);
     if (fault !== null) return fault;
-    prev = entry.hash;
+    seen.bySeq.set(entry.seq, entry);
+    seen.byId.set(entry.id, entry);
   }
   const count = entries.length;
   if (expected.count !== undefined && count < expected.count) {
@@ -128,12 +132,13 @@ export function verifyChain(entries: readonly RecordEntry[], expected: ExpectedC
     };
   }
   const last = entries[count - 1];
+  const head = last?.hash ?? GENESIS;
   if (last !== undefined && expected.count !== undefined && count > expected.count) {
     return bad('inserted', last, `The record has ${count} entries; it should have ${expected.count}.`);
   }
-  if (expected.head !== undefined && expected.head !== prev) {
+  if (expected.head !== undefined && expected.head !== head) {
     const what = 'The record does not end with the entry that it should end with: its last entry was replaced or cut off.';
     return { ok: false, fault: 'altered', seq: count, entryId: last?.id ?? null, what };
   }
-  return { ok: true, head: prev, count };
+  return { ok: true, head, count };
 }

@@ -21,6 +21,7 @@ describe('formatQuantity', () => {
     [1e-7, 'Ω', 3, '0.1 \u03bcΩ'],
     [0.1 + 0.2, 'V', 4, '300 mV'],
     [5400, 's', 4, '5400 s'],
+    [6.6, '', 4, '6.6'],
     [Number.NaN, 'V', 4, 'no value'],
     [Number.POSITIVE_INFINITY, 'Ω', 4, 'over range'],
   ] as const)('prints %d %s at %d figures as %s', (value, unit, digits, text) => {
@@ -89,6 +90,7 @@ describe('speakQuantity', () => {
     [0.35, 'Ω', 'three hundred and fifty milliohms'],
     [470e-6, 'F', 'four hundred and seventy microfarads'],
     [21, '°C', 'twenty-one degrees Celsius'],
+    [21, '', 'twenty-one'],
     [5400, 's', 'five thousand four hundred seconds'],
     [Number.POSITIVE_INFINITY, 'Ω', 'over range'],
   ] as const)('says %d %s as %s', (value, unit, words) => {

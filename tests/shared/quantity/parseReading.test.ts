@@ -88,6 +88,9 @@ const refused: readonly (readonly [string, Wanted, ReadingFault, RegExp])[] = [
   ['4.97 VAC', { quantity: 'volts-dc' }, 'wrong-unit', /^That is volts AC; this step reads volts DC\.$/],
   ['OL V', { quantity: 'ohms' }, 'wrong-unit', /^That is volts; this step reads ohms\.$/],
   ['40 W', { unit: 'V' }, 'wrong-unit', /^That is watts; this field takes volts\.$/],
+  ['77 °F', { quantity: 'celsius' }, 'wrong-unit', /^That is degrees Fahrenheit; this step reads degrees Celsius\.$/],
+  ['15 V', { unit: '' }, 'wrong-unit', /^That is volts; this field takes plain numbers\.$/],
+  ['15k', { unit: '' }, 'wrong-prefix', /kilo/],
   ['470M', { quantity: 'volts-dc' }, 'wrong-prefix', /M is mega.*For milli write a small m/],
   ['1M', { quantity: 'farads' }, 'wrong-prefix', /M is mega/],
   ['470u', { quantity: 'celsius' }, 'wrong-prefix', /micro/],
@@ -128,6 +131,10 @@ describe('parseReading', () => {
     expect(parseReading(text, { quantity: 'ohms' })).toEqual({ ok: true, kind: 'over-range', sign: 1, echo: 'over range' });
   });
 
+  it('takes a plain number where no unit is asked for', () => {
+    expect(parseReading('6,6', { unit: '' })).toEqual({ ok: true, kind: 'value', value: 6.6, echo: '6.6' });
+  });
+
   it('keeps the sign of an over-range display', () => {
     expect(parseReading('\u2212OL', { quantity: 'volts-dc' })).toMatchObject({ ok: true, kind: 'over-range', sign: -1 });
   });
@@ -144,13 +151,11 @@ describe('parseReading', () => {
     const readings = fc.constantFrom(...QUANTITY_IDS).chain((quantity) => {
       const { unit, signed, prefixes } = QUANTITIES[quantity];
       const exponents = prefixes.map((prefix) => PREFIXES[prefix].exponent);
-      return fc
-        .tuple(fc.integer({ min: 1, max: 9999 }), fc.constantFrom(...exponents), fc.boolean())
-        .map(([figures, exponent, minus]) => ({
-          quantity,
-          unit,
-          value: (minus && signed ? -1 : 1) * Number(`${figures}e${exponent - 3}`),
-        }));
+      return fc.tuple(fc.integer({ min: 1, max: 9999 }), fc.constantFrom(...exponents), fc.boolean()).map(([figures, exponent, minus]) => ({
+        quantity,
+        unit,
+        value: (minus && signed ? -1 : 1) * Number(`${figures}e${exponent - 3}`),
+      }));
     });
     fc.assert(
       fc.property(readings, ({ quantity, unit, value }) => {

@@ -142,6 +142,22 @@ describe('verifyChain', () => {
     expect(verifyChain([...whole, ...other])).toMatchObject({ ok: false, fault: 'foreign' });
   });
 
+  it('checks a record of two thousand entries', () => {
+    const long = record(2000);
+    expect(verifyChain(long)).toMatchObject({ ok: true, count: 2000 });
+    expect(verifyChain([...long, long[5] as RecordEntry])).toMatchObject({ ok: false, fault: 'duplicated', seq: 6 });
+  });
+
+  it('finds an entry with a new number that carries an old id', () => {
+    const [first] = whole;
+    const last = whole.at(-1);
+    if (first === undefined || last === undefined) throw new Error('no entry');
+    expect(verifyChain([...whole, rehash({ ...last, id: first.id, seq: 9, prev: last.hash })])).toMatchObject({
+      fault: 'duplicated',
+      seq: 9,
+    });
+  });
+
   it('counts more entries than there should be', () => {
     expect(verifyChain(whole, { count: 7 })).toMatchObject({ ok: false, fault: 'inserted', seq: 8 });
   });
