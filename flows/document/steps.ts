@@ -122,7 +122,8 @@ export const stepSchema = z.discriminatedUnion('kind', [
   z.strictObject({ ...common, kind: z.literal('soak'), ...reading, holdMinutes: z.number().positive().max(1_440), everyMinutes: z.number().positive().max(240) }),
   z.strictObject({ ...common, kind: z.literal('photo'), of: text(120), power }),
   z.strictObject({ ...common, kind: z.literal('isolate') }),
-  z.strictObject({ ...common, kind: z.literal('discharge'), toolOhms: z.number().positive().max(1e7), toolWatts: z.number().positive().max(1e4) }),
+  /** without a tool of its own the step takes the resistor that the workings choose for the machine */
+  z.strictObject({ ...common, kind: z.literal('discharge'), toolOhms: z.number().positive().max(1e7).optional(), toolWatts: z.number().positive().max(1e4).optional() }),
   z.strictObject({ ...common, kind: z.literal('prove-dead') }),
   z.strictObject({ ...proveCommon, kind: z.literal('prove-earth') }),
   z.strictObject({ ...proveCommon, kind: z.literal('prove-insulation') }),

@@ -95,6 +95,9 @@ function stepFaults(tree: Tree, known: Names, step: Step, at: number): TreeFault
       if (step.each === 'rails' && step.quantity !== 'volts-dc' && step.limit.is === 'nominal') add(['limit'], 'the nominal of a rail is in volts');
       if (step.kind === 'soak' && step.everyMinutes > step.holdMinutes) add(['everyMinutes'], 'longer than the soak itself');
       break;
+    case 'discharge':
+      if ((step.toolOhms === undefined) !== (step.toolWatts === undefined)) add(['toolWatts'], 'a tool has ohms and watts, or neither');
+      break;
     case 'prove-trip':
       if (!known.fitted.has(step.series)) add(['series'], `nothing fits "${step.series}"`);
       break;

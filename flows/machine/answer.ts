@@ -14,6 +14,7 @@ import type { MachineEvent } from './events';
 import { follow, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 import { partsToDischarge } from '../facts/stores';
+import { liveAboveLimits } from './secondPerson';
 import type { Row, WordRow } from './rows';
 
 type Answering = Extract<MachineEvent, { type: 'ROW' | 'READING' }>;
@@ -48,6 +49,9 @@ export function answerRow(layout: Layout, context: RunContext, placed: ProgramSt
   if (next !== row) return refuse('not-now', `First: ${next?.label ?? 'the step itself'}.`);
   const opens = rowOpensAt(row, context);
   if (opens !== null && event.at < opens) return refuse('too-early', `Not yet: wait another ${Math.ceil((opens - event.at) / 1000)} s.`, placed?.step.kind === 'soak' ? null : 'H3');
+  if (context.second === null && placed !== undefined && liveAboveLimits(row, placed)) {
+    return refuse('not-allowed', 'Live work above the limits: a second person has to be present and sign in first.', 'H20');
+  }
   const judged = rowAnswer(row, placed, context, event);
   if (!judged.ok) return judged;
   const answered: RunContext = { ...context, rows: [...context.rows, judged.answer], proofInstrument: judged.instrument };

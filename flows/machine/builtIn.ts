@@ -3,10 +3,6 @@ import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { Exit, Step } from '../document/steps';
 
-/** Discharge tool of the bench: named here because the machine's own steps belong to no tree. */
-const TOOL_OHMS = 100;
-const TOOL_WATTS = 50;
-
 const common = { tools: [], minutes: 2, hazards: [] };
 // the machine leads on by itself from these; the exits only carry the outcomes
 const exits = (on: Exit['on']): Exit[] => [{ id: 'on', on, to: 'on' }];
@@ -28,10 +24,8 @@ export function builtInSteps(profile: Profile, settings: Settings): Step[] {
       id: '~discharge',
       kind: 'discharge',
       title: 'Make safe: discharge what stores energy',
-      lines: [`Clip the ${TOOL_OHMS} Ω, ${TOOL_WATTS} W discharge tool across each part in turn.`, 'Wait out the time, then read the volts across it.'],
+      lines: ['Clip the discharge tool across each part in turn.', 'Wait out the time, then read the volts across it.'],
       contact: 'probe',
-      toolOhms: TOOL_OHMS,
-      toolWatts: TOOL_WATTS,
       exits: exits(['in', 'high', 'not-sure', 'cannot']),
     },
     {

@@ -1,4 +1,5 @@
 /** What a row's answer comes to, and what a step's rows come to together (A16: the worst row). */
+import { classifyRail } from '@/shared/workings/railLimits';
 import { decide } from '@/shared/workings/readingLimit';
 
 import { ROW_ORDER } from '../document/outcomes';
@@ -11,21 +12,15 @@ export function classifyReading(row: ReadingRow, value: number | 'over', uncerta
   if (row.mayFall && falling) return 'falling';
   const size = row.bySize ? Math.abs(value) : value;
   if (row.plain) return row.high === null || size <= row.high ? 'in' : 'high';
-  if (row.nominal !== null && !row.bySize && value * row.nominal < 0 && Math.abs(value) > uncertainty) return 'reversed';
-  const decision = decide(size, { low: row.low, high: row.high }, uncertainty);
-  switch (decision) {
-    case 'in':
-      return 'in';
-    case 'close-in':
-    case 'close-out':
-      return 'close';
-    case 'low':
-    case 'high': {
-      // by size: a negative rail that is too deep is high, one that is too near 0 V is low
-      const negative = row.nominal !== null && row.nominal < 0;
-      return negative ? (decision === 'low' ? 'high' : 'low') : decision;
-    }
-  }
+  const rail = railLimitsOf(row);
+  const decision = rail === null ? decide(size, { low: row.low, high: row.high }, uncertainty) : classifyRail(value, rail, uncertainty);
+  return decision === 'close-in' || decision === 'close-out' ? 'close' : decision;
+}
+
+/** Rows with a nominal are judged by size, a negative rail included, and a wrong sign is its own result. */
+function railLimitsOf(row: ReadingRow): { lowVolts: number; highVolts: number } | null {
+  if (row.nominal === null || row.bySize || row.low === null || row.high === null) return null;
+  return row.nominal < 0 ? { lowVolts: row.high, highVolts: row.low } : { lowVolts: row.low, highVolts: row.high };
 }
 
 /** The worst of several row results. Authored answers of a row-wise observation are ranked by `rank`, worst first. */

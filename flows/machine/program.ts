@@ -9,6 +9,7 @@ import type { Tree } from '../document/tree';
 import { hazardsOf } from '../facts/derivedHazards';
 import type { StepScope } from '../facts/effects';
 import { builtInSteps } from './builtIn';
+import { dischargeTool, tooSmallFor } from './dischargeTool';
 import { openingRows, rowsOf } from './rows';
 import type { Row, WordRow } from './rows';
 
@@ -70,7 +71,9 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
   add(tree, null, (i) => String(i + 1));
   const own = scopeOf(tree, '', profile, settings);
   for (const step of builtInSteps(profile, settings)) {
-    steps.set(step.id, { key: step.id, step, scope: own, rows: rowsOf(step, own), hazards: hazardsOf(step, own), caller: null, stud: '!', builtIn: true });
+    const placed: ProgramStep = { key: step.id, step, scope: own, rows: rowsOf(step, own), hazards: hazardsOf(step, own), caller: null, stud: '!', builtIn: true };
+    steps.set(step.id, placed);
+    if (step.kind === 'discharge') faults.push(...placeFaults(placed));
   }
   const { opening } = tree;
   const named = (list: readonly { name: string }[]) => list.map((x) => x.name);
@@ -115,7 +118,11 @@ function letter(i: number): string {
 
 const NEEDS_ROWS: readonly Step['kind'][] = ['prove-returns', 'prove-trip', 'prove-rails', 'measure', 'soak'];
 
-function placeFaults({ step, rows }: ProgramStep): DocumentFault[] {
+function placeFaults({ step, rows, scope }: ProgramStep): DocumentFault[] {
+  if (step.kind === 'discharge') {
+    const tool = dischargeTool(step, scope.profile, scope.settings);
+    return tooSmallFor(tool, scope.profile, scope.settings).map((part) => ({ step: step.id, key: 'toolWatts', message: `H3: the resistor of ${tool.ohms} Ω, ${tool.watts} W is too small for ${part.name}` }));
+  }
   if (rows.length > 0) return rows.flatMap((row) => (row.ask === 'reading' && row.low === null && row.high === null ? [{ step: step.id, key: 'limit', message: `the profile gives no limit for ${row.label}` }] : []));
   const wants = NEEDS_ROWS.includes(step.kind) || ('each' in step && step.each !== undefined);
   return wants ? [{ step: step.id, key: 'each' in step && step.each !== undefined ? 'each' : 'kind', message: 'the profile has no row for this step' }] : [];

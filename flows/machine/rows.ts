@@ -1,11 +1,14 @@
 /** The rows by which a step is answered: one for each rail, return, part or pair that the profile has for it. */
+import { formatQuantity } from '@/shared/quantity/formatQuantity';
+
 import type { Quantity } from '../document/ids';
 import type { RowResult } from '../document/outcomes';
 import { resolvePoint } from '../document/profile';
 import type { Point, Profile, Rail } from '../document/profile';
-import type { Limit, Step, StepOf } from '../document/steps';
+import type { Step, StepOf } from '../document/steps';
 import type { StepScope } from '../facts/effects';
-import { partsToDischarge } from '../facts/stores';
+import { dischargeSeconds, dischargeTool, partsOf } from './dischargeTool';
+import { workingsLimits } from './stepWorkings';
 
 /** When a row may be answered: seconds after the step was entered, or after another row was answered. */
 export interface RowWait {
@@ -174,25 +177,22 @@ function isolateRows(profile: Profile): WordRow[] {
 }
 
 function dischargeRows(step: StepOf<'discharge'>, scope: StepScope): Row[] {
-  const must = partsToDischarge(scope.profile, scope.settings);
-  const parts = must.length > 0 ? must : scope.profile.stores;
+  const { profile, settings } = scope;
+  const parts = partsOf(profile, settings);
   if (parts.length === 0) return [{ id: 'none', label: 'No part of this machine stores energy', ask: 'word', wait: null, words: [{ word: 'in', label: 'Go on', result: 'in' }, NOT_SURE] }];
+  const tool = dischargeTool(step, profile, settings);
+  const through = `${formatQuantity(tool.ohms, 'Ω', { digits: 3 })}, ${tool.watts} W`;
   return parts.map((s) =>
-    reading(s.id, `${s.name}: volts DC across it`, {
+    reading(s.id, `${s.name}: through ${through}; then volts DC across it`, {
       quantity: 'volts-dc',
-      high: scope.settings.deadVolts,
+      high: settings.deadVolts,
       bySize: true,
       plain: true,
-      red: resolvePoint(scope.profile, 'each-store', s.id),
+      red: resolvePoint(profile, 'each-store', s.id),
       black: zero(scope),
-      wait: { seconds: dischargeSeconds(s.farads, s.voltsWorked, scope.settings.deadVolts, step.toolOhms), from: 'entry' },
+      wait: { seconds: dischargeSeconds(s, tool, settings), from: 'entry' },
     }),
   );
-}
-
-/** Seconds until a capacitor is at the dead limit through the tool resistor alone (the fitted bleeder is not trusted): R C ln(V/Vs). */
-export function dischargeSeconds(farads: number, volts: number, safeVolts: number, toolOhms: number): number {
-  return volts <= safeVolts ? 0 : Math.ceil(toolOhms * farads * Math.log(volts / safeVolts));
 }
 
 function proveDeadRows(scope: StepScope): Row[] {
@@ -232,19 +232,19 @@ function measureRows(step: StepOf<'measure'> | StepOf<'soak'>, scope: StepScope,
   const black = resolvePoint(scope.profile, step.points?.black ?? 'zero', null);
   if (step.each === undefined) {
     const red = step.points?.red === undefined ? null : resolvePoint(scope.profile, step.points.red, null);
-    const { low, high, nominal } = limitsOf(step.limit, null);
+    const { low, high, nominal } = limitsOf(step, null, null, scope);
     return [reading(`reading${suffix}`, red?.name ?? step.title, { quantity: step.quantity, low, high, nominal, red, black: step.quantity === 'celsius' ? null : black, wait })];
   }
   if (step.each === 'rails') {
     return scope.profile.rails.map((rail) => {
-      const { low, high, nominal } = limitsOf(step.limit, rail);
+      const { low, high, nominal } = limitsOf(step, rail, rail.id, scope);
       return reading(`${rail.id}${suffix}`, rail.name, { quantity: step.quantity, low, high, nominal, red: resolvePoint(scope.profile, 'each-rail', rail.id), black, wait });
     });
   }
-  const { low, high, nominal } = limitsOf(step.limit, null);
-  return eachOf(step.each, scope.profile).map((item) =>
-    reading(`${item.id}${suffix}`, item.name, { quantity: step.quantity, low, high, nominal, red: resolvePoint(scope.profile, step.each === 'stores' ? 'each-store' : item.id, item.id), black, wait }),
-  );
+  return eachOf(step.each, scope.profile).map((item) => {
+    const { low, high, nominal } = limitsOf(step, null, item.id, scope);
+    return reading(`${item.id}${suffix}`, item.name, { quantity: step.quantity, low, high, nominal, red: resolvePoint(scope.profile, step.each === 'stores' ? 'each-store' : item.id, item.id), black, wait });
+  });
 }
 
 function soakRows(step: StepOf<'soak'>, scope: StepScope): ReadingRow[] {
@@ -255,8 +255,9 @@ function soakRows(step: StepOf<'soak'>, scope: StepScope): ReadingRow[] {
   }).flat();
 }
 
-/** A limit as signed low and high. `workings` limits come from a sheet and are resolved by `workingsLimits`. */
-function limitsOf(limit: Limit, rail: Rail | null): { low: number | null; high: number | null; nominal: number | null } {
+/** The limit of a row as signed low and high; both null where a sheet cannot be filled, which the layout reports as a fault. */
+function limitsOf(step: StepOf<'measure'> | StepOf<'soak'>, rail: Rail | null, row: string | null, scope: StepScope): { low: number | null; high: number | null; nominal: number | null } {
+  const { limit } = step;
   switch (limit.is) {
     case 'nominal': {
       const nominal = limit.of === 'row' ? (rail?.nominal ?? 0) : limit.of;
@@ -271,6 +272,6 @@ function limitsOf(limit: Limit, rail: Rail | null): { low: number | null; high: 
     case 'above':
       return { low: limit.low, high: null, nominal: null };
     case 'workings':
-      return { low: null, high: null, nominal: rail?.nominal ?? null };
+      return { low: null, high: null, ...workingsLimits(limit, row, step.workings, scope.profile, scope.settings), nominal: rail?.nominal ?? null };
   }
 }

@@ -321,3 +321,18 @@ describe('H11 and H21: time, stop, lapse', () => {
     expect(d.view.purpose).toEqual({ is: 'mend', to: 'touch' });
   });
 });
+
+describe('H20: live work above the limits', () => {
+  const probe = (red: string) => step('measure', 'read', 'abort', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', power: 'live', points: { red }, limit: { is: 'between', low: 1, high: 400 } });
+  const high = { ...benchProfile, points: [...benchProfile.points, { id: 'bulk', name: 'bulk +', connector: 'C9', pin: '+', rail: null, mark: null, neighbours: [] }] };
+  it('needs a second person who has signed in, and never the restorer', () => {
+    const { rule, bench: b } = play(treeOf([...ready('lamp'), lamp('lamp', 'read'), probe('bulk')]), {}, high);
+    expect(rule).toBe('H20');
+    expect(b.try({ type: 'SECOND_PRESENT', by: 'ann' }).ok).toBe(false);
+    b.do({ type: 'SECOND_PRESENT', by: 'sam' }).row();
+    expect(b.view.key).toBe('abort/isolate');
+  });
+  it('asks nobody for a rail of 5 V', () => {
+    expect(play(treeOf([...ready('lamp'), lamp('lamp', 'read'), probe('t5')]), {}, high).rule).toBeNull();
+  });
+});
