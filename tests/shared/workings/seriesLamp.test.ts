@@ -70,6 +70,16 @@ describe('operatingPoints', () => {
     expect(operatingPoints(lamp, 120, { kind: 'constant-power', watts: 37 })).toEqual([]);
   });
 
+  it('is a plain resistance while the filament is cold: most watts V²/4R at half the volts, a quarter less at 3/4 and 1/4', () => {
+    // 480 V, 100 W, ratio 2: 1152 Ω cold up to 102 V.
+    const lamp: Lamp = { ratedVolts: 480, ratedWatts: 100, coldRatio: 2 };
+    const most = (12 * 12) / (4 * 1152);
+    const points = operatingPoints(lamp, 12, { kind: 'constant-power', watts: most * 0.75 });
+    expect(points.map(({ lampVolts }) => lampVolts)).toEqual([expect.closeTo(3, 9), expect.closeTo(9, 9)]);
+    expect(operatingPoints(lamp, 12, { kind: 'constant-power', watts: most * 0.999 })).toHaveLength(2);
+    expect(operatingPoints(lamp, 12, { kind: 'constant-power', watts: most * 1.001 })).toHaveLength(0);
+  });
+
   it('marks as stable exactly the points that a load holding its watts returns to after a nudge', () => {
     fc.assert(
       fc.property(lamps, supply, wide(0.01, 1e5), (lamp, supplyVolts, watts) => {
