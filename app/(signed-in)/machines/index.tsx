@@ -1,0 +1,5 @@
+import { MachinesScreen } from '@/shared/ui/screens/machines/MachinesScreen';
+
+export default function Machines() {
+  return <MachinesScreen />;
+}

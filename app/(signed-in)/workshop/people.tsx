@@ -1,0 +1,5 @@
+import { PeopleScreen } from '@/shared/ui/screens/workshop/PeopleScreen';
+
+export default function People() {
+  return <PeopleScreen />;
+}

@@ -1,0 +1,5 @@
+import { SettingsScreen } from '@/shared/ui/screens/workshop/SettingsScreen';
+
+export default function Settings() {
+  return <SettingsScreen />;
+}

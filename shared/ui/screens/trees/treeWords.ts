@@ -1,0 +1,135 @@
+/** The words in which a fault tree is shown to a reader. */
+import { HAZARDS } from '@/flows/document/hazards';
+import type { HazardKind } from '@/flows/document/hazards';
+import { QUANTITIES } from '@/flows/document/ids';
+import { DEFAULT_VERDICT } from '@/flows/document/outcomes';
+import type { Kind, Outcome, Verdict } from '@/flows/document/outcomes';
+import type { Claim, Exit, Limit, Step } from '@/flows/document/steps';
+import type { Suspect, Tree } from '@/flows/document/tree';
+import type { Unit } from '@/shared/quantity/units';
+import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
+
+export const KIND_WORDS: Readonly<Record<Kind, string>> = {
+  do: 'Do', observe: 'Look', measure: 'Measure', soak: 'Soak', photo: 'Photo', isolate: 'Isolate', discharge: 'Discharge', 'prove-dead': 'Prove dead',
+  'prove-earth': 'Prove earth', 'prove-insulation': 'Prove insulation', 'prove-returns': 'Prove returns', 'prove-trip': 'Prove a trip', 'connect-load': 'Connect load',
+  energise: 'Energise', raise: 'Raise', 'prove-rails': 'Prove rails', work: 'Work', hold: 'Hold point', call: 'Call of a tree', end: 'End',
+};
+
+export const CONTACT_WORDS: Readonly<Record<Step['contact'], string>> = { none: 'no contact', cover: 'cover off', probe: 'one insulated probe', hands: 'hands' };
+
+export const MODE_WORDS: Readonly<Record<Suspect['mode'], string>> = {
+  open: 'open', short: 'short', leaky: 'leaky', drift: 'drifted', 'no-contact': 'no contact', 'low-value': 'low value', 'fires-early': 'fires early', dead: 'dead',
+};
+
+const OUTCOME_WORDS: Readonly<Record<Outcome, string>> = {
+  cannot: 'cannot do it', 'not-sure': 'not sure', 'not-out': 'not out', reversed: 'reversed', high: 'high', falling: 'falling', low: 'low', close: 'close', in: 'in', out: 'all out',
+  done: 'done', on: 'it is on', given: 'given', refused: 'refused', answer: 'answer',
+};
+
+export const END_WORDS: Readonly<Record<Extract<Step, { kind: 'end' }>['says'], string>> = {
+  'fault-found': 'fault found', 'supply-proven': 'supply proven', cleared: 'cleared', stopped: 'stopped', referred: 'referred to a senior', 'in-service': 'in service',
+};
+
+export const CLAIM_WORDS: Readonly<Record<Claim, string>> = {
+  out: 'every source out', dead: 'proved dead', looked: 'looked over', earth: 'earth proved', insulation: 'insulation proved', returns: 'returns proved', trips: 'all trips proved',
+  'proving-regulator': 'regulator proved on the bench supply', 'proving-limited': 'rails proved on limited power', 'proving-full': 'rails proved at full load', 'load-none': 'no load',
+  'load-boards': 'boards in', release: 'a valid release', 'nothing-fitted': 'nothing temporary fitted',
+};
+
+const SUPPLY_WORDS: Readonly<Record<Tree['appliesTo']['supplyKinds'][number], string>> = { linear: 'linear', 'switched-from-raw': 'switched from a raw rail', 'switch-mode': 'switch-mode' };
+
+export const EVIDENCE_SAYS = { 'rules-out': 'rules out', 'points-away': 'points away from', 'says-nothing': 'says nothing on', 'points-to': 'points to', 'all-but-proves': 'all but proves' } as const;
+
+/** `Class I; linear supplies; 1 to 6 rails`. */
+export function appliesToWords({ protectiveClasses, supplyKinds, fewestRails, mostRails, serials }: Tree['appliesTo']): string {
+  const rails = fewestRails === mostRails ? `${fewestRails} ${fewestRails === 1 ? 'rail' : 'rails'}` : `${fewestRails} to ${mostRails} rails`;
+  const only = serials ? `; serials ${serials.join(', ')} only` : '';
+  return `Class ${protectiveClasses.join(' or ')}; ${supplyKinds.map((kind) => SUPPLY_WORDS[kind]).join(', ')}; ${rails}${only}`;
+}
+
+/** What an exit is taken on, in the author's words where there are any. */
+export function exitWords(exit: Exit, ends: ReadonlyMap<string, string> = new Map()): string {
+  if (exit.label !== undefined) return exit.label;
+  return exit.on.map((on) => ends.get(on) ?? OUTCOME_WORDS[on as Outcome] ?? on).join(', ');
+}
+
+/** Pass, fail, unsure or find, said or by default. */
+export function exitVerdict(exit: Exit): Verdict {
+  if (exit.verdict !== undefined) return exit.verdict;
+  const verdicts = exit.on.map((on) => DEFAULT_VERDICT[on as Outcome] ?? 'pass');
+  return (['fail', 'unsure', 'find', 'pass'] as const).find((v) => verdicts.includes(v)) ?? 'pass';
+}
+
+/** The limit of a reading, as an author states it. */
+export function limitWords(limit: Limit, quantity: keyof typeof QUANTITIES): string {
+  const unit: Unit = QUANTITIES[quantity];
+  const print = (n: number) => formatQuantity(n, unit);
+  switch (limit.is) {
+    case 'nominal': {
+      const of = limit.of === 'row' ? 'nominal of the rail' : print(limit.of);
+      return `${of} ± ${limit.tolerance === 'row' ? 'its tolerance' : `${formatNumber(limit.tolerance * 100)} %`}`;
+    }
+    case 'between':
+      return `${print(limit.low)} to ${print(limit.high)}`;
+    case 'below':
+      return `${print(limit.high)} or less`;
+    case 'above':
+      return `${print(limit.low)} or more`;
+    case 'workings':
+      return `from the workings “${limit.sheet}”`;
+  }
+}
+
+/** What is particular to the kind of a step, one fact a line. */
+export function stepFacts(step: Step): string[] {
+  switch (step.kind) {
+    case 'do':
+      return [...(step.fits ?? []).map((f) => `Fits: ${f.name}`), ...(step.removes ?? []).map((id) => `Takes out: ${id}`), ...(step.trims ? [`Trims: ${step.trims}`] : [])];
+    case 'observe':
+      return [`Asks: ${step.asks}`, ...(step.power === 'live' ? ['While live'] : [])];
+    case 'measure':
+    case 'soak':
+      return [
+        `Limit: ${limitWords(step.limit, step.quantity)}`,
+        `Probe: ${{ clipped: 'clipped on while dead', hand: 'by hand, one insulated probe', none: 'no contact' }[step.probe]}`,
+        ...(step.each ? [`For each of the ${step.each}`] : []),
+        ...(step.kind === 'soak' ? [`Held ${formatNumber(step.holdMinutes)} min, read every ${formatNumber(step.everyMinutes)} min`] : []),
+      ];
+    case 'discharge':
+      return [step.toolOhms === undefined ? 'Resistor and wait: from the workings, for the machine' : `Through ${formatQuantity(step.toolOhms, 'Ω')}${step.toolWatts === undefined ? '' : `, ${formatQuantity(step.toolWatts, 'W')}`}`];
+    case 'prove-trip':
+      return [`Rail ${step.rail}, no more than ${formatQuantity(step.ceilingVolts, 'V')}`];
+    case 'connect-load':
+      return [`Load: ${{ boards: 'boards', none: 'none', light: 'light dummy load', full: 'full dummy load' }[step.load]}`];
+    case 'energise':
+    case 'raise':
+      return [
+        `Through ${{ lamp: `a lamp${step.lampWatts ? ` of ${formatQuantity(step.lampWatts, 'W')}` : ''}`, bench: 'the bench supply', mains: 'mains', 'limited-ac': 'a limited AC source' }[step.through]} into the ${step.node}${step.rail ? ` ${step.rail}` : ''}`,
+        `At most ${formatQuantity(step.mostVolts, 'V')}, ${formatQuantity(step.mostAmps, 'A')}, for ${formatNumber(step.longestMinutes)} min`,
+        `Load: ${step.load}`,
+      ];
+    case 'prove-rails':
+      return [{ regulator: 'Regulator, on the bench supply', limited: 'On limited power', full: 'At full load' }[step.level]];
+    case 'work':
+      return [`Area: ${step.area}`, ...(step.cannotBeUndone ? ['Cannot be undone'] : [])];
+    case 'hold':
+      return [`Asks the senior: ${step.asks}`];
+    case 'end':
+      return [...(step.replace ? [`Replace: ${step.replace}`] : []), ...(step.retest ? [`Test again: ${step.retest}`] : [])];
+    case 'photo':
+      return [`Of: ${step.of}`];
+    case 'isolate':
+    case 'prove-dead':
+    case 'prove-earth':
+    case 'prove-insulation':
+    case 'prove-returns':
+    case 'call':
+      return [];
+  }
+}
+
+/** A hazard in one line. */
+export function hazardWords(kind: HazardKind): string {
+  const { hazard, result } = HAZARDS[kind];
+  return `${hazard}. ${result}`;
+}
