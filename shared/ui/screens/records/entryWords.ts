@@ -1,0 +1,101 @@
+/** An entry of a record in words: what was done. */
+import type { Instrument } from '@/shared/contract/instruments';
+import type { RecordEntry } from '@/shared/record/recordEntry';
+import type { ReadingLine } from '@/shared/ui/screens/records/readingsOf';
+import type { ReplayedEntry } from '@/shared/ui/screens/records/replayRecord';
+
+export interface EntryWords {
+  what: string;
+  /** what was said, or with what it was done; null where there is no more to say */
+  detail: string | null;
+}
+
+interface Known {
+  entries: readonly RecordEntry[];
+  readings: ReadonlyMap<string, ReadingLine>;
+  instruments: readonly Instrument[];
+}
+
+const WORDS: Readonly<Record<string, string>> = { done: 'done', 'not-sure': 'not sure', cannot: 'cannot', on: 'it is on', out: 'out', 'not-out': 'not out' };
+
+/** What was done, told from the machine's event where there is one and from the entry's body otherwise. */
+export function entryWords({ entry, event, before }: ReplayedEntry, known: Known): EntryWords {
+  const says = (what: string, detail: unknown = null): EntryWords => ({ what, detail: typeof detail === 'string' && detail !== '' ? detail : null });
+  const { body } = entry;
+  switch (entry.kind) {
+    case 'opened':
+      return says('Run opened');
+    case 'warning-read':
+      return says('Warning read');
+    case 'energised':
+      return says('Switched on', event?.type === 'GUARD_HELD' ? `guard held for ${(event.heldMs / 1000).toFixed(1)} s` : null);
+    case 'hold-asked':
+      return says('Countersign asked for');
+    case 'hold-given':
+      return says('Countersigned', event?.type === 'HOLD_GIVEN' ? event.note : null);
+    case 'hold-refused':
+      return says('Countersign refused', event?.type === 'HOLD_REFUSED' ? event.reason : null);
+    case 'paused':
+      return says('Paused', event?.type === 'PAUSE' ? event.reason : null);
+    case 'resumed':
+      return says(event?.type === 'REENTER' ? 'Went on after Stop' : 'Went on');
+    case 'stopped':
+      return says(event?.type === 'ABORT' ? 'Broken off' : 'Stop, make safe');
+    case 'lapsed':
+      return says(event?.type === 'RESTART' ? 'The page was loaded anew' : 'Time passed: what had lapsed was taken back');
+    case 'closed':
+      return says('Run closed');
+    case 'submitted':
+      return says('Submitted for review', body['remark']);
+    case 'returned':
+      return says('Returned with questions', Array.isArray(body['questions']) ? body['questions'].map((q, i) => `${i + 1}. ${String(q)}`).join('\n') : null);
+    case 'reply':
+      return says('Answered, under review again', body['text']);
+    case 'finding':
+      return says(`Finding (${String(body['grade'])}) on entry ${seqOf(known.entries, body['entry'])}`, body['text']);
+    case 'accepted':
+      return says('Accepted and signed', body['meaning']);
+    case 'released':
+      return says('Released', body['says']);
+    case 'void':
+      return says('Release void', body['reason']);
+    case 'photo':
+      return says('Photo taken');
+    case 'reading':
+      return reading(entry, known) ?? says('Reading');
+    case 'answer':
+    case 'isolated':
+      return answer({ entry, event, before, after: null }) ?? says(entry.kind === 'isolated' ? 'Isolated' : 'Answered');
+    case 'part':
+    case 'tag':
+    case 'deviation':
+    case 'handed-over':
+    case 'taken-over':
+    case 'conflict':
+    case 'correction':
+    case 'addendum':
+      return says({ part: 'Part replaced', tag: 'Tag written', deviation: 'Deviation', 'handed-over': 'Handed over', 'taken-over': 'Taken over', conflict: 'Conflict', correction: 'Reading corrected', addendum: 'Addendum' }[entry.kind], body['text']);
+  }
+}
+
+function seqOf(entries: readonly RecordEntry[], id: unknown): string {
+  return String(entries.find((e) => e.id === id)?.seq ?? '?');
+}
+
+function reading(entry: RecordEntry, { readings, instruments }: Known): EntryWords | null {
+  const line = readings.get(entry.id);
+  if (line === undefined) return null;
+  const meter = instruments.find((i) => i.id === line.instrument)?.name;
+  return { what: `${line.label}: ${line.reading}, ${line.verdict}`, detail: [`typed “${line.typed}”`, ...(meter ? [meter] : [])].join(', ') };
+}
+
+function answer({ event, before }: ReplayedEntry): EntryWords | null {
+  if (event?.type === 'ROW') {
+    const row = before?.rows.find((r) => r.row.id === event.row)?.row;
+    const word = row?.ask === 'word' ? row.words.find((w) => w.word === event.word)?.label : undefined;
+    return { what: `${row?.label ?? event.row}: ${word ?? WORDS[event.word] ?? event.word}`, detail: null };
+  }
+  if (event?.type === 'ANSWER') return { what: before?.answers.find((a) => a.answer === event.answer)?.label ?? WORDS[event.answer] ?? event.answer, detail: event.note ?? null };
+  if (event?.type === 'SECOND_PRESENT') return { what: 'Second person present', detail: null };
+  return null;
+}
