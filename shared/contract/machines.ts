@@ -2,9 +2,8 @@
 import { z } from 'zod';
 
 import { idSchema } from '@/flows/document/ids';
-import { profileShape } from '@/flows/document/profile';
-import { fittedSchema } from '@/flows/document/steps';
 
+import { fittedThing, profileDocument } from './documents';
 import { hashSchema, instantSchema, machineIdSchema, personIdSchema, releaseIdSchema, runIdSchema } from './ids';
 import { runSummarySchema } from './runSummary';
 
@@ -26,7 +25,7 @@ export type Release = z.infer<typeof releaseSchema>;
 /** What a run has left on the machine and starts its next run. */
 export const machineTagSchema = z
   .discriminatedUnion('is', [
-    z.object({ is: z.literal('fitted'), thing: fittedSchema, since: instantSchema, run: runIdSchema }),
+    z.object({ is: z.literal('fitted'), thing: fittedThing, since: instantSchema, run: runIdSchema }),
     z.object({ is: z.literal('killer'), part: idSchema, killer: idSchema, since: instantSchema, run: runIdSchema }),
   ])
   .meta({ id: 'MachineTag' });
@@ -51,7 +50,7 @@ export const machinesSchema = z.object({ machines: z.array(machineSchema) });
 
 export const dossierSchema = z.object({
   machine: machineSchema,
-  profile: z.object({ revision: z.number().int(), hash: hashSchema, document: profileShape.meta({ id: 'Profile' }) }),
+  profile: z.object({ revision: z.number().int(), hash: hashSchema, document: profileDocument }),
   runs: z.array(runSummarySchema),
   releases: z.array(releaseSchema),
   staysFitted: z.array(machineTagSchema),

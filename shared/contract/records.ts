@@ -1,10 +1,7 @@
 /** Records under review: findings, return and reply, acceptance, export. */
 import { z } from 'zod';
 
-import { profileShape } from '@/flows/document/profile';
-import { settingsSchema } from '@/flows/document/settings';
-import { treeShape } from '@/flows/document/tree';
-
+import { profileDocument, settingsDocument, treeDocument } from './documents';
 import { entrySchema } from './entries';
 import { entryIdSchema, instantSchema, personIdSchema, sentence } from './ids';
 import { instrumentSchema } from './instruments';
@@ -40,10 +37,10 @@ export const recordSchema = z
     run: runSummarySchema,
     pins: pinsSchema,
     start: startSchema,
-    tree: treeShape,
-    callees: z.array(treeShape),
-    profile: profileShape,
-    settings: settingsSchema,
+    tree: treeDocument,
+    callees: z.array(treeDocument),
+    profile: profileDocument,
+    settings: settingsDocument,
     instruments: z.array(instrumentSchema),
     people: z.array(personSchema),
     entries: z.array(entrySchema),

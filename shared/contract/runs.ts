@@ -2,11 +2,8 @@
 import { z } from 'zod';
 
 import { idSchema } from '@/flows/document/ids';
-import { profileShape } from '@/flows/document/profile';
-import { settingsSchema } from '@/flows/document/settings';
-import { fittedSchema } from '@/flows/document/steps';
-import { treeShape } from '@/flows/document/tree';
 
+import { fittedThing, profileDocument, settingsDocument, treeDocument } from './documents';
 import { entrySchema } from './entries';
 import { hashSchema, machineIdSchema, personIdSchema, runIdSchema, treeIdSchema, versionSchema } from './ids';
 import { instrumentSchema } from './instruments';
@@ -40,7 +37,7 @@ export const startSchema = z
     /** epoch milliseconds */
     at: z.number(),
     release: z.boolean(),
-    fitted: z.array(fittedSchema),
+    fitted: z.array(fittedThing),
     killers: z.array(z.object({ part: idSchema, killer: idSchema })),
   })
   .meta({ id: 'RunStart' });
@@ -55,10 +52,10 @@ export const runBundleSchema = z
     run: runSummarySchema,
     pins: pinsSchema,
     start: startSchema,
-    tree: treeShape,
-    callees: z.array(treeShape),
-    profile: profileShape,
-    settings: settingsSchema,
+    tree: treeDocument,
+    callees: z.array(treeDocument),
+    profile: profileDocument,
+    settings: settingsDocument,
     instruments: z.array(instrumentSchema),
     people: z.array(personSchema),
     entries: z.array(entrySchema),

@@ -1,8 +1,7 @@
 /** The settings of the workshop. */
 import { z } from 'zod';
 
-import { settingsSchema } from '@/flows/document/settings';
-
+import { settingsDocument } from './documents';
 import { hashSchema } from './ids';
 
-export const workshopSettingsSchema = z.object({ settings: settingsSchema, hash: hashSchema });
+export const workshopSettingsSchema = z.object({ settings: settingsDocument, hash: hashSchema });

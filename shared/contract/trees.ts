@@ -1,8 +1,7 @@
 /** Fault trees and their versions. */
 import { z } from 'zod';
 
-import { treeShape } from '@/flows/document/tree';
-
+import { treeDocument } from './documents';
 import { hashSchema, instantSchema, personIdSchema, treeIdSchema, versionSchema } from './ids';
 
 export const VERSION_STATES = ['draft', 'in-check', 'issued', 'withdrawn'] as const;
@@ -26,10 +25,9 @@ export type TreeVersion = z.infer<typeof treeVersionSchema>;
 
 export const treesSchema = z.object({ trees: z.array(z.object({ id: treeIdSchema, versions: z.array(treeVersionSchema) })) });
 
-const documentSchema = treeShape.meta({ id: 'Tree' });
 export const treeDocumentSchema = z.object({
   version: treeVersionSchema,
-  document: documentSchema,
+  document: treeDocument,
   /** the trees that it calls, each in its pinned version */
-  callees: z.array(documentSchema),
+  callees: z.array(treeDocument),
 });
