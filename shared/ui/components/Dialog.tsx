@@ -42,7 +42,8 @@ export function Dialog({ title, children, actions, onClose, foot }: Props) {
       if (before instanceof HTMLElement) before.focus();
     };
   }, []);
-  const onKeyDown = (e: TabLike) => {
+  // caught on the way down: a text field keeps its keys to itself on the way up
+  const onKeyDownCapture = (e: TabLike) => {
     if (e.key === 'Escape' && onClose) {
       e.stopPropagation();
       onClose();
@@ -56,7 +57,7 @@ export function Dialog({ title, children, actions, onClose, foot }: Props) {
     next.focus();
   };
   return createPortal(
-    <View ref={layer} {...webProps({ onKeyDown })} style={webStyle({ position: 'fixed', top: 0, right: 0, bottom: 0, left: 0, zIndex: 100, backgroundColor: colors.scrim })}>
+    <View ref={layer} {...webProps({ onKeyDownCapture })} style={webStyle({ position: 'fixed', top: 0, right: 0, bottom: 0, left: 0, zIndex: 100, backgroundColor: colors.scrim })}>
       <View style={{ flex: 1, minHeight: 0, padding: space.l, justifyContent: 'center', alignItems: 'center' }}>
         <View
           ref={box}

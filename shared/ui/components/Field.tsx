@@ -37,6 +37,7 @@ export function Field({ label, value, onChangeText, onBlur, onSubmit, error, hin
   return (
     <View style={{ gap: space.xs, alignSelf: 'stretch' }}>
       <Label>{required ? label : `${label} (may stay empty)`}</Label>
+      <View {...webProps({ dataSet: { ring: 'within' } })}>
       <TextInput
         mode="outlined"
         value={value}
@@ -60,6 +61,7 @@ export function Field({ label, value, onChangeText, onBlur, onSubmit, error, hin
         style={{ minHeight: target.control + 4, backgroundColor: colors.raised, ...(lines > 1 ? { height: 26 * lines + 28 } : { height: target.control + 4 }) }}
         {...webProps({ 'aria-invalid': error !== undefined, 'aria-required': required, ...(described ? { 'aria-describedby': described } : {}) })}
       />
+      </View>
       {error ? <FieldError id={`${id}e`} text={error} /> : null}
       {hint ? (
         <BodyText id={`${id}h`} size="small" tone="soft">

@@ -5,7 +5,7 @@ import { Icon } from '@/shared/ui/components/icons/Icon';
 import { PowerPattern } from '@/shared/ui/components/PowerPattern';
 import { powerVisual } from '@/shared/ui/components/powerVisual';
 import type { PowerState } from '@/shared/ui/components/powerVisual';
-import { line, space, stud } from '@/shared/ui/theme/space';
+import { line, space, stud, target } from '@/shared/ui/theme/space';
 import { face, type } from '@/shared/ui/theme/type';
 import { useTheme } from '@/shared/ui/theme/useTheme';
 import { webProps } from '@/shared/ui/theme/webStyle';
@@ -56,7 +56,7 @@ function Place({ place, ink, onPress }: { place: string; ink: string; onPress: (
       {of ? <Text style={{ fontFamily: face.mono }}>{`/${of}`}</Text> : null}
     </Text>
   );
-  const box = { justifyContent: 'center', paddingHorizontal: space.m } as const;
+  const box = { justifyContent: 'center', paddingHorizontal: 10, minWidth: target.control } as const;
   if (!onPress) {
     return (
       <View role="img" aria-label={words} style={box}>

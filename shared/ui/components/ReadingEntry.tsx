@@ -45,7 +45,7 @@ export function ReadingEntry({ label, value, unit, meter, error, hint, disabled 
           </View>
         ) : null}
       </View>
-      <View style={{ flexDirection: 'row', alignItems: 'center', borderBottomWidth: line.heavy, borderBottomColor: error ? colors.brass : colors.ink, backgroundColor: colors.raised, gap: space.s, paddingHorizontal: space.s }}>
+      <View {...webProps({ dataSet: { ring: 'within' } })} style={{ flexDirection: 'row', alignItems: 'center', borderBottomWidth: line.heavy, borderBottomColor: error ? colors.brass : colors.ink, backgroundColor: colors.raised, gap: space.s, paddingHorizontal: space.s }}>
         <TextInput
           ref={input}
           value={value}

@@ -14,8 +14,8 @@ interface Props {
   above?: boolean | undefined;
   /** the rule goes on to a row below */
   below?: boolean | undefined;
-  /** draws the neighbours' small studs at the ends of the rule */
-  neighbours?: boolean | undefined;
+  /** draws the small open stud of the step to come at the foot of the rule */
+  next?: boolean | undefined;
   /** fills the height that is left */
   grow?: boolean | undefined;
   children: ReactNode;
@@ -25,7 +25,7 @@ const inset = space.l;
 const axis = stud.column / 2;
 
 /** Stud at the left on its rule, content at the right. */
-export function StudRail({ number, state = 'ahead', above = false, below = false, neighbours = false, grow = false, children }: Props) {
+export function StudRail({ number, state = 'ahead', above = false, below = false, next = false, grow = false, children }: Props) {
   const { colors } = useTheme();
   const ruleAt = { position: 'absolute', left: axis - 1, width: line.rule, backgroundColor: colors.rule } as const;
   const centre = inset + stud.size / 2;
@@ -34,13 +34,8 @@ export function StudRail({ number, state = 'ahead', above = false, below = false
       <View style={{ width: stud.column, alignItems: 'center', paddingTop: inset }} aria-hidden>
         {above ? <View style={[ruleAt, { top: 0, height: centre }]} /> : null}
         {below ? <View style={[ruleAt, { top: centre, bottom: 0 }]} /> : null}
-        {above && neighbours ? (
-          <View style={{ position: 'absolute', top: -stud.small / 2 }}>
-            <StepStud state="done" />
-          </View>
-        ) : null}
         <StepStud number={number} state={state} />
-        {below && neighbours ? (
+        {below && next ? (
           <View style={{ position: 'absolute', bottom: space.xl }}>
             <StepStud state="ahead" />
           </View>

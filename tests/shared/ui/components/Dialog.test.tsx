@@ -5,11 +5,12 @@ import { describe, expect, it } from 'vitest';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Button } from '@/shared/ui/components/Button';
 import { Dialog } from '@/shared/ui/components/Dialog';
+import { Field } from '@/shared/ui/components/Field';
 import { wrapTab } from '@/shared/ui/components/focusTrap';
 import { StopBar } from '@/shared/ui/components/StopBar';
 import { renderSheet } from '@/tests/shared/ui/components/renderSheet';
 
-function Sheet({ mustAnswer = false, stop = false }: { mustAnswer?: boolean; stop?: boolean }) {
+function Sheet({ mustAnswer = false, stop = false, field = false }: { mustAnswer?: boolean; stop?: boolean; field?: boolean }) {
   const [open, setOpen] = useState(false);
   return (
     <>
@@ -27,6 +28,7 @@ function Sheet({ mustAnswer = false, stop = false }: { mustAnswer?: boolean; sto
           }
         >
           <BodyText>The supply may go back.</BodyText>
+          {field ? <Field label="Remark" value="" onChangeText={() => undefined} /> : null}
         </Dialog>
       ) : null}
     </>
@@ -54,6 +56,17 @@ describe('Dialog', () => {
     fireEvent.keyDown(dialog, { key: 'Escape' });
     expect(screen.queryByRole('dialog')).toBeNull();
     expect(document.activeElement).toBe(opener);
+  });
+
+  it('closes on Escape and keeps Tab from inside a text field too', () => {
+    renderSheet(<Sheet field />);
+    openIt();
+    const remark = screen.getByRole('textbox', { name: 'Remark' });
+    remark.focus();
+    fireEvent.keyDown(remark, { key: 'Tab', shiftKey: true });
+    expect(document.activeElement).toBe(screen.getByRole('button', { name: 'Sign' }));
+    fireEvent.keyDown(remark, { key: 'Escape' });
+    expect(screen.queryByRole('dialog')).toBeNull();
   });
 
   it('gives the focus back when it is answered', () => {
