@@ -1,4 +1,4 @@
-import { NotFoundScreen } from '@/shared/ui/screens/parts/NotFoundScreen';
+import { NotFoundScreen } from '@/shared/ui/screens/notFound/NotFoundScreen';
 
 export default function NotFound() {
   return <NotFoundScreen />;

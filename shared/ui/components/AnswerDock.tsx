@@ -10,7 +10,17 @@ import { useTheme } from '@/shared/ui/theme/useTheme';
 export function AnswerDock({ children }: { children: ReactNode }) {
   const { colors } = useTheme();
   return (
-    <View role="group" aria-label="Answers" style={{ backgroundColor: colors.paper, borderTopWidth: line.rule, borderTopColor: colors.ink, padding: space.s, alignItems: 'center' }}>
+    <View
+      role="group"
+      aria-label="Answers"
+      style={{
+        backgroundColor: colors.paper,
+        borderTopWidth: line.rule,
+        borderTopColor: colors.ink,
+        padding: space.s,
+        alignItems: 'center',
+      }}
+    >
       <View style={{ width: '100%', maxWidth: 720 }}>
         <AnswerStack>{children}</AnswerStack>
       </View>

@@ -12,5 +12,9 @@ interface Props {
 
 /** Holds `BigAnswer`s. */
 export function AnswerStack({ children, row = false }: Props) {
-  return <View style={{ flexDirection: row ? 'row' : 'column', flexWrap: row ? 'wrap' : 'nowrap', gap: target.gap, alignSelf: 'stretch' }}>{children}</View>;
+  return (
+    <View style={{ flexDirection: row ? 'row' : 'column', flexWrap: row ? 'wrap' : 'nowrap', gap: target.gap, alignSelf: 'stretch' }}>
+      {children}
+    </View>
+  );
 }

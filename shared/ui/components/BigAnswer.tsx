@@ -19,7 +19,13 @@ interface Props extends Omit<PressProps, 'kind'> {
 /** One answer; stack them with `AnswerStack`, which keeps the gap between them. */
 export function BigAnswer({ label, kind = 'plain', detail, half = false, name, ...press }: Props) {
   return (
-    <Press {...press} name={name ?? (detail ? `${label}: ${detail}` : undefined)} kind={kind} minHeight={target.answer} style={half ? { flexGrow: 1, flexShrink: 1, flexBasis: 130, paddingHorizontal: 10 } : { alignSelf: 'stretch' }}>
+    <Press
+      {...press}
+      name={name ?? (detail ? `${label}: ${detail}` : undefined)}
+      kind={kind}
+      minHeight={target.answer}
+      style={half ? { flexGrow: 1, flexShrink: 1, flexBasis: 130, paddingHorizontal: 10 } : { alignSelf: 'stretch' }}
+    >
       {(word) => (
         <View style={{ flexShrink: 1 }}>
           <Text style={[type.answer, { color: word, textAlign: 'center' }]}>{label}</Text>

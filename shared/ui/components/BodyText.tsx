@@ -22,7 +22,14 @@ interface Props {
 /** A paragraph, or with `inline` a run of words inside one. `alarm` and `proved` are for hazards and power only. */
 export function BodyText({ children, size = 'body', tone, bold = false, inline = false, align, id }: Props) {
   const { colors } = useTheme();
-  const color = { ink: colors.ink, soft: colors.inkSoft, brass: colors.brass, alarm: colors.alarm, proved: colors.proved, action: colors.action }[tone ?? 'ink'];
+  const color = {
+    ink: colors.ink,
+    soft: colors.inkSoft,
+    brass: colors.brass,
+    alarm: colors.alarm,
+    proved: colors.proved,
+    action: colors.action,
+  }[tone ?? 'ink'];
   return (
     <Text
       {...(id ? { nativeID: id } : {})}

@@ -26,9 +26,28 @@ export function Checkbox({ label, detail, checked, disabled = false, onChange }:
       aria-label={detail ? `${label}: ${detail}` : label}
       disabled={disabled}
       onPress={() => onChange(!checked)}
-      style={{ minHeight: target.control + 4, flexDirection: 'row', alignItems: 'center', gap: space.m, paddingVertical: space.s, borderBottomWidth: line.hair, borderBottomColor: colors.rule, alignSelf: 'stretch' }}
+      style={{
+        minHeight: target.control + 4,
+        flexDirection: 'row',
+        alignItems: 'center',
+        gap: space.m,
+        paddingVertical: space.s,
+        borderBottomWidth: line.hair,
+        borderBottomColor: colors.rule,
+        alignSelf: 'stretch',
+      }}
     >
-      <View style={{ width: 28, height: 28, borderWidth: line.rule, borderColor: ink, backgroundColor: colors.raised, alignItems: 'center', justifyContent: 'center' }}>
+      <View
+        style={{
+          width: 28,
+          height: 28,
+          borderWidth: line.rule,
+          borderColor: ink,
+          backgroundColor: colors.raised,
+          alignItems: 'center',
+          justifyContent: 'center',
+        }}
+      >
         {checked ? <Icon name="check" size={22} color={ink} weight={3} /> : null}
       </View>
       <View style={{ flex: 1 }}>

@@ -27,7 +27,11 @@ export function Choice({ label, options, value, onChange }: Props) {
       <View aria-hidden>
         <Label>{label}</Label>
       </View>
-      <View role="radiogroup" aria-label={label} style={{ borderWidth: line.rule, borderColor: colors.ink, backgroundColor: colors.raised }}>
+      <View
+        role="radiogroup"
+        aria-label={label}
+        style={{ borderWidth: line.rule, borderColor: colors.ink, backgroundColor: colors.raised }}
+      >
         {options.map((option, index) => {
           const chosen = index === at;
           return (
@@ -63,7 +67,17 @@ export function Choice({ label, options, value, onChange }: Props) {
                 borderTopColor: colors.rule,
               }}
             >
-              <View style={{ width: 24, height: 24, borderRadius: 12, borderWidth: line.rule, borderColor: colors.ink, alignItems: 'center', justifyContent: 'center' }}>
+              <View
+                style={{
+                  width: 24,
+                  height: 24,
+                  borderRadius: 12,
+                  borderWidth: line.rule,
+                  borderColor: colors.ink,
+                  alignItems: 'center',
+                  justifyContent: 'center',
+                }}
+              >
                 {chosen ? <View style={{ width: 12, height: 12, borderRadius: 6, backgroundColor: colors.ink }} /> : null}
               </View>
               <View style={{ flex: 1 }}>

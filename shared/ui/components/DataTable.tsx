@@ -50,7 +50,15 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, rowTarget, sort
         <View role="rowgroup">
           <View role="row" style={{ flexDirection: 'row', borderBottomWidth: line.rule, borderBottomColor: colors.ink }}>
             {columns.map((column) => (
-              <TableHeader key={column.key} id={column.key} title={column.title} grow={column.grow ?? 1} align={column.align ?? 'left'} sort={sort} onSort={column.sortable ? onSort : undefined} />
+              <TableHeader
+                key={column.key}
+                id={column.key}
+                title={column.title}
+                grow={column.grow ?? 1}
+                align={column.align ?? 'left'}
+                sort={sort}
+                onSort={column.sortable ? onSort : undefined}
+              />
             ))}
           </View>
         </View>
@@ -62,7 +70,15 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, rowTarget, sort
             <View
               key={rowKey(row)}
               role="row"
-              style={{ flexDirection: stacked ? 'column' : 'row', alignItems: stacked ? 'stretch' : 'center', paddingVertical: stacked ? space.m : space.xs, gap: stacked ? space.xs : 0, minHeight: 52, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}
+              style={{
+                flexDirection: stacked ? 'column' : 'row',
+                alignItems: stacked ? 'stretch' : 'center',
+                paddingVertical: stacked ? space.m : space.xs,
+                gap: stacked ? space.xs : 0,
+                minHeight: 52,
+                borderBottomWidth: line.hair,
+                borderBottomColor: colors.rule,
+              }}
             >
               {columns.map((column, index) => (
                 <Cell key={column.key} column={column} row={row} stacked={stacked} first={index === 0} to={index === 0 ? to : undefined} />
@@ -97,7 +113,17 @@ function Cell<Row>({ column, row, stacked, first, to }: CellProps<Row>) {
   const content = to ? <TableRowLink to={to}>{drawn}</TableRowLink> : drawn;
   if (!stacked) {
     return (
-      <View role="cell" style={{ flexGrow: column.grow ?? 1, flexShrink: 1, flexBasis: 0, minWidth: 0, paddingHorizontal: space.s, paddingVertical: space.xs }}>
+      <View
+        role="cell"
+        style={{
+          flexGrow: column.grow ?? 1,
+          flexShrink: 1,
+          flexBasis: 0,
+          minWidth: 0,
+          paddingHorizontal: space.s,
+          paddingVertical: space.xs,
+        }}
+      >
         {content}
       </View>
     );

@@ -57,7 +57,11 @@ export function Dialog({ title, children, actions, onClose, foot }: Props) {
     next.focus();
   };
   return createPortal(
-    <View ref={layer} {...webProps({ onKeyDownCapture })} style={webStyle({ position: 'fixed', top: 0, right: 0, bottom: 0, left: 0, zIndex: 100, backgroundColor: colors.scrim })}>
+    <View
+      ref={layer}
+      {...webProps({ onKeyDownCapture })}
+      style={webStyle({ position: 'fixed', top: 0, right: 0, bottom: 0, left: 0, zIndex: 100, backgroundColor: colors.scrim })}
+    >
       <View style={{ flex: 1, minHeight: 0, padding: space.l, justifyContent: 'center', alignItems: 'center' }}>
         <View
           ref={box}
@@ -65,7 +69,14 @@ export function Dialog({ title, children, actions, onClose, foot }: Props) {
           aria-modal
           aria-labelledby={`${id}t`}
           tabIndex={-1}
-          style={{ width: '100%', maxWidth: 560, maxHeight: '100%', backgroundColor: colors.paper, borderWidth: line.heavy, borderColor: colors.ink }}
+          style={{
+            width: '100%',
+            maxWidth: 560,
+            maxHeight: '100%',
+            backgroundColor: colors.paper,
+            borderWidth: line.heavy,
+            borderColor: colors.ink,
+          }}
         >
           <View style={{ padding: space.l, paddingRight: space.xxl, borderBottomWidth: line.rule, borderBottomColor: colors.ink }}>
             <Heading level={2} id={`${id}t`}>
@@ -75,7 +86,18 @@ export function Dialog({ title, children, actions, onClose, foot }: Props) {
           <ScrollView style={{ flexShrink: 1 }} contentContainerStyle={{ padding: space.l, gap: space.l }}>
             {children}
           </ScrollView>
-          <View style={{ flexDirection: 'row', flexWrap: 'wrap', justifyContent: 'flex-end', gap: target.gap, padding: space.l, paddingTop: space.s }}>{actions}</View>
+          <View
+            style={{
+              flexDirection: 'row',
+              flexWrap: 'wrap',
+              justifyContent: 'flex-end',
+              gap: target.gap,
+              padding: space.l,
+              paddingTop: space.s,
+            }}
+          >
+            {actions}
+          </View>
         </View>
       </View>
       {foot}

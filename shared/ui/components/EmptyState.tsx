@@ -17,7 +17,17 @@ interface Props {
 export function EmptyState({ title, text, action }: Props) {
   const { colors } = useTheme();
   return (
-    <View style={{ borderWidth: line.rule, borderStyle: 'dashed', borderColor: colors.inkSoft, padding: space.xl, gap: space.m, alignItems: 'flex-start', alignSelf: 'stretch' }}>
+    <View
+      style={{
+        borderWidth: line.rule,
+        borderStyle: 'dashed',
+        borderColor: colors.inkSoft,
+        padding: space.xl,
+        gap: space.m,
+        alignItems: 'flex-start',
+        alignSelf: 'stretch',
+      }}
+    >
       <Heading level={3}>{title}</Heading>
       <BodyText>{text}</BodyText>
       {action}

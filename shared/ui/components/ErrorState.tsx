@@ -20,7 +20,20 @@ interface Props {
 export function ErrorState({ happened, todo, onRetry }: Props) {
   const { colors } = useTheme();
   return (
-    <View role="alert" style={{ borderWidth: line.rule, borderColor: colors.ink, borderLeftWidth: 10, borderLeftColor: colors.brass, padding: space.xl, gap: space.m, alignItems: 'flex-start', alignSelf: 'stretch', backgroundColor: colors.raised }}>
+    <View
+      role="alert"
+      style={{
+        borderWidth: line.rule,
+        borderColor: colors.ink,
+        borderLeftWidth: 10,
+        borderLeftColor: colors.brass,
+        padding: space.xl,
+        gap: space.m,
+        alignItems: 'flex-start',
+        alignSelf: 'stretch',
+        backgroundColor: colors.raised,
+      }}
+    >
       <View style={{ flexDirection: 'row', gap: space.m, alignItems: 'center' }}>
         <Icon name="exclaim" size={26} color={colors.brass} weight={3.5} />
         <View style={{ flexShrink: 1 }}>

@@ -30,7 +30,21 @@ interface Props {
 }
 
 /** The name stays above the field, the fault below it; both belong to it for a screen reader. */
-export function Field({ label, value, onChangeText, onBlur, onSubmit, error, hint, required = false, disabled = false, secret = false, lines = 1, inputMode, autoComplete }: Props) {
+export function Field({
+  label,
+  value,
+  onChangeText,
+  onBlur,
+  onSubmit,
+  error,
+  hint,
+  required = false,
+  disabled = false,
+  secret = false,
+  lines = 1,
+  inputMode,
+  autoComplete,
+}: Props) {
   const { colors } = useTheme();
   const id = useId();
   const described = [error ? `${id}e` : null, hint ? `${id}h` : null].filter(Boolean).join(' ');
@@ -38,29 +52,37 @@ export function Field({ label, value, onChangeText, onBlur, onSubmit, error, hin
     <View style={{ gap: space.xs, alignSelf: 'stretch' }}>
       <Label>{required ? label : `${label} (may stay empty)`}</Label>
       <View {...webProps({ dataSet: { ring: 'within' } })}>
-      <TextInput
-        mode="outlined"
-        value={value}
-        onChangeText={onChangeText}
-        onBlur={() => onBlur?.()}
-        onSubmitEditing={() => onSubmit?.()}
-        disabled={disabled}
-        secureTextEntry={secret}
-        multiline={lines > 1}
-        numberOfLines={lines}
-        error={error !== undefined}
-        {...(inputMode ? { inputMode } : {})}
-        {...(autoComplete ? { autoComplete } : {})}
-        autoCapitalize={secret || inputMode === 'email' ? 'none' : 'sentences'}
-        accessibilityLabel={label}
-        outlineColor={colors.ink}
-        activeOutlineColor={colors.action}
-        textColor={colors.ink}
-        outlineStyle={{ borderRadius: 0, borderWidth: line.rule }}
-        contentStyle={{ fontFamily: face.text, fontSize: 18, paddingHorizontal: space.m, ...(lines > 1 ? { paddingTop: space.m } : {}) }}
-        style={{ minHeight: target.control + 4, backgroundColor: colors.raised, ...(lines > 1 ? { height: 26 * lines + 28 } : { height: target.control + 4 }) }}
-        {...webProps({ 'aria-invalid': error !== undefined, 'aria-required': required, ...(described ? { 'aria-describedby': described } : {}) })}
-      />
+        <TextInput
+          mode="outlined"
+          value={value}
+          onChangeText={onChangeText}
+          onBlur={() => onBlur?.()}
+          onSubmitEditing={() => onSubmit?.()}
+          disabled={disabled}
+          secureTextEntry={secret}
+          multiline={lines > 1}
+          numberOfLines={lines}
+          error={error !== undefined}
+          {...(inputMode ? { inputMode } : {})}
+          {...(autoComplete ? { autoComplete } : {})}
+          autoCapitalize={secret || inputMode === 'email' ? 'none' : 'sentences'}
+          accessibilityLabel={label}
+          outlineColor={colors.ink}
+          activeOutlineColor={colors.action}
+          textColor={colors.ink}
+          outlineStyle={{ borderRadius: 0, borderWidth: line.rule }}
+          contentStyle={{ fontFamily: face.text, fontSize: 18, paddingHorizontal: space.m, ...(lines > 1 ? { paddingTop: space.m } : {}) }}
+          style={{
+            minHeight: target.control + 4,
+            backgroundColor: colors.raised,
+            ...(lines > 1 ? { height: 26 * lines + 28 } : { height: target.control + 4 }),
+          }}
+          {...webProps({
+            'aria-invalid': error !== undefined,
+            'aria-required': required,
+            ...(described ? { 'aria-describedby': described } : {}),
+          })}
+        />
       </View>
       {error ? <FieldError id={`${id}e`} text={error} /> : null}
       {hint ? (

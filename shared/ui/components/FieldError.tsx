@@ -11,7 +11,9 @@ export function FieldError({ id, text }: { id: string; text: string }) {
   const { colors } = useTheme();
   return (
     <View role="alert" style={{ flexDirection: 'row', gap: space.s, alignItems: 'flex-start' }}>
-      <View style={{ width: 22, height: 22, borderWidth: line.rule, borderColor: colors.brass, alignItems: 'center', justifyContent: 'center' }}>
+      <View
+        style={{ width: 22, height: 22, borderWidth: line.rule, borderColor: colors.brass, alignItems: 'center', justifyContent: 'center' }}
+      >
         <Icon name="exclaim" size={14} color={colors.brass} weight={3.5} />
       </View>
       <View style={{ flex: 1 }}>

@@ -68,14 +68,29 @@ function Terminal({ point, x, y }: { point: FigurePoint; x: number; y: number })
       <Line x1={x - 6.5} y1={y + 6.5} x2={x + 6.5} y2={y - 6.5} stroke={colors.ink} strokeWidth={1.5} />
       {lead ? (
         <G>
-          <Circle cx={x} cy={y} r={14} fill="none" stroke={leadInk} strokeWidth={3.5} {...(lead === 'black' ? {} : { strokeDasharray: '6 2.5' })} />
+          <Circle
+            cx={x}
+            cy={y}
+            r={14}
+            fill="none"
+            stroke={leadInk}
+            strokeWidth={3.5}
+            {...(lead === 'black' ? {} : { strokeDasharray: '6 2.5' })}
+          />
           <Line x1={x} y1={y - 36} x2={x} y2={y} stroke={leadInk} strokeWidth={3.5} />
           <SvgText x={x + 6} y={y - 23} fill={leadInk} fontFamily={face.textBold} fontSize={smallestTextPx} textAnchor="start">
             {lead === 'red' ? 'R' : 'B'}
           </SvgText>
         </G>
       ) : null}
-      <SvgText x={x} y={y + 40} fill={lead ? colors.ink : colors.inkSoft} fontFamily={lead ? face.monoBold : face.mono} fontSize={smallestTextPx} textAnchor="middle">
+      <SvgText
+        x={x}
+        y={y + 40}
+        fill={lead ? colors.ink : colors.inkSoft}
+        fontFamily={lead ? face.monoBold : face.mono}
+        fontSize={smallestTextPx}
+        textAnchor="middle"
+      >
         {point.name}
       </SvgText>
     </G>

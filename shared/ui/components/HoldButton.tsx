@@ -75,12 +75,28 @@ export function HoldButton({ label, holdMs = 2000, disabled = false, onConfirm }
         aria-disabled={over}
         {...handlers}
         style={[
-          { minHeight: target.answer + 8, borderWidth: line.heavy, borderColor: over ? colors.disabled : colors.ink, backgroundColor: over ? colors.disabled : colors.raised, justifyContent: 'center', paddingHorizontal: space.xl },
+          {
+            minHeight: target.answer + 8,
+            borderWidth: line.heavy,
+            borderColor: over ? colors.disabled : colors.ink,
+            backgroundColor: over ? colors.disabled : colors.raised,
+            justifyContent: 'center',
+            paddingHorizontal: space.xl,
+          },
           webStyle({ touchAction: 'none', userSelect: 'none', cursor: over ? 'default' : 'pointer' }),
         ]}
       >
         <View style={{ position: 'absolute', left: 0, bottom: 0, height: 10, width: `${drawn * 100}%`, backgroundColor: colors.ink }} />
-        <View style={{ position: 'absolute', left: 0, right: 0, bottom: 10, height: line.hair, backgroundColor: over ? colors.onDisabled : colors.ink }} />
+        <View
+          style={{
+            position: 'absolute',
+            left: 0,
+            right: 0,
+            bottom: 10,
+            height: line.hair,
+            backgroundColor: over ? colors.onDisabled : colors.ink,
+          }}
+        />
         <NotchCorner edge={over ? undefined : colors.ink} border={line.heavy} />
         <Text style={[type.answer, { color: over ? colors.onDisabled : colors.ink, textAlign: 'center', paddingBottom: 8 }]}>{label}</Text>
       </View>

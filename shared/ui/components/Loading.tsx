@@ -18,7 +18,16 @@ export function Loading({ what }: Props) {
   return (
     <View role="status" style={{ paddingVertical: space.xl, gap: space.m, alignSelf: 'stretch' }}>
       <BodyText tone="soft">{`Fetching ${what} …`}</BodyText>
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', borderBottomWidth: line.rule, borderBottomColor: colors.rule, maxWidth: 320 }} aria-hidden>
+      <View
+        style={{
+          flexDirection: 'row',
+          justifyContent: 'space-between',
+          borderBottomWidth: line.rule,
+          borderBottomColor: colors.rule,
+          maxWidth: 320,
+        }}
+        aria-hidden
+      >
         {marks.map((mark) => (
           <View key={mark} style={{ width: line.rule, height: mark % 7 === 0 ? 12 : 7, backgroundColor: colors.rule }} />
         ))}

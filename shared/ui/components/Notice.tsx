@@ -23,7 +23,14 @@ export function Notice({ children, title, kind = 'look', live = false }: Props) 
   return (
     <View
       {...(live ? { role: kind === 'alarm' ? 'alert' : 'status' } : {})}
-      style={{ borderLeftWidth: line.heavy + 1, borderLeftColor: edge, paddingLeft: space.m, paddingVertical: space.xs, gap: space.xs, alignSelf: 'stretch' }}
+      style={{
+        borderLeftWidth: line.heavy + 1,
+        borderLeftColor: edge,
+        paddingLeft: space.m,
+        paddingVertical: space.xs,
+        gap: space.xs,
+        alignSelf: 'stretch',
+      }}
     >
       {title ? (
         <BodyText bold tone={tone}>

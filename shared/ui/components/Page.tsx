@@ -34,11 +34,23 @@ export function Page({ title, eyebrow, aside, head, foot, maxWidth = 1120, bleed
     <View style={{ flex: 1, minHeight: 0, backgroundColor: colors.paper }}>
       {head}
       <ScrollView role="main" style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1, alignItems: 'center' }}>
-        <View style={{ flexGrow: 1, width: '100%', maxWidth, paddingHorizontal: side, paddingTop: bleed ? 0 : wide ? space.xl : space.l, paddingBottom: bleed ? 0 : space.huge, gap: bleed ? 0 : space.xl }}>
+        <View
+          style={{
+            flexGrow: 1,
+            width: '100%',
+            maxWidth,
+            paddingHorizontal: side,
+            paddingTop: bleed ? 0 : wide ? space.xl : space.l,
+            paddingBottom: bleed ? 0 : space.huge,
+            gap: bleed ? 0 : space.xl,
+          }}
+        >
           {title ? (
             <View style={{ borderBottomWidth: line.rule, borderBottomColor: colors.ink, paddingBottom: space.m, gap: space.xs }}>
               {eyebrow ? <Label>{eyebrow}</Label> : null}
-              <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', justifyContent: 'space-between', gap: space.m }}>
+              <View
+                style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', justifyContent: 'space-between', gap: space.m }}
+              >
                 <View style={{ flexShrink: 1 }}>
                   <Heading level={1}>{title}</Heading>
                 </View>

@@ -25,8 +25,14 @@ export function PlacesBar({ places, current }: Props) {
     ? { width: 188, paddingVertical: space.xl, borderRightWidth: line.rule, borderRightColor: colors.ink }
     : { flexDirection: 'row' as const, borderTopWidth: line.rule, borderTopColor: colors.ink };
   return (
-    <View role="navigation" aria-label="Places" style={[bar, { backgroundColor: colors.paper }, webStyle({ paddingBottom: wide ? space.xl : 'env(safe-area-inset-bottom)' })]}>
-      {wide ? <Text style={[type.section, { color: colors.ink, paddingHorizontal: space.l, paddingBottom: space.l }]}>Lampstep</Text> : null}
+    <View
+      role="navigation"
+      aria-label="Places"
+      style={[bar, { backgroundColor: colors.paper }, webStyle({ paddingBottom: wide ? space.xl : 'env(safe-area-inset-bottom)' })]}
+    >
+      {wide ? (
+        <Text style={[type.section, { color: colors.ink, paddingHorizontal: space.l, paddingBottom: space.l }]}>Lampstep</Text>
+      ) : null}
       {shown.map((place, index) => {
         const here = place.name === marked;
         const ink = here ? colors.paper : colors.ink;
@@ -38,8 +44,20 @@ export function PlacesBar({ places, current }: Props) {
             style={(hovered) => [
               { backgroundColor: here ? colors.ink : hovered ? colors.tint : 'transparent', alignItems: 'center', gap: wide ? space.m : 2 },
               wide
-                ? { flexDirection: 'row', minHeight: 52, paddingHorizontal: space.l, borderTopWidth: line.hair, borderTopColor: colors.rule }
-                : { flex: 1, minHeight: 60, justifyContent: 'center', borderLeftWidth: index === 0 ? 0 : line.hair, borderLeftColor: colors.rule },
+                ? {
+                    flexDirection: 'row',
+                    minHeight: 52,
+                    paddingHorizontal: space.l,
+                    borderTopWidth: line.hair,
+                    borderTopColor: colors.rule,
+                  }
+                : {
+                    flex: 1,
+                    minHeight: 60,
+                    justifyContent: 'center',
+                    borderLeftWidth: index === 0 ? 0 : line.hair,
+                    borderLeftColor: colors.rule,
+                  },
             ]}
             ringInside
           >

@@ -27,7 +27,15 @@ export function PowerBand({ state, detail, place, onPressPlace }: Props) {
   const { colors } = useTheme();
   const v = powerVisual(state);
   return (
-    <View style={{ flexDirection: 'row', minHeight: height, backgroundColor: v.ground, borderBottomWidth: line.rule, borderBottomColor: colors.ink }}>
+    <View
+      style={{
+        flexDirection: 'row',
+        minHeight: height,
+        backgroundColor: v.ground,
+        borderBottomWidth: line.rule,
+        borderBottomColor: colors.ink,
+      }}
+    >
       <View style={{ width: stud.column, borderRightWidth: line.rule, borderRightColor: v.ink, overflow: 'hidden' }}>
         <View style={{ position: 'absolute', top: 0, bottom: 0, left: 0, right: 0 }}>
           <PowerPattern state={state} width="100%" height="100%" />
@@ -38,7 +46,12 @@ export function PowerBand({ state, detail, place, onPressPlace }: Props) {
           </View>
         </View>
       </View>
-      <View role="status" aria-label="Supply" aria-live="assertive" style={{ flex: 1, justifyContent: 'center', paddingHorizontal: space.m, paddingVertical: space.xs }}>
+      <View
+        role="status"
+        aria-label="Supply"
+        aria-live="assertive"
+        style={{ flex: 1, justifyContent: 'center', paddingHorizontal: space.m, paddingVertical: space.xs }}
+      >
         <Text style={[type.section, { color: v.ink, textTransform: 'uppercase', letterSpacing: 0.8, lineHeight: 28 }]}>{v.word}</Text>
         {detail ? <Text style={[type.small, { color: v.ink, lineHeight: 20 }]}>{detail}</Text> : null}
       </View>

@@ -28,7 +28,17 @@ export function PowerStrip({ title, segments }: Props) {
         style={{ flexDirection: 'row', height: 44, borderWidth: line.rule, borderColor: colors.ink, backgroundColor: colors.raised }}
       >
         {segments.map(({ state, seconds }, at) => (
-          <View key={`${at}-${state}`} style={{ flexGrow: Math.max(seconds, 0), flexBasis: 3, flexShrink: 0, borderRightWidth: at < segments.length - 1 ? line.hair : 0, borderRightColor: colors.ink, overflow: 'hidden' }}>
+          <View
+            key={`${at}-${state}`}
+            style={{
+              flexGrow: Math.max(seconds, 0),
+              flexBasis: 3,
+              flexShrink: 0,
+              borderRightWidth: at < segments.length - 1 ? line.hair : 0,
+              borderRightColor: colors.ink,
+              overflow: 'hidden',
+            }}
+          >
             <PowerPattern state={state} width="100%" height="100%" />
           </View>
         ))}

@@ -62,7 +62,9 @@ export function Press({ kind = 'plain', disabled = false, name, ground, onPress,
       {(state) => (
         <>
           {kind === 'primary' ? <NotchCorner ground={ground} /> : null}
-          <View style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'center', gap: space.m }}>{children(visual(state).word)}</View>
+          <View style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'center', gap: space.m }}>
+            {children(visual(state).word)}
+          </View>
         </>
       )}
     </Pressable>

@@ -45,7 +45,18 @@ export function ReadingEntry({ label, value, unit, meter, error, hint, disabled 
           </View>
         ) : null}
       </View>
-      <View {...webProps({ dataSet: { ring: 'within' } })} style={{ flexDirection: 'row', alignItems: 'center', borderBottomWidth: line.heavy, borderBottomColor: error ? colors.brass : colors.ink, backgroundColor: colors.raised, gap: space.s, paddingHorizontal: space.s }}>
+      <View
+        {...webProps({ dataSet: { ring: 'within' } })}
+        style={{
+          flexDirection: 'row',
+          alignItems: 'center',
+          borderBottomWidth: line.heavy,
+          borderBottomColor: error ? colors.brass : colors.ink,
+          backgroundColor: colors.raised,
+          gap: space.s,
+          paddingHorizontal: space.s,
+        }}
+      >
         <TextInput
           ref={input}
           value={value}
@@ -74,7 +85,15 @@ export function ReadingEntry({ label, value, unit, meter, error, hint, disabled 
             setLetters(!letters);
             input.current?.focus();
           }}
-          style={{ minWidth: target.control, minHeight: target.control, alignItems: 'center', justifyContent: 'center', borderLeftWidth: line.hair, borderLeftColor: colors.rule, paddingHorizontal: space.xs }}
+          style={{
+            minWidth: target.control,
+            minHeight: target.control,
+            alignItems: 'center',
+            justifyContent: 'center',
+            borderLeftWidth: line.hair,
+            borderLeftColor: colors.rule,
+            paddingHorizontal: space.xs,
+          }}
         >
           <Text style={[type.label, { color: colors.action, textTransform: 'none' }]}>{letters ? '123' : '− k m'}</Text>
         </Pressable>

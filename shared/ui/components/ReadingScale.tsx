@@ -29,7 +29,12 @@ export function ReadingScale({ unit, format, ...input }: Props) {
   const model = scaleModel(input, Math.floor((width - 2 * margin) / labelPitch));
   const x = (n: number) => margin + ((n - model.min) / (model.max - model.min)) * (width - 2 * margin);
   return (
-    <View role="img" aria-label={scaleWords(input, unit, format)} style={{ alignSelf: 'stretch', height }} onLayout={(e) => setWidth(e.nativeEvent.layout.width || 320)}>
+    <View
+      role="img"
+      aria-label={scaleWords(input, unit, format)}
+      style={{ alignSelf: 'stretch', height }}
+      onLayout={(e) => setWidth(e.nativeEvent.layout.width || 320)}
+    >
       <Svg width={width} height={height} aria-hidden>
         <Band model={model} x={x} openLow={input.low === null} openHigh={input.high === null} />
         <Ruling model={model} x={x} width={width} />
@@ -62,7 +67,17 @@ function Band({ model, x, openLow, openHigh }: PartProps & { openLow: boolean; o
       <Rect x={from} y={bandTop} width={Math.max(0, to - from)} height={bandHeight} fill={`url(#${id})`} />
       <Path d={`M${from} ${bandTop}H${to}M${from} ${bottom}H${to}`} stroke={colors.action} strokeWidth={1.5} fill="none" />
       {clear.map((g) => (
-        <Rect key={g.from} x={g.from} y={bandTop} width={Math.max(2, g.to - g.from)} height={bandHeight} fill={colors.paper} stroke={colors.brass} strokeWidth={1.5} strokeDasharray="3 2.5" />
+        <Rect
+          key={g.from}
+          x={g.from}
+          y={bandTop}
+          width={Math.max(2, g.to - g.from)}
+          height={bandHeight}
+          fill={colors.paper}
+          stroke={colors.brass}
+          strokeWidth={1.5}
+          strokeDasharray="3 2.5"
+        />
       ))}
       {openLow ? null : <Line x1={from} x2={from} y1={bandTop - 4} y2={base} stroke={colors.action} strokeWidth={2.5} />}
       {openHigh ? null : <Line x1={to} x2={to} y1={bandTop - 4} y2={base} stroke={colors.action} strokeWidth={2.5} />}
@@ -76,12 +91,28 @@ function Ruling({ model, x, width }: PartProps & { width: number }) {
     <G>
       <Line x1={margin - 14} x2={width - margin + 14} y1={base} y2={base} stroke={colors.ink} strokeWidth={2} />
       {model.ticks.map((tick) => (
-        <Line key={tick.at} x1={x(tick.at)} x2={x(tick.at)} y1={base - (tick.major ? 9 : 5)} y2={base} stroke={colors.ink} strokeWidth={tick.major ? 1.6 : 1} />
+        <Line
+          key={tick.at}
+          x1={x(tick.at)}
+          x2={x(tick.at)}
+          y1={base - (tick.major ? 9 : 5)}
+          y2={base}
+          stroke={colors.ink}
+          strokeWidth={tick.major ? 1.6 : 1}
+        />
       ))}
       {model.ticks
         .filter((tick) => tick.major)
         .map((tick) => (
-          <SvgText key={tick.at} x={x(tick.at)} y={base + 22} fill={colors.inkSoft} fontFamily={type.mono.fontFamily} fontSize={smallestTextPx} textAnchor="middle">
+          <SvgText
+            key={tick.at}
+            x={x(tick.at)}
+            y={base + 22}
+            fill={colors.inkSoft}
+            fontFamily={type.mono.fontFamily}
+            fontSize={smallestTextPx}
+            textAnchor="middle"
+          >
             {plainNumber(tick.at, model.decimals)}
           </SvgText>
         ))}

@@ -13,5 +13,10 @@ interface Props {
 export function Rule({ weight = 'hair' }: Props) {
   const { colors } = useTheme();
   const strong = weight === 'strong';
-  return <View role="none" style={{ height: strong ? line.rule : line.hair, backgroundColor: strong ? colors.ink : colors.rule, alignSelf: 'stretch' }} />;
+  return (
+    <View
+      role="none"
+      style={{ height: strong ? line.rule : line.hair, backgroundColor: strong ? colors.ink : colors.rule, alignSelf: 'stretch' }}
+    />
+  );
 }

@@ -27,10 +27,22 @@ export function TableHeader({ id, title, grow, align, sort, onSort }: Props) {
     <View
       role="columnheader"
       {...webProps(onSort ? { 'aria-sort': direction ?? 'none' } : {})}
-      style={{ flexGrow: grow, flexShrink: 1, flexBasis: 0, minWidth: 0, paddingHorizontal: space.s, minHeight: 36, justifyContent: 'center' }}
+      style={{
+        flexGrow: grow,
+        flexShrink: 1,
+        flexBasis: 0,
+        minWidth: 0,
+        paddingHorizontal: space.s,
+        minHeight: 36,
+        justifyContent: 'center',
+      }}
     >
       {onSort ? (
-        <Pressable role="button" onPress={() => onSort(nextSort(sort, id))} style={{ minHeight: target.control, flexDirection: 'row', alignItems: 'center', gap: space.xs, justifyContent }}>
+        <Pressable
+          role="button"
+          onPress={() => onSort(nextSort(sort, id))}
+          style={{ minHeight: target.control, flexDirection: 'row', alignItems: 'center', gap: space.xs, justifyContent }}
+        >
           <Label>{title}</Label>
           {direction ? <Icon name={direction === 'ascending' ? 'up' : 'down'} size={16} color={colors.ink} /> : null}
         </Pressable>

@@ -16,7 +16,17 @@ export function Tag({ word, kind = 'plain' }: Props) {
   const { colors } = useTheme();
   const ink = { plain: colors.ink, now: colors.paper, look: colors.brass, over: colors.inkSoft }[kind];
   return (
-    <View style={{ borderWidth: line.rule, borderStyle: kind === 'over' ? 'dashed' : 'solid', borderColor: kind === 'now' ? colors.ink : ink, backgroundColor: kind === 'now' ? colors.ink : 'transparent', paddingHorizontal: space.s, paddingVertical: 1, alignSelf: 'flex-start' }}>
+    <View
+      style={{
+        borderWidth: line.rule,
+        borderStyle: kind === 'over' ? 'dashed' : 'solid',
+        borderColor: kind === 'now' ? colors.ink : ink,
+        backgroundColor: kind === 'now' ? colors.ink : 'transparent',
+        paddingHorizontal: space.s,
+        paddingVertical: 1,
+        alignSelf: 'flex-start',
+      }}
+    >
       <Text style={[type.label, { color: ink, textTransform: 'uppercase' }]}>{word}</Text>
     </View>
   );

@@ -40,7 +40,11 @@ export function WarningGate({ hazards, acknowledged, onAcknowledge }: Props) {
   const { colors } = useTheme();
   const signal = signalVisual(worstSignal(hazards.map((h) => h.signal)));
   return (
-    <View role="region" aria-label={`${signal.word}: read before you go on`} style={{ borderWidth: line.heavy, borderColor: colors.ink, backgroundColor: colors.raised, alignSelf: 'stretch' }}>
+    <View
+      role="region"
+      aria-label={`${signal.word}: read before you go on`}
+      style={{ borderWidth: line.heavy, borderColor: colors.ink, backgroundColor: colors.raised, alignSelf: 'stretch' }}
+    >
       <SignalPanel signal={signal} />
       {hazards.map((h, at) => (
         <View key={h.id}>
@@ -68,7 +72,18 @@ export function WarningGate({ hazards, acknowledged, onAcknowledge }: Props) {
 function SignalPanel({ signal }: { signal: SignalVisual }) {
   const { colors } = useTheme();
   return (
-    <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.m, paddingHorizontal: space.l, minHeight: 52, backgroundColor: signal.ground, borderBottomWidth: line.heavy, borderBottomColor: colors.ink }}>
+    <View
+      style={{
+        flexDirection: 'row',
+        alignItems: 'center',
+        gap: space.m,
+        paddingHorizontal: space.l,
+        minHeight: 52,
+        backgroundColor: signal.ground,
+        borderBottomWidth: line.heavy,
+        borderBottomColor: colors.ink,
+      }}
+    >
       {signal.alert ? (
         <Svg width={36} height={33} viewBox="0 0 36 33" aria-hidden>
           <Path d="M18 1 35 32H1z" fill={signal.ink} />

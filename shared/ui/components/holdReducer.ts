@@ -34,7 +34,8 @@ export function holdReducer(state: HoldState, event: HoldEvent, holdMs: number):
       if (state.phase === 'armed' && elapsedMs >= armedForMs) return { phase: 'idle', sinceMs: event.atMs };
       return state;
     case 'bare-click':
-      if (state.phase === 'armed') return elapsedMs >= holdMs && elapsedMs < armedForMs ? { phase: 'confirmed', sinceMs: event.atMs } : state;
+      if (state.phase === 'armed')
+        return elapsedMs >= holdMs && elapsedMs < armedForMs ? { phase: 'confirmed', sinceMs: event.atMs } : state;
       return state.phase === 'holding' ? state : { phase: 'armed', sinceMs: event.atMs };
   }
 }

@@ -15,12 +15,40 @@ export interface PowerVisual {
 }
 
 const visuals: Readonly<Record<PowerState, PowerVisual>> = {
-  'proved-dead': { word: 'Proved dead', ground: safety.green, ink: safety.white, pattern: 'plain', patternInk: safety.green, symbol: 'power-proved-dead' },
-  off: { word: 'Off, not proved', ground: safety.grey, ink: safety.black, pattern: 'dashes', patternInk: safety.greyDark, symbol: 'power-off' },
+  'proved-dead': {
+    word: 'Proved dead',
+    ground: safety.green,
+    ink: safety.white,
+    pattern: 'plain',
+    patternInk: safety.green,
+    symbol: 'power-proved-dead',
+  },
+  off: {
+    word: 'Off, not proved',
+    ground: safety.grey,
+    ink: safety.black,
+    pattern: 'dashes',
+    patternInk: safety.greyDark,
+    symbol: 'power-off',
+  },
   lamp: { word: 'Lamp', ground: safety.yellow, ink: safety.black, pattern: 'dots', patternInk: safety.black, symbol: 'power-lamp' },
-  bench: { word: 'Bench supply', ground: safety.blue, ink: safety.white, pattern: 'ticks', patternInk: safety.blueLight, symbol: 'power-bench' },
+  bench: {
+    word: 'Bench supply',
+    ground: safety.blue,
+    ink: safety.white,
+    pattern: 'ticks',
+    patternInk: safety.blueLight,
+    symbol: 'power-bench',
+  },
   mains: { word: 'Mains', ground: safety.red, ink: safety.white, pattern: 'diagonal', patternInk: safety.redLight, symbol: 'power-mains' },
-  unknown: { word: 'Not known, treat as live', ground: safety.white, ink: safety.black, pattern: 'chequer', patternInk: safety.black, symbol: 'power-unknown' },
+  unknown: {
+    word: 'Not known, treat as live',
+    ground: safety.white,
+    ink: safety.black,
+    pattern: 'chequer',
+    patternInk: safety.black,
+    symbol: 'power-unknown',
+  },
 };
 
 /** How a power state is shown; the same by day and by night. */

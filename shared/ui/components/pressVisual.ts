@@ -19,7 +19,11 @@ export interface PressVisual {
 export function pressVisual(kind: PressKind, state: PressState, colors: Palette): PressVisual {
   if (state.disabled) {
     const border = kind === 'quiet' ? 'transparent' : colors.disabled;
-    return { ground: kind === 'primary' ? colors.disabled : 'transparent', word: kind === 'primary' ? colors.onDisabled : colors.inkSoft, border };
+    return {
+      ground: kind === 'primary' ? colors.disabled : 'transparent',
+      word: kind === 'primary' ? colors.onDisabled : colors.inkSoft,
+      border,
+    };
   }
   const active = state.pressed || state.hovered;
   if (kind === 'primary') {

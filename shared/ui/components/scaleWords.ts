@@ -4,7 +4,8 @@ import type { ScaleInput } from '@/shared/ui/components/scaleModel';
 /** A number as it is printed: true minus sign, at most `decimals` places, or four significant figures. */
 export function plainNumber(n: number, decimals?: number): string {
   if (!Number.isFinite(n)) return n > 0 ? 'over range' : n < 0 ? 'under range' : 'not a number';
-  const rounded = decimals === undefined ? String(Number(n.toPrecision(4))) : (Math.round(n * 10 ** decimals) / 10 ** decimals + 0).toFixed(decimals);
+  const rounded =
+    decimals === undefined ? String(Number(n.toPrecision(4))) : (Math.round(n * 10 ** decimals) / 10 ** decimals + 0).toFixed(decimals);
   return rounded.replace('-', '−');
 }
 

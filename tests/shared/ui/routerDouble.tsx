@@ -12,7 +12,10 @@ export const routeParams: Record<string, string> = {};
 
 function written(href: Address): string {
   if (typeof href === 'string') return href;
-  return Object.entries(href.params ?? {}).reduce((path, [name, value]) => path.replace(`[${name}]`, encodeURIComponent(value)), href.pathname);
+  return Object.entries(href.params ?? {}).reduce(
+    (path, [name, value]) => path.replace(`[${name}]`, encodeURIComponent(value)),
+    href.pathname,
+  );
 }
 
 const router = {

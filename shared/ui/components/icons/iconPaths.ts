@@ -15,7 +15,9 @@ export const iconPaths = {
   workshop: { stroke: 'M3 10l9-6 9 6M5 9v11h14V9M9 20v-7h6v7' },
   // power
   'power-proved-dead': { stroke: 'M1.5 12H5M5 7h5.5v10H5zM10.5 9.5H14M10.5 14.5H14M18.5 6v12M18.5 12h4' },
-  'power-off': { stroke: 'M2 15h6M16 15h6M8.5 14.5l8-7M8 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2zM16 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2z' },
+  'power-off': {
+    stroke: 'M2 15h6M16 15h6M8.5 14.5l8-7M8 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2zM16 13.4a1.6 1.6 0 100 3.2 1.6 1.6 0 000-3.2z',
+  },
   'power-lamp': { stroke: 'M12 2.5a6.5 6.5 0 100 13 6.5 6.5 0 000-13zM7.4 4.4l9.2 9.2M16.6 4.4l-9.2 9.2M9 18.5h6M9.5 21.5h5' },
   'power-bench': { stroke: 'M2.5 5h19v14h-19zM6 9h5v3.5H6zM14.5 10.7h4M16.5 8.7v4M14.5 16h4M6 16h5' },
   'power-mains': { stroke: 'M13.5 2 5.5 13.5h6L9.5 22l9-12h-6.5z', fill: 'M13.5 2 5.5 13.5h6L9.5 22l9-12h-6.5z' },
@@ -43,7 +45,10 @@ export const iconPaths = {
   pencil: { stroke: 'M4 20l1-5L16.5 3.5l4 4L9 19zM14 6l4 4' },
   plus: { stroke: 'M12 4v16M4 12h16' },
   unsent: { stroke: 'M12 20v-9M8 14.5l4-4 4 4M4 8V4h16v4M3 3l18 18' },
-  sun: { stroke: 'M12 7.5a4.5 4.5 0 100 9 4.5 4.5 0 000-9zM12 1.5v3M12 19.5v3M1.5 12h3M19.5 12h3M4.6 4.6l2 2M17.4 17.4l2 2M19.4 4.6l-2 2M6.6 17.4l-2 2' },
+  sun: {
+    stroke:
+      'M12 7.5a4.5 4.5 0 100 9 4.5 4.5 0 000-9zM12 1.5v3M12 19.5v3M1.5 12h3M19.5 12h3M4.6 4.6l2 2M17.4 17.4l2 2M19.4 4.6l-2 2M6.6 17.4l-2 2',
+  },
   moon: { stroke: 'M19.5 14.5A8.5 8.5 0 119.5 4.5a7 7 0 0010 10z' },
 } as const satisfies Record<string, Drawing>;
 

@@ -37,7 +37,13 @@ export function FormParts() {
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.xl }}>
         <View style={{ flexGrow: 1, flexBasis: 310, maxWidth: 520, gap: space.l }}>
           <Field label="Machine" required value={name} onChangeText={setName} hint="Maker and model, as on the plate." />
-          <Field label="Mail address" required value="senior-at-example" onChangeText={() => undefined} error="A mail address has an @, as in senior@example.org." />
+          <Field
+            label="Mail address"
+            required
+            value="senior-at-example"
+            onChangeText={() => undefined}
+            error="A mail address has an @, as in senior@example.org."
+          />
           <Field label="Remark" value="" lines={3} onChangeText={() => undefined} />
           <Field label="Serial" required disabled value="0097" onChangeText={() => undefined} />
           <Select label="Run on" options={machines} value={machine} onChange={setMachine} />

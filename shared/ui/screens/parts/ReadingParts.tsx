@@ -36,7 +36,15 @@ export function ReadingParts() {
         ))}
       </View>
       <View style={{ maxWidth: 480, gap: space.l }}>
-        <ReadingEntry label="R14, one end lifted" value={text} unit="Ω" meter="Meter B, 60 kΩ" error="4k7x is not a resistance. Type it as 4.7k, 4k7 or 4700." hint="Letters k, M, m and μ may stand for the point." onChangeText={setText} />
+        <ReadingEntry
+          label="R14, one end lifted"
+          value={text}
+          unit="Ω"
+          meter="Meter B, 60 kΩ"
+          error="4k7x is not a resistance. Type it as 4.7k, 4k7 or 4700."
+          hint="Letters k, M, m and μ may stand for the point."
+          onChangeText={setText}
+        />
       </View>
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.xl }}>
         <Verdict mark="in" word="In" note="clear of both guard bands (±0.04 V)" />

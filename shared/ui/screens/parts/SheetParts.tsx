@@ -45,16 +45,36 @@ const columns: Column<Meter>[] = [
 export function SheetParts() {
   const { colors } = useTheme();
   const [sort, setSort] = useState<TableSort>({ column: 'name', direction: 'ascending' });
-  const rows = meters.toSorted((a, b) => a[sort.column === 'until' ? 'until' : 'name'].localeCompare(b[sort.column === 'until' ? 'until' : 'name']) * (sort.direction === 'ascending' ? 1 : -1));
+  const rows = meters.toSorted(
+    (a, b) =>
+      a[sort.column === 'until' ? 'until' : 'name'].localeCompare(b[sort.column === 'until' ? 'until' : 'name']) *
+      (sort.direction === 'ascending' ? 1 : -1),
+  );
   return (
     <>
       <Part title="Table">
-        <DataTable caption="Instruments" columns={columns} rows={rows} rowKey={(m) => m.name} rowTarget={(m) => ({ name: `${m.name}: open`, onPress: () => undefined })} sort={sort} onSort={setSort} />
+        <DataTable
+          caption="Instruments"
+          columns={columns}
+          rows={rows}
+          rowKey={(m) => m.name}
+          rowTarget={(m) => ({ name: `${m.name}: open`, onPress: () => undefined })}
+          sort={sort}
+          onSort={setSort}
+        />
       </Part>
       <Part title="States of a page">
         <Loading what="the record" />
-        <EmptyState title="No run is open" text="Choose a machine and an issued tree to start one." action={<Button kind="primary" label="Start a run" onPress={() => undefined} />} />
-        <ErrorState happened="The record could not be fetched" todo="The server did not answer. Nothing that you recorded is lost: it is kept on this device until the server has it." onRetry={() => undefined} />
+        <EmptyState
+          title="No run is open"
+          text="Choose a machine and an issued tree to start one."
+          action={<Button kind="primary" label="Start a run" onPress={() => undefined} />}
+        />
+        <ErrorState
+          happened="The record could not be fetched"
+          todo="The server did not answer. Nothing that you recorded is lost: it is kept on this device until the server has it."
+          onRetry={() => undefined}
+        />
         <Notice kind="note" title="Tree version 3">
           Issued 2026-11-02, checked by a second senior.
         </Notice>

@@ -47,7 +47,12 @@ export function StepSheet() {
     </>
   );
   return (
-    <Page bleed maxWidth={720} head={<PowerBand state="lamp" detail="60 W in series, 230 V · live 01:12" place="14/31" onPressPlace={() => undefined} />} foot={foot}>
+    <Page
+      bleed
+      maxWidth={720}
+      head={<PowerBand state="lamp" detail="60 W in series, 230 V · live 01:12" place="14/31" onPressPlace={() => undefined} />}
+      foot={foot}
+    >
       <StudRail number={14} state="now" above below next grow>
         <View>
           <Label>Dormant three-rail supply</Label>

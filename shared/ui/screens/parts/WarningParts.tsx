@@ -26,8 +26,22 @@ const charge: Hazard = {
   result: 'A short burns skin and throws metal.',
   avoid: ['Discharge through the resistor, never with a screwdriver.'],
 };
-const hot: Hazard = { id: 'hot', signal: 'caution', sign: 'hot', hazard: 'Lamp and load resistors', result: 'Hot for ten minutes after.', avoid: ['Let them cool before you move them.'] };
-const part: Hazard = { id: 'part', signal: 'notice', sign: null, hazard: 'Memory board without bias', result: 'Its devices cannot be bought any more.', avoid: ['Bias rail first, last off.'] };
+const hot: Hazard = {
+  id: 'hot',
+  signal: 'caution',
+  sign: 'hot',
+  hazard: 'Lamp and load resistors',
+  result: 'Hot for ten minutes after.',
+  avoid: ['Let them cool before you move them.'],
+};
+const part: Hazard = {
+  id: 'part',
+  signal: 'notice',
+  sign: null,
+  hazard: 'Memory board without bias',
+  result: 'Its devices cannot be bought any more.',
+  avoid: ['Bias rail first, last off.'],
+};
 const signs: SignName[] = ['general', 'electricity', 'charge', 'hot', 'rotating', 'burst', 'toxic', 'xray', 'heavy', 'eyes'];
 
 /** Several hazards in one gate; the same gate read; the milder words. */

@@ -26,8 +26,16 @@ describe('DataTable', () => {
   it('is a table with heads, rows and cells on a wide screen', () => {
     renderSheet(<DataTable {...common} rows={rows} blocks={false} />);
     const table = screen.getByRole('table', { name: 'Instruments' });
-    expect(within(table).getAllByRole('columnheader').map((h) => h.textContent)).toEqual(['Instrument', 'Calibrated to']);
-    expect(within(table).getAllByRole('cell').map((c) => c.textContent)).toEqual(['Meter A', '2027-03-01', 'Meter B', '2026-01-15']);
+    expect(
+      within(table)
+        .getAllByRole('columnheader')
+        .map((h) => h.textContent),
+    ).toEqual(['Instrument', 'Calibrated to']);
+    expect(
+      within(table)
+        .getAllByRole('cell')
+        .map((c) => c.textContent),
+    ).toEqual(['Meter A', '2027-03-01', 'Meter B', '2026-01-15']);
   });
 
   it('says in each block what a cell is on a phone', () => {
@@ -37,7 +45,9 @@ describe('DataTable', () => {
 
   it('makes of the first cell the way into a row', () => {
     const onPress = vi.fn();
-    renderSheet(<DataTable {...common} rows={rows} blocks={false} rowTarget={(m) => ({ name: `Open ${m.name}`, onPress: () => onPress(m.name) })} />);
+    renderSheet(
+      <DataTable {...common} rows={rows} blocks={false} rowTarget={(m) => ({ name: `Open ${m.name}`, onPress: () => onPress(m.name) })} />,
+    );
     fireEvent.click(screen.getByRole('button', { name: 'Open Meter B' }));
     expect(onPress).toHaveBeenCalledWith('Meter B');
   });

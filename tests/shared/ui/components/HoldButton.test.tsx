@@ -14,7 +14,11 @@ afterEach(() => {
   vi.unstubAllGlobals();
 });
 
-const pass = (ms: number) => act(() => vi.advanceTimersByTime(ms));
+function pass(ms: number): void {
+  act(() => {
+    vi.advanceTimersByTime(ms);
+  });
+}
 
 function show(disabled = false) {
   const onConfirm = vi.fn();

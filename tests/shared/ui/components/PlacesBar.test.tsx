@@ -5,7 +5,10 @@ import { PlacesBar } from '@/shared/ui/components/PlacesBar';
 import type { Place } from '@/shared/ui/components/placesShown';
 import { renderSheet } from '@/tests/shared/ui/components/renderSheet';
 
-const places: Place[] = (['Bench', 'Trees', 'Machines', 'Records', 'Workings', 'Workshop'] as const).map((name) => ({ name, href: `/${name.toLowerCase()}` as Place['href'] }));
+const places: Place[] = (['Bench', 'Trees', 'Machines', 'Records', 'Workings', 'Workshop'] as const).map((name) => ({
+  name,
+  href: `/${name.toLowerCase()}` as Place['href'],
+}));
 
 describe('PlacesBar', () => {
   it('is a navigation of real addresses in which the current place is marked', () => {

@@ -6,15 +6,30 @@ import type { Hazard } from '@/shared/ui/components/WarningGate';
 import { worstSignal } from '@/shared/ui/components/warningVisual';
 import { renderSheet } from '@/tests/shared/ui/components/renderSheet';
 
-const hot: Hazard = { id: 'hot', signal: 'caution', sign: 'hot', hazard: 'Load resistors', result: 'Hot for ten minutes.', avoid: ['Let them cool.'] };
-const mains: Hazard = { id: 'mains', signal: 'danger', sign: 'electricity', hazard: '230 V on the inlet', result: 'Shock can kill.', avoid: ['Hands off.', 'Second person present.'] };
+const hot: Hazard = {
+  id: 'hot',
+  signal: 'caution',
+  sign: 'hot',
+  hazard: 'Load resistors',
+  result: 'Hot for ten minutes.',
+  avoid: ['Let them cool.'],
+};
+const mains: Hazard = {
+  id: 'mains',
+  signal: 'danger',
+  sign: 'electricity',
+  hazard: '230 V on the inlet',
+  result: 'Shock can kill.',
+  avoid: ['Hands off.', 'Second person present.'],
+};
 
 describe('WarningGate', () => {
   it('stands under the worst word of its hazards and names each with result and avoidance', () => {
     renderSheet(<WarningGate hazards={[hot, mains]} acknowledged={false} onAcknowledge={() => undefined} />);
     const gate = screen.getByRole('region', { name: 'DANGER: read before you go on' });
     expect(screen.getByRole('heading', { name: 'DANGER' })).toBeTruthy();
-    for (const words of [hot.hazard, hot.result, ...hot.avoid, mains.hazard, mains.result, ...mains.avoid]) expect(gate.textContent).toContain(words);
+    for (const words of [hot.hazard, hot.result, ...hot.avoid, mains.hazard, mains.result, ...mains.avoid])
+      expect(gate.textContent).toContain(words);
   });
 
   it('defers to local codes, the maker and licensed practice', () => {

@@ -67,18 +67,25 @@ describe('scaleModel', () => {
 
   it('for any reading and limits: rising ticks, few labels, band and needle on the scale', () => {
     fc.assert(
-      fc.property(fc.option(finite), fc.option(finite), fc.option(finite), fc.double({ min: 0, max: 100, noNaN: true }), fc.integer({ min: 2, max: 9 }), (value, a, b, guard, labels) => {
-        const [low, high] = a !== null && b !== null && a > b ? [b, a] : [a, b];
-        const m = scaleModel({ value, low, high, guard }, labels);
-        expect(m.max).toBeGreaterThan(m.min);
-        expect(m.ticks.filter((t) => t.major).length).toBeLessThanOrEqual(labels);
-        expect(m.ticks.length).toBeLessThan(labels * 8 + 8);
-        for (const n of [m.needle?.at, m.band?.from, m.band?.to, ...m.guards.flatMap((g) => [g.from, g.to])]) {
-          if (n === undefined) continue;
-          expect(n).toBeGreaterThanOrEqual(m.min);
-          expect(n).toBeLessThanOrEqual(m.max);
-        }
-      }),
+      fc.property(
+        fc.option(finite),
+        fc.option(finite),
+        fc.option(finite),
+        fc.double({ min: 0, max: 100, noNaN: true }),
+        fc.integer({ min: 2, max: 9 }),
+        (value, a, b, guard, labels) => {
+          const [low, high] = a !== null && b !== null && a > b ? [b, a] : [a, b];
+          const m = scaleModel({ value, low, high, guard }, labels);
+          expect(m.max).toBeGreaterThan(m.min);
+          expect(m.ticks.filter((t) => t.major).length).toBeLessThanOrEqual(labels);
+          expect(m.ticks.length).toBeLessThan(labels * 8 + 8);
+          for (const n of [m.needle?.at, m.band?.from, m.band?.to, ...m.guards.flatMap((g) => [g.from, g.to])]) {
+            if (n === undefined) continue;
+            expect(n).toBeGreaterThanOrEqual(m.min);
+            expect(n).toBeLessThanOrEqual(m.max);
+          }
+        },
+      ),
       { numRuns: 500 },
     );
   });
