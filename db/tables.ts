@@ -249,4 +249,5 @@ export type UpdateableRunHeadRow = Updateable<RunHeadsTable>;
 export type SessionRow = Selectable<SessionsTable>;
 export type InsertableSessionRow = Insertable<SessionsTable>;
 export type InstrumentRow = Selectable<InstrumentsTable>;
+export type InsertableInstrumentRow = Insertable<InstrumentsTable>;
 export type TreeVersionRow = Selectable<TreeVersionsTable>;

@@ -20,7 +20,9 @@ export class ProblemError extends Error {
 export function inputProblem(error: z.ZodError): ProblemError {
   const faults = error.issues.slice(0, 50).map((issue) => ({ path: issue.path.join('.'), message: issue.message }));
   const first = faults[0];
-  const say = first === undefined ? undefined : `${first.path === '' ? 'Input' : first.path}: ${first.message}${faults.length > 1 ? ` (and ${faults.length - 1} more)` : ''}.`;
+  const where = first === undefined || first.path === '' ? 'the input' : `“${first.path}”`;
+  const more = faults.length > 1 ? ` (and ${faults.length - 1} more)` : '';
+  const say = first === undefined ? undefined : `Check ${where}: ${first.message}${more}.`;
   return new ProblemError('bad-input', say, { faults });
 }
 

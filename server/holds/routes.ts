@@ -11,7 +11,7 @@ import { getRunFor, wantOtherThanRestorer, wantRestorer } from '../runs/access';
 import type { ConfirmPassword } from '../session/confirmPassword';
 import { holdOf } from './holdOf';
 import { findWaitingRuns } from './queries';
-import { addSecondPerson, answerHold } from './service';
+import { addSecondPerson, answerHold, wantMember } from './service';
 
 /** Adds the routes of hold points and second persons. */
 export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPassword): void {
@@ -37,6 +37,7 @@ export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPass
       const run = await getRunFor(tx, params.run);
       wantRestorer(who, run);
       wantOtherThanRestorer({ person: body.person }, run, 'The second person has to be somebody else than the restorer.');
+      await wantMember(tx, body.person);
     });
     await confirm(body.person, body.password);
     return inWorkshop(parts.db, who.workshop, (tx) => addSecondPerson(tx, parts, params.run, body));

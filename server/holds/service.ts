@@ -43,8 +43,7 @@ export async function addSecondPerson(tx: Tx, parts: Parts, runId: string, secon
   const head = await lockHead(tx, (await getRunFor(tx, runId)).id);
   const run = await getRunFor(tx, runId);
   wantOtherThanRestorer({ person: second.person }, run, 'The second person has to be somebody else than the restorer.');
-  const member = await tx.selectFrom('members').select('person').where('person', '=', second.person).where('left_at', 'is', null).executeTakeFirst();
-  if (member === undefined) throw new ProblemError('bad-input', 'The second person is no member of this workshop.', { faults: [{ path: 'person', message: 'is no member of this workshop' }] });
+  await wantMember(tx, second.person);
   const before = await signedBefore(tx, run, head, second.id, second.person, 'SECOND_PRESENT');
   if (before !== null) return before;
   if (run.state !== 'open') throw new ProblemError('wrong-state', 'This run is closed.');
@@ -52,6 +51,12 @@ export async function addSecondPerson(tx: Tx, parts: Parts, runId: string, secon
   const { state } = await getStanding(tx, parts, run, head);
   const event: MachineEvent = { ...signedTime(state, head, parts.clock()), type: 'SECOND_PRESENT', by: second.person };
   return takeSigned(tx, parts, run, head, { id: second.id, actor: second.person, event });
+}
+
+/** Asked before the password is: nobody's account outside the workshop can be tried here. */
+export async function wantMember(tx: Tx, person: string): Promise<void> {
+  const member = await tx.selectFrom('members').select('person').where('person', '=', person).where('left_at', 'is', null).executeTakeFirst();
+  if (member === undefined) throw new ProblemError('bad-input', 'The second person is no member of this workshop.', { faults: [{ path: 'person', message: 'is no member of this workshop' }] });
 }
 
 async function takeSigned(tx: Tx, parts: Parts, run: RunRow, head: RunHeadRow, taken: { id: string; actor: string; event: MachineEvent }): Promise<Signed> {

@@ -13,8 +13,10 @@ function options(secure: boolean, path: string): CookieOptions {
   return { httpOnly: true, sameSite: 'strict', secure, path };
 }
 
-/** Sets both cookies; `secure` where the site is reached by https. */
-// The access cookie outlives its token, so that the server can say "expired" rather than "signed out" and the client renews it.
+/**
+ * Sets both cookies; `secure` where the site is reached by https. The access cookie outlives its token, so that the server can say
+ * "expired" rather than "signed out" and the client renews it.
+ */
 export function setSessionCookies(res: Response, secure: boolean, tokens: { access: string; refresh: string }): void {
   res.cookie(ACCESS_COOKIE, tokens.access, { ...options(secure, '/'), maxAge: REFRESH_MS });
   res.cookie(REFRESH_COOKIE, tokens.refresh, { ...options(secure, REFRESH_PATH), maxAge: REFRESH_MS });
