@@ -31,9 +31,14 @@ export class Shop {
   mute = false;
   posts = 0;
 
-  /** An entry by somebody else. */
+  /** An answer by somebody else. */
   put(answer: string): Entry {
-    return this.seal(`other-${this.entries.length + 1}`, say(answer));
+    return this.take(say(answer));
+  }
+
+  /** An event that did not come through the outbox. */
+  take(of: MachineEvent): Entry {
+    return this.seal(`other-${this.entries.length + 1}`, of);
   }
 
   private seal(id: string, of: MachineEvent): Entry {
