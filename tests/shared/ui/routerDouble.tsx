@@ -22,6 +22,7 @@ const router = {
   push: (to: Address) => void moves.push({ how: 'push', to: written(to) }),
   replace: (to: Address) => void moves.push({ how: 'replace', to: written(to) }),
   navigate: (to: Address) => void moves.push({ how: 'push', to: written(to) }),
+  setParams: (params: Record<string, string>) => void Object.assign(routeParams, params),
   back: () => void moves.push({ how: 'back', to: null }),
   canGoBack: () => true,
 };
