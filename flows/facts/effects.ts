@@ -143,11 +143,12 @@ function checkOps(step: Step, exit: Exit, outcome: Outcome | string, scope: Step
     case 'pass':
       return [{ op: 'pass', check }, ...cleared, ...(step.kind === 'observe' && step.lookOver === true ? [{ op: 'proof', fact: 'looked', to: 'proved' } satisfies Op] : [])];
     case 'fail':
-      return [{ op: 'fail', check, live: answeredLive(step) }, ...cleared];
+      // a plain answer ends the doubt about it: what was not known is known now, and bars power as a failure
+      return [{ op: 'fail', check, live: answeredLive(step) }, { op: 'lift-doubt', check }, ...cleared];
     case 'unsure':
       return [{ op: 'doubt', check }];
     case 'find':
-      return [{ op: 'proving', to: 'none' }, ...cleared];
+      return [{ op: 'proving', to: 'none' }, { op: 'lift-doubt', check }, ...cleared];
   }
 }
 

@@ -25,7 +25,7 @@ const STOP_AT_FIRST: readonly Step['kind'][] = ['isolate', 'discharge', 'prove-d
 /** The rows that stand now: those of the step, of the bench opening, or one for each thing to take out. */
 export function currentRows(layout: Layout, context: RunContext): readonly Row[] {
   if (context.key === SAFE.opening) return layout.opening;
-  if (context.key === SAFE.takeOut) return toTakeOut(context.facts).map(takeOutRow);
+  if (context.key === SAFE.takeOut) return toTakeOut(context.facts.fitted).map(takeOutRow);
   return layout.steps.get(context.key)?.rows ?? [];
 }
 
@@ -212,13 +212,13 @@ function safeAgain(layout: Layout, context: RunContext): Judged {
 
 /** Taking a thing out voids its area as taking it out in a step would; what cannot come out stays fitted. */
 function takenOut(context: RunContext): RunContext['facts'] {
-  const out = toTakeOut(context.facts).filter((f) => context.rows.find((r) => r.id === f.id)?.result === 'done');
+  const out = toTakeOut(context.facts.fitted).filter((f) => context.rows.find((r) => r.id === f.id)?.result === 'done');
   return applyOps(context.facts, [...out.flatMap((f) => fitVoids(f.area)), ...out.map((f): Op => ({ op: 'unfit', id: f.id }))]);
 }
 
 /** What could not be taken out ends the run as stopped, with the thing named on the machine. */
 function afterTakeOut(layout: Layout, context: RunContext): Judged {
-  if (toTakeOut(context.facts).length > 0) return accept({ ...context, goto: SAFE.ended, end: { says: 'stopped', key: null } });
+  if (toTakeOut(context.facts.fitted).length > 0) return accept({ ...context, goto: SAFE.ended, end: { says: 'stopped', key: null } });
   return closeOut(context, layout);
 }
 

@@ -28,8 +28,8 @@ export const refuse = (code: Refusal['code'], say: string, rule: RuleId | null =
 const TAKEN_OUT: readonly string[] = ['link', 'bypass', 'series', 'clip'];
 
 /** Things that close-out will ask to take out. */
-export function toTakeOut(facts: Facts): Facts['fitted'] {
-  return facts.fitted.filter((f) => TAKEN_OUT.includes(f.class));
+export function toTakeOut(fitted: Facts['fitted']): Facts['fitted'] {
+  return fitted.filter((f) => TAKEN_OUT.includes(f.class));
 }
 
 /** The needs of a step that the facts do not meet. */
@@ -64,7 +64,7 @@ function arriveAtEnd(layout: Layout, context: RunContext, key: string, step: Ste
 
 /** The facts as close-out will leave them, with what taking things out voids. */
 function closedOut(facts: Facts): Facts {
-  const out = toTakeOut(facts);
+  const out = toTakeOut(facts.fitted);
   return applyOps(facts, [...out.flatMap((f) => fitVoids(f.area)), ...out.map((f) => ({ op: 'unfit', id: f.id }) as const)]);
 }
 
@@ -72,7 +72,7 @@ function closedOut(facts: Facts): Facts {
 export function closeOut(context: RunContext, layout: Layout): Judged {
   if (context.purpose.is !== 'end') return refuse('not-now', 'Nothing is being closed.');
   if (!isProvedDead(context.facts)) return accept({ ...context, goto: SAFE.isolate });
-  if (toTakeOut(context.facts).length > 0) return accept({ ...context, goto: SAFE.takeOut });
+  if (toTakeOut(context.facts.fitted).length > 0) return accept({ ...context, goto: SAFE.takeOut });
   const { key } = context.purpose;
   const step = key === null ? null : layout.steps.get(key)?.step;
   return accept({ ...context, goto: SAFE.ended, end: step?.kind === 'end' ? { says: step.says, key } : { says: 'stopped', key: null } });

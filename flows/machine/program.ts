@@ -4,7 +4,7 @@ import type { HazardKind } from '../document/hazards';
 import type { DocumentFault } from '../document/parseTree';
 import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
-import type { Exit, FittedThing, Step, StepOf } from '../document/steps';
+import type { Claim, Exit, FittedThing, Step, StepOf } from '../document/steps';
 import type { Tree } from '../document/tree';
 import { hazardsOf } from '../facts/derivedHazards';
 import type { StepScope } from '../facts/effects';
@@ -34,6 +34,8 @@ export interface Layout {
   steps: ReadonlyMap<string, ProgramStep>;
   /** first step of the tree called by a call, by the call's key */
   calleeFirst: ReadonlyMap<string, string>;
+  /** what the called tree needs at its start, by the call's key */
+  calleeNeeds: ReadonlyMap<string, readonly Claim[]>;
   opening: WordRow[];
   first: string;
   /** numbered steps of the tree, for "14 of 31" */
@@ -48,6 +50,7 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
   const { tree, callees, profile, settings } = input;
   const steps = new Map<string, ProgramStep>();
   const calleeFirst = new Map<string, string>();
+  const calleeNeeds = new Map<string, readonly Claim[]>();
   const faults: DocumentFault[] = [];
   const add = (own: Tree, caller: string | null, studOf: (i: number) => string) => {
     const prefix = caller === null ? '' : `${caller}/`;
@@ -64,6 +67,7 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
       else {
         faults.push(...callFaults(step, callee));
         calleeFirst.set(key, `${key}/${callee.steps[0]?.id ?? ''}`);
+        calleeNeeds.set(key, callee.needsAtStart);
         add(callee, step.id, (j) => `${i + 1}${letter(j)}`);
       }
     });
@@ -79,7 +83,7 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
   const named = (list: readonly { name: string }[]) => list.map((x) => x.name);
   const rows = openingRows({ tools: named(opening.tools), instruments: named(opening.instruments), parts: named(opening.parts), conditions: opening.conditions }, profile, FIRST_CAUTION);
   const first = tree.steps[0]?.id ?? '';
-  return { layout: { tree, profile, settings, steps, calleeFirst, opening: rows, first, total: tree.steps.filter((s) => s.kind !== 'end').length }, faults };
+  return { layout: { tree, profile, settings, steps, calleeFirst, calleeNeeds, opening: rows, first, total: tree.steps.filter((s) => s.kind !== 'end').length }, faults };
 }
 
 /** Where an exit leads once calls are entered and ends of called trees are left: the key at which the run stands, and the exits taken on the way. */

@@ -92,7 +92,7 @@ export const lampTreeJson = {
     { ...base, id: 'done', kind: 'end', title: 'Cleared', lines: ['Done.'], contact: 'none', says: 'cleared', exits: [] },
     { ...base, id: 'refer', kind: 'end', title: 'Ask a senior', lines: ['Ask.'], contact: 'none', says: 'referred', exits: [] },
   ],
-  reentries: [{ step: 'earth', needs: ['dead'] }],
+  reentries: [{ step: 'earth', needs: ['dead', 'looked', 'load-none'] }],
 };
 
 export const lampTree: Tree = must(parseTree(lampTreeJson));

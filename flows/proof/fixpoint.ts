@@ -1,0 +1,161 @@
+/**
+ * The verdict: for every place, what may be 0 and what may be 1 over all ways to it, and which needs that breaks.
+ * Preconditions: a graph whose targets exist. Postconditions: the states are the meet over all paths, exactly, for every fact that is a bit
+ * (each effect is a set, a clear or a copy of one bit). Linear in edges times words, for each bit changes at most once at each place.
+ */
+import type { Claim } from '../document/steps';
+import { claimAtoms } from '../facts/claims';
+import type { Facts } from '../facts/facts';
+import type { Need, RuleId } from '../facts/needs';
+import { toTakeOut } from '../machine/arrive';
+import { fitVoids } from '../facts/voids';
+import type { Op } from '../facts/ops';
+import { hasBit, join, putBit, through } from './bits';
+import type { MayState } from './bits';
+import { encodingOf } from './encode';
+import type { Encoding } from './encode';
+import type { Graph, PlaceNode } from './graph';
+
+/** A need that some way to a place does not meet. */
+export interface Broken {
+  rule: RuleId;
+  key: string;
+  need: Need;
+}
+
+export interface Fixpoint {
+  encoding: Encoding;
+  /** state at arrival, by place; a place that nothing leads to is not there */
+  at: ReadonlyMap<string, MayState>;
+  broken: Broken[];
+}
+
+/** Runs to the fixpoint from every start. */
+export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
+  const encoding = encodingOf(graph, start);
+  const at = new Map<string, MayState>();
+  const queue: string[] = [];
+  const queued = new Set<string>();
+  const arrive = (key: string, state: MayState) => {
+    const known = at.get(key);
+    const grew = known === undefined ? true : join(known, state);
+    if (known === undefined) at.set(key, { may0: state.may0.slice(), may1: state.may1.slice() });
+    if (grew && !queued.has(key)) {
+      queued.add(key);
+      queue.push(key);
+    }
+  };
+  for (const s of graph.starts) arrive(s.key, s.reentry ? reentryState(graph, encoding, s.key) : encoding.state(start));
+
+  const effects = new Map<string, { entered: ReturnType<Encoding['effect']>; edges: { to: string; effect: ReturnType<Encoding['effect']> }[] }>();
+  const effectsOf = (node: PlaceNode) => {
+    const known = effects.get(node.key);
+    if (known !== undefined) return known;
+    const made = { entered: encoding.effect(node.entered), edges: node.edges.map((e) => ({ to: e.to, effect: encoding.effect(e.ops) })) };
+    effects.set(node.key, made);
+    return made;
+  };
+  const aborts = abortTargets(graph);
+  for (let head = 0; head < queue.length; head += 1) {
+    const key = queue[head] ?? '';
+    queued.delete(key);
+    const node = graph.nodes.get(key);
+    const state = at.get(key);
+    if (node === undefined || state === undefined) continue;
+    const own = effectsOf(node);
+    const acting = through(state, own.entered);
+    for (const edge of own.edges) arrive(edge.to, through(acting, edge.effect));
+    for (const to of aborts.get(key) ?? []) arrive(to, acting);
+  }
+  return { encoding, at, broken: [...graph.nodes.values()].flatMap((node) => brokenAt(encoding, node, at.get(node.key))) };
+}
+
+/** A re-entry stands on exactly what it declares, and the machine also asks its step's needs, nothing owed, nothing fitted. */
+function reentryState(graph: Graph, encoding: Encoding, key: string): MayState {
+  const state = encoding.free();
+  const { layout } = graph;
+  const declared: Claim[] = layout.tree.reentries.filter((r) => r.step === key || layout.calleeFirst.get(r.step) === key).flatMap((r) => r.needs);
+  const needs: Need[] = [...declared.flatMap((c) => claimAtoms(c, layout.profile)).map((atom): Need => ({ rule: 'H21', atom, say: '' })), ...(graph.nodes.get(key)?.needs ?? []), { rule: 'H21', atom: { fact: 'none-fitted' }, say: '' }, { rule: 'H21', atom: { fact: 'no-killer' }, say: '' }];
+  for (const need of needs) {
+    const form = encoding.need(need);
+    if (form.as !== 'bits') continue;
+    for (const { bit, must } of form.literals) clearBit(must ? state.may0 : state.may1, bit);
+    // one load at a time: what is declared shuts the others out
+    if (need.atom.fact === 'load') for (const bit of encoding.names.startingWith('load:')) if (bit !== encoding.names.of(`load:${need.atom.is}`)) clearBit(state.may1, bit);
+  }
+  // after make-safe the bench is proved dead
+  for (const name of ['out', 'discharged', 'proved', 'opened']) {
+    clearBit(state.may0, encoding.names.of(name));
+    putBit(state.may1, encoding.names.of(name));
+  }
+  for (const bit of [encoding.names.of('live'), ...encoding.names.startingWith('src:'), ...encoding.names.startingWith('feeds:'), ...encoding.names.startingWith('clip:')]) {
+    clearBit(state.may1, bit);
+    putBit(state.may0, bit);
+  }
+  return state;
+}
+
+function clearBit(set: Uint32Array, bit: number): void {
+  set[bit >>> 5] = (set[bit >>> 5] ?? 0) & ~(1 << (bit & 31));
+}
+
+function brokenAt(encoding: Encoding, node: PlaceNode, arrived: MayState | undefined): Broken[] {
+  if (arrived === undefined) return [];
+  const { step } = node.placed;
+  const state = step.kind === 'end' && step.says !== 'in-service' ? closedOut(encoding, arrived) : arrived;
+  return node.needs.filter((need) => {
+    const form = encoding.need(need);
+    if (form.as === 'never') return true;
+    return form.as === 'bits' && form.literals.some(({ bit, must }) => hasBit(must ? state.may0 : state.may1, bit));
+  }).map((need) => ({ rule: need.rule, key: node.key, need }));
+}
+
+/** Close-out as the machine does it: dead, temporary things out, and what taking them out may void. */
+function closedOut(encoding: Encoding, state: MayState): MayState {
+  let closed = through(state, encoding.effect([{ op: 'sources', to: 'out' }, { op: 'stored', to: 'proved' }]));
+  for (const thing of encoding.things) {
+    if (toTakeOut([thing]).length === 0 || !hasBit(closed.may1, encoding.names.of(`fitted:${thing.id}`))) continue;
+    const out: Op[] = [...fitVoids(thing.area), { op: 'unfit', id: thing.id }];
+    const taken = through(closed, encoding.effect(out));
+    const always = !hasBit(closed.may0, encoding.names.of(`fitted:${thing.id}`));
+    if (!always) join(taken, { may0: closed.may0, may1: withoutBit(closed.may1, encoding.names.of(`fitted:${thing.id}`)) });
+    closed = taken;
+  }
+  return closed;
+}
+
+function withoutBit(set: Uint32Array, bit: number): Uint32Array {
+  const copy = set.slice();
+  clearBit(copy, bit);
+  return copy;
+}
+
+/** From every place that an energise can be in force at, abort leads to that energise's target, with what the step has made worse. */
+export function abortTargets(graph: Graph): ReadonlyMap<string, readonly string[]> {
+  const targets = new Map<string, Set<string>>();
+  for (const node of graph.nodes.values()) {
+    const { step, scope } = node.placed;
+    if (step.kind !== 'energise') continue;
+    const to = graph.land(scope.check(step.abort));
+    for (const key of liveRegion(graph, node.key)) {
+      const known = targets.get(key) ?? new Set<string>();
+      targets.set(key, known.add(to));
+    }
+  }
+  return new Map([...targets].map(([key, set]) => [key, [...set]]));
+}
+
+/** Places that an energise can still be in force at: all that it leads to without a source having been taken out. */
+export function liveRegion(graph: Graph, energise: string): Set<string> {
+  const region = new Set<string>([energise]);
+  const stack = [energise];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    for (const edge of graph.nodes.get(key)?.edges ?? []) {
+      const out = edge.ops.some((op) => op.op === 'sources' && op.to === 'out');
+      if (out || region.has(edge.to)) continue;
+      region.add(edge.to);
+      stack.push(edge.to);
+    }
+  }
+  return region;
+}

@@ -1,0 +1,115 @@
+/** The graph that a proof walks: every place a run can stand at, and every way on, with what each does to the facts. */
+import { OUTCOMES_OF } from '../document/outcomes';
+import type { Exit, Step } from '../document/steps';
+import { after, entered } from '../facts/effects';
+import { needs } from '../facts/needs';
+import type { Need } from '../facts/needs';
+import type { Op } from '../facts/ops';
+import { claimAtoms } from '../facts/claims';
+import { follow } from '../machine/program';
+import type { Layout, Landing, ProgramStep } from '../machine/program';
+
+export interface Edge {
+  from: string;
+  exit: Exit;
+  /** the outcome, or the id of an authored answer */
+  outcome: string;
+  /** whether the exit's counter has run out, so that `then` is taken */
+  spent: boolean;
+  ops: readonly Op[];
+  to: string;
+  through: Landing['through'];
+}
+
+export interface PlaceNode {
+  key: string;
+  placed: ProgramStep;
+  needs: readonly Need[];
+  entered: readonly Op[];
+  edges: readonly Edge[];
+}
+
+/** Where a run can begin to walk: the tree's first step, or a re-entry after Stop with exactly the facts that it declares. */
+export interface Start {
+  key: string;
+  reentry: boolean;
+}
+
+export interface Graph {
+  layout: Layout;
+  nodes: ReadonlyMap<string, PlaceNode>;
+  starts: readonly Start[];
+  /** the place that a target comes to, calls entered */
+  land(key: string): string;
+}
+
+/**
+ * Builds the graph of a layout.
+ * Preconditions: the layout has no faults. Postconditions: every target of an edge is a node; calls are entered and left as the machine does it;
+ * both ways of a counted exit are there (more ways than a run has, never fewer). Linear in steps and exits.
+ */
+export function graphOf(layout: Layout): Graph {
+  const nodes = new Map<string, PlaceNode>();
+  for (const placed of layout.steps.values()) {
+    if (placed.builtIn || placed.step.kind === 'call' || endsCalledTree(placed)) continue;
+    nodes.set(placed.key, {
+      key: placed.key,
+      placed,
+      needs: [...needs(placed.step, placed.scope), ...calledNeeds(layout, placed)],
+      entered: entered(placed.step, placed.scope),
+      edges: edgesOf(layout, placed),
+    });
+  }
+  const land = (key: string) => follow(layout, key, () => false).key;
+  return { layout, nodes, land, starts: [{ key: land(layout.first), reentry: false }, ...layout.tree.reentries.map((r) => ({ key: land(r.step), reentry: true }))] };
+}
+
+/** An end of a called tree is left by the exit of its call, except those that end the run. */
+function endsCalledTree({ step, caller }: ProgramStep): boolean {
+  return step.kind === 'end' && caller !== null && step.says !== 'stopped' && step.says !== 'in-service';
+}
+
+function edgesOf(layout: Layout, placed: ProgramStep): Edge[] {
+  return placed.step.exits.flatMap((exit: Exit) =>
+    outcomesOf(placed.step, exit).flatMap(({ outcome, word }) => {
+      const own = after(placed.step, exit, word, placed.scope);
+      return waysOf(exit).flatMap(({ to, spent }) => landings(layout, placed.scope.check(to)).map((landing): Edge => ({ from: placed.key, exit, outcome, spent, ops: [...own, ...throughOps(layout, landing)], to: landing.key, through: landing.through })));
+    }),
+  );
+}
+
+/** What can be answered so that this exit is taken. A step's outcomes that fall together in one exit still differ in their effect. */
+function outcomesOf(step: Step, exit: Exit): { outcome: string; word: string }[] {
+  if (exit.on.includes('answer')) return [{ outcome: exit.id, word: 'answer' }];
+  const possible: readonly string[] = OUTCOMES_OF[step.kind];
+  return (exit.on as string[]).filter((on) => possible.includes(on)).map((on) => ({ outcome: on, word: on }));
+}
+
+function waysOf(exit: Exit): { to: string; spent: boolean }[] {
+  return exit.then === undefined ? [{ to: exit.to, spent: false }] : [{ to: exit.to, spent: false }, { to: exit.then, spent: true }];
+}
+
+/** A call that is left by a counted exit has two ways on. */
+function landings(layout: Layout, target: string): Landing[] {
+  const open = follow(layout, target, () => false);
+  if (!open.through.some((t) => t.exit.atMost !== undefined)) return [open];
+  const spent = follow(layout, target, () => true);
+  return spent.key === open.key ? [open] : [open, spent];
+}
+
+function throughOps(layout: Layout, landing: Landing): Op[] {
+  return landing.through.flatMap(({ call, exit }) => {
+    const scope = layout.steps.get(call)?.scope;
+    return (exit.evidence ?? []).filter((e) => e.says === 'rules-out' || e.says === 'points-away').map((e): Op => ({ op: 'clear', suspect: scope?.check(e.suspect) ?? e.suspect }));
+  });
+}
+
+/** H19: what a called tree needs at its start, and what its call says it needs, is asked at its first step. */
+function calledNeeds(layout: Layout, placed: ProgramStep): Need[] {
+  if (placed.caller === null || layout.calleeFirst.get(placed.caller) !== placed.key) return [];
+  const call = layout.steps.get(placed.caller)?.step;
+  if (call?.kind !== 'call') return [];
+  return [...(call.needs ?? []), ...(layout.calleeNeeds.get(placed.caller) ?? [])].flatMap((claim) =>
+    claimAtoms(claim, layout.profile).map((atom): Need => ({ rule: 'H19', atom, say: `the called tree needs “${claim}” at its start` })),
+  );
+}

@@ -1,0 +1,207 @@
+/** H11, H16, H18, H19: what speaks of whole paths and not of one place. Each is a finding with the place that shows it. */
+import { DEAD_QUANTITIES } from '../document/ids';
+import type { Exit } from '../document/steps';
+import type { RuleId } from '../facts/needs';
+import type { Layout } from '../machine/program';
+import type { Edge, Graph, PlaceNode } from './graph';
+
+export interface PathFinding {
+  rule: Extract<RuleId, 'H11' | 'H16' | 'H18' | 'H19'>;
+  key: string | null;
+  say: string;
+}
+
+/** H16: every step can be reached and can reach an end; every loop is counted and leads out of energy, then to a senior. */
+export function reachFindings(graph: Graph): PathFinding[] {
+  const reached = forward(graph, graph.starts.map((s) => s.key), () => true);
+  const ends = [...graph.nodes.values()].filter((n) => n.edges.length === 0).map((n) => n.key);
+  const ending = backward(graph, ends);
+  const found: PathFinding[] = [];
+  for (const node of graph.nodes.values()) {
+    if (!reached.has(node.key)) found.push({ rule: 'H16', key: node.key, say: 'no way leads to this step' });
+    else if (!ending.has(node.key)) found.push({ rule: 'H16', key: node.key, say: 'no way leads from this step to an end' });
+    for (const edge of node.edges) {
+      if (edge.spent && !leadsOut(graph, edge.to)) found.push({ rule: 'H16', key: node.key, say: `when “${edge.exit.label ?? edge.exit.id}” has been taken too often, it must lead to isolation, a hold or an end` });
+    }
+  }
+  for (const key of cycle(graph, (edge) => edge.exit.atMost === undefined || edge.spent)) found.push({ rule: 'H16', key, say: 'this step stands in a loop that no counted exit ends' });
+  return found;
+}
+
+/** Where a spent counter may lead: a hold, an end, or isolation first. */
+function leadsOut(graph: Graph, key: string): boolean {
+  const kind = graph.nodes.get(key)?.placed.step.kind;
+  return kind === 'hold' || kind === 'end' || kind === 'isolate';
+}
+
+/**
+ * H11: from every energise, each way reaches isolation within its stated minutes; nothing waits for a person while live, no end is reached live, no
+ * loop there is uncounted. Minutes of a counted loop count as often as it can be taken. Isolation counts from the moment at which its step is shown.
+ */
+export function liveFindings(graph: Graph): PathFinding[] {
+  const found: PathFinding[] = [];
+  for (const node of graph.nodes.values()) {
+    const { step } = node.placed;
+    if (step.kind !== 'energise') continue;
+    const region = untilIsolation(graph, node.key);
+    const inside = [...region].flatMap((key) => graph.nodes.get(key) ?? []);
+    const ended = inside.find((n) => n.placed.step.kind === 'end' && n.placed.step.says !== 'in-service');
+    if (ended !== undefined) found.push({ rule: 'H11', key: ended.key, say: `this end can be reached while “${step.title}” is still on` });
+    const walk = (edge: Edge) => region.has(edge.to) && !isIsolate(graph, edge.from);
+    const uncounted = cycle(graph, (edge) => walk(edge) && region.has(edge.from) && (edge.exit.atMost === undefined || edge.spent));
+    if (uncounted.length > 0) {
+      found.push({ rule: 'H11', key: uncounted[0] ?? null, say: `while “${step.title}” is on, a loop has no end` });
+      continue;
+    }
+    const again = inside.flatMap((n) => n.edges.filter((e) => walk(e) && !e.spent && e.exit.atMost !== undefined)).reduce((sum, e) => sum + (e.exit.atMost ?? 0), 0);
+    const minutes = (1 + again) * longest(graph, node.key, (edge) => walk(edge) && (edge.exit.atMost === undefined || edge.spent), region);
+    const most = Math.min(step.longestMinutes, ...inside.flatMap((n) => (n.placed.step.kind === 'raise' ? [n.placed.step.longestMinutes] : [])));
+    if (minutes > most) found.push({ rule: 'H11', key: node.key, say: `isolation can come ${minutes} min after “${step.title}”, which is stated for ${most} min` });
+  }
+  return found;
+}
+
+function isIsolate(graph: Graph, key: string): boolean {
+  return graph.nodes.get(key)?.placed.step.kind === 'isolate';
+}
+
+/** Places from an energise to the isolate steps that its ways come to; what follows a failed isolation is isolation still. */
+function untilIsolation(graph: Graph, energise: string): Set<string> {
+  return forward(graph, [energise], (edge) => !isIsolate(graph, edge.from), false);
+}
+
+function minutesOf({ placed: { step } }: PlaceNode): number {
+  return step.kind === 'soak' ? Math.max(step.minutes, step.holdMinutes) : step.minutes;
+}
+
+/** Minutes of the longest way inside a region that has no loop left. */
+function longest(graph: Graph, from: string, take: (edge: Edge) => boolean, region: ReadonlySet<string>): number {
+  const known = new Map<string, number>();
+  const stack: string[] = [from];
+  while (stack.length > 0) {
+    const key = stack.at(-1) ?? '';
+    const node = graph.nodes.get(key);
+    const next = node === undefined ? [] : node.edges.filter((e) => take(e) && region.has(e.to)).map((e) => e.to);
+    const open = next.filter((to) => !known.has(to) && !stack.includes(to));
+    if (open.length > 0) {
+      stack.push(...open.slice(0, 1));
+      continue;
+    }
+    known.set(key, (node === undefined ? 0 : minutesOf(node)) + Math.max(0, ...next.map((to) => known.get(to) ?? 0)));
+    stack.pop();
+  }
+  return known.get(from) ?? 0;
+}
+
+/** H18: tools, instruments and conditions used are those on the opening list, none missing, none idle. */
+export function listFindings(layout: Layout): PathFinding[] {
+  const { opening } = layout.tree;
+  const own = [...layout.steps.values()].filter((p) => !p.builtIn && p.caller === null);
+  const used = new Set(own.flatMap((p) => p.step.tools));
+  const read = new Set(own.flatMap((p) => (p.step.kind === 'measure' || p.step.kind === 'soak' ? [p.step.quantity] : p.rows.flatMap((r) => (r.ask === 'reading' ? [r.quantity] : [])))));
+  const idle = [...opening.tools, ...opening.parts].filter((t) => !used.has(t.id));
+  const idleMeters = opening.instruments.filter((i) => !used.has(i.id) && !i.reads.some((q) => read.has(q)));
+  const missing = own.flatMap((p): PathFinding[] => {
+    const { step } = p;
+    if (step.kind !== 'measure' && step.kind !== 'soak') return [];
+    const has = opening.instruments.some((i) => i.reads.includes(step.quantity));
+    return has ? [] : [{ rule: 'H18', key: p.key, say: `no instrument on the opening list reads ${DEAD_QUANTITIES.includes(step.quantity) ? 'this dead' : 'this'} (${step.quantity})` }];
+  });
+  return [...missing, ...[...idle, ...idleMeters].map((t): PathFinding => ({ rule: 'H18', key: null, say: `“${t.name}” is on the opening list and no step uses it` }))];
+}
+
+/** H19: a source that is out at a call is out at the return; a call pins its version at issue. */
+export function callFindings(graph: Graph): PathFinding[] {
+  const found: PathFinding[] = [];
+  for (const [call, first] of graph.layout.calleeFirst) {
+    const callStep = graph.layout.steps.get(call)?.step;
+    if (callStep?.kind === 'call' && callStep.version === null) found.push({ rule: 'H19', key: call, say: 'the called tree has no pinned version' });
+    // follow "out" alone through the called tree: it may be lost inside, but not at a way back
+    const lost = new Set<string>();
+    const stack: { key: string; out: boolean }[] = [{ key: first, out: true }];
+    const seen = new Set<string>();
+    for (let here = stack.pop(); here !== undefined; here = stack.pop()) {
+      const node = graph.nodes.get(here.key);
+      if (node === undefined || seen.has(`${here.key}|${here.out}`)) continue;
+      seen.add(`${here.key}|${here.out}`);
+      const own = node.placed.caller === call;
+      if (!own) {
+        if (!here.out) lost.add(here.key);
+        continue;
+      }
+      for (const edge of node.edges) {
+        const after = [...node.entered, ...edge.ops].reduce((out, op) => (op.op === 'sources' ? op.to === 'out' : op.op === 'source' ? false : out), here.out);
+        stack.push({ key: edge.to, out: after });
+      }
+    }
+    for (const key of lost) found.push({ rule: 'H19', key: call, say: `a source that was out at the call may be in when it comes back to “${graph.nodes.get(key)?.placed.step.title ?? key}”` });
+  }
+  return found;
+}
+
+function forward(graph: Graph, from: readonly string[], take: (edge: Edge) => boolean, aborting = true): Set<string> {
+  const seen = new Set(from);
+  const stack = [...from];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    const node = graph.nodes.get(key);
+    const aborts = aborting && node?.placed.step.kind === 'energise' ? [graph.land(node.placed.scope.check(node.placed.step.abort))] : [];
+    for (const to of [...(node?.edges ?? []).filter(take).map((e) => e.to), ...aborts]) {
+      if (seen.has(to)) continue;
+      seen.add(to);
+      stack.push(to);
+    }
+  }
+  return seen;
+}
+
+function backward(graph: Graph, from: readonly string[]): Set<string> {
+  const into = new Map<string, string[]>();
+  for (const node of graph.nodes.values()) for (const edge of node.edges) into.set(edge.to, [...(into.get(edge.to) ?? []), edge.from]);
+  const seen = new Set(from);
+  const stack = [...from];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    for (const before of into.get(key) ?? []) {
+      if (seen.has(before)) continue;
+      seen.add(before);
+      stack.push(before);
+    }
+  }
+  return seen;
+}
+
+/** Places left on a loop when only these edges count; empty when there is none. What has no way in or no way out is peeled off. */
+function cycle(graph: Graph, take: (edge: Edge) => boolean): string[] {
+  const edges = [...graph.nodes.values()].flatMap((n) => n.edges.filter(take)).filter((e) => graph.nodes.has(e.to));
+  const out = new Map<string, string[]>();
+  const degree = new Map<string, number>();
+  for (const e of edges) {
+    out.set(e.from, [...(out.get(e.from) ?? []), e.to]);
+    degree.set(e.to, (degree.get(e.to) ?? 0) + 1);
+  }
+  const queue = [...graph.nodes.keys()].filter((key) => (degree.get(key) ?? 0) === 0);
+  const gone = new Set<string>();
+  for (let key = queue.pop(); key !== undefined; key = queue.pop()) {
+    gone.add(key);
+    for (const to of out.get(key) ?? []) {
+      const left = (degree.get(to) ?? 0) - 1;
+      degree.set(to, left);
+      if (left === 0) queue.push(to);
+    }
+  }
+  const left = [...graph.nodes.keys()].filter((key) => !gone.has(key));
+  // behind a loop hang places that are on none: keep those that can come back to themselves
+  return left.filter((key) => comesBack(key, out));
+}
+
+function comesBack(key: string, out: ReadonlyMap<string, string[]>): boolean {
+  const seen = new Set<string>();
+  const stack = [...(out.get(key) ?? [])];
+  for (let at = stack.pop(); at !== undefined; at = stack.pop()) {
+    if (at === key) return true;
+    if (seen.has(at)) continue;
+    seen.add(at);
+    stack.push(...(out.get(at) ?? []));
+  }
+  return false;
+}
+
