@@ -1,0 +1,90 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+
+import { demoContent } from '@/db/seeds/demo/content';
+import { DEMO_PASSWORD, demoPeople, demoWorkshops } from '@/db/seeds/demoPeople';
+import { loadDemoContent } from '@/db/seeds/loadDemoContent';
+import { loadDemo } from '@/db/seeds/loadDemo';
+import { demoAccounts, demoPassword } from '@/server/cli/demoAccounts';
+import { instrumentsSchema } from '@/shared/contract/instruments';
+import { recordSchema, recordsSchema } from '@/shared/contract/records';
+import { verifyChain } from '@/shared/record/chain';
+import { addMachine, makeWorkshop } from '@/tests/setup/factory';
+import { HttpClient } from '@/tests/setup/HttpClient';
+import { openServer } from '@/tests/setup/testServer';
+import type { TestServer } from '@/tests/setup/testServer';
+
+describe('loadDemo', () => {
+  let server: TestServer;
+  const ownerUrl = () => server.database.ownerUrl;
+
+  beforeAll(async () => {
+    server = await openServer();
+    server.time.now = Date.now();
+    expect(await loadDemo({ ownerUrl: ownerUrl() })).toBe('loaded');
+  }, 120_000);
+  afterAll(() => server.stop());
+
+  const signIn = async (mail: string) => {
+    const client = new HttpClient(server.url);
+    expect((await client.post('/api/session', { mail, password: DEMO_PASSWORD })).status, mail).toBe(201);
+    return client;
+  };
+
+  it('makes the accounts that are printed at the start', async () => {
+    expect(DEMO_PASSWORD).toBe(demoPassword);
+    for (const { mail } of demoAccounts) await signIn(mail);
+  });
+
+  it('writes records whose chains hold and whose signatures can be checked', async () => {
+    const reviewer = await signIn('reviewer@example.org');
+    const { records } = recordsSchema.parse((await reviewer.get('/api/records')).body);
+    expect(records.length).toBeGreaterThan(0);
+    for (const { id } of records) {
+      const { entries, head } = recordSchema.parse((await reviewer.get(`/api/records/${id}`)).body);
+      expect(verifyChain(entries, { head: head.hash, count: head.seq })).toMatchObject({ ok: true });
+      expect((await reviewer.get(`/api/records/${id}/export`)).status).toBe(200);
+    }
+  });
+
+  it('has six instruments, of which one is out of date', async () => {
+    const { instruments } = instrumentsSchema.parse((await (await signIn('restorer@example.org')).get('/api/instruments')).body);
+    expect(instruments.map(({ outOfDate }) => outOfDate)).toEqual([false, false, false, false, false, true]);
+  });
+
+  it('leaves no letter behind', async () => {
+    expect(await server.query('select 1 from graphile_worker._private_jobs')).toEqual([]);
+  });
+
+  it('keeps what is there when the content is the same, also when two start at the same moment', async () => {
+    const before = await server.query('select max(received_at) as last, count(*) as n from entries');
+    expect(await Promise.all([loadDemo({ ownerUrl: ownerUrl() }), loadDemo({ ownerUrl: ownerUrl() })])).toEqual(['kept', 'kept']);
+    expect(await server.query('select max(received_at) as last, count(*) as n from entries')).toEqual(before);
+  });
+
+  it('makes the demo anew when its content has changed, and touches no other workshop', async () => {
+    const own = await makeWorkshop(ownerUrl());
+    const small = { ...demoContent, machines: demoContent.machines.slice(0, 1), runs: [] };
+    const wish = { ownerUrl: ownerUrl(), now: Date.now(), bcryptCost: 4 };
+    expect(await loadDemoContent({ ...wish, content: small })).toBe('rebuilt');
+    expect(await server.query('select 1 from machines where workshop = $1', [demoWorkshops.first.id])).toHaveLength(1);
+    expect(await server.query('select 1 from members where workshop = $1', [own.id])).toHaveLength(7);
+    await addMachine(ownerUrl(), own);
+  });
+
+  it('begins anew after a start that was killed half-way', async () => {
+    await server.query(`delete from demo_content where name = 'workshops'`);
+    const small = { ...demoContent, machines: demoContent.machines.slice(0, 1), runs: [] };
+    expect(await loadDemoContent({ ownerUrl: ownerUrl(), now: Date.now(), bcryptCost: 4, content: small })).toBe('loaded');
+  });
+
+  it('names the run whose script does not fit its tree', async () => {
+    const [run] = demoContent.runs;
+    if (run === undefined) throw new Error('the demo has no run');
+    const runs = [{ ...run, key: 'broken', moves: [{ to: 'nowhere' }] }];
+    await expect(loadDemoContent({ ownerUrl: ownerUrl(), now: Date.now(), bcryptCost: 4, content: { ...demoContent, runs } })).rejects.toThrow(/^demo run “broken”: /);
+  });
+
+  it('has invented people at example.org only', () => {
+    for (const { mail } of Object.values(demoPeople)) expect(mail).toMatch(/^[a-z0-9.]+@example\.org$/);
+  });
+});
