@@ -4,6 +4,8 @@
 export class BitNames {
   private readonly numbers = new Map<string, number>();
   private readonly names: string[] = [];
+  /** answers of `startingWith`, good while no name has come since */
+  private readonly prefixes = new Map<string, { size: number; bits: readonly number[] }>();
 
   /** The number of a name; a new one for a new name. */
   of(name: string): number {
@@ -15,8 +17,12 @@ export class BitNames {
   }
 
   /** Numbers of all names that begin so. */
-  startingWith(prefix: string): number[] {
-    return [...this.numbers].filter(([name]) => name.startsWith(prefix)).map(([, n]) => n);
+  startingWith(prefix: string): readonly number[] {
+    const known = this.prefixes.get(prefix);
+    if (known !== undefined && known.size === this.names.length) return known.bits;
+    const bits = this.names.flatMap((name, bit) => (name.startsWith(prefix) ? [bit] : []));
+    this.prefixes.set(prefix, { size: this.names.length, bits });
+    return bits;
   }
 
   /** The name of a number. */
