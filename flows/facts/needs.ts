@@ -127,7 +127,8 @@ function feedNeeds(step: PowerStep, scope: StepScope): Need[] {
     { rule: 'H8', atom: { fact: 'no-earthed-clip-on-primary' }, say: 'an earthed instrument is clipped to the primary' },
     { rule: 'H6', atom: { fact: 'looked' }, say: 'the look-over does not stand' },
     ...(step.throughItems ?? []).map((id): Need => ({ rule: 'H5', atom: { fact: 'fitted', id }, say: 'what the power must pass through is not fitted' })),
-    ...owedNeeds(cls),
+    // a part fed alone is how a killer is ruled out: H15 bars only what feeds the circuit
+    ...owedNeeds(cls).filter((need) => need.rule !== 'H15' || step.node !== 'part'),
   ];
   if (cls === 'full') needed.push({ rule: 'H4', atom: { fact: 'none-of-class', class: 'bypass' }, say: 'a bypass is still fitted' });
   if (step.node !== 'part') needed.push({ rule: 'H5', atom: { fact: 'load', is: step.load }, say: 'the load at the bench is not the one that this step declares' });

@@ -4,17 +4,27 @@ import { isLive } from '@/flows/facts/facts';
 import { copyOf, explore } from './explore';
 import { libraryTree, move, programOf, walk } from './walk';
 
-const tree = libraryTree('first-power');
+const WALKS: [string, string][] = [
+  ['first-power', 'corvane-12'],
+  ['first-power', 'ostrel-16'],
+  ['lamp-bright', 'corvane-12'],
+  ['look-over', 'brindle-80'],
+  ['returns-measured', 'wendle-5'],
+  ['reform-in-place', 'ostrel-16'],
+];
 
-describe.each(['corvane-12', 'ostrel-16'])('every step of first power on %s', (name) => {
-  const program = programOf(tree, name);
+describe.each(WALKS)('every step of %s on %s', (id, profile) => {
+  const tree = libraryTree(id);
+  const program = programOf(tree, profile);
   const { arrivals, ends, barred } = explore(program);
-  const steps = [...program.layout.steps.values()].filter((p) => !p.builtIn);
+  const placedAt = (key: string) => program.layout.steps.get(key);
+  const madeSafe = (bench: ReturnType<typeof copyOf>) => walk(bench.do({ type: 'STOP' }), {}, (b) => b.view.key === '~choose' || b.view.phase === 'ended');
 
   it('is reached, and no answer leads into a step that the house rules bar', () => {
     expect(barred).toEqual([]);
     const reached = new Set(arrivals.map((a) => a.key));
-    expect(steps.filter((p) => p.step.kind !== 'end' && p.step.kind !== 'call' && !reached.has(p.key)).map((p) => p.key)).toEqual([]);
+    const steps = [...program.layout.steps.values()].filter((p) => !p.builtIn && p.step.kind !== 'end' && p.step.kind !== 'call');
+    expect(steps.filter((p) => !reached.has(p.key)).map((p) => p.key)).toEqual([]);
   });
 
   it('leads to every end that the tree has', () => {
@@ -23,7 +33,7 @@ describe.each(['corvane-12', 'ostrel-16'])('every step of first power on %s', (n
 
   it('shows its warning before its action where hands, a probe or power are at work', () => {
     for (const { key, bench } of arrivals) {
-      const placed = program.layout.steps.get(key);
+      const placed = placedAt(key);
       if (placed === undefined || placed.builtIn) continue;
       const { step } = placed;
       if (step.contact !== 'hands' && step.contact !== 'probe' && step.kind !== 'energise' && step.kind !== 'raise') continue;
@@ -35,13 +45,11 @@ describe.each(['corvane-12', 'ostrel-16'])('every step of first power on %s', (n
 
   it('can be left by Stop at once, and what follows is dead before anything else', () => {
     for (const { key, bench } of arrivals) {
-      for (const deep of [false, true]) {
-        const stopped = copyOf(bench);
-        for (let i = 0; deep && i < 8 && stopped.view.key === key && stopped.view.phase !== 'act'; i += 1) move(stopped, {});
-        stopped.do({ type: 'STOP' });
-        expect(stopped.view.key, key).toBe('~isolate');
-        walk(stopped, {}, (b) => b.view.key === '~choose');
-        expect(stopped.view.band, key).toBe('proved-dead');
+      const deep = copyOf(bench);
+      for (let i = 0; i < 8 && deep.view.key === key && deep.view.phase !== 'act'; i += 1) move(deep, {});
+      for (const stopped of [copyOf(bench), deep]) {
+        expect(copyOf(stopped).do({ type: 'STOP' }).view.key, key).toBe('~isolate');
+        expect(madeSafe(stopped).view.band, key).toBe('proved-dead');
       }
     }
   });
@@ -49,28 +57,30 @@ describe.each(['corvane-12', 'ostrel-16'])('every step of first power on %s', (n
   it('goes on after Stop only at places whose step may be entered as the bench now stands', () => {
     const offered = new Set<string>();
     for (const { bench } of arrivals) {
-      const stopped = copyOf(bench);
-      stopped.do({ type: 'STOP' });
-      walk(stopped, {}, (b) => b.view.key === '~choose');
+      const stopped = madeSafe(copyOf(bench));
       for (const { key } of stopped.view.reentries) {
         offered.add(key);
         const again = copyOf(stopped).do({ type: 'REENTER', step: key });
         expect(again.view.key).toBe(key);
-        expect(isLive(again.view.facts)).toBe(false);
         expect(again.view.band).toBe('proved-dead');
       }
     }
     expect(tree.reentries.map((r) => r.step).filter((step) => !offered.has(step))).toEqual([]);
   });
 
-  it('is led to make dead when power is broken off', () => {
-    const live = arrivals.filter((a) => isLive(a.bench.view.facts));
-    expect(live.length).toBeGreaterThan(10);
-    for (const { key, bench } of live) {
+  it('is led to make dead and to a senior when power is broken off', () => {
+    for (const { key, bench } of arrivals.filter((a) => isLive(a.bench.view.facts))) {
       const aborted = copyOf(bench).do({ type: 'ABORT' });
-      expect(aborted.view.key, key).toBe('dead-abort/isolate');
-      walk(aborted, {});
-      expect(aborted.view.end, key).toMatchObject({ says: 'referred', key: 'aborted' });
+      expect(placedAt(aborted.view.key)?.step.kind, key).toBe('isolate');
+      expect(walk(aborted).view.end?.says, key).toBe('referred');
     }
+  });
+
+  it('says one thing a line, in twenty words at most, and names every tool that it uses', () => {
+    const wordy = tree.steps.flatMap((s) => s.lines).filter((line) => line.split(/\s+/).length > 20);
+    expect(wordy).toEqual([]);
+    const used = new Set(tree.steps.flatMap((s) => s.tools));
+    const { tools, instruments, parts } = tree.opening;
+    expect([...tools, ...instruments, ...parts].map((t) => t.id).filter((t) => !used.has(t))).toEqual([]);
   });
 });
