@@ -28,7 +28,9 @@ export function EmptyState({ title, text, action }: Props) {
         alignSelf: 'stretch',
       }}
     >
-      <Heading level={3}>{title}</Heading>
+      <Heading level={2} size="sub">
+        {title}
+      </Heading>
       <BodyText>{text}</BodyText>
       {action}
     </View>

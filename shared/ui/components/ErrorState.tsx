@@ -37,7 +37,9 @@ export function ErrorState({ happened, todo, onRetry }: Props) {
       <View style={{ flexDirection: 'row', gap: space.m, alignItems: 'center' }}>
         <Icon name="exclaim" size={26} color={colors.brass} weight={3.5} />
         <View style={{ flexShrink: 1 }}>
-          <Heading level={3}>{happened}</Heading>
+          <Heading level={2} size="sub">
+            {happened}
+          </Heading>
         </View>
       </View>
       <BodyText>{todo}</BodyText>

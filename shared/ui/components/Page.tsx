@@ -25,15 +25,15 @@ interface Props {
   children: ReactNode;
 }
 
-/** The main region of the page. */
+/** The main region of the page; nothing of a screen stands outside it. */
 export function Page({ title, eyebrow, aside, head, foot, maxWidth = 1120, bleed = false, children }: Props) {
   const { colors } = useTheme();
   const wide = isWide(useWindowDimensions().width);
   const side = bleed ? 0 : wide ? space.xxl : space.l;
   return (
-    <View style={{ flex: 1, minHeight: 0, backgroundColor: colors.paper }}>
+    <View role="main" style={{ flex: 1, minHeight: 0, backgroundColor: colors.paper }}>
       {head}
-      <ScrollView role="main" style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1, alignItems: 'center' }}>
+      <ScrollView style={{ flex: 1 }} contentContainerStyle={{ flexGrow: 1, alignItems: 'center' }}>
         <View
           style={{
             flexGrow: 1,
