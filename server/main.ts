@@ -1,4 +1,5 @@
 /** Starting the server, as a function for others and as a process of its own. */
+import { realpathSync } from 'node:fs';
 import { createServer } from 'node:http';
 import type { Server } from 'node:http';
 import { pathToFileURL } from 'node:url';
@@ -60,7 +61,8 @@ function listen(server: Server, host: string, port: number): Promise<number> {
   });
 }
 
-if (process.argv[1] !== undefined && import.meta.url === pathToFileURL(process.argv[1]).href) {
+// A path that is a link is followed, as Node follows it for the module itself.
+if (process.argv[1] !== undefined && import.meta.url === pathToFileURL(realpathSync(process.argv[1])).href) {
   try {
     const { stop } = await startServer(readConfig(process.env));
     for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => void stop().then(() => process.exit(0)));
