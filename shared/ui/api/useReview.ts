@@ -24,7 +24,8 @@ export function useReview(record: string): Review {
   const queries = useQueryClient();
   const acted = async <T>(asked: Promise<Answer<T>>): Promise<Answer<T>> => {
     const answer = await asked;
-    if (answer.kind === 'ok' || answer.code === 'wrong-state') await Promise.all(TOUCHED.map((name) => queries.invalidateQueries({ queryKey: [name] })));
+    if (answer.kind === 'ok' || answer.code === 'wrong-state')
+      await Promise.all(TOUCHED.map((name) => queries.invalidateQueries({ queryKey: [name] })));
     return answer;
   };
   const params = { record };

@@ -32,8 +32,19 @@ export function MachineHistory({ runs, releases }: Props) {
           columns={[
             { key: 'state', title: 'Release', cell: (r) => (r.valid ? releaseWord(r) : <BodyText>{releaseWord(r)}</BodyText>), grow: 1.5 },
             { key: 'by', title: 'Given by', cell: (r) => <BodyText>{personName(people, r.givenBy)}</BodyText> },
-            { key: 'why', title: 'Void because', cell: (r) => <BodyText tone={r.voidReason ? 'ink' : 'soft'}>{r.voidReason ?? 'not void'}</BodyText>, grow: 1.6 },
-            { key: 'record', title: 'Stands on', cell: (r) => <LinkText label="Record" name={`Record of the release given ${dateTimeWords(r.givenAt)}`} href={`/records/${r.run}`} /> },
+            {
+              key: 'why',
+              title: 'Void because',
+              cell: (r) => <BodyText tone={r.voidReason ? 'ink' : 'soft'}>{r.voidReason ?? 'not void'}</BodyText>,
+              grow: 1.6,
+            },
+            {
+              key: 'record',
+              title: 'Stands on',
+              cell: (r) => (
+                <LinkText label="Record" name={`Record of the release given ${dateTimeWords(r.givenAt)}`} href={`/records/${r.run}`} />
+              ),
+            },
           ]}
         />
       </Section>
@@ -42,13 +53,21 @@ export function MachineHistory({ runs, releases }: Props) {
           caption="Runs"
           rows={runs}
           rowKey={(r) => r.id}
-          rowTarget={(r) => ({ name: `Run of ${dateTimeWords(r.startedAt)}`, href: r.state === 'open' ? `/bench/${r.id}` : `/records/${r.id}` })}
+          rowTarget={(r) => ({
+            name: `Run of ${dateTimeWords(r.startedAt)}`,
+            href: r.state === 'open' ? `/bench/${r.id}` : `/records/${r.id}`,
+          })}
           empty={<BodyText tone="soft">No run has been made on this machine.</BodyText>}
           columns={[
             { key: 'when', title: 'When', cell: (r) => <Mono>{dateTimeWords(r.startedAt)}</Mono>, grow: 1.4 },
             { key: 'tree', title: 'Tree', cell: (r) => <BodyText>{`${r.tree.title}, version ${r.tree.version}`}</BodyText>, grow: 2.4 },
             { key: 'who', title: 'Restorer', cell: (r) => <BodyText>{personName(people, r.restorer)}</BodyText>, grow: 1.2 },
-            { key: 'state', title: 'State', cell: (r) => <Tag word={RUN_STATE_WORDS[r.state]} kind={RUN_STATE_TAGS[r.state]} />, grow: 1.1 },
+            {
+              key: 'state',
+              title: 'State',
+              cell: (r) => <Tag word={RUN_STATE_WORDS[r.state]} kind={RUN_STATE_TAGS[r.state]} />,
+              grow: 1.1,
+            },
             { key: 'outcome', title: 'Outcome', cell: (r) => <BodyText>{endingWords(r.ended)}</BodyText>, grow: 1.3 },
           ]}
         />

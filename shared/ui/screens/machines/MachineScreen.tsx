@@ -23,7 +23,12 @@ export function MachineScreen({ machineId }: { machineId: string }) {
   const dossier = useMachine(machineId);
   const machine = dossier.data?.machine;
   return (
-    <Page title={machine?.name ?? 'Machine'} eyebrow={machine ? `Machine · serial ${machine.serial} · profile revision ${machine.revision}` : undefined} aside={machine?.openRun ? <Tag word="run open" kind="now" /> : null} maxWidth={1280}>
+    <Page
+      title={machine?.name ?? 'Machine'}
+      eyebrow={machine ? `Machine · serial ${machine.serial} · profile revision ${machine.revision}` : undefined}
+      aside={machine?.openRun ? <Tag word="run open" kind="now" /> : null}
+      maxWidth={1280}
+    >
       <Fetched query={dossier} what="the machine">
         {({ machine: m, profile, runs, releases, staysFitted }) => (
           <Columns
@@ -41,7 +46,11 @@ export function MachineScreen({ machineId }: { machineId: string }) {
                 </View>
                 <StaysFitted tags={staysFitted} profile={profile.document} />
                 <Section title="Owner’s limits" look="label">
-                  {profile.document.ownerLimits.length > 0 ? profile.document.ownerLimits.map((limit) => <BodyText key={limit}>{limit}</BodyText>) : <BodyText tone="soft">The owner has set none.</BodyText>}
+                  {profile.document.ownerLimits.length > 0 ? (
+                    profile.document.ownerLimits.map((limit) => <BodyText key={limit}>{limit}</BodyText>)
+                  ) : (
+                    <BodyText tone="soft">The owner has set none.</BodyText>
+                  )}
                 </Section>
                 <Section title="Plate" look="label">
                   <FactRows caption="Plate" rows={[...plateRows(profile.document), { name: 'Release', value: releaseWord(m.release) }]} />

@@ -30,7 +30,12 @@ const columns: Column<Machine>[] = [
       </View>
     ),
   },
-  { key: 'release', title: 'Release', grow: 1.2, cell: (m) => <BodyText tone={m.release?.valid ? 'ink' : 'soft'}>{releaseWord(m.release)}</BodyText> },
+  {
+    key: 'release',
+    title: 'Release',
+    grow: 1.2,
+    cell: (m) => <BodyText tone={m.release?.valid ? 'ink' : 'soft'}>{releaseWord(m.release)}</BodyText>,
+  },
 ];
 
 /** One row a machine. */
@@ -46,7 +51,12 @@ export function MachinesScreen() {
             rows={all}
             rowKey={(m) => m.id}
             rowTarget={(m) => ({ name: `${m.name}, serial ${m.serial}`, href: `/machines/${m.id}` })}
-            empty={<EmptyState title="No machines yet" text="A machine stands here with its electrical description once a senior has entered it." />}
+            empty={
+              <EmptyState
+                title="No machines yet"
+                text="A machine stands here with its electrical description once a senior has entered it."
+              />
+            }
           />
         )}
       </Fetched>

@@ -63,7 +63,12 @@ export function ProfileTables({ profile }: { profile: Profile }) {
 const pointColumns = [
   { key: 'name', title: 'Point', cell: (p: Point) => p.name, grow: 1.4 },
   { key: 'pin', title: 'Connector, pin', cell: (p: Point) => <Mono>{`${p.connector} ${p.pin}`}</Mono> },
-  { key: 'neighbours', title: 'Do not touch beside it', cell: (p: Point) => <BodyText tone={p.neighbours.length > 0 ? 'ink' : 'soft'}>{p.neighbours.join(', ') || 'nothing near'}</BodyText>, grow: 2 },
+  {
+    key: 'neighbours',
+    title: 'Do not touch beside it',
+    cell: (p: Point) => <BodyText tone={p.neighbours.length > 0 ? 'ink' : 'soft'}>{p.neighbours.join(', ') || 'nothing near'}</BodyText>,
+    grow: 2,
+  },
 ];
 
 function Stores({ profile }: { profile: Profile }) {
@@ -82,12 +87,20 @@ function Stores({ profile }: { profile: Profile }) {
             { key: 'size', title: 'Size', cell: (s) => <Mono>{s.size}</Mono> },
             { key: 'volts', title: 'Works at', cell: (s) => <Mono>{s.volts}</Mono>, grow: 1.3 },
             { key: 'joules', title: 'Holds', cell: (s) => <Mono bold>{s.joules}</Mono> },
-            { key: 'discharge', title: 'Before work', cell: (s) => (s.discharge ? <Tag word="discharge first (H3)" kind="look" /> : <BodyText>prove dead</BodyText>), grow: 1.7 },
+            {
+              key: 'discharge',
+              title: 'Before work',
+              cell: (s) => (s.discharge ? <Tag word="discharge first (H3)" kind="look" /> : <BodyText>prove dead</BodyText>),
+              grow: 1.7,
+            },
             { key: 'bleeder', title: 'Bleeder', cell: (s) => <BodyText>{s.bleeder}</BodyText>, grow: 1.7 },
           ]}
         />
       ) : null}
-      <Notice kind="note">What a part can hold is reckoned from its size and the volts that it works at. The meter has the last word: discharge, wait, read again.</Notice>
+      <Notice kind="note">
+        What a part can hold is reckoned from its size and the volts that it works at. The meter has the last word: discharge, wait, read
+        again.
+      </Notice>
     </Section>
   );
 }
@@ -97,7 +110,9 @@ function Boards({ profile: { boards, rails } }: { profile: Profile }) {
   const railName = (id: string) => rails.find((r) => r.id === id)?.name ?? id;
   return (
     <Section title="Boards">
-      {boards.removable ? null : <Notice>The boards cannot be parted from the supply. A hold point takes the place of taking them out.</Notice>}
+      {boards.removable ? null : (
+        <Notice>The boards cannot be parted from the supply. A hold point takes the place of taking them out.</Notice>
+      )}
       <DataTable
         caption="Boards"
         rows={boards.fitted}
@@ -105,7 +120,14 @@ function Boards({ profile: { boards, rails } }: { profile: Profile }) {
         columns={[
           { key: 'name', title: 'Board', cell: (b) => b.name, grow: 1.4 },
           { key: 'slot', title: 'Slot', cell: (b) => <Mono>{b.slot}</Mono> },
-          { key: 'draws', title: 'Draws', cell: (b) => <BodyText>{b.draws.map((d) => `${railName(d.rail)} ${formatQuantity(d.amps, 'A')}`).join(', ') || 'nothing'}</BodyText>, grow: 2 },
+          {
+            key: 'draws',
+            title: 'Draws',
+            cell: (b) => (
+              <BodyText>{b.draws.map((d) => `${railName(d.rail)} ${formatQuantity(d.amps, 'A')}`).join(', ') || 'nothing'}</BodyText>
+            ),
+            grow: 2,
+          },
           { key: 'bias', title: 'First rail', cell: (b) => <BodyText>{b.biasFirst ? railName(b.biasFirst) : 'any'}</BodyText> },
         ]}
       />

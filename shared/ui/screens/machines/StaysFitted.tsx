@@ -24,16 +24,25 @@ export function StaysFitted({ tags, profile }: Props) {
     <Section title="Left on it by earlier runs" look="label">
       {tags.length === 0 ? <BodyText tone="soft">Nothing temporary is fitted, and no part is owed a check.</BodyText> : null}
       {tags.map((tag) => (
-        <View key={tag.is === 'fitted' ? tag.thing.id : `${tag.part}-${tag.killer}`} style={{ borderLeftWidth: line.heavy + 1, borderLeftColor: colors.brass, paddingLeft: space.m }}>
+        <View
+          key={tag.is === 'fitted' ? tag.thing.id : `${tag.part}-${tag.killer}`}
+          style={{ borderLeftWidth: line.heavy + 1, borderLeftColor: colors.brass, paddingLeft: space.m }}
+        >
           {tag.is === 'fitted' ? (
             <>
               <BodyText bold>{tag.thing.name}</BodyText>
-              <BodyText size="small" tone="soft">{`${CLASS_WORDS[tag.thing.class]}, ${tag.thing.area}, since ${dateWords(tag.since)}`}</BodyText>
+              <BodyText
+                size="small"
+                tone="soft"
+              >{`${CLASS_WORDS[tag.thing.class]}, ${tag.thing.area}, since ${dateWords(tag.since)}`}</BodyText>
             </>
           ) : (
             <>
               <BodyText bold>{`${partName(profile, tag.part)} is to be replaced`}</BodyText>
-              <BodyText size="small" tone="soft">{`First rule out what is known to have killed it: ${partName(profile, tag.killer)}. Since ${dateWords(tag.since)}.`}</BodyText>
+              <BodyText
+                size="small"
+                tone="soft"
+              >{`First rule out what is known to have killed it: ${partName(profile, tag.killer)}. Since ${dateWords(tag.since)}.`}</BodyText>
             </>
           )}
           <LinkText label="The run that left it" href={`/records/${tag.run}`} />

@@ -9,13 +9,28 @@ import type { FactRow } from '@/shared/ui/screens/shell/FactRows';
 const print = (value: number, unit: Unit) => formatQuantity(value, unit);
 const percent = (share: number) => `${formatNumber(share * 100)} %`;
 
-const SUPPLY_KINDS: Readonly<Record<Profile['supplyKind'], string>> = { linear: 'linear', 'switched-from-raw': 'switched from a raw rail', 'switch-mode': 'switch-mode' };
+const SUPPLY_KINDS: Readonly<Record<Profile['supplyKind'], string>> = {
+  linear: 'linear',
+  'switched-from-raw': 'switched from a raw rail',
+  'switch-mode': 'switch-mode',
+};
 const SOURCE_KINDS: Readonly<Record<Profile['sources'][number]['kind'], string>> = {
-  battery: 'battery', ups: 'uninterruptible supply', 'second-feed': 'second feed', 'connected-equipment': 'connected equipment', instrument: 'instrument',
+  battery: 'battery',
+  ups: 'uninterruptible supply',
+  'second-feed': 'second feed',
+  'connected-equipment': 'connected equipment',
+  instrument: 'instrument',
 };
 const HAZARD_FLAGS: Readonly<Record<Profile['hazards'][number], string>> = {
-  crt: 'picture tube under vacuum', 'beryllium-oxide': 'beryllium oxide in power devices', pcb: 'PCB oil in capacitors', selenium: 'selenium rectifier', asbestos: 'asbestos sheet',
-  mercury: 'mercury switch or rectifier', 'x-ray': 'high-voltage shunt regulator (X-ray)', 'lead-solder': 'lead solder', heavy: 'heavy transformer',
+  crt: 'picture tube under vacuum',
+  'beryllium-oxide': 'beryllium oxide in power devices',
+  pcb: 'PCB oil in capacitors',
+  selenium: 'selenium rectifier',
+  asbestos: 'asbestos sheet',
+  mercury: 'mercury switch or rectifier',
+  'x-ray': 'high-voltage shunt regulator (X-ray)',
+  'lead-solder': 'lead solder',
+  heavy: 'heavy transformer',
 };
 
 /** The plate: what feeds the machine and how it is protected. */
@@ -30,7 +45,10 @@ export function plateRows({ mains, supplyKind, machineClass, raw, outOfMachine, 
     { name: 'Earth lead', value: print(mains.earthLeadOhms, 'Ω') },
     { name: 'Insulation test', value: print(mains.insulationTestVolts, 'V') },
     { name: 'Raw node', value: raw === null ? 'none' : `${raw.name}: ${print(raw.volts, 'V')}, ${print(raw.ratedAmps, 'A')}` },
-    { name: 'Other sources', value: sources.map((s) => `${s.name} (${SOURCE_KINDS[s.kind]}, ${print(s.volts, 'V')})`).join('; ') || 'none' },
+    {
+      name: 'Other sources',
+      value: sources.map((s) => `${s.name} (${SOURCE_KINDS[s.kind]}, ${print(s.volts, 'V')})`).join('; ') || 'none',
+    },
     { name: 'Starts a run', value: outOfMachine ? 'as a supply on the bench, no load' : 'with its boards in' },
     { name: 'Known hazards', value: hazards.map((h) => HAZARD_FLAGS[h]).join('; ') || 'none beyond mains and stored charge' },
   ];
@@ -100,6 +118,9 @@ export function storeLine(store: Store, settings: Settings): StoreLine {
     volts: `${print(store.voltsWorked, 'V')} of ${print(store.voltsRated, 'V')}`,
     joules: formatQuantity(storedJoules(store), 'J', { digits: 3 }),
     discharge: needsDischarge(store, settings),
-    bleeder: [store.bleederOhms === null ? 'no bleeder' : `bleeder ${print(store.bleederOhms, 'Ω')}`, ...(store.rebounds ? [`comes back: read again after ${formatNumber(store.reboundWaitSeconds)} s`] : [])].join('; '),
+    bleeder: [
+      store.bleederOhms === null ? 'no bleeder' : `bleeder ${print(store.bleederOhms, 'Ω')}`,
+      ...(store.rebounds ? [`comes back: read again after ${formatNumber(store.reboundWaitSeconds)} s`] : []),
+    ].join('; '),
   };
 }

@@ -16,7 +16,8 @@ import { useAct } from '@/shared/ui/screens/records/useAct';
 const formSchema = z.object({ ...acceptBody.pick({ password: true, meaning: true }).shape, release: z.boolean() });
 
 /** What a signature means unless the reviewer says it in other words. */
-export const SIGNATURE_MEANING = 'I took no part in this run. I have read its record from the first entry to the last, and its outcome follows from what stands in it.';
+export const SIGNATURE_MEANING =
+  'I took no part in this run. I have read its record from the first entry to the last, and its outcome follows from what stands in it.';
 
 interface Props {
   record: RecordView;
@@ -29,27 +30,53 @@ interface Props {
 export function AcceptDialog({ record, release, onClose }: Props) {
   const { accept } = useReview(record.run.id);
   const { id, problem, send } = useAct(onClose);
-  const { control, handleSubmit, formState, setError } = useForm({ resolver: zodResolver(formSchema), defaultValues: { password: '', meaning: SIGNATURE_MEANING, release: false } });
+  const { control, handleSubmit, formState, setError } = useForm({
+    resolver: zodResolver(formSchema),
+    defaultValues: { password: '', meaning: SIGNATURE_MEANING, release: false },
+  });
   const act = handleSubmit(async (given) => {
     const refused = await send(() => accept({ id, ...given }));
     if (refused?.code === 'wrong-password') setError('password', { message: refused.say });
   });
   const { machine } = record.run;
   return (
-    <ActDialog title="Accept and sign" act="Accept and sign" busy={formState.isSubmitting} problem={problem?.code === 'wrong-password' ? null : problem} onAct={() => void act()} onClose={onClose}>
+    <ActDialog
+      title="Accept and sign"
+      act="Accept and sign"
+      busy={formState.isSubmitting}
+      problem={problem?.code === 'wrong-password' ? null : problem}
+      onAct={() => void act()}
+      onClose={onClose}
+    >
       <BodyText>{`Record of ${machine.name}, serial ${machine.serial}, ${record.head.seq} entries. Afterwards nothing in it can be changed.`}</BodyText>
       <Controller
         control={control}
         name="meaning"
         render={({ field, fieldState }) => (
-          <Field label="Your signature means" required lines={4} value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} hint="It is written into the record under your name, with the time." />
+          <Field
+            label="Your signature means"
+            required
+            lines={4}
+            value={field.value}
+            onChangeText={field.onChange}
+            onBlur={field.onBlur}
+            error={fieldState.error?.message}
+            hint="It is written into the record under your name, with the time."
+          />
         )}
       />
       {release ? (
         <Controller
           control={control}
           name="release"
-          render={({ field }) => <Checkbox label="Release: supply proven, may be refitted" detail={`for serial ${machine.serial}; void after any later work on that supply`} checked={field.value} onChange={field.onChange} />}
+          render={({ field }) => (
+            <Checkbox
+              label="Release: supply proven, may be refitted"
+              detail={`for serial ${machine.serial}; void after any later work on that supply`}
+              checked={field.value}
+              onChange={field.onChange}
+            />
+          )}
         />
       ) : (
         <Notice kind="note">No release goes with it: that rests only on a run that ended with the supply proven.</Notice>
@@ -58,7 +85,17 @@ export function AcceptDialog({ record, release, onClose }: Props) {
         control={control}
         name="password"
         render={({ field, fieldState }) => (
-          <Field label="Your password" required secret value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} onSubmit={() => void act()} error={fieldState.error?.message} autoComplete="current-password" />
+          <Field
+            label="Your password"
+            required
+            secret
+            value={field.value}
+            onChangeText={field.onChange}
+            onBlur={field.onBlur}
+            onSubmit={() => void act()}
+            error={fieldState.error?.message}
+            autoComplete="current-password"
+          />
         )}
       />
     </ActDialog>

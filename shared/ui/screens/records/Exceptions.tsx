@@ -18,13 +18,19 @@ export function Exceptions({ exceptions }: { exceptions: readonly RecordExceptio
   const [all, setAll] = useState(false);
   const shown = all ? exceptions : exceptions.slice(0, FIRST);
   const rest = exceptions.length - shown.length;
-  if (exceptions.length === 0) return <BodyText tone="soft">Nothing stands out: every reading clear of its limits, no Stop, no refusal, no doubt, no haste.</BodyText>;
+  if (exceptions.length === 0)
+    return <BodyText tone="soft">Nothing stands out: every reading clear of its limits, no Stop, no refusal, no doubt, no haste.</BodyText>;
   return (
     <View>
       <View role="list" aria-label="Look at these first">
         {shown.map((e) => (
           <View key={`${e.kind}-${e.entry}`} role="listitem" style={{ borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
-            <Pressable role="button" aria-label={`Entry ${e.seq}: ${e.title}, ${e.detail}`} onPress={() => goToEntry(e.entry)} style={{ flexDirection: 'row', gap: space.m, alignItems: 'center', paddingVertical: space.m }}>
+            <Pressable
+              role="button"
+              aria-label={`Entry ${e.seq}: ${e.title}, ${e.detail}`}
+              onPress={() => goToEntry(e.entry)}
+              style={{ flexDirection: 'row', gap: space.m, alignItems: 'center', paddingVertical: space.m }}
+            >
               <StepStud number={e.seq} state={e.kind === 'close' || e.kind === 'out' || e.kind === 'stopped' ? 'close' : 'done'} />
               <View style={{ flex: 1, minWidth: 0 }}>
                 <BodyText bold>{e.title}</BodyText>

@@ -31,18 +31,42 @@ interface Props {
 export function FindingDialog({ record, entry, onClose }: Props) {
   const { addFinding } = useReview(record.run.id);
   const { id, problem, send } = useAct(onClose);
-  const { control, handleSubmit, formState } = useForm<Given>({ resolver: zodResolver(formSchema), defaultValues: { grade: 'note', text: '' } });
+  const { control, handleSubmit, formState } = useForm<Given>({
+    resolver: zodResolver(formSchema),
+    defaultValues: { grade: 'note', text: '' },
+  });
   const act = handleSubmit(async ({ grade, text }) => {
     await send(() => addFinding({ id, entry, grade, text }));
   });
   const seq = record.entries.find((e) => e.id === entry)?.seq ?? 0;
   return (
-    <ActDialog title={`Finding on entry ${seq}`} act="Write it down" busy={formState.isSubmitting} problem={problem} onAct={() => void act()} onClose={onClose}>
-      <Controller control={control} name="grade" render={({ field }) => <Choice label="Grade" options={grades} value={field.value} onChange={field.onChange} />} />
+    <ActDialog
+      title={`Finding on entry ${seq}`}
+      act="Write it down"
+      busy={formState.isSubmitting}
+      problem={problem}
+      onAct={() => void act()}
+      onClose={onClose}
+    >
+      <Controller
+        control={control}
+        name="grade"
+        render={({ field }) => <Choice label="Grade" options={grades} value={field.value} onChange={field.onChange} />}
+      />
       <Controller
         control={control}
         name="text"
-        render={({ field, fieldState }) => <Field label="What you found" required lines={4} value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} />}
+        render={({ field, fieldState }) => (
+          <Field
+            label="What you found"
+            required
+            lines={4}
+            value={field.value}
+            onChangeText={field.onChange}
+            onBlur={field.onBlur}
+            error={fieldState.error?.message}
+          />
+        )}
       />
     </ActDialog>
   );

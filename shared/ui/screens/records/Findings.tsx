@@ -26,7 +26,12 @@ export function Findings({ record }: { record: RecordView }) {
               const seq = entries.find((e) => e.id === f.entry)?.seq ?? 0;
               return (
                 <View key={f.id} role="listitem" style={{ borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
-                  <Pressable role="button" aria-label={`Finding, ${f.grade}, on entry ${seq}: ${f.text}`} onPress={() => goToEntry(f.entry)} style={{ gap: space.xs, paddingVertical: space.m }}>
+                  <Pressable
+                    role="button"
+                    aria-label={`Finding, ${f.grade}, on entry ${seq}: ${f.text}`}
+                    onPress={() => goToEntry(f.entry)}
+                    style={{ gap: space.xs, paddingVertical: space.m }}
+                  >
                     <View style={{ flexDirection: 'row', gap: space.m, alignItems: 'center' }}>
                       <Tag word={f.grade} kind={f.grade === 'note' ? 'plain' : 'look'} />
                       <BodyText size="small" tone="soft">{`entry ${seq}, ${personName(people, f.by)}, ${dateTimeWords(f.at)}`}</BodyText>
@@ -42,7 +47,15 @@ export function Findings({ record }: { record: RecordView }) {
       {returned.length > 0 ? (
         <Section title="Questions and answers" look="label">
           {returned.map((entry) => (
-            <View key={entry.id} style={{ borderLeftWidth: line.heavy + 1, borderLeftColor: entry.kind === 'returned' ? colors.brass : colors.rule, paddingLeft: space.m, gap: space.xs }}>
+            <View
+              key={entry.id}
+              style={{
+                borderLeftWidth: line.heavy + 1,
+                borderLeftColor: entry.kind === 'returned' ? colors.brass : colors.rule,
+                paddingLeft: space.m,
+                gap: space.xs,
+              }}
+            >
               <BodyText size="small" tone="soft">{`${personName(people, entry.actor)}, ${dateTimeWords(entry.at)}`}</BodyText>
               {textsOf(entry.body).map((words) => (
                 <BodyText key={words}>{words}</BodyText>

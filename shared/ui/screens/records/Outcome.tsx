@@ -27,7 +27,16 @@ export function Outcome({ record: { run, people, entries }, end }: Props) {
     { name: 'Closed', value: run.closedAt ? dateTimeWords(run.closedAt) : 'not yet' },
     ...(end?.replace ? [{ name: 'Replace', value: end.replace }] : []),
     ...(end?.retest ? [{ name: 'Test again', value: end.retest }] : []),
-    ...(released ? [{ name: 'Release', value: voided ? `Given ${dateTimeWords(released.at)}, void since ${dateTimeWords(voided.at)}` : `Supply proven, may be refitted: given ${dateTimeWords(released.at)}` }] : []),
+    ...(released
+      ? [
+          {
+            name: 'Release',
+            value: voided
+              ? `Given ${dateTimeWords(released.at)}, void since ${dateTimeWords(voided.at)}`
+              : `Supply proven, may be refitted: given ${dateTimeWords(released.at)}`,
+          },
+        ]
+      : []),
   ];
   return (
     <View style={{ gap: space.xs }}>

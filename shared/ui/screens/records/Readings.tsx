@@ -47,11 +47,22 @@ export function Readings({ lines }: { lines: readonly ReadingLine[] }) {
   const wide = isWide(useWindowDimensions().width);
   const against = lines.filter((l) => !l.plain);
   const dead = lines.filter((l) => l.plain);
-  const to = (line: ReadingLine) => ({ name: `Entry ${line.seq}, ${line.label}, ${line.reading}, ${line.verdict}`, onPress: () => goToEntry(line.id) });
+  const to = (line: ReadingLine) => ({
+    name: `Entry ${line.seq}, ${line.label}, ${line.reading}, ${line.verdict}`,
+    onPress: () => goToEntry(line.id),
+  });
   return (
     <>
       <Section title="Readings">
-        <DataTable caption="Readings against limits" columns={drawn} rows={against} rowKey={(l) => l.id} rowTarget={to} blocks={!wide} empty={<BodyText tone="soft">No reading was taken against a limit.</BodyText>} />
+        <DataTable
+          caption="Readings against limits"
+          columns={drawn}
+          rows={against}
+          rowKey={(l) => l.id}
+          rowTarget={to}
+          blocks={!wide}
+          empty={<BodyText tone="soft">No reading was taken against a limit.</BodyText>}
+        />
       </Section>
       {dead.length > 0 ? (
         <Section title="Discharging and proving dead">
@@ -65,5 +76,14 @@ export function Readings({ lines }: { lines: readonly ReadingLine[] }) {
 function Scale({ line }: { line: ReadingLine }) {
   const { factor, unit } = scaleOf(line);
   const by = (n: number | null) => (n === null ? null : n * factor);
-  return <ReadingScale value={by(line.needle)} low={by(line.low)} high={by(line.high)} guard={line.guard * factor} nominal={by(line.nominal)} unit={unit} />;
+  return (
+    <ReadingScale
+      value={by(line.needle)}
+      low={by(line.low)}
+      high={by(line.high)}
+      guard={line.guard * factor}
+      nominal={by(line.nominal)}
+      unit={unit}
+    />
+  );
 }

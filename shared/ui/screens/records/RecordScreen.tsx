@@ -16,9 +16,20 @@ export function RecordScreen({ recordId }: { recordId: string }) {
   const replay = useReplay(record.data);
   const shown = record.data;
   return (
-    <Page title={shown ? outcome(shown, replay?.end?.end?.title) : 'Record'} eyebrow={shown ? belongsTo(shown) : undefined} aside={shown ? <ChainVerdict record={shown} /> : null} maxWidth={1440}>
+    <Page
+      title={shown ? outcome(shown, replay?.end?.end?.title) : 'Record'}
+      eyebrow={shown ? belongsTo(shown) : undefined}
+      aside={shown ? <ChainVerdict record={shown} /> : null}
+      maxWidth={1440}
+    >
       <Fetched query={record} what="the record">
-        {(data) => (me.data && replay ? <RecordSheet record={data} replay={replay} me={me.data} /> : <BodyText tone="soft">Reading the entries …</BodyText>)}
+        {(data) =>
+          me.data && replay ? (
+            <RecordSheet record={data} replay={replay} me={me.data} />
+          ) : (
+            <BodyText tone="soft">Reading the entries …</BodyText>
+          )
+        }
       </Fetched>
     </Page>
   );

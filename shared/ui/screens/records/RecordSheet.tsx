@@ -44,7 +44,11 @@ export function RecordSheet({ record, replay, me }: Props) {
         side={
           <>
             <Outcome record={record} end={replay.end?.end ?? null} />
-            {replay.broken ? <Notice title={`Entry ${replay.broken.seq} cannot be played again`}>{`${replay.broken.say} From there on only what the entries state is shown.`}</Notice> : null}
+            {replay.broken ? (
+              <Notice
+                title={`Entry ${replay.broken.seq} cannot be played again`}
+              >{`${replay.broken.say} From there on only what the entries state is shown.`}</Notice>
+            ) : null}
             <Section title="Look at these first" look="label">
               <Exceptions exceptions={exceptions} />
             </Section>
@@ -57,7 +61,10 @@ export function RecordSheet({ record, replay, me }: Props) {
         }
       >
         {power.from !== null && power.to !== null ? (
-          <Section title={`Power at the bench, ${dateWords(power.from)}, ${clockWords(power.from)} to ${clockWords(power.to)}`} look="label">
+          <Section
+            title={`Power at the bench, ${dateWords(power.from)}, ${clockWords(power.from)} to ${clockWords(power.to)}`}
+            look="label"
+          >
             <PowerStrip title={`Power at the bench, ${clockWords(power.from)} to ${clockWords(power.to)}`} segments={power.segments} />
           </Section>
         ) : null}

@@ -31,7 +31,12 @@ export function RecordsScreen({ state }: Props) {
   return (
     <Page title="Records">
       <View style={{ maxWidth: 340 }}>
-        <Select label="Show" options={STATE_FILTERS} value={chosen ?? 'all'} onChange={(value) => router.setParams({ state: value === 'all' ? '' : value })} />
+        <Select
+          label="Show"
+          options={STATE_FILTERS}
+          value={chosen ?? 'all'}
+          onChange={(value) => router.setParams({ state: value === 'all' ? '' : value })}
+        />
       </View>
       <Fetched query={records} what="the records">
         {({ records: rows }) => (
@@ -39,10 +44,16 @@ export function RecordsScreen({ state }: Props) {
             caption="Records"
             rows={rows}
             rowKey={(r) => r.id}
-            rowTarget={(r) => ({ name: `${r.machine.name} ${r.machine.serial}, ${dateTimeWords(r.startedAt)}, ${RUN_STATE_WORDS[r.state]}`, href: `/records/${r.id}` })}
+            rowTarget={(r) => ({
+              name: `${r.machine.name} ${r.machine.serial}, ${dateTimeWords(r.startedAt)}, ${RUN_STATE_WORDS[r.state]}`,
+              href: `/records/${r.id}`,
+            })}
             empty={
               chosen === null ? (
-                <EmptyState title="No records yet" text="A run that is closed at the bench becomes a record here: what was checked, with which meter, at what reading, and who countersigned." />
+                <EmptyState
+                  title="No records yet"
+                  text="A run that is closed at the bench becomes a record here: what was checked, with which meter, at what reading, and who countersigned."
+                />
               ) : (
                 <EmptyState title={`No record is ${RUN_STATE_WORDS[chosen]}`} text="Choose another state above to see the others." />
               )
@@ -62,10 +73,20 @@ export function RecordsScreen({ state }: Props) {
                 ),
               },
               { key: 'tree', title: 'Tree', grow: 2.4, cell: (r) => <BodyText>{`${r.tree.title}, version ${r.tree.version}`}</BodyText> },
-              { key: 'restorer', title: 'Restorer', grow: 0.9, cell: (r) => <Person code={personCode(people, r.restorer)} name={personName(people, r.restorer)} /> },
+              {
+                key: 'restorer',
+                title: 'Restorer',
+                grow: 0.9,
+                cell: (r) => <Person code={personCode(people, r.restorer)} name={personName(people, r.restorer)} />,
+              },
               { key: 'when', title: 'When', grow: 1.5, cell: (r) => <Mono>{dateTimeWords(r.startedAt)}</Mono> },
               { key: 'outcome', title: 'Outcome', grow: 1.3, cell: (r) => <BodyText>{endingWords(r.ended)}</BodyText> },
-              { key: 'state', title: 'State', grow: 1.1, cell: (r) => <Tag word={RUN_STATE_WORDS[r.state]} kind={RUN_STATE_TAGS[r.state]} /> },
+              {
+                key: 'state',
+                title: 'State',
+                grow: 1.1,
+                cell: (r) => <Tag word={RUN_STATE_WORDS[r.state]} kind={RUN_STATE_TAGS[r.state]} />,
+              },
             ]}
           />
         )}

@@ -28,12 +28,29 @@ export function ReplyDialog({ record, onClose }: Props) {
   });
   const asked = [...record.entries].reverse().find((e) => e.kind === 'returned')?.body['questions'];
   return (
-    <ActDialog title="Answer and submit again" act="Submit again" busy={formState.isSubmitting} problem={problem} onAct={() => void act()} onClose={onClose}>
+    <ActDialog
+      title="Answer and submit again"
+      act="Submit again"
+      busy={formState.isSubmitting}
+      problem={problem}
+      onAct={() => void act()}
+      onClose={onClose}
+    >
       <View>{Array.isArray(asked) ? asked.map((q, i) => <BodyText key={String(q)}>{`${i + 1}. ${String(q)}`}</BodyText>) : null}</View>
       <Controller
         control={control}
         name="text"
-        render={({ field, fieldState }) => <Field label="Your answer" required lines={5} value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} />}
+        render={({ field, fieldState }) => (
+          <Field
+            label="Your answer"
+            required
+            lines={5}
+            value={field.value}
+            onChangeText={field.onChange}
+            onBlur={field.onBlur}
+            error={fieldState.error?.message}
+          />
+        )}
       />
     </ActDialog>
   );

@@ -13,7 +13,12 @@ import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
 
 const MOST = 20;
-const formSchema = z.object({ questions: z.array(z.object({ text: sentence(500) })).min(1).max(MOST) });
+const formSchema = z.object({
+  questions: z
+    .array(z.object({ text: sentence(500) }))
+    .min(1)
+    .max(MOST),
+});
 
 interface Props {
   record: RecordView;
@@ -30,18 +35,37 @@ export function ReturnDialog({ record, onClose }: Props) {
     await send(() => returnRecord({ id, questions: questions.map((q) => q.text) }));
   });
   return (
-    <ActDialog title="Return with questions" act="Return it" busy={formState.isSubmitting} problem={problem} onAct={() => void act()} onClose={onClose}>
+    <ActDialog
+      title="Return with questions"
+      act="Return it"
+      busy={formState.isSubmitting}
+      problem={problem}
+      onAct={() => void act()}
+      onClose={onClose}
+    >
       <BodyText>The restorer answers, and the record is under review again. Nothing that stands in it is changed.</BodyText>
       {fields.map((row, at) => (
         <Controller
           key={row.id}
           control={control}
           name={`questions.${at}.text`}
-          render={({ field, fieldState }) => <Field label={`Question ${at + 1}`} required lines={2} value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} />}
+          render={({ field, fieldState }) => (
+            <Field
+              label={`Question ${at + 1}`}
+              required
+              lines={2}
+              value={field.value}
+              onChangeText={field.onChange}
+              onBlur={field.onBlur}
+              error={fieldState.error?.message}
+            />
+          )}
         />
       ))}
       {fields.length < MOST ? <Button kind="quiet" icon="plus" label="Another question" onPress={() => append({ text: '' })} /> : null}
-      {fields.length > 1 ? <Button kind="quiet" label={`Take out question ${fields.length}`} onPress={() => remove(fields.length - 1)} /> : null}
+      {fields.length > 1 ? (
+        <Button kind="quiet" label={`Take out question ${fields.length}`} onPress={() => remove(fields.length - 1)} />
+      ) : null}
     </ActDialog>
   );
 }

@@ -27,7 +27,11 @@ export function ReviewActions({ record, offers }: Props) {
   const close = () => setOpen(null);
   return (
     <Section title="Review" look="label">
-      {offers.find ? <BodyText size="small" tone="soft">A finding is made at its entry, below.</BodyText> : null}
+      {offers.find ? (
+        <BodyText size="small" tone="soft">
+          A finding is made at its entry, below.
+        </BodyText>
+      ) : null}
       {offers.why.map((why) => (
         <Notice key={why} kind="note">
           {why}

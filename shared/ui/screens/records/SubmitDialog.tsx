@@ -27,12 +27,28 @@ export function SubmitDialog({ record, onClose }: Props) {
     await send(() => submit(remark === '' ? { id } : { id, remark }));
   });
   return (
-    <ActDialog title="Submit for review" act="Submit" busy={formState.isSubmitting} problem={problem} onAct={() => void act()} onClose={onClose}>
+    <ActDialog
+      title="Submit for review"
+      act="Submit"
+      busy={formState.isSubmitting}
+      problem={problem}
+      onAct={() => void act()}
+      onClose={onClose}
+    >
       <BodyText>A reviewer who took no part in the run reads it, and accepts it or returns it with questions.</BodyText>
       <Controller
         control={control}
         name="remark"
-        render={({ field, fieldState }) => <Field label="Remark" lines={3} value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} />}
+        render={({ field, fieldState }) => (
+          <Field
+            label="Remark"
+            lines={3}
+            value={field.value}
+            onChangeText={field.onChange}
+            onBlur={field.onBlur}
+            error={fieldState.error?.message}
+          />
+        )}
       />
     </ActDialog>
   );

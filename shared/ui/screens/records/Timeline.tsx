@@ -22,7 +22,10 @@ interface Props {
 /** Hung on the studs of the tree's steps; the edge of each row carries the power that stood at the bench. */
 export function Timeline({ record, replay, readings, onRemark }: Props) {
   const groups = useMemo(() => timelineOf(replay.entries), [replay]);
-  const known = useMemo(() => ({ entries: record.entries, instruments: record.instruments, readings: new Map(readings.map((line) => [line.id, line])) }), [record, readings]);
+  const known = useMemo(
+    () => ({ entries: record.entries, instruments: record.instruments, readings: new Map(readings.map((line) => [line.id, line])) }),
+    [record, readings],
+  );
   return (
     <Section title="Entries">
       <View>
@@ -31,7 +34,14 @@ export function Timeline({ record, replay, readings, onRemark }: Props) {
             <Heading level={3}>{group.title}</Heading>
             <View role="list" aria-label={`Entries of ${group.title}`}>
               {group.entries.map((replayed) => (
-                <TimelineEntry key={replayed.entry.id} replayed={replayed} people={record.people} known={known} findings={record.findings.filter((f) => f.entry === replayed.entry.id)} onRemark={onRemark} />
+                <TimelineEntry
+                  key={replayed.entry.id}
+                  replayed={replayed}
+                  people={record.people}
+                  known={known}
+                  findings={record.findings.filter((f) => f.entry === replayed.entry.id)}
+                  onRemark={onRemark}
+                />
               ))}
             </View>
           </StudRail>

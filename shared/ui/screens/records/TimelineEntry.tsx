@@ -29,7 +29,12 @@ export function TimelineEntry({ replayed, people, known, findings, onRemark }: P
   const { entry, after, event } = replayed;
   const { what, detail } = entryWords(replayed, known);
   return (
-    <View role="listitem" nativeID={entryAnchor(entry.id)} tabIndex={-1} style={{ flexDirection: 'row', gap: space.m, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
+    <View
+      role="listitem"
+      nativeID={entryAnchor(entry.id)}
+      tabIndex={-1}
+      style={{ flexDirection: 'row', gap: space.m, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}
+    >
       <View style={{ width: 10, overflow: 'hidden' }} aria-hidden>
         {after && event ? <PowerPattern state={after.band} width="100%" height="100%" /> : null}
       </View>

@@ -16,11 +16,21 @@ interface Known {
   instruments: readonly Instrument[];
 }
 
-const WORDS: Readonly<Record<string, string>> = { done: 'done', 'not-sure': 'not sure', cannot: 'cannot', on: 'it is on', out: 'out', 'not-out': 'not out' };
+const WORDS: Readonly<Record<string, string>> = {
+  done: 'done',
+  'not-sure': 'not sure',
+  cannot: 'cannot',
+  on: 'it is on',
+  out: 'out',
+  'not-out': 'not out',
+};
 
 /** What was done, told from the machine's event where there is one and from the entry's body otherwise. */
 export function entryWords({ entry, event, before }: ReplayedEntry, known: Known): EntryWords {
-  const says = (what: string, detail: unknown = null): EntryWords => ({ what, detail: typeof detail === 'string' && detail !== '' ? detail : null });
+  const says = (what: string, detail: unknown = null): EntryWords => ({
+    what,
+    detail: typeof detail === 'string' && detail !== '' ? detail : null,
+  });
   const { body } = entry;
   switch (entry.kind) {
     case 'opened':
@@ -48,7 +58,10 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'submitted':
       return says('Submitted for review', body['remark']);
     case 'returned':
-      return says('Returned with questions', Array.isArray(body['questions']) ? body['questions'].map((q, i) => `${i + 1}. ${String(q)}`).join('\n') : null);
+      return says(
+        'Returned with questions',
+        Array.isArray(body['questions']) ? body['questions'].map((q, i) => `${i + 1}. ${String(q)}`).join('\n') : null,
+      );
     case 'reply':
       return says('Answered, under review again', body['text']);
     case 'finding':
@@ -74,7 +87,19 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'conflict':
     case 'correction':
     case 'addendum':
-      return says({ part: 'Part replaced', tag: 'Tag written', deviation: 'Deviation', 'handed-over': 'Handed over', 'taken-over': 'Taken over', conflict: 'Conflict', correction: 'Reading corrected', addendum: 'Addendum' }[entry.kind], body['text']);
+      return says(
+        {
+          part: 'Part replaced',
+          tag: 'Tag written',
+          deviation: 'Deviation',
+          'handed-over': 'Handed over',
+          'taken-over': 'Taken over',
+          conflict: 'Conflict',
+          correction: 'Reading corrected',
+          addendum: 'Addendum',
+        }[entry.kind],
+        body['text'],
+      );
   }
 }
 
@@ -86,7 +111,10 @@ function reading(entry: RecordEntry, { readings, instruments }: Known): EntryWor
   const line = readings.get(entry.id);
   if (line === undefined) return null;
   const meter = instruments.find((i) => i.id === line.instrument)?.name;
-  return { what: `${line.label}: ${line.reading}, ${line.verdict}`, detail: [`typed “${line.typed}”`, ...(meter ? [meter] : [])].join(', ') };
+  return {
+    what: `${line.label}: ${line.reading}, ${line.verdict}`,
+    detail: [`typed “${line.typed}”`, ...(meter ? [meter] : [])].join(', '),
+  };
 }
 
 function answer({ event, before }: ReplayedEntry): EntryWords | null {
@@ -95,7 +123,11 @@ function answer({ event, before }: ReplayedEntry): EntryWords | null {
     const word = row?.ask === 'word' ? row.words.find((w) => w.word === event.word)?.label : undefined;
     return { what: `${row?.label ?? event.row}: ${word ?? WORDS[event.word] ?? event.word}`, detail: null };
   }
-  if (event?.type === 'ANSWER') return { what: before?.answers.find((a) => a.answer === event.answer)?.label ?? WORDS[event.answer] ?? event.answer, detail: event.note ?? null };
+  if (event?.type === 'ANSWER')
+    return {
+      what: before?.answers.find((a) => a.answer === event.answer)?.label ?? WORDS[event.answer] ?? event.answer,
+      detail: event.note ?? null,
+    };
   if (event?.type === 'SECOND_PRESENT') return { what: 'Second person present', detail: null };
   return null;
 }

@@ -26,7 +26,11 @@ const ORDER: readonly ExceptionKind[] = ['stopped', 'out', 'hold-refused', 'clos
  * The exceptions of a record, the gravest kind first, in the order of the entries within a kind. Neighbours of one kind that
  * say the same are told once, with their number.
  */
-export function exceptionsOf(entries: readonly ReplayedEntry[], instruments: readonly Instrument[], settings: Pick<Settings, 'deadLapseMinutes'>): RecordException[] {
+export function exceptionsOf(
+  entries: readonly ReplayedEntry[],
+  instruments: readonly Instrument[],
+  settings: Pick<Settings, 'deadLapseMinutes'>,
+): RecordException[] {
   const found = [...readings(readingsOf(entries), instruments), ...words(entries, settings), ...hurried(entries)];
   return found.sort((a, b) => ORDER.indexOf(a.kind) - ORDER.indexOf(b.kind) || a.seq - b.seq);
 }
@@ -35,12 +39,20 @@ function readings(lines: readonly ReadingLine[], instruments: readonly Instrumen
   const found: RecordException[] = [];
   for (const line of lines) {
     const at = { entry: line.id, seq: line.seq };
-    if (line.mark === 'out' || line.mark === 'close') found.push({ ...at, kind: line.mark, title: `${line.label}: ${line.verdict}`, detail: `${line.reading}${marginWords(line)}` });
+    if (line.mark === 'out' || line.mark === 'close')
+      found.push({ ...at, kind: line.mark, title: `${line.label}: ${line.verdict}`, detail: `${line.reading}${marginWords(line)}` });
   }
   for (const instrument of instruments) {
     const late = lines.filter((line) => line.instrument === instrument.id && isOutOfDate(line, [instrument]));
     const first = late[0];
-    if (first) found.push({ kind: 'instrument', entry: first.id, seq: first.seq, title: `${instrument.name} was out of date`, detail: `calibrated until ${instrument.calibratedUntil}; ${late.length} ${late.length === 1 ? 'reading' : 'readings'}` });
+    if (first)
+      found.push({
+        kind: 'instrument',
+        entry: first.id,
+        seq: first.seq,
+        title: `${instrument.name} was out of date`,
+        detail: `calibrated until ${instrument.calibratedUntil}; ${late.length} ${late.length === 1 ? 'reading' : 'readings'}`,
+      });
   }
   return found;
 }
@@ -64,17 +76,42 @@ function words(entries: readonly ReplayedEntry[], { deadLapseMinutes }: Pick<Set
       case 'stopped':
         return [{ ...at, kind: 'stopped', title: event?.type === 'ABORT' ? 'Broken off' : 'Stop pressed', detail: `at “${place}”` }];
       case 'hold-refused':
-        return [{ ...at, kind: 'hold-refused', title: 'Hold refused', detail: event?.type === 'HOLD_REFUSED' ? `“${event.reason}”` : place }];
+        return [
+          { ...at, kind: 'hold-refused', title: 'Hold refused', detail: event?.type === 'HOLD_REFUSED' ? `“${event.reason}”` : place },
+        ];
       case 'lapsed':
         // time alone that changes nothing is no lapse
         if (event?.type === 'TICK' && before?.band === after?.band) return [];
-        return [{ ...at, kind: 'lapsed', title: event?.type === 'RESTART' ? 'The page was loaded anew' : '“Proved dead” lapsed', detail: event?.type === 'RESTART' ? `at “${place}”; everything proved was taken back` : `after ${deadLapseMinutes} min, at “${place}”` }];
+        return [
+          {
+            ...at,
+            kind: 'lapsed',
+            title: event?.type === 'RESTART' ? 'The page was loaded anew' : '“Proved dead” lapsed',
+            detail:
+              event?.type === 'RESTART'
+                ? `at “${place}”; everything proved was taken back`
+                : `after ${deadLapseMinutes} min, at “${place}”`,
+          },
+        ];
       case 'deviation':
       case 'conflict':
       case 'correction':
       case 'handed-over':
       case 'taken-over':
-        return [{ ...at, kind: 'other', title: { deviation: 'Deviation', conflict: 'Conflict', correction: 'Reading corrected', 'handed-over': 'Handed over', 'taken-over': 'Taken over' }[entry.kind], detail: `at “${place}”` }];
+        return [
+          {
+            ...at,
+            kind: 'other',
+            title: {
+              deviation: 'Deviation',
+              conflict: 'Conflict',
+              correction: 'Reading corrected',
+              'handed-over': 'Handed over',
+              'taken-over': 'Taken over',
+            }[entry.kind],
+            detail: `at “${place}”`,
+          },
+        ];
       default: {
         const word = event?.type === 'ROW' ? event.word : event?.type === 'ANSWER' ? event.answer : null;
         const said = word === null ? undefined : UNSURE[word];
@@ -106,7 +143,17 @@ function hurried(entries: readonly ReplayedEntry[]): RecordException[] {
       open.soonestMs = Math.min(open.soonestMs, ms);
       return;
     }
-    found.push({ kind: 'hurried', entry: here.entry.id, seq: here.entry.seq, title: '', detail: '', count: 1, last: i, place, soonestMs: ms });
+    found.push({
+      kind: 'hurried',
+      entry: here.entry.id,
+      seq: here.entry.seq,
+      title: '',
+      detail: '',
+      count: 1,
+      last: i,
+      place,
+      soonestMs: ms,
+    });
   });
   return found.map(({ count, last: _, place, soonestMs, ...rest }) => ({
     ...rest,

@@ -39,7 +39,12 @@ export function eventOf(entry: RecordEntry): MachineEvent | null {
 export function replayRecord({ start, tree, callees, profile, settings, entries }: Replayable): Replay {
   const compiled = compile({ tree, callees, profile, settings });
   const bare = (): ReplayedEntry[] => entries.map((entry) => ({ entry, event: eventOf(entry), before: null, after: null }));
-  if (!compiled.ok) return { entries: bare(), broken: { seq: 1, say: `The tree cannot be played with this profile: ${compiled.faults[0]?.message ?? 'it does not hold'}.` }, end: null };
+  if (!compiled.ok)
+    return {
+      entries: bare(),
+      broken: { seq: 1, say: `The tree cannot be played with this profile: ${compiled.faults[0]?.message ?? 'it does not hold'}.` },
+      end: null,
+    };
   const { program } = compiled;
   let state: RunState = startRun(program, start);
   let seen = view(program, state);

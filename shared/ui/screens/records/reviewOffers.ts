@@ -14,7 +14,10 @@ export interface ReviewOffers {
 }
 
 /** From the server's word on what may be done, the state of the record and the person's part in it. */
-export function reviewOffers({ may, run, entries }: Pick<RecordView, 'may' | 'run' | 'entries'>, { person, roles }: Pick<Me, 'person' | 'roles'>): ReviewOffers {
+export function reviewOffers(
+  { may, run, entries }: Pick<RecordView, 'may' | 'run' | 'entries'>,
+  { person, roles }: Pick<Me, 'person' | 'roles'>,
+): ReviewOffers {
   return { ...may, why: whyNot({ may, run, entries }, person.id, roles) };
 }
 
@@ -22,7 +25,9 @@ function whyNot({ may, run, entries }: Pick<RecordView, 'may' | 'run' | 'entries
   if (run.state === 'accepted') return ['This record is accepted. Nothing in it can be changed.'];
   if (run.restorer === me) {
     if (run.state === 'submitted') return ['This is your own run: another person reviews it. It waits for a reviewer.'];
-    return may.submit || may.reply ? ['This is your own run: another person reviews it.'] : ['This is your own run, but your roles no longer let you submit it. Ask the keeper of the workshop.'];
+    return may.submit || may.reply
+      ? ['This is your own run: another person reviews it.']
+      : ['This is your own run, but your roles no longer let you submit it. Ask the keeper of the workshop.'];
   }
   if (!roles.includes('reviewer')) return ['Only a reviewer can remark on, return or accept a record.'];
   if (run.state === 'closed') return ['Not submitted for review yet: its restorer does that.'];

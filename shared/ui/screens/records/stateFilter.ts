@@ -12,4 +12,10 @@ export function recordStateOf(asked: string | undefined): RecordState | null {
   return STATES.find((state) => state === asked) ?? null;
 }
 
-export const STATE_FILTERS = [{ value: 'all', label: 'All records' }, ...STATES.map((state) => ({ value: state, label: `${RUN_STATE_WORDS[state][0]?.toUpperCase() ?? ''}${RUN_STATE_WORDS[state].slice(1)}` }))];
+export const STATE_FILTERS = [
+  { value: 'all', label: 'All records' },
+  ...STATES.map((state) => ({
+    value: state,
+    label: `${RUN_STATE_WORDS[state][0]?.toUpperCase() ?? ''}${RUN_STATE_WORDS[state].slice(1)}`,
+  })),
+];

@@ -29,7 +29,11 @@ const COUNTED: readonly { kinds: readonly EntryKind[]; one: string; many: string
 ];
 
 /** In the order in which the people first appear. */
-export function whoDidWhat(entries: readonly ReplayedEntry[], readings: readonly ReadingLine[], instruments: readonly Instrument[]): PersonsPart[] {
+export function whoDidWhat(
+  entries: readonly ReplayedEntry[],
+  readings: readonly ReadingLine[],
+  instruments: readonly Instrument[],
+): PersonsPart[] {
   const people = [...new Set(entries.map(({ entry }) => entry.actor))];
   return people.map((person) => {
     const own = entries.filter(({ entry }) => entry.actor === person);
@@ -40,6 +44,12 @@ export function whoDidWhat(entries: readonly ReplayedEntry[], readings: readonly
     const ids = new Set(own.map(({ entry }) => entry.id));
     const used = new Set(readings.flatMap((line) => (ids.has(line.id) && line.instrument !== null ? [line.instrument] : [])));
     const names = instruments.filter((i) => used.has(i.id)).map((i) => `${i.name}, calibrated until ${i.calibratedUntil}`);
-    return { person, did: did.join(', ') || 'opened the record', from: own[0]?.entry.at ?? '', to: own.at(-1)?.entry.at ?? '', with: names.join('; ') || 'no instrument' };
+    return {
+      person,
+      did: did.join(', ') || 'opened the record',
+      from: own[0]?.entry.at ?? '',
+      to: own.at(-1)?.entry.at ?? '',
+      with: names.join('; ') || 'no instrument',
+    };
   });
 }

@@ -18,11 +18,23 @@ export function FactRows({ caption, rows }: { caption: string; rows: readonly Fa
   return (
     <View role="list" aria-label={caption} style={{ alignSelf: 'stretch' }}>
       {rows.map(({ name, value }) => (
-        <View key={name} role="listitem" style={{ flexDirection: 'row', gap: space.m, paddingVertical: space.s, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
+        <View
+          key={name}
+          role="listitem"
+          style={{
+            flexDirection: 'row',
+            gap: space.m,
+            paddingVertical: space.s,
+            borderBottomWidth: line.hair,
+            borderBottomColor: colors.rule,
+          }}
+        >
           <View style={{ flexGrow: 2, flexShrink: 1, flexBasis: 0, minWidth: 0 }}>
             <BodyText tone="soft">{name}</BodyText>
           </View>
-          <View style={{ flexGrow: 3, flexShrink: 1, flexBasis: 0, minWidth: 0 }}>{typeof value === 'string' ? <BodyText>{value}</BodyText> : value}</View>
+          <View style={{ flexGrow: 3, flexShrink: 1, flexBasis: 0, minWidth: 0 }}>
+            {typeof value === 'string' ? <BodyText>{value}</BodyText> : value}
+          </View>
         </View>
       ))}
     </View>

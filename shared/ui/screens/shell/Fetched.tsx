@@ -27,7 +27,9 @@ interface Props<T> {
 export function whatToDo({ code, retryable }: Pick<ClientProblem, 'code' | 'retryable'>): string {
   if (code === 'no-network') return 'Check the network, then try again. What is kept on this device stays.';
   if (code === 'not-found') return 'It may have been entered in another workshop, or the address is wrong.';
-  return retryable ? 'Try again in a moment. Nothing was changed.' : 'Nothing was changed. Load the page again; if it stays so, tell the keeper of the workshop.';
+  return retryable
+    ? 'Try again in a moment. Nothing was changed.'
+    : 'Nothing was changed. Load the page again; if it stays so, tell the keeper of the workshop.';
 }
 
 /** An answer that has been had once stays in sight when fetching it again fails; an ended session leads to the door. */
@@ -45,5 +47,11 @@ export function Fetched<T>({ query, what, children }: Props<T>) {
     );
   }
   if (problem === null) return <Loading what={what} />;
-  return <ErrorState happened={problem.say} todo={whatToDo(problem)} onRetry={problem.code === 'not-found' ? undefined : () => void query.refetch()} />;
+  return (
+    <ErrorState
+      happened={problem.say}
+      todo={whatToDo(problem)}
+      onRetry={problem.code === 'not-found' ? undefined : () => void query.refetch()}
+    />
+  );
 }

@@ -22,7 +22,11 @@ export function SignedInScreen() {
   if (me.data === undefined) {
     return (
       <Page>
-        {me.error ? <ErrorState happened={me.error.problem.say} todo={whatToDo(me.error.problem)} onRetry={() => void me.refetch()} /> : <Loading what="the workshop" />}
+        {me.error ? (
+          <ErrorState happened={me.error.problem.say} todo={whatToDo(me.error.problem)} onRetry={() => void me.refetch()} />
+        ) : (
+          <Loading what="the workshop" />
+        )}
       </Page>
     );
   }

@@ -33,7 +33,10 @@ export function SignInScreen({ from, expired }: Props) {
   const router = useRouter();
   const { signIn } = useSession();
   const [problem, setProblem] = useState<SignInProblem | null>(null);
-  const { control, handleSubmit, formState, setFocus } = useForm({ resolver: zodResolver(formSchema), defaultValues: { mail: '', password: '' } });
+  const { control, handleSubmit, formState, setFocus } = useForm({
+    resolver: zodResolver(formSchema),
+    defaultValues: { mail: '', password: '' },
+  });
   const submit = handleSubmit(async ({ mail, password }) => {
     setProblem(null);
     const answer = await signIn({ mail, password });
@@ -46,8 +49,14 @@ export function SignInScreen({ from, expired }: Props) {
   });
   return (
     <Page maxWidth={520} title="Lampstep" eyebrow="Sign in">
-      <BodyText size="instruction">Leads a restorer, one safe step at a time, through bringing long-dormant electronics back to power.</BodyText>
-      {expired && problem === null ? <Notice live>Your session has run out. Sign in again, and you come back to where you were. Nothing that you entered is lost.</Notice> : null}
+      <BodyText size="instruction">
+        Leads a restorer, one safe step at a time, through bringing long-dormant electronics back to power.
+      </BodyText>
+      {expired && problem === null ? (
+        <Notice live>
+          Your session has run out. Sign in again, and you come back to where you were. Nothing that you entered is lost.
+        </Notice>
+      ) : null}
       {problem ? (
         <Notice title={problem.happened} live>
           {problem.todo}
@@ -58,17 +67,42 @@ export function SignInScreen({ from, expired }: Props) {
           control={control}
           name="mail"
           render={({ field, fieldState }) => (
-            <Field label="Mail address" required value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} onSubmit={() => void submit()} error={fieldState.error?.message} inputMode="email" autoComplete="username" />
+            <Field
+              label="Mail address"
+              required
+              value={field.value}
+              onChangeText={field.onChange}
+              onBlur={field.onBlur}
+              onSubmit={() => void submit()}
+              error={fieldState.error?.message}
+              inputMode="email"
+              autoComplete="username"
+            />
           )}
         />
         <Controller
           control={control}
           name="password"
           render={({ field, fieldState }) => (
-            <Field label="Password" required secret value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} onSubmit={() => void submit()} error={fieldState.error?.message} autoComplete="current-password" />
+            <Field
+              label="Password"
+              required
+              secret
+              value={field.value}
+              onChangeText={field.onChange}
+              onBlur={field.onBlur}
+              onSubmit={() => void submit()}
+              error={fieldState.error?.message}
+              autoComplete="current-password"
+            />
           )}
         />
-        <BigAnswer kind="primary" label={formState.isSubmitting ? 'Signing in …' : 'Sign in'} disabled={formState.isSubmitting} onPress={() => void submit()} />
+        <BigAnswer
+          kind="primary"
+          label={formState.isSubmitting ? 'Signing in …' : 'Sign in'}
+          disabled={formState.isSubmitting}
+          onPress={() => void submit()}
+        />
       </View>
       <Notice kind="note">{FIRST_CAUTION}</Notice>
     </Page>

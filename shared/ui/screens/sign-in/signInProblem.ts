@@ -12,10 +12,19 @@ export function signInProblem({ code, say, retryable }: Pick<ClientProblem, 'cod
     case 'sign-in-failed':
       return { happened: say, todo: 'Check both and try again. Capital and small letters differ in the password.' };
     case 'too-many':
-      return { happened: say, todo: 'The door stays shut for a while after several wrong passwords. Ask the keeper of the workshop if you have forgotten yours.' };
+      return {
+        happened: say,
+        todo: 'The door stays shut for a while after several wrong passwords. Ask the keeper of the workshop if you have forgotten yours.',
+      };
     case 'no-network':
-      return { happened: 'The server cannot be reached.', todo: 'Check the network, then press “Sign in” again. What you have typed stays.' };
+      return {
+        happened: 'The server cannot be reached.',
+        todo: 'Check the network, then press “Sign in” again. What you have typed stays.',
+      };
     default:
-      return { happened: say, todo: retryable ? 'Try again in a moment.' : 'Load the page again; if it stays so, tell the keeper of the workshop.' };
+      return {
+        happened: say,
+        todo: retryable ? 'Try again in a moment.' : 'Load the page again; if it stays so, tell the keeper of the workshop.',
+      };
   }
 }

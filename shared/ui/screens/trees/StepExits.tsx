@@ -27,7 +27,18 @@ export function StepExits({ tree, callee, step }: Props) {
   return (
     <View role="list" aria-label={`Exits of ${step.title}`}>
       {step.exits.map((exit: Exit) => (
-        <View key={exit.id} role="listitem" style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.m, paddingVertical: space.xs, borderTopWidth: line.hair, borderTopColor: colors.rule }}>
+        <View
+          key={exit.id}
+          role="listitem"
+          style={{
+            flexDirection: 'row',
+            flexWrap: 'wrap',
+            columnGap: space.m,
+            paddingVertical: space.xs,
+            borderTopWidth: line.hair,
+            borderTopColor: colors.rule,
+          }}
+        >
           <View style={{ flexGrow: 2, flexShrink: 1, flexBasis: 150, minWidth: 0 }}>
             <BodyText bold>{exitWords(exit, ends)}</BodyText>
             <BodyText size="small" tone="soft">
@@ -54,7 +65,11 @@ export function StepExits({ tree, callee, step }: Props) {
             {(exit.evidence ?? [])
               .filter((e) => e.says !== 'says-nothing')
               .map((e) => (
-                <BodyText key={e.suspect} size="small" tone="brass">{`${EVIDENCE_SAYS[e.says]} ${tree.suspects.find((s) => s.id === e.suspect)?.part ?? e.suspect}`}</BodyText>
+                <BodyText
+                  key={e.suspect}
+                  size="small"
+                  tone="brass"
+                >{`${EVIDENCE_SAYS[e.says]} ${tree.suspects.find((s) => s.id === e.suspect)?.part ?? e.suspect}`}</BodyText>
               ))}
           </View>
         </View>

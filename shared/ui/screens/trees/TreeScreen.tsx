@@ -25,7 +25,12 @@ export function TreeScreen({ treeId, version }: Props) {
   const versions = trees.data?.trees.find((tree) => tree.id === treeId)?.versions ?? [];
   const shown = versionShown(versions, version);
   return (
-    <Page title={shown?.title ?? 'Fault tree'} eyebrow={shown ? `Fault tree · version ${shown.version} · ${shown.steps} steps` : undefined} aside={shown ? <Tag word={VERSION_STATE_WORDS[shown.state]} kind={VERSION_STATE_TAGS[shown.state]} /> : null} maxWidth={1280}>
+    <Page
+      title={shown?.title ?? 'Fault tree'}
+      eyebrow={shown ? `Fault tree · version ${shown.version} · ${shown.steps} steps` : undefined}
+      aside={shown ? <Tag word={VERSION_STATE_WORDS[shown.state]} kind={VERSION_STATE_TAGS[shown.state]} /> : null}
+      maxWidth={1280}
+    >
       <Fetched query={trees} what="the fault tree">
         {() =>
           shown ? (
@@ -36,7 +41,9 @@ export function TreeScreen({ treeId, version }: Props) {
           ) : (
             <EmptyState
               title={versions.length > 0 ? `No version ${version ?? ''}` : 'No such tree'}
-              text={versions.length > 0 ? 'This tree has no version of that number.' : 'There is no fault tree of that name in this workshop.'}
+              text={
+                versions.length > 0 ? 'This tree has no version of that number.' : 'There is no fault tree of that name in this workshop.'
+              }
               action={<LinkText label="All fault trees" href="/trees" />}
             />
           )
@@ -48,7 +55,9 @@ export function TreeScreen({ treeId, version }: Props) {
 
 function StateNotice({ shown, versions }: { shown: TreeVersion; versions: readonly TreeVersion[] }) {
   const issued = versions.find((v) => v.state === 'issued' && v.version !== shown.version);
-  const instead = issued ? <LinkText label={`Version ${issued.version} is issued`} href={`/trees/${issued.tree}?version=${issued.version}`} /> : null;
+  const instead = issued ? (
+    <LinkText label={`Version ${issued.version} is issued`} href={`/trees/${issued.tree}?version=${issued.version}`} />
+  ) : null;
   if (shown.state === 'withdrawn') {
     return (
       <View style={{ gap: space.s }}>
@@ -60,7 +69,9 @@ function StateNotice({ shown, versions }: { shown: TreeVersion; versions: readon
   if (shown.state === 'draft' || shown.state === 'in-check') {
     return (
       <View style={{ gap: space.s }}>
-        <Notice title={shown.state === 'draft' ? 'Draft' : 'In check'}>Not issued: no run can be started from it until a second senior has checked it.</Notice>
+        <Notice title={shown.state === 'draft' ? 'Draft' : 'In check'}>
+          Not issued: no run can be started from it until a second senior has checked it.
+        </Notice>
         {instead}
       </View>
     );

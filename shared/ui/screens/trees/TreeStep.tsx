@@ -47,7 +47,12 @@ export function TreeStep({ tree, callee, at }: Props) {
             {fact}
           </BodyText>
         ))}
-        {step.kind === 'call' ? <LinkText label={`The called tree: ${callee?.title ?? step.tree}`} href={step.version === null ? `/trees/${step.tree}` : `/trees/${step.tree}?version=${step.version}`} /> : null}
+        {step.kind === 'call' ? (
+          <LinkText
+            label={`The called tree: ${callee?.title ?? step.tree}`}
+            href={step.version === null ? `/trees/${step.tree}` : `/trees/${step.tree}?version=${step.version}`}
+          />
+        ) : null}
         {step.hazards.length > 0 ? (
           <View style={{ gap: space.s }}>
             {step.hazards.map((kind) => (
@@ -71,5 +76,7 @@ export function TreeStep({ tree, callee, at }: Props) {
 
 function headOf(step: Step): string {
   if (step.kind === 'end') return `${KIND_WORDS.end} · ${END_WORDS[step.says]}`;
-  return [KIND_WORDS[step.kind], CONTACT_WORDS[step.contact], ...(step.minutes > 0 ? [`${formatNumber(step.minutes)} min`] : [])].join(' · ');
+  return [KIND_WORDS[step.kind], CONTACT_WORDS[step.contact], ...(step.minutes > 0 ? [`${formatNumber(step.minutes)} min`] : [])].join(
+    ' · ',
+  );
 }

@@ -60,7 +60,12 @@ export function TreeVersionSheet({ version, versions }: Props) {
           <Section title="Steps">
             <View role="list" aria-label="Steps">
               {document.steps.map((step, at) => (
-                <TreeStep key={step.id} tree={document} callee={step.kind === 'call' ? callees.find((tree) => tree.id === step.tree) : undefined} at={at} />
+                <TreeStep
+                  key={step.id}
+                  tree={document}
+                  callee={step.kind === 'call' ? callees.find((tree) => tree.id === step.tree) : undefined}
+                  at={at}
+                />
               ))}
             </View>
           </Section>
@@ -109,8 +114,22 @@ function Suspects({ tree }: { tree: Tree }) {
         columns={[
           { key: 'part', title: 'Part', grow: 2, cell: (s) => s.part },
           { key: 'mode', title: 'Fails by being', grow: 1.2, cell: (s) => <BodyText>{MODE_WORDS[s.mode]}</BodyText> },
-          { key: 'prior', title: 'Before any check', grow: 1.2, cell: (s) => <BodyText>{`${Math.max(1, Math.round((100 * s.prior) / whole))} in 100`}</BodyText> },
-          { key: 'killers', title: 'Known killers', grow: 1.6, cell: (s) => <BodyText tone={s.killedBy.length > 0 ? 'ink' : 'soft'}>{s.killedBy.map((id) => tree.suspects.find((k) => k.id === id)?.part ?? id).join(', ') || 'none'}</BodyText> },
+          {
+            key: 'prior',
+            title: 'Before any check',
+            grow: 1.2,
+            cell: (s) => <BodyText>{`${Math.max(1, Math.round((100 * s.prior) / whole))} in 100`}</BodyText>,
+          },
+          {
+            key: 'killers',
+            title: 'Known killers',
+            grow: 1.6,
+            cell: (s) => (
+              <BodyText tone={s.killedBy.length > 0 ? 'ink' : 'soft'}>
+                {s.killedBy.map((id) => tree.suspects.find((k) => k.id === id)?.part ?? id).join(', ') || 'none'}
+              </BodyText>
+            ),
+          },
         ]}
       />
     </Section>
@@ -124,7 +143,11 @@ function OtherVersions({ version, versions }: Props) {
     <Section title="Other versions" look="label">
       <View>
         {others.map((v) => (
-          <LinkText key={v.version} label={`Version ${v.version}, ${VERSION_STATE_WORDS[v.state]}`} href={`/trees/${v.tree}?version=${v.version}`} />
+          <LinkText
+            key={v.version}
+            label={`Version ${v.version}, ${VERSION_STATE_WORDS[v.state]}`}
+            href={`/trees/${v.tree}?version=${v.version}`}
+          />
         ))}
       </View>
     </Section>

@@ -31,7 +31,11 @@ const columns: Column<TreeVersion>[] = [
   { key: 'version', title: 'Version', grow: 0.7, cell: (v) => <Mono>{v.version}</Mono> },
   { key: 'state', title: 'State', grow: 0.9, cell: (v) => <Tag word={VERSION_STATE_WORDS[v.state]} kind={VERSION_STATE_TAGS[v.state]} /> },
   { key: 'steps', title: 'Steps', grow: 0.6, cell: (v) => <Mono>{v.steps}</Mono> },
-  { key: 'issued', title: 'Issued', cell: (v) => (v.issuedAt ? <Mono>{dateWords(v.issuedAt)}</Mono> : <BodyText tone="soft">not yet</BodyText>) },
+  {
+    key: 'issued',
+    title: 'Issued',
+    cell: (v) => (v.issuedAt ? <Mono>{dateWords(v.issuedAt)}</Mono> : <BodyText tone="soft">not yet</BodyText>),
+  },
 ];
 
 /** One row a tree, in the version that leads it. */
@@ -47,7 +51,12 @@ export function TreesScreen() {
             rows={all.flatMap(({ versions }) => leadingVersion(versions) ?? [])}
             rowKey={(v) => v.tree}
             rowTarget={(v) => ({ name: `${v.title}, version ${v.version}, ${VERSION_STATE_WORDS[v.state]}`, href: `/trees/${v.tree}` })}
-            empty={<EmptyState title="No fault trees yet" text="A senior writes the procedure of the workshop down as a tree; once it is checked and issued it stands here and can be run at the bench." />}
+            empty={
+              <EmptyState
+                title="No fault trees yet"
+                text="A senior writes the procedure of the workshop down as a tree; once it is checked and issued it stands here and can be run at the bench."
+              />
+            }
           />
         )}
       </Fetched>

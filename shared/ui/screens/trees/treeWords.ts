@@ -10,39 +10,108 @@ import type { Unit } from '@/shared/quantity/units';
 import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
 
 export const KIND_WORDS: Readonly<Record<Kind, string>> = {
-  do: 'Do', observe: 'Look', measure: 'Measure', soak: 'Soak', photo: 'Photo', isolate: 'Isolate', discharge: 'Discharge', 'prove-dead': 'Prove dead',
-  'prove-earth': 'Prove earth', 'prove-insulation': 'Prove insulation', 'prove-returns': 'Prove returns', 'prove-trip': 'Prove a trip', 'connect-load': 'Connect load',
-  energise: 'Energise', raise: 'Raise', 'prove-rails': 'Prove rails', work: 'Work', hold: 'Hold point', call: 'Call of a tree', end: 'End',
+  do: 'Do',
+  observe: 'Look',
+  measure: 'Measure',
+  soak: 'Soak',
+  photo: 'Photo',
+  isolate: 'Isolate',
+  discharge: 'Discharge',
+  'prove-dead': 'Prove dead',
+  'prove-earth': 'Prove earth',
+  'prove-insulation': 'Prove insulation',
+  'prove-returns': 'Prove returns',
+  'prove-trip': 'Prove a trip',
+  'connect-load': 'Connect load',
+  energise: 'Energise',
+  raise: 'Raise',
+  'prove-rails': 'Prove rails',
+  work: 'Work',
+  hold: 'Hold point',
+  call: 'Call of a tree',
+  end: 'End',
 };
 
-export const CONTACT_WORDS: Readonly<Record<Step['contact'], string>> = { none: 'no contact', cover: 'cover off', probe: 'one insulated probe', hands: 'hands' };
+export const CONTACT_WORDS: Readonly<Record<Step['contact'], string>> = {
+  none: 'no contact',
+  cover: 'cover off',
+  probe: 'one insulated probe',
+  hands: 'hands',
+};
 
 export const MODE_WORDS: Readonly<Record<Suspect['mode'], string>> = {
-  open: 'open', short: 'short', leaky: 'leaky', drift: 'drifted', 'no-contact': 'no contact', 'low-value': 'low value', 'fires-early': 'fires early', dead: 'dead',
+  open: 'open',
+  short: 'short',
+  leaky: 'leaky',
+  drift: 'drifted',
+  'no-contact': 'no contact',
+  'low-value': 'low value',
+  'fires-early': 'fires early',
+  dead: 'dead',
 };
 
 const OUTCOME_WORDS: Readonly<Record<Outcome, string>> = {
-  cannot: 'cannot do it', 'not-sure': 'not sure', 'not-out': 'not out', reversed: 'reversed', high: 'high', falling: 'falling', low: 'low', close: 'close', in: 'in', out: 'all out',
-  done: 'done', on: 'it is on', given: 'given', refused: 'refused', answer: 'answer',
+  cannot: 'cannot do it',
+  'not-sure': 'not sure',
+  'not-out': 'not out',
+  reversed: 'reversed',
+  high: 'high',
+  falling: 'falling',
+  low: 'low',
+  close: 'close',
+  in: 'in',
+  out: 'all out',
+  done: 'done',
+  on: 'it is on',
+  given: 'given',
+  refused: 'refused',
+  answer: 'answer',
 };
 
 export const END_WORDS: Readonly<Record<Extract<Step, { kind: 'end' }>['says'], string>> = {
-  'fault-found': 'fault found', 'supply-proven': 'supply proven', cleared: 'cleared', stopped: 'stopped', referred: 'referred to a senior', 'in-service': 'in service',
+  'fault-found': 'fault found',
+  'supply-proven': 'supply proven',
+  cleared: 'cleared',
+  stopped: 'stopped',
+  referred: 'referred to a senior',
+  'in-service': 'in service',
 };
 
 export const CLAIM_WORDS: Readonly<Record<Claim, string>> = {
-  out: 'every source out', dead: 'proved dead', looked: 'looked over', earth: 'earth proved', insulation: 'insulation proved', returns: 'returns proved', trips: 'all trips proved',
-  'proving-regulator': 'regulator proved on the bench supply', 'proving-limited': 'rails proved on limited power', 'proving-full': 'rails proved at full load', 'load-none': 'no load',
-  'load-boards': 'boards in', release: 'a valid release', 'nothing-fitted': 'nothing temporary fitted',
+  out: 'every source out',
+  dead: 'proved dead',
+  looked: 'looked over',
+  earth: 'earth proved',
+  insulation: 'insulation proved',
+  returns: 'returns proved',
+  trips: 'all trips proved',
+  'proving-regulator': 'regulator proved on the bench supply',
+  'proving-limited': 'rails proved on limited power',
+  'proving-full': 'rails proved at full load',
+  'load-none': 'no load',
+  'load-boards': 'boards in',
+  release: 'a valid release',
+  'nothing-fitted': 'nothing temporary fitted',
 };
 
-const SUPPLY_WORDS: Readonly<Record<Tree['appliesTo']['supplyKinds'][number], string>> = { linear: 'linear', 'switched-from-raw': 'switched from a raw rail', 'switch-mode': 'switch-mode' };
+const SUPPLY_WORDS: Readonly<Record<Tree['appliesTo']['supplyKinds'][number], string>> = {
+  linear: 'linear',
+  'switched-from-raw': 'switched from a raw rail',
+  'switch-mode': 'switch-mode',
+};
 
-export const EVIDENCE_SAYS = { 'rules-out': 'rules out', 'points-away': 'points away from', 'says-nothing': 'says nothing on', 'points-to': 'points to', 'all-but-proves': 'all but proves' } as const;
+export const EVIDENCE_SAYS = {
+  'rules-out': 'rules out',
+  'points-away': 'points away from',
+  'says-nothing': 'says nothing on',
+  'points-to': 'points to',
+  'all-but-proves': 'all but proves',
+} as const;
 
 /** `Class I; linear supplies; 1 to 6 rails`. */
 export function appliesToWords({ protectiveClasses, supplyKinds, fewestRails, mostRails, serials }: Tree['appliesTo']): string {
-  const rails = fewestRails === mostRails ? `${fewestRails} ${fewestRails === 1 ? 'rail' : 'rails'}` : `${fewestRails} to ${mostRails} rails`;
+  const rails =
+    fewestRails === mostRails ? `${fewestRails} ${fewestRails === 1 ? 'rail' : 'rails'}` : `${fewestRails} to ${mostRails} rails`;
   const only = serials ? `; serials ${serials.join(', ')} only` : '';
   return `Class ${protectiveClasses.join(' or ')}; ${supplyKinds.map((kind) => SUPPLY_WORDS[kind]).join(', ')}; ${rails}${only}`;
 }
@@ -84,7 +153,11 @@ export function limitWords(limit: Limit, quantity: keyof typeof QUANTITIES): str
 export function stepFacts(step: Step): string[] {
   switch (step.kind) {
     case 'do':
-      return [...(step.fits ?? []).map((f) => `Fits: ${f.name}`), ...(step.removes ?? []).map((id) => `Takes out: ${id}`), ...(step.trims ? [`Trims: ${step.trims}`] : [])];
+      return [
+        ...(step.fits ?? []).map((f) => `Fits: ${f.name}`),
+        ...(step.removes ?? []).map((id) => `Takes out: ${id}`),
+        ...(step.trims ? [`Trims: ${step.trims}`] : []),
+      ];
     case 'observe':
       return [`Asks: ${step.asks}`, ...(step.power === 'live' ? ['While live'] : [])];
     case 'measure':
@@ -96,7 +169,11 @@ export function stepFacts(step: Step): string[] {
         ...(step.kind === 'soak' ? [`Held ${formatNumber(step.holdMinutes)} min, read every ${formatNumber(step.everyMinutes)} min`] : []),
       ];
     case 'discharge':
-      return [step.toolOhms === undefined ? 'Resistor and wait: from the workings, for the machine' : `Through ${formatQuantity(step.toolOhms, 'Ω')}${step.toolWatts === undefined ? '' : `, ${formatQuantity(step.toolWatts, 'W')}`}`];
+      return [
+        step.toolOhms === undefined
+          ? 'Resistor and wait: from the workings, for the machine'
+          : `Through ${formatQuantity(step.toolOhms, 'Ω')}${step.toolWatts === undefined ? '' : `, ${formatQuantity(step.toolWatts, 'W')}`}`,
+      ];
     case 'prove-trip':
       return [`Rail ${step.rail}, no more than ${formatQuantity(step.ceilingVolts, 'V')}`];
     case 'connect-load':

@@ -13,6 +13,11 @@ export function versionShown(versions: readonly TreeVersion[], asked: string | u
   return versions.find((v) => String(v.version) === asked) ?? null;
 }
 
-export const VERSION_STATE_WORDS: Readonly<Record<TreeVersion['state'], string>> = { draft: 'draft', 'in-check': 'in check', issued: 'issued', withdrawn: 'withdrawn' };
+export const VERSION_STATE_WORDS: Readonly<Record<TreeVersion['state'], string>> = {
+  draft: 'draft',
+  'in-check': 'in check',
+  issued: 'issued',
+  withdrawn: 'withdrawn',
+};
 
 export const VERSION_STATE_TAGS = { draft: 'look', 'in-check': 'look', issued: 'plain', withdrawn: 'over' } as const;

@@ -25,7 +25,17 @@ export function SheetAnswerView({ sheet, answer }: Props) {
   return (
     <View style={{ gap: space.l }}>
       <BodyText tone="soft">{sheet.question}</BodyText>
-      <View role="status" aria-label="Answer" style={{ borderTopWidth: line.heavy, borderTopColor: colors.ink, borderBottomWidth: line.rule, borderBottomColor: colors.ink, paddingVertical: space.l }}>
+      <View
+        role="status"
+        aria-label="Answer"
+        style={{
+          borderTopWidth: line.heavy,
+          borderTopColor: colors.ink,
+          borderBottomWidth: line.rule,
+          borderBottomColor: colors.ink,
+          paddingVertical: space.l,
+        }}
+      >
         <Heading level={2} size="section">
           {answer ? answer.headline : 'No answer yet: mend the marked field below.'}
         </Heading>

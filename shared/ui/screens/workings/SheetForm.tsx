@@ -22,13 +22,30 @@ export function SheetForm({ fields, texts, errors, echoes, onChange }: Props) {
     <View role="form" aria-label="Inputs" style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.xl, rowGap: space.l }}>
       {fields.map((field) => {
         const unit = unitOf(field, texts);
-        const hint = [echoes[field.name] ? `= ${echoes[field.name]}` : null, field.description].filter((part) => part !== null && part !== '').join('. ');
+        const hint = [echoes[field.name] ? `= ${echoes[field.name]}` : null, field.description]
+          .filter((part) => part !== null && part !== '')
+          .join('. ');
         return (
           <View key={field.name} style={{ flexGrow: 1, flexShrink: 1, flexBasis: 300, minWidth: 0, maxWidth: '100%' }}>
             {field.choices ? (
-              <Select label={field.title} options={field.choices.map((value) => ({ value, label: choiceWords(value) }))} value={texts[field.name] ?? null} onChange={(value) => onChange(field.name, value)} error={errors[field.name]} />
+              <Select
+                label={field.title}
+                options={field.choices.map((value) => ({ value, label: choiceWords(value) }))}
+                value={texts[field.name] ?? null}
+                onChange={(value) => onChange(field.name, value)}
+                error={errors[field.name]}
+              />
             ) : (
-              <Field label={unit ? `${field.title}, ${unit}` : field.title} required={!field.optional} value={texts[field.name] ?? ''} onChangeText={(text) => onChange(field.name, text)} error={errors[field.name]} hint={hint} inputMode="text" autoComplete="off" />
+              <Field
+                label={unit ? `${field.title}, ${unit}` : field.title}
+                required={!field.optional}
+                value={texts[field.name] ?? ''}
+                onChangeText={(text) => onChange(field.name, text)}
+                error={errors[field.name]}
+                hint={hint}
+                inputMode="text"
+                autoComplete="off"
+              />
             )}
           </View>
         );

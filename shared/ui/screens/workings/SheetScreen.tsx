@@ -26,7 +26,11 @@ export function SheetScreen({ sheetId, given }: Props) {
   if (sheet === undefined) {
     return (
       <Page title="Workings">
-        <EmptyState title="No such sheet" text="There is no bench calculation of that name." action={<LinkText label="All workings" href="/workings" />} />
+        <EmptyState
+          title="No such sheet"
+          text="There is no bench calculation of that name."
+          action={<LinkText label="All workings" href="/workings" />}
+        />
       </Page>
     );
   }
@@ -37,7 +41,13 @@ export function SheetScreen({ sheetId, given }: Props) {
 function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Props['given'] }) {
   const router = useRouter();
   const fields = useMemo(() => sheetFields(sheet), [sheet]);
-  const [texts, setTexts] = useState<Record<string, string>>(() => ({ ...startTexts(sheet), ...ofAddress(fields.map((f) => f.name), given) }));
+  const [texts, setTexts] = useState<Record<string, string>>(() => ({
+    ...startTexts(sheet),
+    ...ofAddress(
+      fields.map((f) => f.name),
+      given,
+    ),
+  }));
   const [touched, setTouched] = useState(false);
   useEffect(() => {
     if (touched) router.setParams(texts);

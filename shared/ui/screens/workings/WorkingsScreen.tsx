@@ -15,13 +15,19 @@ export function WorkingsScreen() {
   const { colors } = useTheme();
   return (
     <Page title="Workings" maxWidth={860}>
-      <BodyText tone="soft">Each sheet shows its formula with the numbers in it, how far it holds, and its source. The same sheets stand behind the steps of a tree.</BodyText>
+      <BodyText tone="soft">
+        Each sheet shows its formula with the numbers in it, how far it holds, and its source. The same sheets stand behind the steps of a
+        tree.
+      </BodyText>
       <View role="list" aria-label="Workings" style={{ borderTopWidth: line.rule, borderTopColor: colors.ink }}>
         {SHEETS.map((sheet) => (
           <View key={sheet.id} role="listitem" style={{ borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
             <RouteLink
               href={`/workings/${sheet.id}`}
-              style={(hovered) => [{ flexDirection: 'row', alignItems: 'center', gap: space.m, paddingVertical: space.m, minHeight: 64 }, hovered ? { backgroundColor: colors.tint } : null]}
+              style={(hovered) => [
+                { flexDirection: 'row', alignItems: 'center', gap: space.m, paddingVertical: space.m, minHeight: 64 },
+                hovered ? { backgroundColor: colors.tint } : null,
+              ]}
             >
               <View style={{ flex: 1, minWidth: 0 }}>
                 <Heading level={2} size="sub">

@@ -65,7 +65,8 @@ function textOf(value: unknown, unit: Unit | null): string {
   if (typeof value !== 'number') return '';
   if (unit === null) return formatNumber(value, 15).replace('−', '-');
   // the prefix that leaves the fewest figures, so that 0.0047 F stands as 4.7m
-  const prefix = [...UNITS[unit].prefixes].reverse().find((p) => value !== 0 && Math.abs(value) >= Number(`1e${PREFIXES[p].exponent}`)) ?? '';
+  const prefix =
+    [...UNITS[unit].prefixes].reverse().find((p) => value !== 0 && Math.abs(value) >= Number(`1e${PREFIXES[p].exponent}`)) ?? '';
   const shifted = Number((value / Number(`1e${PREFIXES[prefix].exponent}`)).toPrecision(12));
   return `${String(shifted)}${prefix === 'μ' ? 'u' : prefix}`;
 }
@@ -109,6 +110,9 @@ function readNumber(field: SheetField, text: string, texts: SheetTexts): { value
     if (parsed.kind === 'over-range') return { say: `${field.title} must be a number.` };
     return { value: parsed.value, echo: unit === null ? '' : parsed.echo };
   }
-  if (unit === null && parsed.why !== 'ambiguous') return { say: parsed.why === 'negative' ? `${field.title} has no minus sign.` : `“${text}” is not a plain number. Write it like 4.97.` };
+  if (unit === null && parsed.why !== 'ambiguous')
+    return {
+      say: parsed.why === 'negative' ? `${field.title} has no minus sign.` : `“${text}” is not a plain number. Write it like 4.97.`,
+    };
   return { say: parsed.say };
 }

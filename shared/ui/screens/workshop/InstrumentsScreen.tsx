@@ -41,8 +41,18 @@ const columns: Column<Instrument>[] = [
       </View>
     ),
   },
-  { key: 'category', title: 'Category', grow: 0.9, cell: (i) => <BodyText tone={i.category ? 'ink' : 'soft'}>{i.category ?? 'none'}</BodyText> },
-  { key: 'poles', title: 'Proves dead', grow: 0.9, cell: (i) => <BodyText tone={i.twoPole ? 'ink' : 'soft'}>{i.twoPole ? 'two-pole' : 'no'}</BodyText> },
+  {
+    key: 'category',
+    title: 'Category',
+    grow: 0.9,
+    cell: (i) => <BodyText tone={i.category ? 'ink' : 'soft'}>{i.category ?? 'none'}</BodyText>,
+  },
+  {
+    key: 'poles',
+    title: 'Proves dead',
+    grow: 0.9,
+    cell: (i) => <BodyText tone={i.twoPole ? 'ink' : 'soft'}>{i.twoPole ? 'two-pole' : 'no'}</BodyText>,
+  },
   {
     key: 'until',
     title: 'Calibrated until',
@@ -63,7 +73,18 @@ export function InstrumentsScreen() {
     <Page title="Instruments" eyebrow="Workshop" maxWidth={1280}>
       <Fetched query={instruments} what="the instruments">
         {({ instruments: all }) => (
-          <DataTable caption="Instruments" columns={columns} rows={all} rowKey={(i) => i.id} empty={<EmptyState title="No instruments yet" text="The keeper of the workshop enters meters and testers with their accuracy and calibration date." />} />
+          <DataTable
+            caption="Instruments"
+            columns={columns}
+            rows={all}
+            rowKey={(i) => i.id}
+            empty={
+              <EmptyState
+                title="No instruments yet"
+                text="The keeper of the workshop enters meters and testers with their accuracy and calibration date."
+              />
+            }
+          />
         )}
       </Fetched>
       <LinkText label="Workshop" href="/workshop" />

@@ -32,7 +32,12 @@ export function PeopleScreen() {
             columns={[
               { key: 'name', title: 'Name', grow: 1.6, cell: (p) => p.name },
               { key: 'code', title: 'Sign in records', cell: (p) => <Mono>{p.code}</Mono> },
-              { key: 'roles', title: 'Roles', grow: 1.8, cell: (p) => <BodyText tone={p.roles.length > 0 ? 'ink' : 'soft'}>{p.roles.join(', ') || 'none'}</BodyText> },
+              {
+                key: 'roles',
+                title: 'Roles',
+                grow: 1.8,
+                cell: (p) => <BodyText tone={p.roles.length > 0 ? 'ink' : 'soft'}>{p.roles.join(', ') || 'none'}</BodyText>,
+              },
             ]}
           />
         )}

@@ -36,7 +36,10 @@ export function SettingsScreen() {
   const settings = useSettings();
   return (
     <Page title="Settings of the workshop" eyebrow="Workshop" maxWidth={980}>
-      <Notice kind="note">A workshop may set stricter values than these rules start from, never looser ones. Local codes, the maker’s data and licensed practice come first.</Notice>
+      <Notice kind="note">
+        A workshop may set stricter values than these rules start from, never looser ones. Local codes, the maker’s data and licensed
+        practice come first.
+      </Notice>
       <Fetched query={settings} what="the settings">
         {({ settings: given }) => <DataTable caption="Settings" columns={columns} rows={settingRows(given)} rowKey={(r) => r.key} />}
       </Fetched>

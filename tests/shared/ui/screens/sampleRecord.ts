@@ -21,7 +21,16 @@ const iso = (ms: number) => new Date(ms).toISOString();
 const entryId = (seq: number) => `0198c0de-0000-7000-8000-${String(100_000_000_000 + seq)}`;
 
 export const tester: Instrument = {
-  id: 'tester', tag: 'T-1', name: 'Two-pole tester', kind: 'two-pole-tester', serial: '7', category: 'CAT III 600 V', twoPole: true, calibratedUntil: '2027-03-01', outOfDate: false, ranges: [],
+  id: 'tester',
+  tag: 'T-1',
+  name: 'Two-pole tester',
+  kind: 'two-pole-tester',
+  serial: '7',
+  category: 'CAT III 600 V',
+  twoPole: true,
+  calibratedUntil: '2027-03-01',
+  outOfDate: false,
+  ranges: [],
 };
 
 /** A person at the bench who takes their time and whose entries are kept and chained. */
@@ -41,7 +50,16 @@ export class RecordedBench extends Bench {
 
   keep(kind: EntryKind, actor: string, body: Record<string, unknown>): RecordEntry {
     const seq = this.entries.length + 1;
-    const draft = { id: entryId(seq), run, seq, at: iso(this.at), monotonic: this.at, actor, kind, body: JSON.parse(JSON.stringify(body)) as Record<string, Json> };
+    const draft = {
+      id: entryId(seq),
+      run,
+      seq,
+      at: iso(this.at),
+      monotonic: this.at,
+      actor,
+      kind,
+      body: JSON.parse(JSON.stringify(body)) as Record<string, Json>,
+    };
     const entry = sealEntry(draft, iso(this.at), this.entries.at(-1)?.hash ?? GENESIS);
     this.entries.push(entry);
     return entry;

@@ -7,7 +7,11 @@ describe('chainWords', () => {
   const record = goodRun().record();
 
   it('says how many entries were checked', () => {
-    expect(chainWords(record)).toEqual({ whole: true, verdict: 'Chain whole', detail: `${record.entries.length} entries, checked on this device` });
+    expect(chainWords(record)).toEqual({
+      whole: true,
+      verdict: 'Chain whole',
+      detail: `${record.entries.length} entries, checked on this device`,
+    });
   });
 
   it('names the entry whose words were changed', () => {

@@ -22,20 +22,30 @@ describe('exceptionsOf', () => {
     const bench = upToEarth();
     bench.pass({ earth: 0.4 });
     const [first] = told(bench);
-    expect(first).toMatchObject({ kind: 'out', title: expect.stringContaining('Earth pin') as string, detail: expect.stringContaining('250 mΩ outside its limit') as string });
+    expect(first).toMatchObject({
+      kind: 'out',
+      title: expect.stringContaining('Earth pin') as string,
+      detail: expect.stringContaining('250 mΩ outside its limit') as string,
+    });
     expect(bench.entries.find((e) => e.id === first?.entry)?.kind).toBe('reading');
   });
 
   it('tells a reading that is in but inside the guard band, with what the meter can be off', () => {
     const bench = upToEarth();
     bench.pass({ earth: 0.1496 });
-    expect(told(bench)[0]).toMatchObject({ kind: 'close', title: expect.stringContaining('in, but close') as string, detail: expect.stringContaining('meter ± 1 mΩ') as string });
+    expect(told(bench)[0]).toMatchObject({
+      kind: 'close',
+      title: expect.stringContaining('in, but close') as string,
+      detail: expect.stringContaining('meter ± 1 mΩ') as string,
+    });
   });
 
   it('tells a doubt with the row that it was about', () => {
     const bench = upToEarth();
     bench.pass({ earth: 'not-sure' });
-    expect(told(bench)).toMatchObject([{ kind: 'unsure', title: 'Answered “not sure”', detail: expect.stringContaining('Earth pin') as string }]);
+    expect(told(bench)).toMatchObject([
+      { kind: 'unsure', title: 'Answered “not sure”', detail: expect.stringContaining('Earth pin') as string },
+    ]);
   });
 
   it('puts Stop before everything else', () => {
@@ -49,7 +59,10 @@ describe('exceptionsOf', () => {
 
   it('tells a refused countersign with its reason', () => {
     const bench = upToEarth().pass().pass().dead();
-    bench.do({ type: 'WARNING_READ', step: 'lamp' }).do({ type: 'HOLD_ASKED', step: 'lamp' }).do({ type: 'HOLD_REFUSED', step: 'lamp', by: 'sam', reason: 'fit the fan first' });
+    bench
+      .do({ type: 'WARNING_READ', step: 'lamp' })
+      .do({ type: 'HOLD_ASKED', step: 'lamp' })
+      .do({ type: 'HOLD_REFUSED', step: 'lamp', by: 'sam', reason: 'fit the fan first' });
     expect(told(bench)).toContainEqual(expect.objectContaining({ kind: 'hold-refused', detail: '“fit the fan first”' }));
   });
 
@@ -73,7 +86,13 @@ describe('exceptionsOf', () => {
   it('names an instrument that was out of date on the day of the reading', () => {
     const bench = upToEarth();
     const late = told(bench, [{ ...tester, calibratedUntil: '2026-01-04' }]);
-    expect(late).toMatchObject([{ kind: 'instrument', title: 'Two-pole tester was out of date', detail: expect.stringMatching(/calibrated until 2026-01-04; \d+ readings/) as string }]);
+    expect(late).toMatchObject([
+      {
+        kind: 'instrument',
+        title: 'Two-pole tester was out of date',
+        detail: expect.stringMatching(/calibrated until 2026-01-04; \d+ readings/) as string,
+      },
+    ]);
     expect(told(bench, [{ ...tester, calibratedUntil: '2026-01-05' }])).toEqual([]);
   });
 });

@@ -46,7 +46,13 @@ describe('readingsOf', () => {
     const bench = new RecordedBench();
     bench.pass().answer('sound').dead().pass({ earth: 0.1504 });
     const lines = readingsOf(replayRecord(bench.record()).entries);
-    expect(lines.at(-1)).toMatchObject({ mark: 'close', verdict: 'out, but close', out: true, unit: 'Ω', high: expect.closeTo(0.15, 9) as number });
+    expect(lines.at(-1)).toMatchObject({
+      mark: 'close',
+      verdict: 'out, but close',
+      out: true,
+      unit: 'Ω',
+      high: expect.closeTo(0.15, 9) as number,
+    });
   });
 
   it('marks the readings of proving dead as plain, without a guard band', () => {

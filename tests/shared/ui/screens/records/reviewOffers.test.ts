@@ -22,7 +22,9 @@ describe('reviewOffers', () => {
   });
 
   it('tells the one who countersigned that another reviewer has to accept', () => {
-    expect(offers('sam', ['senior', 'reviewer'], 'submitted', { find: true, return: true }).why).toEqual([expect.stringContaining('You countersigned in this run')]);
+    expect(offers('sam', ['senior', 'reviewer'], 'submitted', { find: true, return: true }).why).toEqual([
+      expect.stringContaining('You countersigned in this run'),
+    ]);
   });
 
   it('tells the restorer that another person reviews the own run, also one who is a reviewer', () => {

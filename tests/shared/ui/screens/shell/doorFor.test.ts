@@ -23,7 +23,18 @@ describe('doorFor', () => {
 });
 
 describe('returnPath', () => {
-  it.each([undefined, '', 'records', '//evil.example', '/\\evil.example', 'https://evil.example', '/sign-in', '/sign-in?from=/x', '/a\nb', ['/a', '/b']])('leads home from %j', (from) => {
+  it.each([
+    undefined,
+    '',
+    'records',
+    '//evil.example',
+    '/\\evil.example',
+    'https://evil.example',
+    '/sign-in',
+    '/sign-in?from=/x',
+    '/a\nb',
+    ['/a', '/b'],
+  ])('leads home from %j', (from) => {
     expect(returnPath(from)).toBe('/bench');
   });
 });

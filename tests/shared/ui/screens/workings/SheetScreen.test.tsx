@@ -9,12 +9,16 @@ const answer = () => within(screen.getByRole('status', { name: 'Answer' })).getB
 
 describe('SheetScreen', () => {
   it('shows the answer of what stands in the address', () => {
-    renderSheet(<SheetScreen sheetId="rail-limits" given={{ nominalVolts: '5', tolerancePercent: '5', guardVolts: '0', readingVolts: '' }} />);
+    renderSheet(
+      <SheetScreen sheetId="rail-limits" given={{ nominalVolts: '5', tolerancePercent: '5', guardVolts: '0', readingVolts: '' }} />,
+    );
     expect(answer()).toBe('4.75 V to 5.25 V.');
   });
 
   it('works out again with every change and puts it into the address', () => {
-    renderSheet(<SheetScreen sheetId="rail-limits" given={{ nominalVolts: '5', tolerancePercent: '5', guardVolts: '0', readingVolts: '' }} />);
+    renderSheet(
+      <SheetScreen sheetId="rail-limits" given={{ nominalVolts: '5', tolerancePercent: '5', guardVolts: '0', readingVolts: '' }} />,
+    );
     fireEvent.change(screen.getByLabelText('Tolerance, %'), { target: { value: '10' } });
     expect(answer()).toBe('4.5 V to 5.5 V.');
     expect(routeParams['tolerancePercent']).toBe('10');

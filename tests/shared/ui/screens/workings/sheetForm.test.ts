@@ -33,7 +33,9 @@ describe('the form of a sheet', () => {
 
   it('asks back where a comma could mean two things', () => {
     const bleed = sheet('bleed-down');
-    expect(readSheet(sheetFields(bleed), { ...startTexts(bleed), volts: '1,234' }).errors['volts']).toBe('Do you mean 1.234 or 1234? Write it with a decimal point and without a mark for thousands.');
+    expect(readSheet(sheetFields(bleed), { ...startTexts(bleed), volts: '1,234' }).errors['volts']).toBe(
+      'Do you mean 1.234 or 1234? Write it with a decimal point and without a mark for thousands.',
+    );
   });
 
   it('refuses a unit of another quantity at its field', () => {
@@ -50,7 +52,14 @@ describe('the form of a sheet', () => {
 
   it('reads the limits of a reading in the unit of the chosen quantity', () => {
     const limit = sheet('reading-limit');
-    const { inputs, errors } = readSheet(sheetFields(limit), { ...startTexts(limit), quantity: 'ohms', reading: '4k7', low: '', high: '5k', resolution: '1' });
+    const { inputs, errors } = readSheet(sheetFields(limit), {
+      ...startTexts(limit),
+      quantity: 'ohms',
+      reading: '4k7',
+      low: '',
+      high: '5k',
+      resolution: '1',
+    });
     expect(errors).toEqual({});
     expect(inputs).toMatchObject({ reading: 4700, low: null, high: 5000 });
   });
