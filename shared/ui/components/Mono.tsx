@@ -4,18 +4,21 @@ import { Text } from 'react-native';
 
 import { face, type } from '@/shared/ui/theme/type';
 import { useTheme } from '@/shared/ui/theme/useTheme';
+import { webStyle } from '@/shared/ui/theme/webStyle';
 
 interface Props {
   children: ReactNode;
   bold?: boolean | undefined;
   soft?: boolean | undefined;
+  /** never broken over two lines: a date, a number with its unit */
+  whole?: boolean | undefined;
   /** takes the size of the text around it */
   inline?: boolean | undefined;
   size?: 'mono' | 'reading' | undefined;
 }
 
 /** A quantity, serial, time or hash. */
-export function Mono({ children, bold = false, soft = false, inline = false, size = 'mono' }: Props) {
+export function Mono({ children, bold = false, soft = false, whole = false, inline = false, size = 'mono' }: Props) {
   const { colors } = useTheme();
   return (
     <Text
@@ -23,6 +26,7 @@ export function Mono({ children, bold = false, soft = false, inline = false, siz
         inline ? { fontFamily: face.mono } : type[size],
         inline && !soft ? null : { color: soft ? colors.inkSoft : colors.ink },
         bold ? { fontFamily: face.monoBold } : null,
+        whole ? webStyle({ whiteSpace: 'nowrap' }) : null,
       ]}
     >
       {children}

@@ -59,7 +59,7 @@ export function MachineHistory({ runs, releases }: Props) {
           })}
           empty={<BodyText tone="soft">No run has been made on this machine.</BodyText>}
           columns={[
-            { key: 'when', title: 'When', cell: (r) => <Mono>{dateTimeWords(r.startedAt)}</Mono>, grow: 1.4 },
+            { key: 'when', title: 'When', cell: (r) => <Mono whole>{dateTimeWords(r.startedAt)}</Mono>, grow: 2.1 },
             { key: 'tree', title: 'Tree', cell: (r) => <BodyText>{`${r.tree.title}, version ${r.tree.version}`}</BodyText>, grow: 2.4 },
             { key: 'who', title: 'Restorer', cell: (r) => <BodyText>{personName(people, r.restorer)}</BodyText>, grow: 1.2 },
             {

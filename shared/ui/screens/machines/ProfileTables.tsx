@@ -23,9 +23,15 @@ export function ProfileTables({ profile }: { profile: Profile }) {
           rowKey={(r) => r.id}
           columns={[
             { key: 'name', title: 'Rail', cell: (r) => r.name },
-            { key: 'nominal', title: 'Nominal', cell: (r) => <Mono>{`${r.nominal} ${r.tolerance}`}</Mono>, grow: 1.5 },
-            { key: 'amps', title: 'Most amps', cell: (r) => <Mono>{r.amps}</Mono>, grow: 1.6 },
-            { key: 'trip', title: 'Trips between', cell: (r) => <Mono>{r.trip}</Mono>, grow: 1.5 },
+            { key: 'nominal', title: 'Nominal', cell: (r) => <Mono whole>{`${r.nominal} ${r.tolerance}`}</Mono>, grow: 1.7 },
+            { key: 'amps', title: 'Most amps', cell: (r) => <Mono whole>{r.amps}</Mono> },
+            { key: 'limit', title: 'Limit', cell: (r) => <Mono whole>{r.limit}</Mono> },
+            {
+              key: 'trip',
+              title: 'Trips at',
+              cell: (r) => (r.trip === null ? <BodyText tone="soft">no trip: hold point</BodyText> : <Mono whole>{r.trip}</Mono>),
+              grow: 1.4,
+            },
             { key: 'sense', title: 'Sensed', cell: (r) => <BodyText>{r.sense}</BodyText>, grow: 1.2 },
           ]}
         />
@@ -44,9 +50,9 @@ export function ProfileTables({ profile }: { profile: Profile }) {
               columns={[
                 { key: 'name', title: 'Conductor', cell: (c) => c.name },
                 { key: 'way', title: 'From, to', cell: (c) => <BodyText>{c.way}</BodyText>, grow: 1.6 },
-                { key: 'wire', title: 'Wire', cell: (c) => <Mono>{c.wire}</Mono>, grow: 1.2 },
-                { key: 'pin', title: 'Pin', cell: (c) => <Mono>{c.pin}</Mono> },
-                { key: 'most', title: 'At most', cell: (c) => <Mono>{c.most}</Mono> },
+                { key: 'wire', title: 'Wire', cell: (c) => <BodyText>{c.wire}</BodyText>, grow: 1.2 },
+                { key: 'pin', title: 'Pin', cell: (c) => <Mono whole>{c.pin}</Mono> },
+                { key: 'most', title: 'At most', cell: (c) => <Mono whole>{c.most}</Mono> },
               ]}
             />
           </Section>
@@ -84,13 +90,21 @@ function Stores({ profile }: { profile: Profile }) {
           rowKey={(s) => s.id}
           columns={[
             { key: 'name', title: 'Part', cell: (s) => s.name, grow: 1.4 },
-            { key: 'size', title: 'Size', cell: (s) => <Mono>{s.size}</Mono> },
-            { key: 'volts', title: 'Works at', cell: (s) => <Mono>{s.volts}</Mono>, grow: 1.3 },
-            { key: 'joules', title: 'Holds', cell: (s) => <Mono bold>{s.joules}</Mono> },
+            { key: 'size', title: 'Size', cell: (s) => <Mono whole>{s.size}</Mono> },
+            { key: 'volts', title: 'Works at', cell: (s) => <BodyText>{s.volts}</BodyText>, grow: 1.3 },
+            {
+              key: 'joules',
+              title: 'Holds',
+              cell: (s) => (
+                <Mono bold whole>
+                  {s.joules}
+                </Mono>
+              ),
+            },
             {
               key: 'discharge',
               title: 'Before work',
-              cell: (s) => (s.discharge ? <Tag word="discharge first (H3)" kind="look" /> : <BodyText>prove dead</BodyText>),
+              cell: (s) => (s.discharge ? <Tag word="discharge, H3" kind="look" /> : <BodyText>prove dead</BodyText>),
               grow: 1.7,
             },
             { key: 'bleeder', title: 'Bleeder', cell: (s) => <BodyText>{s.bleeder}</BodyText>, grow: 1.7 },

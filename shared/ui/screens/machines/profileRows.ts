@@ -60,7 +60,9 @@ export interface RailLine {
   nominal: string;
   tolerance: string;
   amps: string;
-  trip: string;
+  limit: string;
+  /** null where it has none */
+  trip: string | null;
   sense: string;
 }
 
@@ -71,8 +73,9 @@ export function railLine(rail: Rail): RailLine {
     name: rail.name,
     nominal: print(rail.nominal, 'V'),
     tolerance: `± ${percent(rail.tolerance)}`,
-    amps: `${print(rail.maxAmps, 'A')}, limit ${print(rail.limitAmps, 'A')}`,
-    trip: rail.trip === null ? 'none: a hold point instead' : `${print(rail.trip.lowVolts, 'V')} to ${print(rail.trip.highVolts, 'V')}`,
+    amps: print(rail.maxAmps, 'A'),
+    limit: print(rail.limitAmps, 'A'),
+    trip: rail.trip === null ? null : `${formatNumber(rail.trip.lowVolts)}–${print(rail.trip.highVolts, 'V')}`,
     sense: `${rail.sense === 'remote' ? 'remote' : 'at the terminals'}${rail.takes ? '; also takes current' : ''}`,
   };
 }

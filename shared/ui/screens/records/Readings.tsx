@@ -8,14 +8,15 @@ import type { Column } from '@/shared/ui/components/DataTable';
 import { Mono } from '@/shared/ui/components/Mono';
 import { ReadingScale } from '@/shared/ui/components/ReadingScale';
 import { Verdict } from '@/shared/ui/components/Verdict';
+import { ReadingBlock } from '@/shared/ui/screens/records/ReadingBlock';
 import { goToEntry } from '@/shared/ui/screens/records/goToEntry';
 import type { ReadingLine } from '@/shared/ui/screens/records/readingsOf';
-import { scaleOf } from '@/shared/ui/screens/records/scaleOf';
+import { RecordScale } from '@/shared/ui/screens/records/RecordScale';
 import { Section } from '@/shared/ui/screens/shell/Section';
 import { isWide } from '@/shared/ui/theme/space';
 
 const drawn: Column<ReadingLine>[] = [
-  { key: 'seq', title: 'Entry', grow: 0.8, cell: (r) => <Mono>{r.seq}</Mono> },
+  { key: 'seq', title: 'Entry', grow: 0.9, cell: (r) => <Mono whole>{r.seq}</Mono> },
   {
     key: 'what',
     title: 'Step, point',
@@ -29,15 +30,33 @@ const drawn: Column<ReadingLine>[] = [
       </View>
     ),
   },
-  { key: 'reading', title: 'Reading', grow: 1.3, cell: (r) => <Mono bold>{r.reading}</Mono> },
-  { key: 'scale', title: 'Against its limit', grow: 3.6, cell: (r) => <Scale line={r} /> },
+  {
+    key: 'reading',
+    title: 'Reading',
+    grow: 1.3,
+    cell: (r) => (
+      <Mono bold whole>
+        {r.reading}
+      </Mono>
+    ),
+  },
+  { key: 'scale', title: 'Against its limit', grow: 3.6, cell: (r) => <RecordScale reading={r} /> },
   { key: 'verdict', title: 'Verdict', grow: 1.3, cell: (r) => <Verdict mark={r.mark} word={r.verdict} /> },
 ];
 
 const plain: Column<ReadingLine>[] = [
-  { key: 'seq', title: 'Entry', grow: 0.6, cell: (r) => <Mono>{r.seq}</Mono> },
+  { key: 'seq', title: 'Entry', grow: 0.8, cell: (r) => <Mono whole>{r.seq}</Mono> },
   { key: 'what', title: 'Point', grow: 2.6, cell: (r) => <BodyText>{r.label}</BodyText> },
-  { key: 'reading', title: 'Reading', grow: 1, cell: (r) => <Mono bold>{r.reading}</Mono> },
+  {
+    key: 'reading',
+    title: 'Reading',
+    grow: 1,
+    cell: (r) => (
+      <Mono bold whole>
+        {r.reading}
+      </Mono>
+    ),
+  },
   { key: 'limit', title: 'At most', grow: 0.8, cell: (r) => <Mono>{r.high === null ? '–' : formatQuantity(r.high, r.unit)}</Mono> },
   { key: 'verdict', title: 'Verdict', grow: 1.1, cell: (r) => <Verdict mark={r.mark} word={r.verdict} /> },
 ];
@@ -54,15 +73,16 @@ export function Readings({ lines }: { lines: readonly ReadingLine[] }) {
   return (
     <>
       <Section title="Readings">
-        <DataTable
-          caption="Readings against limits"
-          columns={drawn}
-          rows={against}
-          rowKey={(l) => l.id}
-          rowTarget={to}
-          blocks={!wide}
-          empty={<BodyText tone="soft">No reading was taken against a limit.</BodyText>}
-        />
+        {against.length === 0 ? <BodyText tone="soft">No reading was taken against a limit.</BodyText> : null}
+        {wide ? (
+          <DataTable caption="Readings against limits" columns={drawn} rows={against} rowKey={(l) => l.id} rowTarget={to} />
+        ) : (
+          <View role="list" aria-label="Readings against limits">
+            {against.map((l) => (
+              <ReadingBlock key={l.id} reading={l} />
+            ))}
+          </View>
+        )}
       </Section>
       {dead.length > 0 ? (
         <Section title="Discharging and proving dead">
@@ -70,20 +90,5 @@ export function Readings({ lines }: { lines: readonly ReadingLine[] }) {
         </Section>
       ) : null}
     </>
-  );
-}
-
-function Scale({ line }: { line: ReadingLine }) {
-  const { factor, unit } = scaleOf(line);
-  const by = (n: number | null) => (n === null ? null : n * factor);
-  return (
-    <ReadingScale
-      value={by(line.needle)}
-      low={by(line.low)}
-      high={by(line.high)}
-      guard={line.guard * factor}
-      nominal={by(line.nominal)}
-      unit={unit}
-    />
   );
 }

@@ -38,7 +38,8 @@ export function RecordScreen({ recordId }: { recordId: string }) {
 function outcome({ run }: RecordView, endTitle: string | undefined): string {
   const words = endingWords(run.ended);
   const said = `${words[0]?.toUpperCase() ?? ''}${words.slice(1)}`;
-  return endTitle && endTitle.toLowerCase() !== words ? `${said}: ${endTitle}` : said;
+  // an end that only repeats the word for it adds nothing
+  return endTitle && !words.includes(endTitle.toLowerCase()) ? `${said}: ${endTitle}` : said;
 }
 
 function belongsTo({ run, pins }: RecordView): string {

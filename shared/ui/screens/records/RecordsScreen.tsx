@@ -64,12 +64,12 @@ export function RecordsScreen({ state }: Props) {
                 title: 'Machine',
                 grow: 1.5,
                 cell: (r) => (
-                  <BodyText>
-                    <BodyText inline bold>
-                      {r.machine.name}
+                  <View>
+                    <BodyText bold>{r.machine.name}</BodyText>
+                    <BodyText size="small" tone="soft">
+                      {r.machine.serial}
                     </BodyText>
-                    {` · ${r.machine.serial}`}
-                  </BodyText>
+                  </View>
                 ),
               },
               { key: 'tree', title: 'Tree', grow: 2.4, cell: (r) => <BodyText>{`${r.tree.title}, version ${r.tree.version}`}</BodyText> },
@@ -79,7 +79,7 @@ export function RecordsScreen({ state }: Props) {
                 grow: 0.9,
                 cell: (r) => <Person code={personCode(people, r.restorer)} name={personName(people, r.restorer)} />,
               },
-              { key: 'when', title: 'When', grow: 1.5, cell: (r) => <Mono>{dateTimeWords(r.startedAt)}</Mono> },
+              { key: 'when', title: 'When', grow: 1.7, cell: (r) => <Mono whole>{dateTimeWords(r.startedAt)}</Mono> },
               { key: 'outcome', title: 'Outcome', grow: 1.3, cell: (r) => <BodyText>{endingWords(r.ended)}</BodyText> },
               {
                 key: 'state',

@@ -42,7 +42,7 @@ export function TreeStep({ tree, callee, at }: Props) {
             <BodyText key={words}>{words}</BodyText>
           ))}
         </View>
-        {stepFacts(step).map((fact) => (
+        {stepFacts(step, tree).map((fact) => (
           <BodyText key={fact} tone="soft">
             {fact}
           </BodyText>

@@ -34,7 +34,7 @@ const columns: Column<TreeVersion>[] = [
   {
     key: 'issued',
     title: 'Issued',
-    cell: (v) => (v.issuedAt ? <Mono>{dateWords(v.issuedAt)}</Mono> : <BodyText tone="soft">not yet</BodyText>),
+    cell: (v) => (v.issuedAt ? <Mono whole>{dateWords(v.issuedAt)}</Mono> : <BodyText tone="soft">not yet</BodyText>),
   },
 ];
 

@@ -149,13 +149,13 @@ export function limitWords(limit: Limit, quantity: keyof typeof QUANTITIES): str
   }
 }
 
-/** What is particular to the kind of a step, one fact a line. */
-export function stepFacts(step: Step): string[] {
+/** What is particular to the kind of a step, one fact a line; the tree gives things their names. */
+export function stepFacts(step: Step, tree: Pick<Tree, 'steps'>): string[] {
   switch (step.kind) {
     case 'do':
       return [
         ...(step.fits ?? []).map((f) => `Fits: ${f.name}`),
-        ...(step.removes ?? []).map((id) => `Takes out: ${id}`),
+        ...(step.removes?.length ? [`Takes out: ${step.removes.map((id) => thingName(tree, id)).join(', ')}`] : []),
         ...(step.trims ? [`Trims: ${step.trims}`] : []),
       ];
     case 'observe':
@@ -203,6 +203,11 @@ export function stepFacts(step: Step): string[] {
     case 'call':
       return [];
   }
+}
+
+function thingName({ steps }: Pick<Tree, 'steps'>, id: string): string {
+  const fits = steps.flatMap((s) => (s.kind === 'do' ? (s.fits ?? []) : []));
+  return fits.find((f) => f.id === id)?.name ?? id.replaceAll('-', ' ');
 }
 
 /** A hazard in one line. */

@@ -18,8 +18,8 @@ interface Props {
   answer: SheetAnswer<unknown> | null;
 }
 
-/** One big line, then formula with numbers, how far it holds, source and caution. */
-export function SheetAnswerView({ sheet, answer }: Props) {
+/** The question, one big line, and the caution. */
+export function SheetHeadline({ sheet, answer }: Props) {
   const { colors } = useTheme();
   const caution = answer?.caution ?? sheet.caution;
   return (
@@ -41,6 +41,14 @@ export function SheetAnswerView({ sheet, answer }: Props) {
         </Heading>
       </View>
       {caution !== '' ? <Notice title="Caution">{caution}</Notice> : null}
+    </View>
+  );
+}
+
+/** Formula with numbers, how far it holds, and its source. */
+export function SheetGrounds({ sheet, answer }: Props) {
+  return (
+    <View style={{ gap: space.l }}>
       <Part title={answer ? 'Formula, with these numbers' : 'Formula'}>
         {(answer ? answer.formula : sheet.law).map((words) => (
           <Mono key={words}>{words}</Mono>

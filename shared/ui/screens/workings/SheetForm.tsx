@@ -1,12 +1,12 @@
 /** The inputs of a bench calculation. */
-import { View } from 'react-native';
+import { useWindowDimensions, View } from 'react-native';
 
 import { Field } from '@/shared/ui/components/Field';
 import { Select } from '@/shared/ui/components/Select';
 import { choiceWords } from '@/shared/ui/screens/workings/choiceWords';
 import { unitOf } from '@/shared/ui/screens/workings/sheetForm';
 import type { SheetField, SheetTexts } from '@/shared/ui/screens/workings/sheetForm';
-import { space } from '@/shared/ui/theme/space';
+import { isWide, space } from '@/shared/ui/theme/space';
 
 interface Props {
   fields: readonly SheetField[];
@@ -18,15 +18,17 @@ interface Props {
 
 /** Two beside each other where there is room; each says its unit and what it has understood. */
 export function SheetForm({ fields, texts, errors, echoes, onChange }: Props) {
+  const wide = isWide(useWindowDimensions().width);
   return (
     <View role="form" aria-label="Inputs" style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.xl, rowGap: space.l }}>
       {fields.map((field) => {
         const unit = unitOf(field, texts);
-        const hint = [echoes[field.name] ? `= ${echoes[field.name]}` : null, field.description]
-          .filter((part) => part !== null && part !== '')
-          .join('. ');
+        const echo = echoes[field.name];
+        // an entry that reads as it is printed needs no echo
+        const understood = echo && echo !== `${texts[field.name] ?? ''} ${unit ?? ''}` ? `= ${echo}` : null;
+        const hint = [understood, field.description].filter((part) => part !== null && part !== '').join('. ');
         return (
-          <View key={field.name} style={{ flexGrow: 1, flexShrink: 1, flexBasis: 300, minWidth: 0, maxWidth: '100%' }}>
+          <View key={field.name} style={{ flexGrow: 1, flexShrink: 1, flexBasis: 300, minWidth: 0, maxWidth: wide ? '48%' : '100%' }}>
             {field.choices ? (
               <Select
                 label={field.title}

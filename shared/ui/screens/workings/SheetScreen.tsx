@@ -1,15 +1,13 @@
 /** One bench calculation. */
 import { useRouter } from 'expo-router';
 import { useEffect, useMemo, useState } from 'react';
-import { View } from 'react-native';
 
 import { EmptyState } from '@/shared/ui/components/EmptyState';
 import { LinkText } from '@/shared/ui/components/LinkText';
 import { Page } from '@/shared/ui/components/Page';
-import { SheetAnswerView } from '@/shared/ui/screens/workings/SheetAnswerView';
+import { SheetGrounds, SheetHeadline } from '@/shared/ui/screens/workings/SheetAnswerView';
 import { SheetForm } from '@/shared/ui/screens/workings/SheetForm';
 import { readSheet, sheetFields, startTexts } from '@/shared/ui/screens/workings/sheetForm';
-import { space } from '@/shared/ui/theme/space';
 import { sheetById } from '@/shared/workings/list';
 import type { AnySheet } from '@/shared/workings/list';
 import { runSheet } from '@/shared/workings/sheet';
@@ -58,19 +56,18 @@ function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Props['given'] }
   const errors = answer !== null && !answer.ok ? { ...read.errors, [answer.field]: answer.say } : read.errors;
   return (
     <Page title={sheet.title} eyebrow="Workings" maxWidth={860}>
-      <SheetAnswerView sheet={sheet} answer={answer?.ok ? answer : null} />
-      <View style={{ gap: space.l }}>
-        <SheetForm
-          fields={fields}
-          texts={texts}
-          errors={errors}
-          echoes={read.echoes}
-          onChange={(name, text) => {
-            setTouched(true);
-            setTexts((now) => ({ ...now, [name]: text }));
-          }}
-        />
-      </View>
+      <SheetHeadline sheet={sheet} answer={answer?.ok ? answer : null} />
+      <SheetForm
+        fields={fields}
+        texts={texts}
+        errors={errors}
+        echoes={read.echoes}
+        onChange={(name, text) => {
+          setTouched(true);
+          setTexts((now) => ({ ...now, [name]: text }));
+        }}
+      />
+      <SheetGrounds sheet={sheet} answer={answer?.ok ? answer : null} />
       <LinkText label="All workings" href="/workings" />
     </Page>
   );

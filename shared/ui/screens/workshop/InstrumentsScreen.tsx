@@ -12,7 +12,7 @@ import { Mono } from '@/shared/ui/components/Mono';
 import { Page } from '@/shared/ui/components/Page';
 import { Tag } from '@/shared/ui/components/Tag';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
-import { INSTRUMENT_KINDS_IN_WORDS, rangeWords } from '@/shared/ui/screens/workshop/instrumentWords';
+import { INSTRUMENT_KINDS_IN_WORDS, functionsOf } from '@/shared/ui/screens/workshop/instrumentWords';
 import { space } from '@/shared/ui/theme/space';
 
 const columns: Column<Instrument>[] = [
@@ -31,12 +31,16 @@ const columns: Column<Instrument>[] = [
   {
     key: 'ranges',
     title: 'Reads, accuracy',
-    grow: 2.6,
+    grow: 3.2,
     cell: (i) => (
       <View>
         {i.ranges.length === 0 ? <BodyText tone="soft">shows a state, no figures</BodyText> : null}
-        {i.ranges.map((range) => (
-          <Mono key={`${range.quantity}-${range.fullScale}`}>{rangeWords(range)}</Mono>
+        {functionsOf(i.ranges).map((one) => (
+          <BodyText key={one.name}>
+            {`${one.name} `}
+            <Mono inline>{one.accuracy}</Mono>
+            {`; ranges ${one.ranges}`}
+          </BodyText>
         ))}
       </View>
     ),
@@ -56,10 +60,10 @@ const columns: Column<Instrument>[] = [
   {
     key: 'until',
     title: 'Calibrated until',
-    grow: 1.1,
+    grow: 1.2,
     cell: (i) => (
       <View style={{ gap: space.xs }}>
-        <Mono>{i.calibratedUntil}</Mono>
+        <Mono whole>{i.calibratedUntil}</Mono>
         {i.outOfDate ? <Tag word="out of date" kind="look" /> : null}
       </View>
     ),

@@ -31,7 +31,7 @@ export function PeopleScreen() {
             empty={<EmptyState title="Nobody here" text="The keeper of the workshop invites its members." />}
             columns={[
               { key: 'name', title: 'Name', grow: 1.6, cell: (p) => p.name },
-              { key: 'code', title: 'Sign in records', cell: (p) => <Mono>{p.code}</Mono> },
+              { key: 'code', title: 'Code', cell: (p) => <Mono>{p.code}</Mono> },
               {
                 key: 'roles',
                 title: 'Roles',

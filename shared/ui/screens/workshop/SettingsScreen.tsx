@@ -28,7 +28,7 @@ const columns: Column<SettingRow>[] = [
       </View>
     ),
   },
-  { key: 'loosest', title: 'As the house rules start', grow: 1.8, cell: (r) => <Mono soft>{r.loosest}</Mono> },
+  { key: 'loosest', title: 'House rule', grow: 1.8, cell: (r) => <Mono soft>{r.loosest}</Mono> },
 ];
 
 /** Read-only: a workshop may be stricter than the house rules, never looser. */

@@ -8,11 +8,11 @@ import { useMe } from '@/shared/ui/api/queries';
 import { useSession } from '@/shared/ui/api/useSession';
 import { Button } from '@/shared/ui/components/Button';
 import { Choice } from '@/shared/ui/components/Choice';
-import { LinkText } from '@/shared/ui/components/LinkText';
 import { Notice } from '@/shared/ui/components/Notice';
 import { Page } from '@/shared/ui/components/Page';
 import { FactRows } from '@/shared/ui/screens/shell/FactRows';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
+import { LinkRows } from '@/shared/ui/screens/shell/LinkRows';
 import { Section } from '@/shared/ui/screens/shell/Section';
 import { isWide } from '@/shared/ui/theme/space';
 import type { SchemeChoice } from '@/shared/ui/theme/schemeChoice';
@@ -34,12 +34,15 @@ export function WorkshopScreen() {
       <Fetched query={me} what="the workshop">
         {(data) => (
           <>
-            <View>
-              {wide ? null : <LinkText label="Workings" href="/workings" />}
-              <LinkText label="Instruments" href="/workshop/instruments" />
-              <LinkText label="People and roles" href="/workshop/people" />
-              <LinkText label="Settings of the workshop" href="/workshop/settings" />
-            </View>
+            <LinkRows
+              caption="Of the workshop"
+              rows={[
+                ...(wide ? [] : [{ href: '/workings' as const, title: 'Workings', about: 'Bench calculations with formula and source' }]),
+                { href: '/workshop/instruments', title: 'Instruments', about: 'Meters and testers, their accuracy and calibration' },
+                { href: '/workshop/people', title: 'People and roles', about: 'Who works here and what each may do' },
+                { href: '/workshop/settings', title: 'Settings of the workshop', about: 'Limits and times, beside the house rules' },
+              ]}
+            />
             <SignedInAs me={data} />
             <Section title="Look of the pages">
               <View style={{ maxWidth: 430 }}>

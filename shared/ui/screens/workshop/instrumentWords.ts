@@ -14,17 +14,45 @@ export const INSTRUMENT_KINDS_IN_WORDS: Readonly<Record<Instrument['kind'], stri
   thermometer: 'thermometer',
 };
 
-const CURRENT: Readonly<Partial<Record<InstrumentRange['quantity'], string>>> = {
-  'volts-dc': ' DC',
-  'volts-ac': ' AC',
-  'amps-dc': ' DC',
-  'amps-ac': ' AC',
-  'diode-volts': ' diode',
-  'esr-ohms': ' ESR',
+const FUNCTIONS: Readonly<Record<InstrumentRange['quantity'], string>> = {
+  'volts-dc': 'Volts DC',
+  'volts-ac': 'Volts AC',
+  'amps-dc': 'Amps DC',
+  'amps-ac': 'Amps AC',
+  ohms: 'Ohms',
+  'diode-volts': 'Diode volts',
+  farads: 'Farads',
+  'esr-ohms': 'ESR',
+  celsius: 'Degrees Celsius',
+  seconds: 'Seconds',
 };
 
-/** `60 V DC ± (0.5 % + 2 of 10 mV)`. */
-export function rangeWords({ quantity, fullScale, resolution, percent, counts }: InstrumentRange): string {
-  const unit: Unit = QUANTITIES[quantity];
-  return `${formatQuantity(fullScale, unit)}${CURRENT[quantity] ?? ''} ± (${formatNumber(percent)} % + ${counts} of ${formatQuantity(resolution, unit)})`;
+export interface InstrumentFunction {
+  name: string;
+  /** as makers print it */
+  accuracy: string;
+  /** full scales, smallest first */
+  ranges: string;
+}
+
+/** Ranges of one function that share their accuracy stand in one line, as in a maker's table. */
+export function functionsOf(ranges: readonly InstrumentRange[]): InstrumentFunction[] {
+  const groups = new Map<string, InstrumentRange[]>();
+  for (const range of ranges) {
+    const key = `${range.quantity} ${range.percent} ${range.counts}`;
+    groups.set(key, [...(groups.get(key) ?? []), range]);
+  }
+  return [...groups.values()].flatMap((group) => {
+    const first = group[0];
+    if (first === undefined) return [];
+    const unit: Unit = QUANTITIES[first.quantity];
+    const scales = group.map((r) => r.fullScale).sort((a, b) => a - b);
+    return [
+      {
+        name: FUNCTIONS[first.quantity],
+        accuracy: `± (${formatNumber(first.percent)} % + ${first.counts})`,
+        ranges: scales.map((n) => formatQuantity(n, unit)).join(', '),
+      },
+    ];
+  });
 }
