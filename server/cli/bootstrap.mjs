@@ -21,13 +21,13 @@ export function nodeFault(version, engines) {
 
 /**
  * True when `installed` (npm's own list of what lies in node_modules) holds what `lock` asks for. A package for another
- * kind of machine may be absent; nothing else may.
+ * kind of machine may be absent, and what the lock file itself calls extraneous; nothing else may.
  */
 export function fitsLock(lock, installed) {
   return Object.entries(lock.packages).every(([path, wanted]) => {
     if (path === '') return true;
     const found = installed.packages[path];
-    return found === undefined ? wanted.optional === true : found.version === wanted.version;
+    return found === undefined ? wanted.optional === true || wanted.extraneous === true : found.version === wanted.version;
   });
 }
 

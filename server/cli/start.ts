@@ -3,6 +3,7 @@ import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 
 import { migrateToLatest } from '@/db/migrate';
+import { DEMO_PASSWORD, demoPeople, demoWorkshops } from '@/db/seeds/demoPeople';
 import { loadDemo } from '@/db/seeds/loadDemo';
 import { startMailFake } from '@/server/adapters/fakes/mailFake';
 import { readConfig } from '@/server/config';
@@ -10,7 +11,6 @@ import { startServer } from '@/server/main';
 
 import { buildWeb, webRoot } from './buildWeb';
 import { openCluster } from './cluster';
-import { demoAccounts, demoPassword } from './demoAccounts';
 import { devKeys } from './devKeys';
 import { findFreePort, isPortFree } from './freePort';
 import { step } from './progress';
@@ -67,8 +67,10 @@ async function start(parts: Parts): Promise<void> {
   say(`✓ Server started (${((performance.now() - begun) / 1000).toFixed(1)} s in all)\n`);
   say(`Lampstep is at ${url}`);
   if (plan.demo) {
-    say(`Demo accounts, all with the password ${demoPassword}:`);
-    for (const { mail, is } of demoAccounts) say(`  ${mail.padEnd(24)}${is}`);
+    say(`Demo accounts, all with the password ${DEMO_PASSWORD}:`);
+    for (const person of Object.values(demoPeople)) {
+      if (person.account) say(`  ${person.mail.padEnd(24)}${person.roles.join(', ')} at ${demoWorkshops[person.workshop].name}`);
+    }
   }
   say('Ctrl-C stops it.');
 }

@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 
 import { inProject } from '@/server/cli/projectFiles';
 
-type Listed = { version?: string; optional?: boolean };
+type Listed = { version?: string; optional?: boolean; extraneous?: boolean };
 type Lock = { packages: Record<string, Listed> };
 type Bootstrap = { nodeFault(version: string, engines: string): string | undefined; fitsLock(lock: Lock, installed: Lock): boolean };
 
@@ -24,9 +24,16 @@ describe('nodeFault', () => {
 });
 
 describe('fitsLock', () => {
-  const lock: Lock = { packages: { '': {}, 'node_modules/a': { version: '1.0.0' }, 'node_modules/for-another-system': { version: '2.0.0', optional: true } } };
+  const lock: Lock = {
+    packages: {
+      '': {},
+      'node_modules/a': { version: '1.0.0' },
+      'node_modules/for-another-system': { version: '2.0.0', optional: true },
+      'node_modules/left-over': { version: '3.0.0', extraneous: true },
+    },
+  };
 
-  it('is content with what the lock file names, packages for other systems left out', () => {
+  it('is content with what the lock file names, packages for other systems and left-overs left out', () => {
     expect(bootstrap.fitsLock(lock, { packages: { 'node_modules/a': { version: '1.0.0' } } })).toBe(true);
   });
 
