@@ -11,12 +11,23 @@ export interface DemoReading {
   instrument: { id: string; twoPole: boolean; uncertainty: number };
 }
 
-/** A value inside the limits of its row; a little off the middle, the same each time for the same row. */
-export function goodValue(row: ReadingRow): number {
-  const off = 1 + (([...row.id].reduce((sum, letter) => sum + letter.charCodeAt(0), 0) % 9) - 4) * 0.0004;
-  if (row.nominal !== null) return significant(row.nominal * off);
-  if (row.low !== null && row.high !== null) return significant(((row.low + row.high) / 2) * off);
-  return significant((row.low !== null ? row.low * 2 : (row.high ?? 1) * 0.2) * off);
+/** A number from 0 to 1 that is the same each time for the same text, and looks like none in particular. */
+export function scatter(text: string): number {
+  const mixed = [...text].reduce((sum, letter) => (Math.imul(sum ^ letter.charCodeAt(0), 16_777_619) >>> 0), 2_166_136_261);
+  return (mixed % 1000) / 999;
+}
+
+/** Share of its distance to the nearest limit by which a good reading may lie off the middle. */
+const SCATTER_SHARE = 0.3;
+
+/** A value well inside the limits of its row, a little off the middle; the same each time for the same row and salt. */
+export function goodValue(row: ReadingRow, salt = ''): number {
+  const off = (scatter(`${salt}/${row.id}`) - 0.5) * 2 * SCATTER_SHARE;
+  if (row.low !== null && row.high !== null) {
+    const middle = row.nominal ?? (row.low + row.high) / 2;
+    return significant(middle + off * Math.min(row.high - middle, middle - row.low));
+  }
+  return significant((row.low !== null ? row.low * 3 : (row.high ?? 1) * 0.2) * (1 + off));
 }
 
 /** The reading of `value`; throws when no instrument of the workshop that is in date can take it. */

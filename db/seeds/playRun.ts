@@ -5,8 +5,10 @@ import { demoPeople } from './demoPeople';
 import type { DemoChoice, DemoChoices, DemoMove, DemoRun } from './DemoContent';
 import type { DemoDevice } from './DemoDevice';
 import type { DemoInstrument } from './demoInstruments';
-import { goodValue, readWith } from './demoReading';
+import { goodValue, readWith, scatter } from './demoReading';
 
+/** A step is done in less than the minutes that its author allows, and never twice alike. */
+const SHARE_OF_MINUTES = 0.3;
 /** More than any tree of the demo needs; a script that goes round in circles ends here. */
 const MOST_MOVES = 3000;
 
@@ -14,11 +16,13 @@ interface Player {
   device: DemoDevice;
   instruments: readonly DemoInstrument[];
   countersign: string;
+  /** readings and times of one run are not those of another */
+  salt: string;
 }
 
 /** Plays every move of the run in order. Throws with the place where a script does not fit its tree. */
 export async function playRun(device: DemoDevice, run: DemoRun, instruments: readonly DemoInstrument[]): Promise<void> {
-  const player: Player = { device, instruments, countersign: demoPeople[run.countersign].id };
+  const player: Player = { device, instruments, countersign: demoPeople[run.countersign].id, salt: run.key };
   for (const move of run.moves) await playMove(player, move);
   await device.flush();
 }
@@ -64,7 +68,11 @@ async function walk(player: Player, choices: Choices, until: (view: RunView) => 
     if (until(view)) return;
     if (view.phase === 'ended') throw new Error(`the run has ended (${view.end?.title ?? ''}) before its script`);
     const first = view.rows.every(({ answer }) => answer === null);
-    if (visit.key !== view.key || (first && view.phase === 'warning')) visit = { key: view.key, choice: (choices.get(view.key) ?? choices.get(view.key.split('/').at(-1) ?? ''))?.shift() };
+    const arrives = visit.key !== view.key || (first && view.phase === 'warning');
+    if (arrives) {
+      device.wait(paceMs(view, player.salt));
+      visit = { key: view.key, choice: (choices.get(view.key) ?? choices.get(view.key.split('/').at(-1) ?? ''))?.shift() };
+    }
     if (view.phase === 'hold-wait') {
       if (!countersign) throw new Error('a hold point stands where none is expected');
       await device.answerHold(player.countersign, 'given');
@@ -73,8 +81,12 @@ async function walk(player: Player, choices: Choices, until: (view: RunView) => 
   throw new Error(`no end in sight at ${device.view.key}`);
 }
 
+function paceMs({ step, key }: RunView, salt: string): number {
+  return Math.round((step?.minutes ?? 0) * 60_000 * SHARE_OF_MINUTES * (0.7 + scatter(`${salt}/${key}`) * 0.6));
+}
+
 /** One move of a person at the bench: warning, hold, guard, row or answer. */
-function answerOnce({ device, instruments }: Player, view: RunView, choice: DemoChoice | undefined): void {
+function answerOnce({ device, instruments, salt }: Player, view: RunView, choice: DemoChoice | undefined): void {
   const { phase, key, current } = view;
   if (phase === 'warning') device.do({ type: 'WARNING_READ', step: key });
   else if (phase === 'hold' || view.step?.kind === 'hold') device.do({ type: 'HOLD_ASKED', step: key });
@@ -86,6 +98,6 @@ function answerOnce({ device, instruments }: Player, view: RunView, choice: Demo
     const chosen = typeof choice === 'object' ? (choice[row.id] ?? choice['*']) : choice;
     if (row.ask === 'word') device.do({ type: 'ROW', step: key, row: row.id, word: typeof chosen === 'string' ? chosen : (row.words[0]?.word ?? '') });
     else if (typeof chosen === 'string' && chosen !== 'over') device.do({ type: 'ROW', step: key, row: row.id, word: chosen });
-    else device.do({ type: 'READING', step: key, row: row.id, ...readWith(instruments, view.step, row, chosen === undefined || (typeof chosen === 'string' && chosen !== 'over') ? goodValue(row) : (chosen as number | 'over')) });
+    else device.do({ type: 'READING', step: key, row: row.id, ...readWith(instruments, view.step, row, chosen === undefined || (typeof chosen === 'string' && chosen !== 'over') ? goodValue(row, salt) : (chosen as number | 'over')) });
   }
 }

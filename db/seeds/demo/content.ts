@@ -1,7 +1,11 @@
 /** What the demo workshops hold: machines of makers that never were, their trees, and the runs that were done on them. */
 import { parseProfile, parseTree } from '@/flows/document/parseTree';
 import firstPower from '@/flows/library/first-power.json';
+import lampBright from '@/flows/library/lamp-bright.json';
+import lookOver from '@/flows/library/look-over.json';
 import makeDead from '@/flows/library/make-dead.json';
+import reformInPlace from '@/flows/library/reform-in-place.json';
+import returnsMeasured from '@/flows/library/returns-measured.json';
 
 import type { DemoContent } from '../DemoContent';
 import { demoRuns } from './demoRuns';
@@ -31,7 +35,10 @@ export const demoContent: DemoContent = {
     { ...first, document: tree(makeDead), version: 1, state: 'issued', daysAgo: 190 },
     { ...first, document: { ...tree(firstPower), title: 'Dormant three-rail supply, first trial' }, version: 1, state: 'withdrawn', daysAgo: 150 },
     { ...first, document: tree(firstPower), version: 2, state: 'issued', daysAgo: 120 },
-    { ...first, document: { ...tree(firstPower), symptom: 'Long dormant, known to have been wet' }, version: 3, state: 'draft', checker: null, daysAgo: 6 },
+    { ...first, document: tree(lookOver), version: 1, state: 'issued', daysAgo: 110 },
+    { ...first, document: tree(returnsMeasured), version: 1, state: 'issued', author: 'senior3', daysAgo: 95 },
+    { ...first, document: tree(reformInPlace), version: 1, state: 'withdrawn', author: 'senior2', checker: 'senior', daysAgo: 170 },
+    { ...first, document: tree(lampBright), version: 1, state: 'draft', author: 'senior3', checker: null, daysAgo: 6 },
     { ...second, document: tree(makeDead), version: 1, state: 'issued', daysAgo: 90 },
     { ...second, document: tree(firstPower), version: 1, state: 'issued', daysAgo: 80 },
   ],

@@ -47,6 +47,19 @@ describe('loadDemo', () => {
     }
   });
 
+  it('shows every state that a run can be in, one of the open ones waiting for a senior', async () => {
+    const runs = await server.query<{ state: string; ended: string | null; waits: boolean; hours: number; since: number }>(
+      `select state, ended, hold_entry is not null as waits, extract(epoch from heard_at - started_at)::float / 3600 as hours, ($2 - extract(epoch from heard_at) * 1000)::float / 3600000 as since
+         from runs join run_heads on run_heads.run = runs.id where runs.workshop = $1 order by started_at`,
+      [demoWorkshops.first.id, server.time.now],
+    );
+    const count = (state: string) => runs.filter((run) => run.state === state).length;
+    expect({ open: count('open'), closed: count('closed'), submitted: count('submitted'), returned: count('returned'), accepted: count('accepted') }).toEqual({ open: 2, closed: 1, submitted: 2, returned: 1, accepted: 3 });
+    expect(runs.filter(({ state }) => state === 'closed').map(({ ended }) => ended)).toEqual(['stopped']);
+    expect(runs.filter(({ state }) => state === 'open').map(({ waits }) => waits).sort()).toEqual([false, true]);
+    expect(await server.query('select release_voids.release from releases left join release_voids on release_voids.release = releases.id where releases.workshop = $1 order by release nulls last', [demoWorkshops.first.id])).toMatchObject([{ release: expect.any(String) as string }, { release: null }]);
+  });
+
   it('has six instruments, of which one is out of date', async () => {
     const { instruments } = instrumentsSchema.parse((await (await signIn('restorer@example.org')).get('/api/instruments')).body);
     expect(instruments.map(({ outOfDate }) => outOfDate)).toEqual([false, false, false, false, false, true]);
