@@ -14,17 +14,27 @@ export type Tx = Transaction<Database>;
 // int8 holds epoch milliseconds and counts here, all below 2^53; a date stays the text that it is, without a time zone.
 const parsers: Record<number, (text: string) => unknown> = { [INT8]: Number, [DATE]: (text) => text };
 
-/** Opens a pool of connections. `destroy()` closes it. */
-export function createDb(url: string, options: { connections?: number; onIdleError?: (error: Error) => void } = {}): Db {
+/**
+ * Opens a pool of connections that survives the loss of any of them: when the database restarts, a query under way fails, and the next
+ * one opens a connection anew. Without a listener Node would end the process.
+ */
+export function createPool(url: string, options: { connections?: number; onBroken?: (error: Error) => void } = {}): Pool {
+  const onBroken = options.onBroken ?? (() => undefined);
   const pool = new Pool({
     connectionString: url,
     max: options.connections ?? 10,
     connectionTimeoutMillis: 10_000,
     types: { getTypeParser: (oid: number, format?: 'text' | 'binary') => (format !== 'binary' && parsers[oid]) || types.getTypeParser(oid, format as 'text') },
   });
-  // A connection that breaks while idle (the database restarts) must not end the process: the next query opens another.
-  pool.on('error', options.onIdleError ?? (() => undefined));
-  return new Kysely<Database>({ dialect: new PostgresDialect({ pool }) });
+  pool.on('error', onBroken);
+  // While it is lent out the pool itself does not listen to it.
+  pool.on('connect', (client) => client.on('error', onBroken));
+  return pool;
+}
+
+/** The typed door to the database. `destroy()` closes its connections. */
+export function createDb(url: string, options: { connections?: number; onBroken?: (error: Error) => void } = {}): Db {
+  return new Kysely<Database>({ dialect: new PostgresDialect({ pool: createPool(url, options) }) });
 }
 
 /** Runs `work` in one transaction that sees the rows of one workshop only. */

@@ -23,7 +23,7 @@ const STOP_MS = 8_000;
 
 /** Starts server and job worker; resolves when it listens. `stop` ends both and closes the database pool. */
 export async function startServer(config: Config, log: Logger = pino({ level: config.logLevel })): Promise<{ port: number; stop: () => Promise<void> }> {
-  const db = createDb(config.databaseUrl, { onIdleError: (error) => log.warn({ err: error }, 'a database connection broke') });
+  const db = createDb(config.databaseUrl, { onBroken: (error) => log.warn({ err: error }, 'a database connection broke') });
   const parts: Parts = { db, config, clock: () => Date.now(), log, programs: createProgramCache() };
   const server = createServer(createApp(parts));
   try {

@@ -40,13 +40,23 @@ export const answerProblems: ErrorRequestHandler = (error: unknown, req, res, ne
     return;
   }
   const problem = toProblem(error);
-  if (problem.code === 'internal') req.log.error({ err: error }, 'unexpected error');
+  if (problem.code === 'internal' || problem.code === 'not-ready') req.log.error({ err: error }, problem.say);
   if (problem.code === 'too-many' || problem.code === 'not-ready') res.setHeader('Retry-After', '60');
   res.status(statusOf(problem.code)).type('application/problem+json').send(JSON.stringify(problem));
 };
 
+/** What PostgreSQL and its driver say when the database is away, starting or going down (class 08 and 57P0x of its error codes). */
+const AWAY = /^(08\d{3}|57P0[123]|ECONN(REFUSED|RESET|ABORTED)|EPIPE|ENOTFOUND|ETIMEDOUT)$/;
+const AWAY_SAY = /^(Connection terminated|timeout exceeded when trying to connect|Client has encountered a connection error)/;
+
+function isDatabaseAway(error: unknown): boolean {
+  if (!(error instanceof Error)) return false;
+  return ('code' in error && typeof error.code === 'string' && AWAY.test(error.code)) || AWAY_SAY.test(error.message);
+}
+
 function toProblem(error: unknown): Problem {
   if (error instanceof ProblemError) return error.problem;
+  if (isDatabaseAway(error)) return new ProblemError('not-ready').problem;
   if (typeof error === 'object' && error !== null && 'status' in error) {
     // What Express and its body parser throw.
     if ('type' in error && error.type === 'entity.too.large') return new ProblemError('too-large').problem;

@@ -4,6 +4,7 @@ import type { TaskList } from 'graphile-worker';
 import { sql } from 'kysely';
 import type { Logger } from 'pino';
 
+import { createPool } from '@/db/createDb';
 import type { Tx } from '@/db/createDb';
 
 /** Stores a job in the caller's transaction. The same `key` twice is one job. */
@@ -14,15 +15,21 @@ export async function addJob(tx: Tx, task: string, payload: object, key: string)
 /** Starts working on jobs; failed ones are tried again, later each time. */
 export async function startJobs(databaseUrl: string, taskList: TaskList, log: Logger): Promise<{ stop: () => Promise<void> }> {
   const levels = { error: 'error', warning: 'warn', info: 'debug', debug: 'trace' } as const;
+  // A pool of our own: stopping waits until its last connection is closed, so that the database can go down right after.
+  const pgPool = createPool(databaseUrl, { connections: 3, onBroken: (error) => log.warn({ err: error }, 'a connection of the job queue broke') });
   const runner = await run({
-    connectionString: databaseUrl,
+    pgPool,
     taskList,
     concurrency: 2,
-    maxPoolSize: 3,
     pollInterval: 2_000,
     noHandleSignals: true,
     parsedCronItems: [],
     logger: new QueueLogger(() => (level, message) => log[levels[level]](message)),
   });
-  return { stop: () => runner.stop() };
+  return {
+    stop: async () => {
+      await runner.stop();
+      await pgPool.end();
+    },
+  };
 }

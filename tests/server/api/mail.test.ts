@@ -4,7 +4,7 @@ import { join } from 'node:path';
 
 import { Client } from 'pg';
 import { v7 as uuidv7 } from 'uuid';
-import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { afterAll, beforeAll, describe, expect, inject, it, vi } from 'vitest';
 
 import { startMailFake } from '@/server/adapters/fakes/mailFake';
 import type { MailFake } from '@/server/adapters/fakes/mailFake';
@@ -80,6 +80,20 @@ describe('the letter “countersign wanted”', () => {
     expect((await admin.query('select count(*)::int as n from graphile_worker._private_jobs')).rows).toEqual([{ n: 0 }]);
     await admin.end();
     expect(mail.letters()).toHaveLength(before);
+    await close(device);
+  });
+
+  it('is sent though every connection to the database has broken in between', async () => {
+    const before = mail.letters().length;
+    const device = await toHold();
+    const admin = new Client({ connectionString: inject('clusterAdminUrl').replace(/\/postgres$/, `/${database.name}`) });
+    await admin.connect();
+    const broken = await admin.query(`select pg_terminate_backend(pid) from pg_stat_activity where datname = $1 and usename = 'lampstep_server'`, [database.name]);
+    expect(broken.rowCount).toBeGreaterThan(1);
+    await admin.end();
+    await vi.waitFor(async () => expect((await device.client.get('/readyz')).status).toBe(200), patience);
+    await device.send();
+    await vi.waitFor(() => expect(mail.letters()).toHaveLength(before + 2), patience);
     await close(device);
   });
 

@@ -90,6 +90,8 @@ describe('the surface of the server', () => {
     const { status, body } = await broken.stranger().get('/readyz');
     expect([status, body['code']]).toEqual([503, 'not-ready']);
     expect((await broken.stranger().get('/healthz')).status).toBe(200);
+    const signIn = await broken.stranger().post('/api/session', { mail: 'a@example.org', password });
+    expect([signIn.status, signIn.body]).toEqual([503, { code: 'not-ready', say: 'The server is not ready. Try again in a moment.' }]);
     await broken.stop();
   });
 });
