@@ -2,6 +2,7 @@
 import { EVIDENCE } from '../document/outcomes';
 import type { EvidenceWord } from '../document/outcomes';
 import type { Suspect } from '../document/tree';
+import { sharesOf } from './logWeights';
 
 /** What one check said about suspects. A check that is answered again replaces what it said before. */
 export interface Finding {
@@ -30,10 +31,8 @@ export function posterior(suspects: readonly Suspect[], findings: readonly Findi
     const words = said.get(suspect.id) ?? [];
     return { suspect, heard: words.length, log: Math.log(suspect.prior) + words.reduce((sum, says) => sum + Math.log(EVIDENCE[says]), 0) };
   });
-  // the largest is taken out before the exponential: only differences count
-  const top = Math.max(...weighed.map((w) => w.log));
-  const total = weighed.reduce((sum, w) => sum + Math.exp(w.log - top), 0);
-  return weighed.map(({ suspect, heard, log }) => ({ suspect, heard, share: Math.exp(log - top) / total })).sort((a, b) => b.share - a.share);
+  const shares = sharesOf(weighed.map((w) => w.log));
+  return weighed.map(({ suspect, heard }, i) => ({ suspect, heard, share: shares[i] ?? 0 })).sort((a, b) => b.share - a.share);
 }
 
 /** The words that stand now, by suspect: the last of each check, none from before work on that suspect. */
