@@ -6,7 +6,6 @@ import { BodyText } from '@/shared/ui/components/BodyText';
 import { DataTable } from '@/shared/ui/components/DataTable';
 import type { Column } from '@/shared/ui/components/DataTable';
 import { Mono } from '@/shared/ui/components/Mono';
-import { ReadingScale } from '@/shared/ui/components/ReadingScale';
 import { Verdict } from '@/shared/ui/components/Verdict';
 import { ReadingBlock } from '@/shared/ui/screens/records/ReadingBlock';
 import { goToEntry } from '@/shared/ui/screens/records/goToEntry';

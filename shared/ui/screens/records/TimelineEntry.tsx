@@ -1,18 +1,20 @@
 /** One entry of a record, as a row. */
-import { View } from 'react-native';
+import { Text, useWindowDimensions, View } from 'react-native';
 
 import type { Person } from '@/shared/contract/people';
 import type { Finding } from '@/shared/contract/records';
 import { BodyText } from '@/shared/ui/components/BodyText';
-import { Button } from '@/shared/ui/components/Button';
+import { Icon } from '@/shared/ui/components/icons/Icon';
 import { Mono } from '@/shared/ui/components/Mono';
 import { PowerPattern } from '@/shared/ui/components/PowerPattern';
+import { Press } from '@/shared/ui/components/Press';
 import { entryWords } from '@/shared/ui/screens/records/entryWords';
 import { entryAnchor } from '@/shared/ui/screens/records/goToEntry';
 import type { ReplayedEntry } from '@/shared/ui/screens/records/replayRecord';
 import { secondsClockWords } from '@/shared/ui/screens/shell/dateWords';
 import { personCode, personName } from '@/shared/ui/screens/shell/personName';
-import { line, space } from '@/shared/ui/theme/space';
+import { isWide, line, space, target } from '@/shared/ui/theme/space';
+import { type } from '@/shared/ui/theme/type';
 import { useTheme } from '@/shared/ui/theme/useTheme';
 
 interface Props {
@@ -26,6 +28,7 @@ interface Props {
 /** Number, time, person, act; what was remarked on it stands below. */
 export function TimelineEntry({ replayed, people, known, findings, onRemark }: Props) {
   const { colors } = useTheme();
+  const wide = isWide(useWindowDimensions().width);
   const { entry, after, event } = replayed;
   const { what, detail } = entryWords(replayed, known);
   return (
@@ -36,7 +39,12 @@ export function TimelineEntry({ replayed, people, known, findings, onRemark }: P
       style={{ flexDirection: 'row', gap: space.m, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}
     >
       <View style={{ width: 10, overflow: 'hidden' }} aria-hidden>
-        {after && event ? <PowerPattern state={after.band} width="100%" height="100%" /> : null}
+        {after && event ? (
+          // out of the flow: a drawing has a height of its own, which must not stretch the row
+          <View style={{ position: 'absolute', top: 0, bottom: 0, left: 0, right: 0 }}>
+            <PowerPattern state={after.band} width="100%" height="100%" />
+          </View>
+        ) : null}
       </View>
       <View style={{ flex: 1, minWidth: 0, paddingVertical: space.s, gap: 2 }}>
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.m, alignItems: 'baseline' }}>
@@ -59,8 +67,20 @@ export function TimelineEntry({ replayed, people, known, findings, onRemark }: P
         ))}
       </View>
       {onRemark ? (
-        <View style={{ justifyContent: 'center' }}>
-          <Button kind="quiet" icon="pencil" label="Remark" name={`Remark on entry ${entry.seq}`} onPress={() => onRemark(entry.id)} />
+        <View style={{ justifyContent: 'flex-start' }}>
+          <Press
+            kind="quiet"
+            name={`Remark on entry ${entry.seq}`}
+            style={{ minWidth: target.control, paddingHorizontal: space.s }}
+            onPress={() => onRemark(entry.id)}
+          >
+            {(word) => (
+              <>
+                <Icon name="pencil" size={22} color={word} />
+                {wide ? <Text style={[type.button, { color: word }]}>Remark</Text> : null}
+              </>
+            )}
+          </Press>
         </View>
       ) : null}
     </View>
