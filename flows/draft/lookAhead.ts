@@ -2,9 +2,11 @@
 import { gainBits, parts, split, weightOf } from './matrix';
 import type { Matrix, Possible } from './matrix';
 
-/** Up to so many suspects every check is tried two deep; above it the most telling ones are tried one deep. */
+/** Up to so many suspects checks are tried two deep, above it one deep. */
 const SMALL = 16;
-const TRIED = 24;
+/** Cells that may be looked at for one choice: it says how many of the most telling checks are tried. */
+const CELLS = { one: 2_000_000, two: 60_000 };
+const FEWEST_TRIED = 3;
 
 interface Ranked {
   check: number;
@@ -25,6 +27,7 @@ export function rankChecks(matrix: Matrix, possible: Possible): Ranked[] {
 /** Expected minutes from here on, weighted like the suspects here, when always the check with most bits a minute is taken. */
 export function greedyMinutes(matrix: Matrix, possible: Possible): number {
   if (possible.members.length < 2) return 0;
+  if (possible.members.length === 2) return cheapestParting(matrix, possible) * weightOf(possible);
   const scratch = new Float64Array(16);
   let best = -1;
   let most = -1;
@@ -41,20 +44,38 @@ export function greedyMinutes(matrix: Matrix, possible: Possible): number {
 
 /** The check to make here, or null when none parts the suspects: each candidate is tried, and what follows it is taken to be ordered as one that looks less far would. */
 export function lookAheadCheck(matrix: Matrix, possible: Possible): number | null {
-  return tried(matrix, possible, possible.members.length <= SMALL ? 2 : 1)?.check ?? null;
+  const { length } = possible.members;
+  const cells = length * matrix.minutes.length;
+  const deep = length <= SMALL;
+  const width = deep ? Math.sqrt(CELLS.two / cells) : CELLS.one / (cells * Math.log2(length));
+  return tried(matrix, possible, deep ? 2 : 1, Math.max(FEWEST_TRIED, Math.floor(width)))?.check ?? null;
 }
 
-function tried(matrix: Matrix, possible: Possible, depth: number): { check: number; minutes: number } | null {
-  const candidates = rankChecks(matrix, possible).slice(0, possible.members.length <= SMALL ? undefined : TRIED);
+function tried(matrix: Matrix, possible: Possible, depth: number, width: number): { check: number; minutes: number } | null {
+  const candidates = rankChecks(matrix, possible).slice(0, width);
   const weight = weightOf(possible);
   let best: { check: number; minutes: number } | null = null;
   for (const { check } of candidates) {
     let minutes = (matrix.minutes[check] ?? 0) * weight;
     for (const branch of split(matrix, possible, check)) {
-      if (branch !== null && branch.members.length > 1) minutes += depth > 1 ? (tried(matrix, branch, depth - 1)?.minutes ?? 0) : greedyMinutes(matrix, branch);
+      if (branch !== null && branch.members.length > 1) minutes += depth > 1 ? (tried(matrix, branch, depth - 1, width)?.minutes ?? 0) : greedyMinutes(matrix, branch);
       if (best !== null && minutes >= best.minutes) break;
     }
     if (best === null || minutes < best.minutes - 1e-12) best = { check, minutes };
   }
   return best;
+}
+
+/** Of two suspects every check that parts them tells the same: the cheapest will do. 0 where none does. */
+function cheapestParting(matrix: Matrix, possible: Possible): number {
+  const [a = 0, b = 0] = possible.members;
+  let least = Infinity;
+  for (let check = 0; check < matrix.minutes.length; check += 1) {
+    const minutes = matrix.minutes[check] ?? 0;
+    const column = matrix.answers[check];
+    if (minutes >= least || column === undefined || column[a] === column[b] || column[a] === -1 || column[b] === -1) continue;
+    if (matrix.open[check] === true && possible.asked.includes(check)) continue;
+    least = minutes;
+  }
+  return Number.isFinite(least) ? least : 0;
 }

@@ -93,9 +93,11 @@ describe('draft', () => {
 
   it('orders 200 suspects by 200 checks in under 3 s', () => {
     const table = randomTable(7, 200, 200);
-    const before = performance.now();
+    // the time of this process alone: other work on the machine does not count
+    const before = process.cpuUsage();
     const { report } = draft(table);
-    expect(performance.now() - before).toBeLessThan(3000);
+    expect(process.cpuUsage(before).user / 1000).toBeLessThan(3000);
+    expect(report.gap).toBeLessThan(0.05);
     expect(report.optimumMinutes).toBeNull();
     expect(report.gapTo).toBe('bound');
     expect(report.groups).toEqual([]);
