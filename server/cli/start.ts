@@ -29,10 +29,11 @@ async function start(parts: Parts): Promise<void> {
   // What production lacks is told before anything is touched.
   if (!plan.demo) readConfig(env);
 
-  const lock = takeStartLock(join(stateFolder, 'start.json'));
-  parts.closeWith(() => lock.release());
-
+  let note: (url: string) => void = () => undefined;
   if (plan.database === 'private') {
+    const lock = takeStartLock(join(stateFolder, 'start.json'));
+    parts.closeWith(() => lock.release());
+    note = (url) => lock.note(url);
     const cluster = await step(say, (c) => `Database on 127.0.0.1:${String(c.port)}, kept in ${c.dir}`, () =>
       openCluster({ dir: join(stateFolder, 'cluster'), port: 55432, durable: true, say }),
     );
@@ -63,7 +64,7 @@ async function start(parts: Parts): Promise<void> {
   const server = await startServer(config);
   parts.closeWith(() => server.stop());
   const url = config.publicUrl ?? `http://localhost:${String(server.port)}`;
-  lock.note(url);
+  note(url);
   say(`✓ Server started (${((performance.now() - begun) / 1000).toFixed(1)} s in all)\n`);
   say(`Lampstep is at ${url}`);
   if (plan.demo) {
