@@ -22,6 +22,10 @@ export const treeShape = z.strictObject({
     fewestRails: z.number().int().min(1).max(16),
     mostRails: z.number().int().min(1).max(16),
     serials: z.array(text(40)).max(200).optional(),
+    /** rails that its steps speak of by id */
+    rails: z.array(idSchema).max(16).optional(),
+    /** what else the profile must have for its rows */
+    has: z.array(z.enum(['returns', 'raw', 'stores', 'devices', 'boards', 'heatsinks'])).max(6).optional(),
   }),
   needsAtStart: z.array(claimSchema).max(14),
   opening: z.strictObject({

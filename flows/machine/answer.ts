@@ -25,7 +25,8 @@ const STOP_AT_FIRST: readonly Step['kind'][] = ['isolate', 'discharge', 'prove-d
 /** The rows that stand now: those of the step, of the bench opening, or one for each thing to take out. */
 export function currentRows(layout: Layout, context: RunContext): readonly Row[] {
   if (context.key === SAFE.opening) return layout.opening;
-  if (context.key === SAFE.takeOut) return toTakeOut(context.facts.fitted).map(takeOutRow);
+  if (context.key === SAFE.takeOut) return toTakeOut(context.facts.fitted).map((f) => thingRow(f, 'taken out'));
+  if (context.key === SAFE.putBack) return context.facts.fitted.map((f) => thingRow(f, 'back as built'));
   return layout.steps.get(context.key)?.rows ?? [];
 }
 
@@ -177,7 +178,7 @@ function resetCounters(layout: Layout, context: RunContext, landed: string, from
 /** The machine's own steps lead on by themselves. */
 function leaveBuiltIn(layout: Layout, context: RunContext, placed: ProgramStep, outcome: string): Judged {
   const on: Exit = { id: 'on', on: [outcome as never], to: 'on' };
-  const facts = placed.key === SAFE.takeOut ? takenOut(context) : applyOps(context.facts, after(placed.step, on, outcome, placed.scope));
+  const facts = placed.key === SAFE.takeOut || placed.key === SAFE.putBack ? takenOut(context) : applyOps(context.facts, after(placed.step, on, outcome, placed.scope));
   const provedAt = placed.key === SAFE.prove && outcome === 'in' ? context.last.at : context.provedAt;
   const next: RunContext = { ...context, facts, provedAt, live: allOut(facts) ? null : context.live, outcome: { key: placed.key, outcome, exit: null, verdict: null } };
   const go = (key: string) => accept({ ...next, goto: key });
@@ -191,6 +192,9 @@ function leaveBuiltIn(layout: Layout, context: RunContext, placed: ProgramStep, 
     case SAFE.prove:
       if (outcome === 'falling') return go(SAFE.discharge);
       return outcome === 'in' ? safeAgain(layout, next) : go(SAFE.isolate);
+    case SAFE.putBack:
+      // what cannot be put back needs a person who decides, not a tree that does not know of it
+      return next.facts.fitted.length > 0 ? accept({ ...next, goto: SAFE.ended, end: { says: 'stopped', key: null } }) : arriveAtFirst(layout, next);
     default:
       return afterTakeOut(layout, next);
   }
@@ -204,6 +208,8 @@ function safeAgain(layout: Layout, context: RunContext): Judged {
       const arrived = arriveAt(layout, context, context.purpose.to);
       return arrived.ok ? arrived : accept({ ...context, purpose: { is: 'stop' }, goto: SAFE.choose });
     }
+    case 'begin':
+      return accept({ ...context, goto: SAFE.putBack });
     case 'stop':
     case 'none':
       return accept({ ...context, purpose: { is: 'stop' }, goto: SAFE.choose });
@@ -212,7 +218,7 @@ function safeAgain(layout: Layout, context: RunContext): Judged {
 
 /** Taking a thing out voids its area as taking it out in a step would; what cannot come out stays fitted. */
 function takenOut(context: RunContext): RunContext['facts'] {
-  const out = toTakeOut(context.facts.fitted).filter((f) => context.rows.find((r) => r.id === f.id)?.result === 'done');
+  const out = context.facts.fitted.filter((f) => context.rows.find((r) => r.id === f.id)?.result === 'done');
   return applyOps(context.facts, [...out.flatMap((f) => fitVoids(f.area)), ...out.map((f): Op => ({ op: 'unfit', id: f.id }))]);
 }
 
@@ -224,19 +230,20 @@ function afterTakeOut(layout: Layout, context: RunContext): Judged {
 
 /** The bench is open: the tree's start is checked and its first step entered. */
 function arriveAtFirst(layout: Layout, context: RunContext): Judged {
+  if (context.facts.fitted.length > 0) return accept({ ...context, goto: SAFE.isolate, purpose: { is: 'begin' } });
   const landing = follow(layout, layout.first, () => false);
   return arriveAt(layout, context, landing.key);
 }
 
-function takeOutRow(f: { id: string; name: string }): WordRow {
+function thingRow(f: { id: string; name: string }, done: string): WordRow {
   return {
     id: f.id,
-    label: `${f.name}: taken out`,
+    label: `${f.name}: ${done}`,
     ask: 'word',
     wait: null,
     words: [
-      { word: 'done', label: 'Taken out', result: 'done' },
-      { word: 'cannot', label: 'It stays in', result: 'cannot' },
+      { word: 'done', label: 'Yes', result: 'done' },
+      { word: 'cannot', label: 'It stays as it is', result: 'cannot' },
     ],
   };
 }

@@ -39,6 +39,15 @@ export function builtInSteps(profile: Profile, settings: Settings): Step[] {
     },
     {
       ...common,
+      id: '~put-back',
+      kind: 'do',
+      title: 'Put back what an earlier run has left',
+      lines: ['Each of these was left fitted or lifted.', 'Put it back, or take it out, as the machine was built.'],
+      contact: 'hands',
+      exits: exits(['done', 'not-sure', 'cannot']),
+    },
+    {
+      ...common,
       id: '~take-out',
       kind: 'do',
       title: 'Take out what was put in',

@@ -157,7 +157,7 @@ function arrive(key: string) {
 
 /** Every key that an exit of this step can lead to directly, counted or not. */
 function leadsOf(layout: Layout, placed: ProgramStep): string[] {
-  if (placed.builtIn) return [SAFE.isolate, SAFE.discharge, SAFE.prove, SAFE.takeOut, SAFE.choose, SAFE.ended];
+  if (placed.builtIn) return [SAFE.isolate, SAFE.discharge, SAFE.prove, SAFE.takeOut, SAFE.putBack, SAFE.choose, SAFE.ended];
   const targets = placed.step.exits.flatMap((e: Exit) => [e.to, ...(e.then === undefined ? [] : [e.then])]).map((to) => placed.scope.check(to));
   const landed = targets.flatMap((to) => [false, true].map((over) => follow(layout, to, () => over).key)).filter((key) => {
     const kind = layout.steps.get(key)?.step.kind;

@@ -6,6 +6,8 @@ export type Phase = 'opening' | 'warning' | 'hold' | 'hold-wait' | 'guard' | 'ac
 /** Why the machine's own steps are being walked. */
 export type Purpose =
   | { is: 'none' }
+  /** before the first step: what an earlier run has left is put back */
+  | { is: 'begin' }
   /** something has lapsed; the run goes on at `to` */
   | { is: 'mend'; to: string }
   | { is: 'stop' }

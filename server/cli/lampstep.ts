@@ -1,10 +1,11 @@
 /** The command line: JSON on standard output; 0 good, 1 a finding, 2 bad input with the reason on standard error. */
 import { BadInput } from './commands/args';
 import type { Command } from './commands/args';
+import { prove } from './commands/prove';
 import { verify } from './commands/verify';
 import { walk } from './commands/walk';
 
-const COMMANDS: readonly Command[] = [walk, verify];
+const COMMANDS: readonly Command[] = [walk, prove, verify];
 
 function help(): string {
   return [

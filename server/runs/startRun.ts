@@ -4,9 +4,11 @@ import { v7 as uuidv7 } from 'uuid';
 import { inWorkshop } from '@/db/createDb';
 import type { Tx } from '@/db/createDb';
 import type { RunRow } from '@/db/tables';
+import { misfits } from '@/flows/document/admits';
 import type { FittedThing } from '@/flows/document/steps';
 import { startRun as startMachine, unmetAtStart } from '@/flows/machine/advance';
 import { compile } from '@/flows/machine/compile';
+import { prove } from '@/flows/proof/prove';
 import type { BodyOf } from '@/shared/contract/defineRoute';
 import type { routes } from '@/shared/contract/routes';
 import type { RunStart } from '@/shared/contract/runs';
@@ -24,7 +26,6 @@ import type { SignedIn } from '../session/access';
 import { getSettings } from '../settings/queries';
 import { findCallees } from '../trees/callees';
 import { findTreeVersion } from '../trees/queries';
-import { treeMisfits } from './treeMisfits';
 import { findRun, insertRun, OPEN_RUN_INDEX, RUN_ID_KEY } from './queries';
 
 type Starter = Pick<SignedIn, 'person' | 'workshop' | 'roles'>;
@@ -49,13 +50,14 @@ async function startOnce(tx: Tx, parts: Parts, who: Starter, wish: Wish): Promis
   const version = await findTreeVersion(tx, wish.tree, wish.version);
   if (version === undefined) throw new ProblemError('not-found', `There is no version ${wish.version} of the tree “${wish.tree}”.`);
   if (version.state !== 'issued') throw new ProblemError('not-startable', `Version ${wish.version} of “${version.document.title}” is ${version.state}; a run needs an issued one.`);
-  const misfits = treeMisfits(version.document, machine.profile, machine.serial);
-  if (misfits.length > 0) throw new ProblemError('not-startable', `“${version.document.title}” does not apply to ${machine.name}: ${misfits.join('; ')}.`);
+  const against = misfits(version.document, machine.profile, machine.serial);
+  if (against.length > 0) throw new ProblemError('not-startable', `“${version.document.title}” does not apply to ${machine.name}: ${against.join('; ')}.`);
 
   const { settings, hash: settingsHash } = await getSettings(tx);
   const { found, missing } = await findCallees(tx, version.document);
   if (missing.length > 0) throw new ProblemError('not-startable', `The called tree ${missing.join(', ')} has no issued version.`);
-  const compiled = compile({ tree: version.document, callees: found.map((row) => row.document), profile: machine.profile, settings });
+  const pair = { tree: version.document, callees: found.map((row) => row.document), profile: machine.profile, settings };
+  const compiled = compile(pair);
   if (!compiled.ok) {
     const faults = compiled.faults.map((fault) => ({ path: [fault.step, fault.key].filter(Boolean).join('.'), message: fault.message }));
     throw new ProblemError('not-startable', `This tree does not hold for ${machine.name}: ${faults[0]?.path ?? ''}: ${faults[0]?.message ?? ''}.`, { faults });
@@ -72,6 +74,10 @@ async function startOnce(tx: Tx, parts: Parts, who: Starter, wish: Wish): Promis
   };
   const unmet = unmetAtStart(program, start);
   if (unmet.length > 0) throw new ProblemError('not-startable', `This tree needs at its start: ${unmet.join('; ')}. ${machine.name} does not bring that.`);
+
+  // what is still fitted is put back by the machine before the first step
+  const broken = prove({ ...pair, carried: { ...start, fitted: [] } }).rules.filter((rule) => !rule.holds);
+  if (broken.length > 0) throw new ProblemError('not-startable', `The proof of this tree does not hold for ${machine.name}. ${broken[0]?.id ?? ''}: ${broken[0]?.story ?? ''}`, { rule: broken[0]?.id ?? null });
 
   const state = startMachine(program, start);
   const callees = found.map((row) => ({ tree: row.tree, version: row.version, hash: row.hash }));

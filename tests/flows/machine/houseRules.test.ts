@@ -196,6 +196,29 @@ describe('H12: ends', () => {
   });
 });
 
+describe('what an earlier run has left', () => {
+  const strap = { id: 'strap', name: 'earth strap', class: 'lifted', area: 'earth' } as const;
+  const carried = () => {
+    const b = new Bench(program(treeOf([look('done')])), false, { fitted: [strap] });
+    b.pass();
+    return b;
+  };
+  it('is put back, dead, before the first step', () => {
+    const b = carried();
+    expect(b.view.key).toBe('~isolate');
+    b.dead();
+    expect(b.view).toMatchObject({ key: '~put-back', band: 'proved-dead' });
+    b.pass();
+    expect(b.view.key).toBe('look');
+    expect(b.view.facts.fitted).toEqual([]);
+  });
+  it('stops the run when it has to stay, still named on the machine', () => {
+    const b = carried().dead().pass({ strap: 'cannot' });
+    expect(b.view.end).toMatchObject({ says: 'stopped' });
+    expect(b.view.facts.fitted).toEqual([strap]);
+  });
+});
+
 describe('H13 and H14: unsure and failed', () => {
   const tree = treeOf([...ready('see'), observe('see', 'lamp', {}, 'lamp'), lamp('lamp', 'abort')]);
   it('gives no power after an unsure answer', () => {

@@ -1,6 +1,7 @@
 /** A small machine and two small trees for tests of the engine, and a person who answers them. */
 import { parseProfile, parseTree } from '@/flows/document/parseTree';
 import type { Profile } from '@/flows/document/profile';
+import type { FittedThing } from '@/flows/document/steps';
 import { defaultSettings } from '@/flows/document/settings';
 import type { Tree } from '@/flows/document/tree';
 import { advance, startRun } from '@/flows/machine/advance';
@@ -122,9 +123,9 @@ export class Bench {
   skewMs = 0;
   readonly program: Program;
 
-  constructor(program: Program, senior = false, carried: { release?: boolean } = {}) {
+  constructor(program: Program, senior = false, carried: { release?: boolean; fitted?: FittedThing[] } = {}) {
     this.program = program;
-    this.state = startRun(program, { restorer: 'ann', restorerIsSenior: senior, at: this.at, release: carried.release ?? false, fitted: [], killers: [] });
+    this.state = startRun(program, { restorer: 'ann', restorerIsSenior: senior, at: this.at, release: carried.release ?? false, fitted: carried.fitted ?? [], killers: [] });
   }
 
   get view(): RunView {

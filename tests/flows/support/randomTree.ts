@@ -40,7 +40,7 @@ const SPINE: readonly number[] = [0, 1, 4, 5, 1, 6, 12, 8, 1];
 export function randomTree(most = 14): fc.Arbitrary<Tree> {
   return fc
     .record({
-      kinds: fc.oneof({ weight: 2, arbitrary: fc.constant([...SPINE]) }, { weight: 3, arbitrary: fc.array(fc.nat(MAKERS.length - 1), { minLength: 2, maxLength: most }) }, { weight: 3, arbitrary: fc.tuple(fc.array(fc.nat(MAKERS.length - 1), { maxLength: 4 }), fc.nat(SPINE.length)).map(([more, at]) => [...SPINE.slice(0, at), ...more, ...SPINE.slice(at)]) }),
+      kinds: fc.oneof<fc.MaybeWeightedArbitrary<number[]>[]>({ weight: 2, arbitrary: fc.constant([...SPINE]) }, { weight: 3, arbitrary: fc.array(fc.nat(MAKERS.length - 1), { minLength: 2, maxLength: most }) }, { weight: 3, arbitrary: fc.tuple(fc.array(fc.nat(MAKERS.length - 1), { maxLength: 4 }), fc.nat(SPINE.length)).map(([more, at]) => [...SPINE.slice(0, at), ...more, ...SPINE.slice(at)]) }),
       astray: fc.array(fc.tuple(fc.nat(20), fc.nat(20)), { maxLength: 3 }),
     })
     .map(({ kinds, astray }) => {

@@ -193,6 +193,8 @@ describe('a record', () => {
         ...lampTreeJson,
         id: 'refit',
         needsAtStart: ['release'],
+        opening: { tools: [], instruments: [], parts: [], conditions: [] },
+        reentries: [],
         suspects: [],
         steps: [
           lampTreeJson.steps.find(({ id }) => id === 'dead1'),

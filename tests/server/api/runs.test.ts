@@ -151,9 +151,15 @@ describe('starting a run', () => {
     await first.send();
     await server.query('update runs set state = $2, ended = $3, closed_at = now() where id = $1', [first.run, 'closed', 'stopped']);
     const thing = { id: 'strap', name: 'Earth strap', class: 'lifted', area: 'earth' };
-    await server.query(`insert into machine_tags (workshop, machine, run, "is", body, since) values ($1, $2, $3, 'fitted', $4, now()), ($1, $2, $3, 'killer', $5, now())`, [workshop.id, workshop.machine, first.run, JSON.stringify(thing), JSON.stringify({ part: 'bridge', killer: 'short' })]);
+    const tag = (is: string, body: unknown) => server.query(`insert into machine_tags (workshop, machine, run, "is", body, since) values ($1, $2, $3, $4, $5, now())`, [workshop.id, workshop.machine, first.run, is, JSON.stringify(body)]);
+    await tag('fitted', thing);
     const second = runBundleSchema.parse((await restorer.post('/api/runs', wish())).body);
-    expect(second.start).toMatchObject({ release: false, fitted: [thing], killers: [{ part: 'bridge', killer: 'short' }] });
+    expect(second.start).toMatchObject({ release: false, fitted: [thing], killers: [] });
+    await server.query('update runs set state = $2, ended = $3, closed_at = now() where id = $1', [second.run.id, 'closed', 'stopped']);
+    await tag('killer', { part: 'bridge', killer: 'short' });
+    // no path of this tree rules that killer out, so power would come on a part that dies again
+    const third = await restorer.post('/api/runs', wish());
+    expect([third.status, third.body['code'], third.body['rule']]).toEqual([422, 'not-startable', 'H15']);
     const dossier = (await restorer.get(`/api/machines/${workshop.machine}`)).body;
     expect(dossier['staysFitted']).toMatchObject([{ is: 'fitted', thing }, { is: 'killer', part: 'bridge', killer: 'short' }]);
   });
