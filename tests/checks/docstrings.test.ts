@@ -27,7 +27,7 @@ function isLaterOverload(file: ts.SourceFile, statement: ts.FunctionDeclaration)
   return before !== undefined && ts.isFunctionDeclaration(before) && before.name?.text === statement.name?.text;
 }
 
-describe('exported functions', () => {
+describe('exported functions', { timeout: 30_000 }, () => {
   // Migrations are read by name and say what they do in their head.
   it.each(['flows', 'shared', 'server', 'db'])('of %s say what they do', (room) => {
     const files = sourceFiles(new RegExp(`^${room}/(?!migrations/).*\\.tsx?$`));

@@ -8,7 +8,7 @@ async function graphOf(entry: string): Promise<{ files: string[]; packages: stri
   return { files: Object.keys(metafile.inputs), packages: [...new Set(packages)].filter((name) => !name.startsWith('node:')) };
 }
 
-describe.each(['server/main.ts', 'server/cli/migrate.ts'])('%s in production', (entry) => {
+describe.each(['server/main.ts', 'server/cli/migrate.ts'])('%s in production', { timeout: 30_000 }, (entry) => {
   it('carries no fake, no demo data and no tree of the library', async () => {
     const { files, packages } = await graphOf(entry);
     expect(files).toContain(entry);

@@ -26,7 +26,8 @@ function program(second: string): { child: ChildProcess; lines: string[]; saw: (
   return { child, lines, saw };
 }
 
-describe('untilStopped', () => {
+// Each test starts a process.
+describe('untilStopped', { timeout: 30_000 }, () => {
   it.each(['SIGINT', 'SIGTERM'] as const)('closes what is open, last first, on %s', async (signal) => {
     const { child, lines, saw } = program(`parts.closeWith(() => console.log('second closed'));`);
     await saw('open');
