@@ -21,7 +21,9 @@ export interface Refusal {
 
 export type Judged = { ok: true; next: RunContext } | { ok: false; refusal: Refusal };
 
+/** The event is taken, and this is where it leads. */
 export const accept = (next: RunContext): Judged => ({ ok: true, next });
+/** The event is not taken: the run stays as it was. */
 export const refuse = (code: Refusal['code'], say: string, rule: RuleId | null = null): Judged => ({ ok: false, refusal: { rule, code, say } });
 
 /** Classes of temporary things that the machine's close-out takes out; lifted leads may stay where the end allows it. */
