@@ -19,13 +19,13 @@ import { recordStateOf, STATE_FILTERS } from '@/shared/ui/screens/records/stateF
 
 interface Props {
   /** from the address: a state, or nothing for all */
-  state: string | undefined;
+  show: string | undefined;
 }
 
 /** Newest first; the filter stands in the address, so that it can be kept and sent. */
-export function RecordsScreen({ state }: Props) {
+export function RecordsScreen({ show }: Props) {
   const router = useRouter();
-  const chosen = recordStateOf(state);
+  const chosen = recordStateOf(show);
   const records = useRecords(chosen === null ? {} : { state: chosen });
   const people = usePeople().data?.people;
   return (
@@ -35,7 +35,7 @@ export function RecordsScreen({ state }: Props) {
           label="Show"
           options={STATE_FILTERS}
           value={chosen ?? 'all'}
-          onChange={(value) => router.setParams({ state: value === 'all' ? '' : value })}
+          onChange={(value) => router.setParams({ show: value === 'all' ? '' : value })}
         />
       </View>
       <Fetched query={records} what="the records">

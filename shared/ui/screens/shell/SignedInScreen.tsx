@@ -1,6 +1,7 @@
 /** The frame of every page behind the door: nobody passes without a session, and the places are at hand. */
 import { Redirect, Slot, usePathname } from 'expo-router';
 import type { Href } from 'expo-router';
+import { View } from 'react-native';
 
 import { useMe } from '@/shared/ui/api/queries';
 import { ErrorState } from '@/shared/ui/components/ErrorState';
@@ -16,23 +17,25 @@ export function SignedInScreen() {
   const pathname = usePathname();
   const me = useMe();
   // nobody is led away from a bench that may be live: a run's own page says what it needs, and Stop works without a session
-  if (isRun(pathname)) return <Slot />;
-  const door = doorFor(me.error?.problem.code ?? null, pathname, globalThis.location?.search ?? '');
-  if (door !== null) return <Redirect href={door as Href} />;
-  if (me.data === undefined) {
-    return (
-      <Page>
-        {me.error ? (
-          <ErrorState happened={me.error.problem.say} todo={whatToDo(me.error.problem)} onRetry={() => void me.refetch()} />
-        ) : (
-          <Loading what="the workshop" />
-        )}
-      </Page>
-    );
-  }
+  const run = isRun(pathname);
+  const door = run ? null : doorFor(me.error?.problem.code ?? null, pathname, globalThis.location?.search ?? '');
+  const shown = run || me.data !== undefined;
   return (
-    <PlacesFrame places={places} current={placeOf(pathname)}>
-      <Slot />
+    <PlacesFrame places={places} current={placeOf(pathname)} bare={run || !shown}>
+      {door === null ? null : <Redirect href={door as Href} />}
+      {shown ? null : (
+        <Page>
+          {me.error && door === null ? (
+            <ErrorState happened={me.error.problem.say} todo={whatToDo(me.error.problem)} onRetry={() => void me.refetch()} />
+          ) : (
+            <Loading what="the workshop" />
+          )}
+        </Page>
+      )}
+      {/* stays mounted behind all of this: without its pages the router forgets where the address leads */}
+      <View style={shown ? { flex: 1, minHeight: 0 } : { display: 'none' }}>
+        <Slot />
+      </View>
     </PlacesFrame>
   );
 }

@@ -14,7 +14,7 @@ describe('doorFor', () => {
     const door = doorFor('session-expired', '/records', '?state=returned') ?? '';
     const search = new URL(door, 'http://localhost').searchParams;
     expect(search.get('expired')).toBe('1');
-    expect(returnPath(search.get('from') ?? undefined)).toBe('/records?state=returned');
+    expect(returnPath(search.get('from') ?? undefined)).toBe('/records?show=returned');
   });
 
   it('does not speak of a session that ran out where there was none', () => {

@@ -47,10 +47,10 @@ describe('SignInScreen', () => {
 
   it('goes back to where one was', async () => {
     serverSays(201, me);
-    show('/records?state=returned', true);
+    show('/records?show=returned', true);
     expect(screen.getByText(/session has run out/)).toBeTruthy();
     fill('Restorer@Example.org', 'secret');
-    await waitFor(() => expect(moves).toEqual([{ how: 'replace', to: '/records?state=returned' }]));
+    await waitFor(() => expect(moves).toEqual([{ how: 'replace', to: '/records?show=returned' }]));
   });
 
   it('asks at the field before it asks the server', async () => {
