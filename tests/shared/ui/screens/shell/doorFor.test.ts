@@ -11,7 +11,7 @@ describe('doorFor', () => {
   });
 
   it('leads to the door and back to the very place, search and all', () => {
-    const door = doorFor('session-expired', '/records', '?state=returned') ?? '';
+    const door = doorFor('session-expired', '/records', '?show=returned') ?? '';
     const search = new URL(door, 'http://localhost').searchParams;
     expect(search.get('expired')).toBe('1');
     expect(returnPath(search.get('from') ?? undefined)).toBe('/records?show=returned');
