@@ -3,6 +3,10 @@ const path = require('node:path');
 const { getDefaultConfig } = require('expo/metro-config');
 
 const config = getDefaultConfig(__dirname);
+// The switch is written into the bundle: without it in the cache's key, a build with the parts sheet closed would take
+// the open one from the cache.
+config.cacheVersion = `parts:${process.env.EXPO_PUBLIC_PARTS ?? ''}`;
+
 const zodLocales = path.resolve(__dirname, 'shared/ui/theme/stubs/zodLocales.js');
 const paperIcon = path.resolve(__dirname, 'shared/ui/theme/PaperIcon.tsx');
 
