@@ -1,5 +1,5 @@
 /** Reading from the server, one hook a route. Each fails with `ApiError`, whose problem carries the sentence to show. */
-import { useQuery } from '@tanstack/react-query';
+import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { UseQueryResult } from '@tanstack/react-query';
 
 import type { RouteName } from '@/shared/contract/routes';
@@ -13,6 +13,8 @@ export type Fetched<N extends RouteName> = UseQueryResult<CallAnswer<N>, ApiErro
 interface Options {
   /** false: not yet */
   enabled?: boolean;
+  /** fetched when a screen opens and never behind its back */
+  once?: boolean;
   /** asked again this often, in milliseconds */
   everyMs?: number;
 }
@@ -22,13 +24,18 @@ export function queryKeyOf(name: RouteName, input?: { params?: unknown; query?: 
   return [name, ...(input?.params === undefined ? [] : [input.params]), ...(input?.query === undefined ? [] : [input.query])];
 }
 
+/** How a route that only reads is fetched, for `useQuery` and `useQueries`. */
+export function queryOf<N extends RouteName>(name: N, input: CallInput<N>) {
+  return queryOptions<CallAnswer<N>, ApiError>({ queryKey: queryKeyOf(name, input), queryFn: () => unwrap(client.call(name, input)) });
+}
+
 /** Fetches a route that only reads. */
-export function useRoute<N extends RouteName>(name: N, input: CallInput<N>, { enabled = true, everyMs }: Options = {}): Fetched<N> {
+export function useRoute<N extends RouteName>(name: N, input: CallInput<N>, { enabled = true, everyMs, once = false }: Options = {}): Fetched<N> {
   return useQuery<CallAnswer<N>, ApiError>({
-    queryKey: queryKeyOf(name, input),
-    queryFn: () => unwrap(client.call(name, input)),
+    ...queryOf(name, input),
     enabled,
     ...(everyMs === undefined ? {} : { refetchInterval: everyMs }),
+    ...(once ? { staleTime: Infinity, gcTime: 0 } : {}),
   });
 }
 
@@ -44,9 +51,9 @@ export function useBench(): Fetched<'runs'> {
   return useRoute('runs', { query: { mine: '1', open: '1' } }, { everyMs: BENCH_EVERY_MS });
 }
 
-/** Everything that this device needs to go on with a run. */
+/** Everything that this device needs to go on with a run, as it was when its screen was opened; what comes later comes through the outbox. */
 export function useRun(run: string): Fetched<'run'> {
-  return useRoute('run', { params: { run } });
+  return useRoute('run', { params: { run } }, { once: true });
 }
 
 const HOLDS_EVERY_MS = 3_000;

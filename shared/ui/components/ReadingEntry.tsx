@@ -14,6 +14,8 @@ import { webProps } from '@/shared/ui/theme/webStyle';
 interface Props {
   /** what is read, as "+5 V at the supply terminals" */
   label: string;
+  /** accessible name where the label alone would not do */
+  name?: string | undefined;
   value: string;
   unit: string;
   /** which meter on which range, as "Meter A, 60 V" */
@@ -26,7 +28,7 @@ interface Props {
 }
 
 /** Takes `4.97`, `4,97`, `470m`, `4k7`: number keys first, letters and sign one touch away. */
-export function ReadingEntry({ label, value, unit, meter, error, hint, disabled = false, onChangeText, onSubmit }: Props) {
+export function ReadingEntry({ label, name, value, unit, meter, error, hint, disabled = false, onChangeText, onSubmit }: Props) {
   const { colors } = useTheme();
   const [letters, setLetters] = useState(false);
   const input = useRef<TextInput>(null);
@@ -69,7 +71,7 @@ export function ReadingEntry({ label, value, unit, meter, error, hint, disabled 
           spellCheck={false}
           autoComplete="off"
           enterKeyHint="done"
-          aria-label={`${label}, in ${unit}`}
+          aria-label={name ?? `${label}, in ${unit}`}
           {...webProps({ 'aria-invalid': error !== undefined, ...(described ? { 'aria-describedby': described } : {}) })}
           style={[type.reading, { flex: 1, minWidth: 0, color: colors.ink, minHeight: target.answer + 8, padding: 0 }]}
         />

@@ -10,7 +10,12 @@ export type BareEvent = Bare<MachineEvent>;
 /** Changes with each load of the page: what was known of the bench before a load counts no more. */
 export const BOOT = v4();
 
+/** Whole milliseconds of the clock that never goes back. */
+export function steadyMs(): number {
+  return Math.round(performance.now());
+}
+
 /** Puts wall time, steady time and the load of the page on an event. */
 export function stamp(event: BareEvent): MachineEvent {
-  return { ...event, at: Date.now(), monotonic: Math.round(performance.now()), boot: BOOT } as MachineEvent;
+  return { ...event, at: Date.now(), monotonic: steadyMs(), boot: BOOT } as MachineEvent;
 }

@@ -1,0 +1,31 @@
+/** The bench: countersigns that are wanted, my open runs, and starting one. */
+import { useBench, useMe } from '@/shared/ui/api/queries';
+import { Page } from '@/shared/ui/components/Page';
+import { HoldsWanted } from '@/shared/ui/screens/bench/HoldsWanted';
+import { OpenRuns } from '@/shared/ui/screens/bench/OpenRuns';
+import { StartRun } from '@/shared/ui/screens/bench/StartRun';
+import { Fetched } from '@/shared/ui/screens/shell/Fetched';
+import { Section } from '@/shared/ui/screens/shell/Section';
+
+/** What a person sees first. */
+export function BenchScreen() {
+  const me = useMe();
+  const runs = useBench();
+  const roles = me.data?.roles ?? [];
+  const leads = roles.includes('restorer') || roles.includes('senior');
+  return (
+    <Page title="Bench" eyebrow={me.data?.workshop.name}>
+      {roles.includes('senior') ? <HoldsWanted /> : null}
+      <Section title="My open runs">
+        <Fetched query={runs} what="your open runs">
+          {({ runs: open }) => <OpenRuns runs={open} mayStart={leads} />}
+        </Fetched>
+      </Section>
+      {leads ? (
+        <Section title="Start a run">
+          <StartRun />
+        </Section>
+      ) : null}
+    </Page>
+  );
+}

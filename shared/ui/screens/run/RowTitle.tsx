@@ -1,0 +1,23 @@
+/** What is asked now, of several. */
+import { View } from 'react-native';
+
+import type { RowView } from '@/flows/machine/view';
+import type { Row } from '@/flows/machine/rows';
+import { Heading } from '@/shared/ui/components/Heading';
+import { Label } from '@/shared/ui/components/Label';
+import { line, space } from '@/shared/ui/theme/space';
+import { useTheme } from '@/shared/ui/theme/useTheme';
+
+/** Read out when the row changes. */
+export function RowTitle({ rows, current }: { rows: readonly RowView[]; current: Row }) {
+  const { colors } = useTheme();
+  const at = rows.findIndex((r) => r.row.id === current.id);
+  return (
+    <View role="status" aria-live="polite" style={{ borderTopWidth: line.rule, borderTopColor: colors.ink, paddingTop: space.s }}>
+      {rows.length > 1 ? <Label>{`${at + 1} of ${rows.length}`}</Label> : null}
+      <Heading level={2} size="section">
+        {current.label}
+      </Heading>
+    </View>
+  );
+}

@@ -1,0 +1,30 @@
+/** Head, instruction, figure and notes of a step; from the second row on the instruction makes room for the rows. */
+import { useState } from 'react';
+
+import type { Row } from '@/flows/machine/rows';
+import { Button } from '@/shared/ui/components/Button';
+import type { Run } from '@/shared/ui/screens/run/Run';
+import { StepFigure } from '@/shared/ui/screens/run/StepFigure';
+import { StepHead } from '@/shared/ui/screens/run/StepHead';
+import { StepLines } from '@/shared/ui/screens/run/StepLines';
+import { StepNotes } from '@/shared/ui/screens/run/StepNotes';
+
+/** `row` is the one to be answered now, or null. */
+export function StepBody({ run, row }: { run: Run; row: Row | null }) {
+  const { step, rows } = run.view;
+  const begun = rows.some((r) => r.answer !== null);
+  const [shown, setShown] = useState(false);
+  return (
+    <>
+      <StepHead run={run} />
+      {step !== null && (!begun || shown) ? (
+        <>
+          <StepLines step={step} />
+          <StepNotes run={run} />
+        </>
+      ) : null}
+      {step !== null && begun && !shown ? <Button kind="quiet" label="Show the instruction again" onPress={() => setShown(true)} /> : null}
+      <StepFigure run={run} row={row} />
+    </>
+  );
+}

@@ -1,0 +1,36 @@
+/** Title of a step, with the tree that it belongs to and where the answers are. */
+import { View } from 'react-native';
+
+import { BodyText } from '@/shared/ui/components/BodyText';
+import { Heading } from '@/shared/ui/components/Heading';
+import { Icon } from '@/shared/ui/components/icons/Icon';
+import { Label } from '@/shared/ui/components/Label';
+import { savedWords } from '@/shared/ui/screens/run/savedWords';
+import type { Run } from '@/shared/ui/screens/run/Run';
+import { space } from '@/shared/ui/theme/space';
+import { useTheme } from '@/shared/ui/theme/useTheme';
+
+/** The one level-1 heading of the screen. */
+export function StepHead({ run, title }: { run: Run; title?: string }) {
+  const { colors } = useTheme();
+  const { saved, view, bundle } = run;
+  const waits = saved.waiting > 0 || saved.trouble !== null;
+  return (
+    <View style={{ gap: space.xs }}>
+      <Label>{view.builtIn ? 'Make safe' : bundle.tree.title}</Label>
+      <Heading level={1}>{title ?? view.title}</Heading>
+      <View role="status" style={{ flexDirection: 'row', gap: space.s, alignItems: 'center' }}>
+        {waits ? (
+          <>
+            <Icon name="unsent" size={20} color={colors.brass} />
+            <View style={{ flexShrink: 1 }}>
+              <BodyText size="small" tone="brass">
+                {savedWords(saved)}
+              </BodyText>
+            </View>
+          </>
+        ) : null}
+      </View>
+    </View>
+  );
+}
