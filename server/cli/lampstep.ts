@@ -1,11 +1,16 @@
 /** The command line: JSON on standard output; 0 good, 1 a finding, 2 bad input with the reason on standard error. */
 import { BadInput } from './commands/args';
 import type { Command } from './commands/args';
+import { compare } from './commands/compare';
+import { draft } from './commands/draft';
 import { prove } from './commands/prove';
+import { rehearse } from './commands/rehearse';
+import { replay } from './commands/replay';
+import { schema } from './commands/schema';
 import { verify } from './commands/verify';
 import { walk } from './commands/walk';
 
-const COMMANDS: readonly Command[] = [walk, prove, verify];
+const COMMANDS: readonly Command[] = [walk, prove, rehearse, draft, compare, replay, schema, verify];
 
 function help(): string {
   return [

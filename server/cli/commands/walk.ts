@@ -1,16 +1,10 @@
 /** `walk`: plays answers through a tree, as server and client would, and stops at the first that the machine refuses. */
-import { z } from 'zod';
-
-import { parseProfile, parseTree } from '@/flows/document/parseTree';
-import { defaultSettings, settingsSchema } from '@/flows/document/settings';
 import { advance, startRun, unmetAtStart } from '@/flows/machine/advance';
-import { compile } from '@/flows/machine/compile';
-import { machineEventSchema } from '@/flows/machine/events';
 import type { MachineEvent } from '@/flows/machine/events';
 import { view } from '@/flows/machine/view';
-import { BadInput, faultLine, readArgs, readDocument, readJson } from './args';
+import { BadInput, readArgs } from './args';
 import type { Command } from './args';
-import { libraryTrees } from './library';
+import { readEvents, readProgram } from './readProgram';
 
 const usage = 'walk TREE.json --profile PROFILE.json --answers ANSWERS.json [--callee FILE]… [--settings FILE] [--senior] [--release]';
 const options = {
@@ -33,15 +27,8 @@ export const walk: Command = {
   async run(argv) {
     const { file, values } = readArgs(argv, options, usage);
     if (values.profile === undefined || values.answers === undefined) throw new BadInput(`Usage: ${usage}`);
-    const tree = await readDocument(file, parseTree);
-    const profile = await readDocument(values.profile, parseProfile);
-    const settings = values.settings === undefined ? defaultSettings : await readSettings(values.settings);
-    const given = await Promise.all((values.callee ?? []).map((name) => readDocument(name, parseTree)));
-    const callees = [...given, ...(await libraryTrees()).filter((t) => !given.some((g) => g.id === t.id))];
-    const compiled = compile({ tree, callees, profile, settings });
-    if (!compiled.ok) throw new BadInput([`${file} does not fit this profile:`, ...compiled.faults.map(faultLine)].join('\n'));
+    const program = await readProgram(file, { ...values, profile: values.profile });
     const events = await readEvents(values.answers);
-    const { program } = compiled;
     const start = { restorer: 'restorer', restorerIsSenior: values.senior ?? false, release: values.release ?? false, fitted: [], killers: [], at: events[0]?.at ?? 0 };
     const unmet = unmetAtStart(program, start);
     if (unmet.length > 0) throw new BadInput(`${file} needs at its start: ${unmet.join(', ')}.`);
@@ -62,21 +49,3 @@ export const walk: Command = {
     return { good: refused === null, output: { step: now.key, phase: now.phase, title: now.title, power: now.band, end: now.end, facts: now.facts, entries, refused } };
   },
 };
-
-async function readSettings(file: string) {
-  const parsed = settingsSchema.safeParse(await readJson(file));
-  if (!parsed.success) throw new BadInput(`${file}:\n${z.prettifyError(parsed.error)}`);
-  return parsed.data;
-}
-
-async function readEvents(file: string): Promise<MachineEvent[]> {
-  const json = await readJson(file);
-  if (!Array.isArray(json)) throw new BadInput(`${file}: is not an array of machine events.`);
-  const firstAt = 1_000_000_000_000;
-  return json.map((raw: unknown, i) => {
-    const filled = typeof raw === 'object' && raw !== null ? { at: firstAt + i * 1000, monotonic: i * 1000, boot: 'walk', ...raw } : raw;
-    const parsed = machineEventSchema.safeParse(filled);
-    if (!parsed.success) throw new BadInput(`${file}, event ${i + 1}:\n${z.prettifyError(parsed.error)}`);
-    return parsed.data;
-  });
-}
