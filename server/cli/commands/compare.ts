@@ -6,7 +6,7 @@ import { BadInput, readArgs, readDocument } from './args';
 import type { Command } from './args';
 import { libraryTrees } from './library';
 
-const usage = 'compare OLDER.json --with NEWER.json [--callee FILE]…   (or: compare OLDER.json NEWER.json)';
+const usage = 'compare OLDER.json NEWER.json [--callee FILE]…';
 const options = { with: { type: 'string' }, callee: { type: 'string', multiple: true } } as const;
 
 export const compare: Command = {
