@@ -206,14 +206,19 @@ function safeAgain(layout: Layout, context: RunContext): Judged {
       return closeOut(context, layout);
     case 'mend': {
       const arrived = arriveAt(layout, context, context.purpose.to);
-      return arrived.ok ? arrived : accept({ ...context, purpose: { is: 'stop' }, goto: SAFE.choose });
+      return arrived.ok ? arrived : afterStop(context);
     }
     case 'begin':
       return accept({ ...context, goto: SAFE.putBack });
     case 'stop':
     case 'none':
-      return accept({ ...context, purpose: { is: 'stop' }, goto: SAFE.choose });
+      return afterStop(context);
   }
+}
+
+/** A place to go on from stands on nothing temporary: what comes out is led out first. */
+function afterStop(context: RunContext): Judged {
+  return accept({ ...context, purpose: { is: 'stop' }, goto: toTakeOut(context.facts.fitted).length > 0 ? SAFE.takeOut : SAFE.choose });
 }
 
 /** Taking a thing out voids its area as taking it out in a step would; what cannot come out stays fitted. */
@@ -222,8 +227,9 @@ function takenOut(context: RunContext): RunContext['facts'] {
   return applyOps(context.facts, [...out.flatMap((f) => fitVoids(f.area)), ...out.map((f): Op => ({ op: 'unfit', id: f.id }))]);
 }
 
-/** What could not be taken out ends the run as stopped, with the thing named on the machine. */
+/** What could not be taken out at an end closes the run as stopped, with the thing named on the machine; after Stop it bars going on. */
 function afterTakeOut(layout: Layout, context: RunContext): Judged {
+  if (context.purpose.is === 'stop') return accept({ ...context, goto: SAFE.choose });
   if (toTakeOut(context.facts.fitted).length > 0) return accept({ ...context, goto: SAFE.ended, end: { says: 'stopped', key: null } });
   return closeOut(context, layout);
 }

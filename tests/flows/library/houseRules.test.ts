@@ -125,4 +125,20 @@ describe('what the person at the bench is refused', () => {
     expect(bench.try({ type: 'REENTER', step: 'lamp-loads' })).toMatchObject({ ok: false, refusal: { rule: 'H21' } });
     expect(bench.view.reentries.map((r) => r.key)).toContain('earth');
   });
+
+  it('H21: going on after Stop with a clip left in; it is led out first, and then the lamp may go on again', () => {
+    const stop = () => {
+      const bench = walkTo(new Bench(whole), 'rails-lamp', LINEAR, 'act').do({ type: 'STOP' });
+      return walk(bench, {}, (b) => b.view.key === '~take-out' && b.view.phase === 'act');
+    };
+    const left = stop();
+    expect(left.view.rows.map((r) => r.row.id)).toEqual(['rail-clips']);
+    left.do({ type: 'ROW', step: '~take-out', row: 'rail-clips', word: 'cannot' });
+    expect(left.view).toMatchObject({ key: '~choose', reentries: [] });
+    const out = walk(stop(), {}, (b) => b.view.key === '~choose');
+    expect(out.view.facts.fitted).toEqual([]);
+    expect(out.view.reentries.map((r) => r.key)).toContain('lamp-loads');
+    walk(out.do({ type: 'REENTER', step: 'lamp-loads' }), LINEAR);
+    expect(out.view.end?.says).toBe('supply-proven');
+  });
 });

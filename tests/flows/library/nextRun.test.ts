@@ -2,20 +2,17 @@ import { describe, expect, it } from 'vitest';
 
 import { startRun } from '@/flows/machine/advance';
 import { Bench } from '../support/bench';
-import { explore } from './explore';
 import { LINEAR, libraryTree, programOf, walk } from './walk';
 
 const tree = libraryTree('first-power');
 const program = programOf(tree, 'corvane-12');
 
 describe('the run after a fault was found', () => {
-  const left = explore(program).arrivals.filter((a) => a.bench.view.purpose.is === 'end').flatMap((a) => a.bench.view.facts.fitted);
-  const lifted = [...new Map(left.filter((f) => f.class === 'lifted').map((f) => [f.id, f])).values()];
-
   it('takes back every lead that an earlier run may have left lifted', () => {
-    const all = tree.steps.flatMap((s) => (s.kind === 'do' ? (s.fits ?? []) : [])).filter((f) => f.class === 'lifted');
+    const lifted = tree.steps.flatMap((s) => (s.kind === 'do' ? (s.fits ?? []) : [])).filter((f) => f.class === 'lifted');
+    const all = [...new Map(lifted.map((f) => [f.id, f])).values()];
     const bench = new Bench(program);
-    bench.state = startRun(program, { restorer: 'ann', restorerIsSenior: false, at: bench.at, release: false, fitted: [...lifted, ...all], killers: [] });
+    bench.state = startRun(program, { restorer: 'ann', restorerIsSenior: false, at: bench.at, release: false, fitted: all, killers: [] });
     walk(bench, LINEAR);
     expect(bench.view.end?.says).toBe('supply-proven');
   });
