@@ -31,7 +31,7 @@ export interface InstrumentFunction {
   name: string;
   /** as makers print it */
   accuracy: string;
-  /** full scales, smallest first */
+  /** full scales, smallest first, none broken from its unit */
   ranges: string;
 }
 
@@ -51,7 +51,7 @@ export function functionsOf(ranges: readonly InstrumentRange[]): InstrumentFunct
       {
         name: FUNCTIONS[first.quantity],
         accuracy: `± (${formatNumber(first.percent)} % + ${first.counts})`,
-        ranges: scales.map((n) => formatQuantity(n, unit)).join(', '),
+        ranges: scales.map((n) => formatQuantity(n, unit).replace(' ', '\u00a0')).join(', '),
       },
     ];
   });
