@@ -1,5 +1,8 @@
+import { useLocalSearchParams } from 'expo-router';
+
 import { BenchScreen } from '@/shared/ui/screens/bench/BenchScreen';
 
 export default function Bench() {
-  return <BenchScreen />;
+  const { machine } = useLocalSearchParams<{ machine?: string }>();
+  return <BenchScreen machine={machine} />;
 }

@@ -7,8 +7,8 @@ import { StartRun } from '@/shared/ui/screens/bench/StartRun';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
 import { Section } from '@/shared/ui/screens/shell/Section';
 
-/** What a person sees first. */
-export function BenchScreen() {
+/** What a person sees first; a `machine` in the address is chosen already. */
+export function BenchScreen({ machine }: { machine?: string | undefined }) {
   const me = useMe();
   const runs = useBench();
   const roles = me.data?.roles ?? [];
@@ -23,7 +23,7 @@ export function BenchScreen() {
       </Section>
       {leads ? (
         <Section title="Start a run">
-          <StartRun />
+          <StartRun key={machine ?? ''} machine={machine} />
         </Section>
       ) : null}
     </Page>

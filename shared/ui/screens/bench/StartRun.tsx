@@ -10,9 +10,9 @@ import { TreesFor } from '@/shared/ui/screens/bench/TreesFor';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
 
 /** Machines with an open run are named but cannot be chosen: one run at a time works on a machine. */
-export function StartRun() {
+export function StartRun({ machine: asked }: { machine?: string | undefined }) {
   const machines = useMachines();
-  const [chosen, setChosen] = useState<string | null>(null);
+  const [chosen, setChosen] = useState<string | null>(asked ?? null);
   return (
     <Fetched query={machines} what="the machines">
       {({ machines: all }) => {

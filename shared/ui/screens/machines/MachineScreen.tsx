@@ -1,7 +1,7 @@
 /** The dossier of one machine. */
 import { View } from 'react-native';
 
-import { useMachine } from '@/shared/ui/api/queries';
+import { useMachine, useMe } from '@/shared/ui/api/queries';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { LinkText } from '@/shared/ui/components/LinkText';
 import { Notice } from '@/shared/ui/components/Notice';
@@ -21,6 +21,8 @@ import { space } from '@/shared/ui/theme/space';
 /** Plate, limits and what is left on it at the side; rails, returns, parts and history in the middle. */
 export function MachineScreen({ machineId }: { machineId: string }) {
   const dossier = useMachine(machineId);
+  const roles = useMe().data?.roles ?? [];
+  const leads = roles.includes('restorer') || roles.includes('senior');
   const machine = dossier.data?.machine;
   return (
     <Page
@@ -40,9 +42,9 @@ export function MachineScreen({ machineId }: { machineId: string }) {
                       <BodyText>A run is open on this machine. One run at a time works on it.</BodyText>
                       <LinkText label="To the open run" href={`/bench/${m.openRun}`} />
                     </Notice>
-                  ) : (
+                  ) : leads ? (
                     <LinkText label="Start a run on this machine" href={`/bench?machine=${m.id}`} />
-                  )}
+                  ) : null}
                 </View>
                 <StaysFitted tags={staysFitted} profile={profile.document} />
                 <Section title="Owner’s limits" look="label">
