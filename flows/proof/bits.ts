@@ -53,6 +53,9 @@ export interface MayState {
   may1: Uint32Array;
 }
 
+/** Leaves everything as it is; states pass through it untouched. */
+export const NO_EFFECT: Effect = { gen: new Uint32Array(0), kill: new Uint32Array(0), copies: [] };
+
 /** True when the bit is in the set. */
 export function hasBit(set: Uint32Array, bit: number): boolean {
   return ((set[bit >>> 5] ?? 0) & (1 << (bit & 31))) !== 0;
@@ -64,7 +67,9 @@ export function putBit(set: Uint32Array, bit: number): void {
 }
 
 /** The state after an effect. A set bit wins over a cleared one within one effect. */
-export function through(state: MayState, { gen, kill, copies }: Effect): MayState {
+export function through(state: MayState, effect: Effect): MayState {
+  if (effect === NO_EFFECT) return state;
+  const { gen, kill, copies } = effect;
   const words = state.may0.length;
   const may0 = new Uint32Array(words);
   const may1 = new Uint32Array(words);

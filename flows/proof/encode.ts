@@ -4,7 +4,7 @@ import type { Atom } from '../facts/atoms';
 import type { Facts } from '../facts/facts';
 import type { Need } from '../facts/needs';
 import type { Op } from '../facts/ops';
-import { BitNames, putBit } from './bits';
+import { BitNames, NO_EFFECT, putBit } from './bits';
 import type { Effect, MayState } from './bits';
 import type { Graph } from './graph';
 
@@ -27,6 +27,9 @@ export interface Encoding {
   /** everything may be either way */
   free(): MayState;
 }
+
+/** Operations that no bit stands for: what is owed is walked by regions, what has been powered only asks for a hold. */
+const OWED_OPS: ReadonlySet<Op['op']> = new Set(['doubt', 'lift-doubt', 'fail', 'fix', 'pass', 'powered', 'powered-void']);
 
 const LOADS = ['boards', 'none', 'light', 'full'];
 
@@ -111,6 +114,7 @@ export function encodingOf(graph: Graph, start: Facts): Encoding {
   };
 
   const effect = (ops: readonly Op[]): Effect => {
+    if (ops.every((op) => OWED_OPS.has(op.op))) return NO_EFFECT;
     const gen = empty();
     const kill = empty();
     const copies: { raise: number; where0: number }[] = [];

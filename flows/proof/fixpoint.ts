@@ -55,7 +55,6 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
     effects.set(node.key, made);
     return made;
   };
-  const aborts = abortTargets(graph);
   for (let head = 0; head < queue.length; head += 1) {
     const key = queue[head] ?? '';
     queued.delete(key);
@@ -65,7 +64,7 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
     const own = effectsOf(node);
     const acting = through(state, own.entered);
     for (const edge of own.edges) arrive(edge.to, through(acting, edge.effect));
-    for (const to of aborts.get(key) ?? []) arrive(to, acting);
+    for (const to of graph.aborts.get(key) ?? []) arrive(to, acting);
   }
   return { encoding, at, broken: [...graph.nodes.values()].flatMap((node) => brokenAt(encoding, node, at.get(node.key))) };
 }
@@ -128,34 +127,4 @@ function withoutBit(set: Uint32Array, bit: number): Uint32Array {
   const copy = set.slice();
   clearBit(copy, bit);
   return copy;
-}
-
-/** From every place that an energise can be in force at, abort leads to that energise's target, with what the step has made worse. */
-export function abortTargets(graph: Graph): ReadonlyMap<string, readonly string[]> {
-  const targets = new Map<string, Set<string>>();
-  for (const node of graph.nodes.values()) {
-    const { step, scope } = node.placed;
-    if (step.kind !== 'energise') continue;
-    const to = graph.land(scope.check(step.abort));
-    for (const key of liveRegion(graph, node.key)) {
-      const known = targets.get(key) ?? new Set<string>();
-      targets.set(key, known.add(to));
-    }
-  }
-  return new Map([...targets].map(([key, set]) => [key, [...set]]));
-}
-
-/** Places that an energise can still be in force at: all that it leads to without a source having been taken out. */
-export function liveRegion(graph: Graph, energise: string): Set<string> {
-  const region = new Set<string>([energise]);
-  const stack = [energise];
-  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
-    for (const edge of graph.nodes.get(key)?.edges ?? []) {
-      const out = edge.ops.some((op) => op.op === 'sources' && op.to === 'out');
-      if (out || region.has(edge.to)) continue;
-      region.add(edge.to);
-      stack.push(edge.to);
-    }
-  }
-  return region;
 }

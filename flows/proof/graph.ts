@@ -41,6 +41,8 @@ export interface Graph {
   starts: readonly Start[];
   /** the place that a target comes to, calls entered */
   land(key: string): string;
+  /** where abort leads from each place that an energise can be in force at */
+  aborts: ReadonlyMap<string, readonly string[]>;
 }
 
 /**
@@ -61,7 +63,7 @@ export function graphOf(layout: Layout): Graph {
     });
   }
   const land = (key: string) => follow(layout, key, () => false).key;
-  return { layout, nodes, land, starts: [{ key: land(layout.first), reentry: false }, ...layout.tree.reentries.map((r) => ({ key: land(r.step), reentry: true }))] };
+  return { layout, nodes, land, aborts: abortTargets(nodes, land), starts: [{ key: land(layout.first), reentry: false }, ...layout.tree.reentries.map((r) => ({ key: land(r.step), reentry: true }))] };
 }
 
 /** An end of a called tree is left by the exit of its call, except those that end the run. */
@@ -112,4 +114,34 @@ function calledNeeds(layout: Layout, placed: ProgramStep): Need[] {
   return [...(call.needs ?? []), ...(layout.calleeNeeds.get(placed.caller) ?? [])].flatMap((claim) =>
     claimAtoms(claim, layout.profile).map((atom): Need => ({ rule: 'H19', atom, say: `the called tree needs “${claim}” at its start` })),
   );
+}
+
+/** From every place that an energise can be in force at, abort leads to that energise's target, with what the step has made worse. */
+function abortTargets(nodes: ReadonlyMap<string, PlaceNode>, land: (key: string) => string): ReadonlyMap<string, readonly string[]> {
+  const targets = new Map<string, Set<string>>();
+  for (const node of nodes.values()) {
+    const { step, scope } = node.placed;
+    if (step.kind !== 'energise') continue;
+    const to = land(scope.check(step.abort));
+    for (const key of liveRegion(nodes, node.key)) {
+      const known = targets.get(key);
+      if (known === undefined) targets.set(key, new Set([to]));
+      else known.add(to);
+    }
+  }
+  return new Map([...targets].map(([key, set]) => [key, [...set]]));
+}
+
+/** Places that an energise can still be in force at: all that it leads to without a source having been taken out. */
+function liveRegion(nodes: ReadonlyMap<string, PlaceNode>, energise: string): Set<string> {
+  const region = new Set<string>([energise]);
+  const stack = [energise];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    for (const edge of nodes.get(key)?.edges ?? []) {
+      if (region.has(edge.to) || edge.ops.some((op) => op.op === 'sources' && op.to === 'out')) continue;
+      region.add(edge.to);
+      stack.push(edge.to);
+    }
+  }
+  return region;
 }

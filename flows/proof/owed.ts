@@ -7,7 +7,6 @@ import { answeredLive } from '../facts/effects';
 import type { Op } from '../facts/ops';
 import type { RuleId } from '../facts/needs';
 import type { Edge, Graph, PlaceNode } from './graph';
-import { abortTargets } from './fixpoint';
 
 export interface Owing {
   rule: Extract<RuleId, 'H13' | 'H14'>;
@@ -25,12 +24,11 @@ type Debt = 'doubt' | 'open' | 'fixed';
 /** Every check whose doubt or failure can reach power. */
 export function owedFindings(graph: Graph): Owing[] {
   const found: Owing[] = [];
-  const aborts = abortTargets(graph);
   for (const node of graph.nodes.values()) {
     for (const edge of node.edges) {
       for (const op of edge.ops) {
-        if (op.op === 'doubt') found.push(...walk(graph, aborts, node, edge, op.check, 'doubt'));
-        if (op.op === 'fail') found.push(...walk(graph, aborts, node, edge, op.check, 'open'));
+        if (op.op === 'doubt') found.push(...walk(graph, node, edge, op.check, 'doubt'));
+        if (op.op === 'fail') found.push(...walk(graph, node, edge, op.check, 'open'));
       }
     }
   }
@@ -53,7 +51,7 @@ function afterOp(debt: Debt, check: string, op: Op): Debt | null {
   }
 }
 
-function walk(graph: Graph, aborts: ReadonlyMap<string, readonly string[]>, from: PlaceNode, by: Edge, check: string, debt: Debt): Owing[] {
+function walk(graph: Graph, from: PlaceNode, by: Edge, check: string, debt: Debt): Owing[] {
   const live = answeredLive(from.placed.step);
   const seen = new Set<string>();
   const stack: { key: string; debt: Debt }[] = [{ key: by.to, debt }];
@@ -68,7 +66,7 @@ function walk(graph: Graph, aborts: ReadonlyMap<string, readonly string[]>, from
       const left = edge.ops.reduce<Debt | null>((d, op) => (d === null ? null : afterOp(d, check, op)), here.debt);
       if (left !== null) stack.push({ key: edge.to, debt: left });
     }
-    for (const to of aborts.get(here.key) ?? []) stack.push({ key: to, debt: here.debt });
+    for (const to of graph.aborts.get(here.key) ?? []) stack.push({ key: to, debt: here.debt });
   }
   return [];
 }

@@ -24,7 +24,7 @@ export function reachFindings(graph: Graph): PathFinding[] {
       if (edge.spent && !leadsOut(graph, edge.to)) found.push({ rule: 'H16', key: node.key, say: `when “${edge.exit.label ?? edge.exit.id}” has been taken too often, it must lead to isolation, a hold or an end` });
     }
   }
-  for (const key of cycle(graph, (edge) => edge.exit.atMost === undefined || edge.spent)) found.push({ rule: 'H16', key, say: 'this step stands in a loop that no counted exit ends' });
+  for (const key of cycle([...graph.nodes.values()], (edge) => edge.exit.atMost === undefined || edge.spent)) found.push({ rule: 'H16', key, say: 'this step stands in a loop that no counted exit ends' });
   return found;
 }
 
@@ -48,7 +48,7 @@ export function liveFindings(graph: Graph): PathFinding[] {
     const ended = inside.find((n) => n.placed.step.kind === 'end' && n.placed.step.says !== 'in-service');
     if (ended !== undefined) found.push({ rule: 'H11', key: ended.key, say: `this end can be reached while “${step.title}” is still on` });
     const walk = (edge: Edge) => region.has(edge.to) && !isIsolate(graph, edge.from);
-    const uncounted = cycle(graph, (edge) => walk(edge) && region.has(edge.from) && (edge.exit.atMost === undefined || edge.spent));
+    const uncounted = cycle(inside, (edge) => walk(edge) && (edge.exit.atMost === undefined || edge.spent));
     if (uncounted.length > 0) {
       found.push({ rule: 'H11', key: uncounted[0] ?? null, say: `while “${step.title}” is on, a loop has no end` });
       continue;
@@ -82,9 +82,9 @@ function longest(graph: Graph, from: string, take: (edge: Edge) => boolean, regi
     const key = stack.at(-1) ?? '';
     const node = graph.nodes.get(key);
     const next = node === undefined ? [] : node.edges.filter((e) => take(e) && region.has(e.to)).map((e) => e.to);
-    const open = next.filter((to) => !known.has(to) && !stack.includes(to));
-    if (open.length > 0) {
-      stack.push(...open.slice(0, 1));
+    const open = next.find((to) => !known.has(to));
+    if (open !== undefined) {
+      stack.push(open);
       continue;
     }
     known.set(key, (node === undefined ? 0 : minutesOf(node)) + Math.max(0, ...next.map((to) => known.get(to) ?? 0)));
@@ -156,7 +156,7 @@ function forward(graph: Graph, from: readonly string[], take: (edge: Edge) => bo
 
 function backward(graph: Graph, from: readonly string[]): Set<string> {
   const into = new Map<string, string[]>();
-  for (const node of graph.nodes.values()) for (const edge of node.edges) into.set(edge.to, [...(into.get(edge.to) ?? []), edge.from]);
+  for (const node of graph.nodes.values()) for (const edge of node.edges) push(into, edge.to, edge.from);
   const seen = new Set(from);
   const stack = [...from];
   for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
@@ -169,39 +169,38 @@ function backward(graph: Graph, from: readonly string[]): Set<string> {
   return seen;
 }
 
-/** Places left on a loop when only these edges count; empty when there is none. What has no way in or no way out is peeled off. */
-function cycle(graph: Graph, take: (edge: Edge) => boolean): string[] {
-  const edges = [...graph.nodes.values()].flatMap((n) => n.edges.filter(take)).filter((e) => graph.nodes.has(e.to));
+/** Places left on a loop when only these edges count; empty when there is none. What has no way in, then what has no way out, is peeled off. */
+function cycle(nodes: readonly PlaceNode[], take: (edge: Edge) => boolean): string[] {
+  const inside = new Set(nodes.map((n) => n.key));
+  const edges = nodes.flatMap((n) => n.edges.filter((e) => inside.has(e.to) && take(e)));
+  const rest = peel(inside, edges.map((e) => [e.from, e.to]));
+  return [...peel(rest, edges.map((e) => [e.to, e.from]))];
+}
+
+/** Keys that are left once every key without a way in has been taken away, again and again. */
+function peel(keys: ReadonlySet<string>, ways: readonly (readonly [string, string])[]): Set<string> {
   const out = new Map<string, string[]>();
   const degree = new Map<string, number>();
-  for (const e of edges) {
-    out.set(e.from, [...(out.get(e.from) ?? []), e.to]);
-    degree.set(e.to, (degree.get(e.to) ?? 0) + 1);
+  for (const [from, to] of ways) {
+    if (!keys.has(from) || !keys.has(to)) continue;
+    push(out, from, to);
+    degree.set(to, (degree.get(to) ?? 0) + 1);
   }
-  const queue = [...graph.nodes.keys()].filter((key) => (degree.get(key) ?? 0) === 0);
-  const gone = new Set<string>();
+  const left = new Set(keys);
+  const queue = [...keys].filter((key) => (degree.get(key) ?? 0) === 0);
   for (let key = queue.pop(); key !== undefined; key = queue.pop()) {
-    gone.add(key);
+    left.delete(key);
     for (const to of out.get(key) ?? []) {
-      const left = (degree.get(to) ?? 0) - 1;
-      degree.set(to, left);
-      if (left === 0) queue.push(to);
+      const n = (degree.get(to) ?? 0) - 1;
+      degree.set(to, n);
+      if (n === 0) queue.push(to);
     }
   }
-  const left = [...graph.nodes.keys()].filter((key) => !gone.has(key));
-  // behind a loop hang places that are on none: keep those that can come back to themselves
-  return left.filter((key) => comesBack(key, out));
+  return left;
 }
 
-function comesBack(key: string, out: ReadonlyMap<string, string[]>): boolean {
-  const seen = new Set<string>();
-  const stack = [...(out.get(key) ?? [])];
-  for (let at = stack.pop(); at !== undefined; at = stack.pop()) {
-    if (at === key) return true;
-    if (seen.has(at)) continue;
-    seen.add(at);
-    stack.push(...(out.get(at) ?? []));
-  }
-  return false;
+function push(map: Map<string, string[]>, key: string, value: string): void {
+  const list = map.get(key);
+  if (list === undefined) map.set(key, [value]);
+  else list.push(value);
 }
-

@@ -12,7 +12,6 @@ import type { Op } from '../facts/ops';
 import { fitVoids } from '../facts/voids';
 import { toTakeOut } from '../machine/arrive';
 import type { Edge, Graph, Start } from './graph';
-import { abortTargets } from './fixpoint';
 
 /** One answer on the way; `edge` is null where the time was up or the power was broken off. */
 export interface Leg {
@@ -60,7 +59,6 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
   const stories = new Map<RuleId, Story>();
   const seen = new Set<string>();
   const queue: Standing[] = [];
-  const aborts = abortTargets(graph);
   let limited = false;
 
   const arrive = (next: Standing) => {
@@ -97,7 +95,7 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
       if (here.counters !== null && counters === null) continue;
       arrive({ key: edge.to, facts: applyOps(acting, edge.ops), counters, from: here, edge, start: here.start });
     }
-    for (const to of aborts.get(here.key) ?? []) arrive({ key: to, facts: acting, counters: here.counters, from: here, edge: null, start: here.start });
+    for (const to of graph.aborts.get(here.key) ?? []) arrive({ key: to, facts: acting, counters: here.counters, from: here, edge: null, start: here.start });
   }
   return { stories, states: seen.size, limited };
 }
