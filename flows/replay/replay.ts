@@ -4,6 +4,7 @@ import type { RunStart, RunState } from '../machine/advance';
 import type { Program } from '../machine/compile';
 import type { RunEnd } from '../machine/context';
 import type { MachineEvent } from '../machine/events';
+import { SAFE } from '../machine/program';
 
 export interface Divergence {
   /** place of the event among those given, from 0 */
@@ -44,6 +45,11 @@ export function replay(program: Program, start: RunStart, events: readonly Machi
   for (const [index, given] of events.entries()) {
     if (unmet.length > 0) break;
     const event = withNewId(given, renamed);
+    const opened = openLike(program, state, event);
+    if (opened.rows.length > 0) {
+      note(result, { index, is: 'elsewhere', was: 'step' in event ? event.step : null, now: SAFE.opening, rule: null, say: `The bench opening of this version also asks: ${opened.rows.join('; ')}. It is taken as answered.`, rejoined: index });
+      state = opened.state;
+    }
     const { key } = state.context;
     const was = 'step' in event && event.type !== 'REENTER' ? event.step : null;
     if (was !== null && was !== key) {
@@ -65,12 +71,30 @@ export function replay(program: Program, start: RunStart, events: readonly Machi
   return { ...result, same: result.divergences.length === 0, at: state.context.key, end: state.context.end };
 }
 
+/** Opening rows that the run was not asked before this event, answered well: what is on an opening list changes no way through the tree. */
+function openLike(program: Program, given: RunState, event: MachineEvent): { state: RunState; rows: string[] } {
+  const rows: string[] = [];
+  let state = given;
+  const { at, monotonic, boot } = event;
+  while (state.context.key === SAFE.opening && 'step' in event) {
+    const next = program.layout.opening.find((row) => !state.context.rows.some((done) => done.id === row.id));
+    const inOpening = event.step === SAFE.opening;
+    if (next === undefined || (inOpening && 'row' in event && (event.row === next.id || !program.layout.opening.some((row) => row.id === event.row)))) break;
+    const taken = advance(program, state, { type: 'ROW', step: SAFE.opening, row: next.id, word: next.words[0]?.word ?? '', at, monotonic, boot });
+    if (!taken.ok) break;
+    state = taken.state;
+    rows.push(next.label);
+  }
+  return { state, rows };
+}
+
 function note(result: Replayed, divergence: Divergence): Divergence {
   result.divergences.push(divergence);
   return divergence;
 }
 
 function nameOf(program: Program, key: string): string {
+  if (key === SAFE.opening) return 'the opening of the bench';
   const title = program.layout.steps.get(key)?.step.title;
   return title === undefined ? key : `“${title}” (${key})`;
 }

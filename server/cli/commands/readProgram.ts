@@ -2,7 +2,9 @@
 import { z } from 'zod';
 
 import { parseProfile, parseTree } from '@/flows/document/parseTree';
+import type { Profile } from '@/flows/document/profile';
 import { defaultSettings, settingsSchema } from '@/flows/document/settings';
+import type { Settings } from '@/flows/document/settings';
 import type { Tree } from '@/flows/document/tree';
 import { compile } from '@/flows/machine/compile';
 import type { Program } from '@/flows/machine/compile';
@@ -13,8 +15,9 @@ import { libraryTrees } from './library';
 
 /** Options that name what a tree is compiled with. */
 export interface ProgramFiles {
-  profile: string;
-  settings?: string | undefined;
+  /** a file, or the profile itself where a record carries it */
+  profile: string | Profile;
+  settings?: string | Settings | undefined;
   /** called trees; what is not given comes from the starter library */
   callee?: string[] | undefined;
 }
@@ -26,8 +29,8 @@ export async function readProgram(file: string, files: ProgramFiles): Promise<Pr
 
 /** A tree that has been read, compiled with the files. @throws BadInput with every fault */
 export async function compileTree(name: string, tree: Tree, files: ProgramFiles): Promise<Program> {
-  const profile = await readDocument(files.profile, parseProfile);
-  const settings = files.settings === undefined ? defaultSettings : await readSettings(files.settings);
+  const profile = typeof files.profile === 'string' ? await readDocument(files.profile, parseProfile) : files.profile;
+  const settings = typeof files.settings === 'string' ? await readSettings(files.settings) : (files.settings ?? defaultSettings);
   const given = await Promise.all((files.callee ?? []).map((callee) => readDocument(callee, parseTree)));
   const callees = [...given, ...(await libraryTrees()).filter((t) => !given.some((g) => g.id === t.id))];
   const compiled = compile({ tree, callees, profile, settings });

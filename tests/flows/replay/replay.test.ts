@@ -99,4 +99,13 @@ describe('replay', () => {
     const other = program(must(parseTree({ ...json, needsAtStart: ['release'] })));
     expect(replay(other, start, record(lamp))).toMatchObject({ same: false, taken: 0, divergences: [{ is: 'refused', say: 'This version needs at its start: release.' }] });
   });
+
+  it('goes on where the other version only asks more, or less, at the opening of the bench', () => {
+    const more = program(must(parseTree({ ...json, opening: { tools: [{ id: 'lamp-holder', name: 'Lamp holder' }], instruments: [], parts: [], conditions: [{ id: 'dry', name: 'The bench is dry' }] } })));
+    const replayed = replay(more, start, record(lamp));
+    expect(replayed.divergences.filter((d) => d.rejoined === null)).toEqual([]);
+    expect(replayed.divergences.map((d) => d.say).join(' ')).toMatch(/Tools and parts here: Lamp holder.*The bench is dry/);
+    expect(replayed.end).toMatchObject({ says: 'cleared' });
+    expect(replay(lamp, start, record(more)).end).toMatchObject({ says: 'cleared' });
+  });
 });

@@ -140,13 +140,15 @@ describe('replay', () => {
     expect(await replay.run([other, '--profile', PROFILE, '--run', run])).toMatchObject({ good: false, output: { same: false, divergences: [{ is: 'elsewhere', was: 'put-back', now: 'look-inside' }] } });
   });
 
-  it('plays the example of the documentation', async () => {
+  it('plays the examples of the documentation, on the machine that a record carries', async () => {
+    expect(await replay.run(['flows/library/look-over.json', '--run', 'docs/examples/RECORD.json'])).toMatchObject({ good: true, output: { same: true, end: { says: expect.any(String) as string } } });
     expect(await replay.run([MAKE_DEAD, '--profile', PROFILE, '--run', 'docs/examples/make-dead.events.json'])).toMatchObject({ good: true, output: { end: { says: 'cleared' } } });
   });
 
   it('says what is wrong with a run', async () => {
     expect(await complaint(replay, MAKE_DEAD, '--profile', PROFILE, '--run', await write('object.json', { answers: [] }))).toMatch(/neither an array of machine events nor an exported record/);
     expect(await complaint(replay, MAKE_DEAD, '--profile', PROFILE, '--run', await write('event.json', [{ type: 'ROW', step: 'isolate' }]))).toMatch(/event 1/);
+    expect(await complaint(replay, MAKE_DEAD, '--run', 'docs/examples/make-dead.events.json')).toMatch(/does not carry the profile/);
     expect(await complaint(replay, MAKE_DEAD, '--profile', PROFILE, '--run', await write('text.json', 'not JSON'))).toMatch(/is not JSON/);
   });
 });
