@@ -233,17 +233,17 @@ function measureRows(step: StepOf<'measure'> | StepOf<'soak'>, scope: StepScope,
   if (step.each === undefined) {
     const red = step.points?.red === undefined ? null : resolvePoint(scope.profile, step.points.red, null);
     const { low, high, nominal } = limitsOf(step, null, null, scope);
-    return [reading(`reading${suffix}`, red?.name ?? step.title, { quantity: step.quantity, low, high, nominal, red, black: step.quantity === 'celsius' ? null : black, wait })];
+    return [reading(`reading${suffix}`, red?.name ?? step.title, { quantity: step.quantity, low, high, nominal, bySize: isBySize(step), red, black: step.quantity === 'celsius' ? null : black, wait })];
   }
   if (step.each === 'rails') {
     return scope.profile.rails.map((rail) => {
       const { low, high, nominal } = limitsOf(step, rail, rail.id, scope);
-      return reading(`${rail.id}${suffix}`, rail.name, { quantity: step.quantity, low, high, nominal, red: resolvePoint(scope.profile, 'each-rail', rail.id), black, wait });
+      return reading(`${rail.id}${suffix}`, rail.name, { quantity: step.quantity, low, high, nominal, bySize: isBySize(step), red: resolvePoint(scope.profile, 'each-rail', rail.id), black, wait });
     });
   }
   return eachOf(step.each, scope.profile).map((item) => {
     const { low, high, nominal } = limitsOf(step, null, item.id, scope);
-    return reading(`${item.id}${suffix}`, item.name, { quantity: step.quantity, low, high, nominal, red: resolvePoint(scope.profile, step.each === 'stores' ? 'each-store' : item.id, item.id), black, wait });
+    return reading(`${item.id}${suffix}`, item.name, { quantity: step.quantity, low, high, nominal, bySize: isBySize(step), red: resolvePoint(scope.profile, step.each === 'stores' ? 'each-store' : item.id, item.id), black, wait });
   });
 }
 
@@ -253,6 +253,11 @@ function soakRows(step: StepOf<'soak'>, scope: StepScope): ReadingRow[] {
     const minutes = (i + 1) * step.everyMinutes;
     return measureRows(step, scope, `-${i + 1}`, { seconds: minutes * 60, from: 'entry' }).map((row) => ({ ...row, label: `${row.label}, at ${minutes} min` }));
   }).flat();
+}
+
+/** “Below” and “above” speak of size: 20 mA the wrong way round is not below 5 mA. Degrees have a sign of their own. */
+function isBySize(step: StepOf<'measure'> | StepOf<'soak'>): boolean {
+  return (step.limit.is === 'below' || step.limit.is === 'above') && step.quantity !== 'celsius';
 }
 
 /** The limit of a row as signed low and high; both null where a sheet cannot be filled, which the layout reports as a fault. */

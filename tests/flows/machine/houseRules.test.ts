@@ -345,6 +345,18 @@ describe('H11 and H21: time, stop, lapse', () => {
   });
 });
 
+describe('a limit that is said by size', () => {
+  it('takes a current the wrong way round for what it is', () => {
+    const leak = (value: number) => {
+      const b = new Bench(program(treeOf([look('d1'), dead('d1', 'leak'), step('measure', 'leak', 'done', { contact: 'probe', probe: 'hand', quantity: 'amps-dc', limit: { is: 'below', high: 0.005 } })])));
+      return b.pass().answer('good').dead().pass({ reading: value }).view.end?.key;
+    };
+    expect(leak(0.002)).toBe('done');
+    expect(leak(-0.002)).toBe('done');
+    expect(leak(-0.02)).toBe('refer');
+  });
+});
+
 describe('H20: live work above the limits', () => {
   const probe = (red: string) => step('measure', 'read', 'abort', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', power: 'live', points: { red }, limit: { is: 'between', low: 1, high: 400 } });
   const high = { ...benchProfile, points: [...benchProfile.points, { id: 'bulk', name: 'bulk +', connector: 'C9', pin: '+', rail: null, mark: null, neighbours: [] }] };
