@@ -12,7 +12,7 @@ const shape = z.strictObject({
   format: z.literal(1),
   title: text(80),
   suspects: z.array(z.strictObject({ id: idSchema, part: text(80), mode: MODES, prior: positive('a prior', 1e6) })).min(1).max(200),
-  checks: z.array(z.strictObject({ id: idSchema, title: text(80), minutes: positive('the minutes of a check', 600), answers: z.array(z.strictObject({ id: idSchema, label: text(60) })).min(2).max(12) })).max(200),
+  checks: z.array(z.strictObject({ id: idSchema, title: text(80), minutes: positive('the minutes of a check', 600), answers: z.array(z.strictObject({ id: idSchema, label: text(60) })).min(2).max(11) })).max(200),
   /** one row a suspect, one cell a check, in their order: the answer's id, or null where it may be any of them */
   cells: z.array(z.array(idSchema.nullable()).max(200)).max(200),
 });

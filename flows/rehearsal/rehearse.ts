@@ -69,7 +69,7 @@ function judge(suspect: Suspect, share: number, played: Play, alike: readonly (r
   const twins = (alike.find((group) => group.some((s) => s.id === id)) ?? []).map((s) => s.id);
   const named = played.end?.suspect ?? null;
   const found = played.stuck === null && (played.mended || named === id);
-  const inGroup = played.stuck === null && (named === null ? played.likeliest.includes(id) : twins.includes(named));
+  const inGroup = played.stuck === null && (named === null ? twins.some((twin) => played.likeliest.includes(twin)) : twins.includes(named));
   const reached = found ? 'verdict' : inGroup ? 'group' : 'missed';
   const among = reached === 'group' ? [...new Set([...twins, ...(named === null ? played.likeliest : [named])])].filter((s) => s !== id) : [];
   return { suspect: id, share, reached, among, ...bare(played) };

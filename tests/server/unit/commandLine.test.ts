@@ -76,6 +76,11 @@ describe('draft', () => {
     expect(output).toMatchObject({ root: { check: 'pass-junctions' }, report: { gap: 0, gapTo: 'optimum', groups: [] } });
   });
 
+  it('prints the draft as a tree, under an id that a tree may have', async () => {
+    expect(await draft.run([TABLE, '--tree', 'low-rail'])).toMatchObject({ good: true, output: { format: 1, id: 'low-rail', steps: expect.arrayContaining([expect.objectContaining({ id: 'pass-junctions', kind: 'observe' })]) as unknown } });
+    expect(await complaint(draft, TABLE, '--tree', '10')).toMatch(/head, id: an id is made of/);
+  });
+
   it('finds suspects that no check tells apart', async () => {
     const table = await read(TABLE);
     const file = await write('alike.json', { ...table, checks: (table['checks'] as unknown[]).slice(0, 1), cells: (table['cells'] as string[][]).map((row) => row.slice(0, 1)) });
