@@ -1,6 +1,5 @@
 /** H11, H16, H18, H19: what speaks of whole paths and not of one place. Each is a finding with the place that shows it. */
 import { DEAD_QUANTITIES } from '../document/ids';
-import type { Exit } from '../document/steps';
 import type { RuleId } from '../facts/needs';
 import type { Layout } from '../machine/program';
 import type { Edge, Graph, PlaceNode } from './graph';
