@@ -3,7 +3,7 @@ import { openDB } from 'idb';
 import type { DBSchema, IDBPDatabase } from 'idb';
 
 import type { RunBundle } from '@/shared/contract/runs';
-import type { Queued } from '@/shared/ui/api/outboxStore';
+import type { Queued } from '@/shared/ui/api/queued';
 
 export interface Device extends DBSchema {
   answers: { key: string; value: Queued; indexes: { run: string } };

@@ -2,7 +2,7 @@
 import { machineEventSchema, SIGNED_EVENTS } from '@/flows/machine/events';
 import type { MachineEvent } from '@/flows/machine/events';
 import type { Entry } from '@/shared/contract/entries';
-import type { NotTaken, Queued } from '@/shared/ui/api/outboxStore';
+import type { NotTaken, Queued } from '@/shared/ui/api/queued';
 
 export interface Ledger {
   /** entries that the server has said it has, without a gap */

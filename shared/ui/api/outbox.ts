@@ -10,7 +10,8 @@ import type { ClientProblem } from '@/shared/ui/api/answer';
 import type { Client } from '@/shared/ui/api/client';
 import { acknowledge, headSeq, joined, renumber, setAside, takeOver } from '@/shared/ui/api/ledger';
 import type { Ledger, Replays } from '@/shared/ui/api/ledger';
-import type { OutboxStore, Queued } from '@/shared/ui/api/outboxStore';
+import type { OutboxStore } from '@/shared/ui/api/outboxStore';
+import type { Queued } from '@/shared/ui/api/queued';
 import { retryDelayMs, standingOf } from '@/shared/ui/api/sendStanding';
 
 export interface Saved {

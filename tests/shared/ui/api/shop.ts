@@ -3,7 +3,8 @@ import type { MachineEvent } from '@/flows/machine/events';
 import type { Entry } from '@/shared/contract/entries';
 import type { Answer, ClientProblem, ClientProblemCode } from '@/shared/ui/api/answer';
 import type { Client } from '@/shared/ui/api/client';
-import type { OutboxStore, Queued } from '@/shared/ui/api/outboxStore';
+import type { OutboxStore } from '@/shared/ui/api/outboxStore';
+import type { Queued } from '@/shared/ui/api/queued';
 
 export const RUN = '0198c0de-0000-7000-8000-00000000000a';
 export const ANN = '11111111-1111-4111-8111-111111111111';
