@@ -37,9 +37,10 @@ function draw(profile: Profile, red: readonly Point[], black: readonly Point[]):
     title: connector,
     points: profile.points.filter((p) => p.connector === connector).map((p): FigurePoint => ({ id: p.id, name: shortName(p), highlight: lead(p) })),
   }));
-  const own = leads.flatMap((p) => [p.name, shortName(p), `${p.connector}-${p.pin}`]);
+  const bare = (words: string) => words.replaceAll(' ', '');
+  const own = leads.flatMap((p) => [p.name, shortName(p), `${p.connector}-${p.pin}`]).map(bare);
   // a neighbour that carries the other lead is no danger
-  const neighbours = [...new Set(leads.flatMap((p) => p.neighbours))].filter((name) => !own.some((is) => name === is || name.startsWith(`${is} (`)));
+  const neighbours = [...new Set(leads.flatMap((p) => p.neighbours))].filter((name) => !own.some((is) => bare(name) === is || bare(name).startsWith(`${is}(`)));
   return { strips, neighbours };
 }
 
