@@ -15,12 +15,14 @@ interface Props {
   title: string;
   /** in the order in which they stand on the machine */
   points: readonly FigurePoint[];
+  /** false where the words stand elsewhere on the page */
+  caption?: boolean | undefined;
 }
 
 const rowHeight = 84;
 
 /** Every screw is drawn; a lead is told by its letter and its ring, not by colour alone. */
-export function Figure({ title, points }: Props) {
+export function Figure({ title, points, caption = true }: Props) {
   const [width, setWidth] = useState(320);
   // the names stand below the screws without touching: a mono figure is 10 px wide
   const pitchLeast = Math.max(44, ...points.map((point) => point.name.length * 10 + 8));
@@ -37,7 +39,7 @@ export function Figure({ title, points }: Props) {
           ))}
         </Svg>
       </View>
-      {points.some((point) => point.highlight) ? (
+      {caption && points.some((point) => point.highlight) ? (
         <BodyText size="small" tone="soft">
           {words}
         </BodyText>

@@ -18,17 +18,21 @@ interface Props {
   name?: string | undefined;
   value: string;
   unit: string;
+  /** stands behind the label as it is written: capitals would turn milliohms into megohms */
+  limit?: string | undefined;
   /** which meter on which range, as "Meter A, 60 V" */
   meter?: string | undefined;
   error?: string | undefined;
   hint?: string | undefined;
   disabled?: boolean | undefined;
+  /** takes the focus when it appears, so that figures can be typed at once */
+  autoFocus?: boolean | undefined;
   onChangeText: (text: string) => void;
   onSubmit?: (() => void) | undefined;
 }
 
 /** Takes `4.97`, `4,97`, `470m`, `4k7`: number keys first, letters and sign one touch away. */
-export function ReadingEntry({ label, name, value, unit, meter, error, hint, disabled = false, onChangeText, onSubmit }: Props) {
+export function ReadingEntry({ label, name, value, unit, limit, meter, error, hint, disabled = false, autoFocus = false, onChangeText, onSubmit }: Props) {
   const { colors } = useTheme();
   const [letters, setLetters] = useState(false);
   const input = useRef<TextInput>(null);
@@ -38,6 +42,7 @@ export function ReadingEntry({ label, name, value, unit, meter, error, hint, dis
     <View style={{ gap: space.xs, alignSelf: 'stretch' }}>
       <View style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'space-between', gap: space.m, flexWrap: 'wrap' }}>
         <Label>{label}</Label>
+        {limit ? <BodyText size="small">{limit}</BodyText> : null}
         {meter ? (
           <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.s }}>
             <Icon name="meter" size={22} color={colors.inkSoft} weight={1.6} />
@@ -65,6 +70,7 @@ export function ReadingEntry({ label, name, value, unit, meter, error, hint, dis
           onChangeText={onChangeText}
           onSubmitEditing={() => onSubmit?.()}
           editable={!disabled}
+          autoFocus={autoFocus}
           inputMode={letters ? 'text' : 'decimal'}
           autoCapitalize="none"
           autoCorrect={false}

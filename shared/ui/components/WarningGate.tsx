@@ -52,7 +52,7 @@ export function WarningGate({ hazards, acknowledged, onAcknowledge }: Props) {
           <HazardRow hazard={h} />
         </View>
       ))}
-      <View style={{ padding: space.l, paddingTop: 0, gap: space.m }}>
+      <View style={{ padding: space.m, paddingTop: 0, gap: space.s }}>
         <BodyText size="small" tone="soft">
           {deferral}
         </BodyText>
@@ -98,19 +98,20 @@ function SignalPanel({ signal }: { signal: SignalVisual }) {
 }
 
 function HazardRow({ hazard: h }: { hazard: Hazard }) {
+  const [only, ...more] = h.avoid;
   return (
-    <View style={{ flexDirection: 'row', gap: space.l, padding: space.l }}>
-      {h.sign ? <SafetySign name={h.sign} size={56} /> : null}
-      <View style={{ flex: 1, minWidth: 0, gap: space.xs }}>
+    <View style={{ flexDirection: 'row', gap: space.m, paddingHorizontal: space.m, paddingVertical: space.s }}>
+      {h.sign ? <SafetySign name={h.sign} size={48} /> : null}
+      <View style={{ flex: 1, minWidth: 0 }}>
         <BodyText size="instruction" bold>
           {h.hazard}
         </BodyText>
-        <BodyText size="instruction">{h.result}</BodyText>
-        {h.avoid.map((words) => (
+        <BodyText>{more.length === 0 && only !== undefined ? `${h.result} ${only}` : h.result}</BodyText>
+        {(more.length === 0 ? [] : h.avoid).map((words) => (
           <View key={words} style={{ flexDirection: 'row', gap: space.s }}>
-            <BodyText size="instruction">–</BodyText>
+            <BodyText>–</BodyText>
             <View style={{ flex: 1 }}>
-              <BodyText size="instruction">{words}</BodyText>
+              <BodyText>{words}</BodyText>
             </View>
           </View>
         ))}

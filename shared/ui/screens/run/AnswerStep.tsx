@@ -18,6 +18,11 @@ export function AnswerStep({ run }: { run: Run }) {
   const first = answers[0];
   const dock = (
     <>
+      {step?.kind === 'observe' ? (
+        <Heading level={2} size="sub">
+          {step.asks}
+        </Heading>
+      ) : null}
       {answers.map((a) => (
         <BigAnswer key={a.answer} kind={a === first ? 'primary' : 'plain'} label={a.label} disabled={run.busy} onPress={() => say(a.answer)} />
       ))}
@@ -31,11 +36,6 @@ export function AnswerStep({ run }: { run: Run }) {
   return (
     <RunFrame run={run} dock={dock}>
       <StepBody run={run} row={null} />
-      {step?.kind === 'observe' ? (
-        <Heading level={2} size="section">
-          {step.asks}
-        </Heading>
-      ) : null}
     </RunFrame>
   );
 }

@@ -17,9 +17,9 @@ export function Countdown({ opensAt, what }: { opensAt: number; what: string }) 
   const left = opensAt - useNow(SECOND_MS);
   const over = left <= 0;
   return (
-    <View role="timer" aria-label={over ? `${what}: the wait is over` : what} style={{ flexDirection: 'row', alignItems: 'center', gap: space.m }}>
-      <Icon name="clock" size={28} color={over ? colors.inkSoft : colors.brass} />
-      {over ? <BodyText tone="soft">{`The wait is over, since ${clockOf(-left)}.`}</BodyText> : <Mono size="reading">{clockOf(left + 999)}</Mono>}
+    <View role="timer" aria-label={over ? `${what}: the wait is over` : what} style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'center', gap: space.s }}>
+      <Icon name="clock" size={24} color={over ? colors.inkSoft : colors.brass} />
+      {over ? <BodyText tone="soft">{`The wait is over, since ${clockOf(-left)}.`}</BodyText> : <Mono bold>{clockOf(left + 999)}</Mono>}
       {over ? null : (
         <View style={{ flexShrink: 1 }}>
           <BodyText>{what}</BodyText>

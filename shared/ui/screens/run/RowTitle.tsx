@@ -1,21 +1,18 @@
-/** What is asked now, of several. */
+/** What is asked now, of several; it stands with its answers. */
 import { View } from 'react-native';
 
 import type { RowView } from '@/flows/machine/view';
 import type { Row } from '@/flows/machine/rows';
 import { Heading } from '@/shared/ui/components/Heading';
 import { Label } from '@/shared/ui/components/Label';
-import { line, space } from '@/shared/ui/theme/space';
-import { useTheme } from '@/shared/ui/theme/useTheme';
 
 /** Read out when the row changes. */
 export function RowTitle({ rows, current }: { rows: readonly RowView[]; current: Row }) {
-  const { colors } = useTheme();
   const at = rows.findIndex((r) => r.row.id === current.id);
   return (
-    <View role="status" aria-live="polite" style={{ borderTopWidth: line.rule, borderTopColor: colors.ink, paddingTop: space.s }}>
+    <View role="status" aria-live="polite">
       {rows.length > 1 ? <Label>{`${at + 1} of ${rows.length}`}</Label> : null}
-      <Heading level={2} size="section">
+      <Heading level={2} size="sub">
         {current.label}
       </Heading>
     </View>

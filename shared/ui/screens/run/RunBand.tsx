@@ -2,6 +2,7 @@
 import { useNow } from '@/shared/ui/hooks/useNow';
 import { PowerBand } from '@/shared/ui/components/PowerBand';
 import { bandDetail } from '@/shared/ui/screens/run/bandWords';
+import { studOf } from '@/shared/ui/screens/run/studOf';
 import type { Run } from '@/shared/ui/screens/run/Run';
 
 const SECOND_MS = 1_000;
@@ -10,6 +11,6 @@ const SECOND_MS = 1_000;
 export function RunBand({ run, onPressPlace }: { run: Run; onPressPlace: () => void }) {
   const now = useNow(SECOND_MS);
   const { view, program, state } = run;
-  const place = view.stud === '' || view.builtIn ? 'way' : `${view.stud}/${view.total}`;
-  return <PowerBand state={view.band} detail={bandDetail(program, state, view, now)} place={place} onPressPlace={onPressPlace} />;
+  const place = view.end === null ? `${studOf(run)}/${view.total}` : undefined;
+  return <PowerBand state={view.band} detail={bandDetail(program, state, view, now)} place={place ?? 'end'} onPressPlace={onPressPlace} />;
 }

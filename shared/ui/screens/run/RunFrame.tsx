@@ -9,6 +9,7 @@ import { StopBar } from '@/shared/ui/components/StopBar';
 import { StudRail } from '@/shared/ui/components/StudRail';
 import { NotTakenNotice } from '@/shared/ui/screens/run/NotTakenNotice';
 import { RefusalNotice } from '@/shared/ui/screens/run/RefusalNotice';
+import { studOf } from '@/shared/ui/screens/run/studOf';
 import { RunBand } from '@/shared/ui/screens/run/RunBand';
 import { RecordSide } from '@/shared/ui/screens/run/RecordSide';
 import type { Run } from '@/shared/ui/screens/run/Run';
@@ -42,17 +43,20 @@ export function RunFrame({ run, dock, stop = true, children }: Props) {
   const foot = (
     <>
       {dock || run.refusal ? (
-        <AnswerDock>
-          <RefusalNotice run={run} />
-          {dock}
-        </AnswerDock>
+        // a dock that is taller than a small screen scrolls in itself: Stop is never pushed away
+        <ScrollView style={{ flexGrow: 0, flexShrink: 1 }}>
+          <AnswerDock>
+            <RefusalNotice run={run} />
+            {dock}
+          </AnswerDock>
+        </ScrollView>
       ) : null}
       {stop && !columns ? <StopBar onPress={pressStop} /> : null}
     </>
   );
   const centre = (
     <Page bleed maxWidth={720} foot={foot}>
-      <StudRail number={view.stud === '' ? '0' : view.stud} state={view.builtIn ? 'close' : 'now'} above={view.stud !== ''} below next grow>
+      <StudRail number={studOf(run)} state={view.builtIn ? 'close' : 'now'} above={view.phase !== 'opening'} below={view.phase !== 'closed'} next={view.end === null} grow>
         <NotTakenNotice run={run} />
         {children}
       </StudRail>

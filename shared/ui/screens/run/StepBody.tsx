@@ -1,9 +1,11 @@
 /** Head, instruction, figure and notes of a step; from the second row on the instruction makes room for the rows. */
 import { useState } from 'react';
+import { View } from 'react-native';
 
 import type { Row } from '@/flows/machine/rows';
 import { Button } from '@/shared/ui/components/Button';
 import type { Run } from '@/shared/ui/screens/run/Run';
+import { StepAside } from '@/shared/ui/screens/run/StepAside';
 import { StepFigure } from '@/shared/ui/screens/run/StepFigure';
 import { StepHead } from '@/shared/ui/screens/run/StepHead';
 import { StepLines } from '@/shared/ui/screens/run/StepLines';
@@ -19,11 +21,15 @@ export function StepBody({ run, row }: { run: Run; row: Row | null }) {
       <StepHead run={run} />
       {step !== null && (!begun || shown) ? (
         <>
-          <StepLines step={step} />
+          <StepLines step={step} aside={<StepAside run={run} />} />
           <StepNotes run={run} />
         </>
       ) : null}
-      {step !== null && begun && !shown ? <Button kind="quiet" label="Show the instruction again" onPress={() => setShown(true)} /> : null}
+      {step !== null && begun && !shown ? (
+        <View style={{ flexDirection: 'row' }}>
+          <Button kind="quiet" label="Show the instruction again" onPress={() => setShown(true)} />
+        </View>
+      ) : null}
       <StepFigure run={run} row={row} />
     </>
   );

@@ -22,6 +22,8 @@ export function WordRowStep({ run, current }: { run: Run; current: RowView & { r
   const [first, ...others] = row.words;
   const dock = (
     <>
+      <RowTitle rows={view.rows} current={row} />
+      {opensAt !== null && !open ? <Countdown opensAt={opensAt} what="until this may be answered" /> : null}
       {first ? <BigAnswer kind="primary" label={first.label} disabled={!open || run.busy} onPress={() => say(first.word)} /> : null}
       <AnswerStack row>
         {others.map((w) => (
@@ -34,8 +36,6 @@ export function WordRowStep({ run, current }: { run: Run; current: RowView & { r
     <RunFrame run={run} dock={dock}>
       <StepBody run={run} row={row} />
       {view.key === SAFE.opening ? <NotReadyNotice run={run} /> : null}
-      <RowTitle rows={view.rows} current={row} />
-      {opensAt !== null && !open ? <Countdown opensAt={opensAt} what="until this may be answered" /> : null}
       <DoneRows rows={view.rows} />
     </RunFrame>
   );

@@ -16,23 +16,23 @@ export function clockOf(ms: number): string {
 /** The time that is left is named when it is short. */
 const SHORT_MS = 120_000;
 
-/** What is in circuit and since when, or what the word above it means for the hands. `now` in epoch milliseconds. */
-export function bandDetail(program: Program, state: RunState, view: RunView, now: number): string {
+/** What is in circuit and since when, or what the word above it stands for; the word for what is not known says it all. `now` in epoch milliseconds. */
+export function bandDetail(program: Program, state: RunState, view: RunView, now: number): string | undefined {
   const { context } = state;
   const { live } = context;
   if (live !== null) {
     if (now > live.until) return `Time is up: isolate now · live ${clockOf(now - live.since)}`;
     const left = live.until - now;
-    const time = left < SHORT_MS ? `off within ${clockOf(left)}` : `live ${clockOf(now - live.since)}`;
-    return `${circuitOf(program, live.key)} · ${time}`;
+    const time = left < SHORT_MS ? `${clockOf(left)} left` : `live ${clockOf(now - live.since)}`;
+    return `${shortly(program, live.key)} · ${time}`;
   }
   switch (view.band) {
     case 'proved-dead':
-      return 'Every source out, nothing stored';
+      return 'All out, no charge left';
     case 'off':
-      return 'Every source out, charge not proved';
+      return 'All out, charge not proved';
     case 'unknown':
-      return view.phase === 'opening' ? 'Nothing is known of this bench yet' : 'Until every source is found out';
+      return undefined;
     case 'lamp':
     case 'bench':
     case 'mains':
@@ -56,4 +56,14 @@ export function circuitOf(program: Program, key: string): string {
     case 'mains':
       return `${volts}, full power`;
   }
+}
+
+/** The same for the band, where a phone has room for two dozen characters. */
+function shortly(program: Program, key: string): string {
+  const placed = program.layout.steps.get(key);
+  if (placed?.step.kind !== 'energise' && placed?.step.kind !== 'raise') return 'A source is in';
+  const { through, mostVolts, mostAmps, lampWatts } = placed.step;
+  const volts = formatQuantity(mostVolts, 'V', { digits: 3 });
+  if (through === 'lamp' && lampWatts !== undefined) return `${formatQuantity(lampWatts, 'W', { digits: 3 })}, ${volts}`;
+  return through === 'mains' ? `${volts}, full` : `${volts}, ${formatQuantity(mostAmps, 'A', { digits: 3 })}`;
 }

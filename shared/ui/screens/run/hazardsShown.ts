@@ -19,8 +19,13 @@ export function hazardsShown(kinds: readonly HazardKind[], profile: Profile, set
 
 function named(kind: HazardKind, profile: Profile, settings: Settings): string {
   const { hazard } = HAZARDS[kind];
-  if (kind === 'mains-shock') return `${hazard}: ${formatQuantity(profile.mains.volts, 'V', { digits: 3 })}`;
+  if (kind === 'mains-shock') return `${hazard}: ${glued(formatQuantity(profile.mains.volts, 'V', { digits: 3 }))}`;
   const [most] = [...partsToDischarge(profile, settings)].sort((a, b) => storedJoules(b) - storedJoules(a));
-  if (kind === 'stored-charge' && most !== undefined) return `${hazard}: ${most.name}, ${formatQuantity(storedJoules(most), 'J', { digits: 3 })}`;
+  if (kind === 'stored-charge' && most !== undefined) return `${hazard}: ${most.name}, ${glued(formatQuantity(storedJoules(most), 'J', { digits: 3 }))}`;
   return hazard;
+}
+
+/** A number is not parted from its unit at the end of a line. */
+function glued(words: string): string {
+  return words.replaceAll(' ', '\u00a0');
 }

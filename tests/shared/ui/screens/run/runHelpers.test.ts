@@ -26,14 +26,14 @@ describe('bandDetail', () => {
   it('counts the time that the bench is live, and what is in circuit', () => {
     const bench = toGuard().do({ type: 'GUARD_HELD', step: 'lamp', heldMs: 2100 });
     const since = bench.view.live?.since ?? 0;
-    expect(bandDetail(lamp, bench.state, bench.view, since + 72_000)).toBe('60 W in series, 230 V · live 01:12');
-    expect(bandDetail(lamp, bench.state, bench.view, since + 9 * 60_000)).toBe('60 W in series, 230 V · off within 01:00');
+    expect(bandDetail(lamp, bench.state, bench.view, since + 72_000)).toBe('60 W, 230 V · live 01:12');
+    expect(bandDetail(lamp, bench.state, bench.view, since + 9 * 60_000)).toBe('60 W, 230 V · 01:00 left');
     expect(bandDetail(lamp, bench.state, bench.view, since + 11 * 60_000)).toMatch(/^Time is up: isolate now/);
   });
 
-  it('says what is known before anything is', () => {
+  it('lets the word stand alone before anything is known', () => {
     const bench = new Bench(lamp);
-    expect(bandDetail(lamp, bench.state, bench.view, bench.at)).toBe('Nothing is known of this bench yet');
+    expect(bandDetail(lamp, bench.state, bench.view, bench.at)).toBeUndefined();
   });
 });
 
@@ -59,7 +59,7 @@ describe('guardChecks', () => {
 describe('hazardsShown', () => {
   it('names the volts and the joules of this machine, worst first', () => {
     const shown = hazardsShown(['lead-solder', 'stored-charge', 'mains-shock'], benchProfile, lamp.layout.settings);
-    expect(shown.map((h) => h.hazard)).toEqual(['Stored charge: C1 reservoir, 13.6 J', 'Mains voltage: 230 V', 'Lead solder']);
+    expect(shown.map((h) => h.hazard)).toEqual(['Stored charge: C1 reservoir, 13.6\u00a0J', 'Mains voltage: 230\u00a0V', 'Lead solder']);
     expect(shown[0]?.signal).toBe('danger');
   });
 });
@@ -137,14 +137,27 @@ describe('metersFor', () => {
   const all = [of('old', { outOfDate: true }), of('meter', {}), of('tester', { twoPole: true, kind: 'two-pole-tester' }), of('ohms', { ranges: [] })];
 
   it('says why an instrument cannot be used', () => {
-    const meters = metersFor(all, { quantity: 'volts-dc', twoPole: true, only: null });
+    const meters = metersFor(all, { quantity: 'volts-dc', kind: 'prove-dead', only: null });
     expect(meters.map((m) => [m.instrument.id, m.barred])).toEqual([['tester', null], ['old', 'Out of date since 2027-01-01'], ['meter', 'Not a two-pole tester']]);
   });
 
   it('begins with the one used before, else with one of the kind that the tree lists', () => {
-    const meters = metersFor(all, { quantity: 'volts-dc', twoPole: false, only: null });
-    expect(firstMeter(meters, 'tester', lampTree, 'volts-dc')?.id).toBe('tester');
-    expect(firstMeter(meters, 'old', lampTree, 'volts-dc')?.id).toBe('meter');
-    expect(firstMeter([], null, lampTree, 'volts-dc')).toBeNull();
+    const meters = metersFor(all, { quantity: 'volts-dc', kind: 'measure', only: null });
+    const five = { quantity: 'volts-dc', about: 5 } as const;
+    expect(firstMeter(meters, 'tester', lampTree, five)?.id).toBe('tester');
+    expect(firstMeter(meters, 'old', lampTree, five)?.id).toBe('meter');
+    expect(firstMeter([], null, lampTree, five)).toBeNull();
+  });
+
+  it('does not begin with one that cannot tell at this size, even when it was used before', () => {
+    const fine = of('fine', { kind: 'low-ohm-meter', ranges: [{ quantity: 'ohms', fullScale: 2, resolution: 0.0001, percent: 0.2, counts: 3 }] });
+    const coarse = of('coarse', { ranges: [{ quantity: 'ohms', fullScale: 600, resolution: 0.1, percent: 0.9, counts: 3 }] });
+    const meters = metersFor([coarse, fine], { quantity: 'ohms', kind: 'prove-earth', only: null });
+    expect(firstMeter(meters, 'coarse', lampTree, { quantity: 'ohms', about: 0.15 })?.id).toBe('fine');
+  });
+
+  it('takes an insulation tester for insulation, never a multimeter', () => {
+    const meters = metersFor([of('meter', { ranges: [{ quantity: 'ohms', fullScale: 6e7, resolution: 1e4, percent: 1, counts: 5 }] })], { quantity: 'ohms', kind: 'prove-insulation', only: null });
+    expect(meters[0]?.barred).toMatch(/volts/);
   });
 });
