@@ -61,6 +61,9 @@ export const PASSING: Record<Kind, Outcome | null> = {
 /** Kinds whose exits lift or leave doubts (H13, H14). Dead-making steps are left out: their doubt is the bench fact itself. */
 export const CHECK_KINDS: readonly Kind[] = ['observe', 'measure', 'soak', 'prove-earth', 'prove-insulation', 'prove-returns', 'prove-trip', 'prove-rails'];
 
+/** Acts whose unsure answer is a doubt too: what is perhaps not fitted, or perhaps not mended, bars power like an unsure reading. */
+export const ACT_KINDS: readonly Kind[] = ['do', 'work'];
+
 /** What evidence an exit carries on a suspect, and its likelihood ratio (steps of Jeffreys' scale; nothing is ever zero). */
 export const EVIDENCE = { 'rules-out': 0.01, 'points-away': 0.1, 'says-nothing': 1, 'points-to': 10, 'all-but-proves': 100 } as const;
 export type EvidenceWord = keyof typeof EVIDENCE;

@@ -2,7 +2,7 @@
  * `entered` and `after`: the only place where a step changes bench facts. What gets worse does so when the action is shown (for energise and
  * raise when the guard is confirmed); what gets better only with the passing outcome.
  */
-import { CHECK_KINDS, DEFAULT_VERDICT } from '../document/outcomes';
+import { ACT_KINDS, CHECK_KINDS, DEFAULT_VERDICT } from '../document/outcomes';
 import type { Outcome, Verdict } from '../document/outcomes';
 import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
@@ -134,8 +134,9 @@ function kindOps(step: Step, outcome: Outcome | string, scope: StepScope): Op[] 
 }
 
 function checkOps(step: Step, exit: Exit, outcome: Outcome | string, scope: StepScope): Op[] {
-  if (!CHECK_KINDS.includes(step.kind)) return [];
   const check = scope.check(step.id);
+  if (ACT_KINDS.includes(step.kind)) return verdictOf(exit, outcome) === 'unsure' ? [{ op: 'doubt', check }] : [{ op: 'lift-doubt', check }];
+  if (!CHECK_KINDS.includes(step.kind)) return [];
   const cleared = (exit.evidence ?? [])
     .filter((e) => e.says === 'rules-out' || e.says === 'points-away')
     .map((e): Op => ({ op: 'clear', suspect: scope.check(e.suspect) }));

@@ -150,11 +150,13 @@ function feedNeeds(step: PowerStep, scope: StepScope): Need[] {
     case 'rail': {
       const rail = profile.rails.find((r) => r.id === step.rail);
       needed.push(...settled('H9', rail !== undefined, 'the profile has no such rail'));
+      needed.push(...settled('H6', cls === 'limited', 'a rail is fed from outside only by a limited supply'));
       needed.push({ rule: 'H9', atom: { fact: 'load', is: 'none' }, say: 'a load or a board is on the rail' });
       if (rail?.trip) needed.push(...settled('H9', step.mostVolts <= rail.trip.highVolts + 0.5, 'more volts than the trip test of this rail may see'));
       break;
     }
     case 'part':
+      needed.push(...settled('H6', cls === 'limited', 'a part is fed alone only from a limited supply'));
       needed.push({ rule: 'H5', atom: { fact: 'fitted', id: step.lead ?? '' }, say: 'the lead of this part is not lifted' });
       break;
   }

@@ -47,11 +47,11 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
   };
   for (const s of graph.starts) arrive(s.key, s.reentry ? reentryState(graph, encoding, s.key) : encoding.state(start));
 
-  const effects = new Map<string, { entered: ReturnType<Encoding['effect']>; edges: { to: string; effect: ReturnType<Encoding['effect']> }[] }>();
+  const effects = new Map<string, { entered: ReturnType<Encoding['effect']>; edges: { to: string; effect: ReturnType<Encoding['effect']>; claims: readonly Need[] }[] }>();
   const effectsOf = (node: PlaceNode) => {
     const known = effects.get(node.key);
     if (known !== undefined) return known;
-    const made = { entered: encoding.effect(node.entered), edges: node.edges.map((e) => ({ to: e.to, effect: encoding.effect(e.ops) })) };
+    const made = { entered: encoding.effect(node.entered), edges: node.edges.map((e) => ({ to: e.to, effect: encoding.effect(e.ops), claims: e.claims })) };
     effects.set(node.key, made);
     return made;
   };
@@ -66,7 +66,14 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
     for (const edge of own.edges) arrive(edge.to, through(acting, edge.effect));
     for (const to of graph.aborts.get(key) ?? []) arrive(to, acting);
   }
-  return { encoding, at, broken: [...graph.nodes.values()].flatMap((node) => brokenAt(encoding, node, at.get(node.key))) };
+  const claimed = [...graph.nodes.values()].flatMap((node): Broken[] => {
+    const state = at.get(node.key);
+    if (state === undefined || node.edges.every((e) => e.claims.length === 0)) return [];
+    const own = effectsOf(node);
+    const acting = through(state, own.entered);
+    return own.edges.flatMap((e) => unmet(encoding, e.claims, through(acting, e.effect)).map((need): Broken => ({ rule: need.rule, key: e.to, need })));
+  });
+  return { encoding, at, broken: [...[...graph.nodes.values()].flatMap((node) => brokenAt(encoding, node, at.get(node.key))), ...claimed] };
 }
 
 /** A re-entry stands on exactly what it declares, and the machine also asks its step's needs, nothing owed, nothing fitted. */
@@ -102,11 +109,15 @@ function brokenAt(encoding: Encoding, node: PlaceNode, arrived: MayState | undef
   if (arrived === undefined) return [];
   const { step } = node.placed;
   const state = step.kind === 'end' && step.says !== 'in-service' ? closedOut(encoding, arrived) : arrived;
-  return node.needs.filter((need) => {
+  return unmet(encoding, node.needs, state).map((need) => ({ rule: need.rule, key: node.key, need }));
+}
+
+function unmet(encoding: Encoding, needs: readonly Need[], state: MayState): Need[] {
+  return needs.filter((need) => {
     const form = encoding.need(need);
     if (form.as === 'never') return true;
     return form.as === 'bits' && form.literals.some(({ bit, must }) => hasBit(must ? state.may0 : state.may1, bit));
-  }).map((need) => ({ rule: need.rule, key: node.key, need }));
+  });
 }
 
 /** Close-out as the machine does it: dead, temporary things out, and what taking them out may void. */

@@ -19,6 +19,8 @@ export interface Edge {
   ops: readonly Op[];
   to: string;
   through: Landing['through'];
+  /** what a call says that it leaves, asked where it comes back (H19) */
+  claims: readonly Need[];
 }
 
 export interface PlaceNode {
@@ -75,7 +77,7 @@ function edgesOf(layout: Layout, placed: ProgramStep): Edge[] {
   return placed.step.exits.flatMap((exit: Exit) =>
     outcomesOf(placed.step, exit).flatMap(({ outcome, word }) => {
       const own = after(placed.step, exit, word, placed.scope);
-      return waysOf(exit).flatMap(({ to, spent }) => landings(layout, placed.scope.check(to)).map((landing): Edge => ({ from: placed.key, exit, outcome, spent, ops: [...own, ...throughOps(layout, landing)], to: landing.key, through: landing.through })));
+      return waysOf(exit).flatMap(({ to, spent }) => landings(layout, placed.scope.check(to)).map((landing): Edge => ({ from: placed.key, exit, outcome, spent, ops: [...own, ...throughOps(layout, landing)], to: landing.key, through: landing.through, claims: resultClaims(layout, landing) })));
     }),
   );
 }
@@ -103,6 +105,15 @@ function throughOps(layout: Layout, landing: Landing): Op[] {
   return landing.through.flatMap(({ call, exit }) => {
     const scope = layout.steps.get(call)?.scope;
     return (exit.evidence ?? []).filter((e) => e.says === 'rules-out' || e.says === 'points-away').map((e): Op => ({ op: 'clear', suspect: scope?.check(e.suspect) ?? e.suspect }));
+  });
+}
+
+/** The stated results of the calls that a way comes back from. */
+function resultClaims(layout: Layout, landing: Landing): Need[] {
+  return landing.through.flatMap(({ call }) => {
+    const step = layout.steps.get(call)?.step;
+    const results = step?.kind === 'call' ? (step.results ?? []) : [];
+    return results.flatMap((claim) => claimAtoms(claim, layout.profile).map((atom): Need => ({ rule: 'H19', atom, say: `the called tree does not leave “${claim}”, as its call says` })));
   });
 }
 

@@ -66,7 +66,7 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
     if (node === undefined) return;
     const { step } = node.placed;
     const asked = step.kind === 'end' && step.says !== 'in-service' ? closedOut(next.facts) : next.facts;
-    const unmet = node.needs.filter((need) => !holds(asked, need.atom));
+    const unmet = [...node.needs.filter((need) => !holds(asked, need.atom)), ...(next.edge?.claims ?? []).filter((need) => !holds(next.facts, need.atom))];
     if (unmet.length > 0) {
       for (const rule of new Set(unmet.map((n) => n.rule))) {
         if (!stories.has(rule)) stories.set(rule, { rule, start: next.start, legs: legsTo(next), at: next.key, needs: unmet.filter((n) => n.rule === rule) });

@@ -1,0 +1,92 @@
+/** Library trees broken on purpose: each unsafe mutant is refused; the ones that are let through are safe, one by one, for the reason given. */
+import { readdirSync, readFileSync } from 'node:fs';
+
+import { describe, expect, it } from 'vitest';
+
+import { misfits } from '@/flows/document/admits';
+import { parseProfile, parseTree } from '@/flows/document/parseTree';
+import { defaultSettings } from '@/flows/document/settings';
+import type { Tree } from '@/flows/document/tree';
+import { layOut } from '@/flows/machine/program';
+import { graphOf } from '@/flows/proof/graph';
+import { prove } from '@/flows/proof/prove';
+
+import { must } from '../support/bench';
+import { mutantsOf } from '../support/mutants';
+
+const read = (folder: string) => readdirSync(folder).filter((f) => f.endsWith('.json')).sort().map((f) => JSON.parse(readFileSync(`${folder}/${f}`, 'utf8')) as unknown);
+const trees = read('flows/library').map((json) => must(parseTree(json)));
+const profiles = read('db/seeds/demo/profiles').map((json) => must(parseProfile(json)));
+const profileFor = (tree: Tree) => profiles.find((p) => misfits(tree, p).length === 0) ?? profiles[0]!;
+/** `npm test` takes every fourth mutant of the largest tree and all of the others; `npm run bench:mutants` takes all. */
+const SHARE = 4;
+
+/** Mutants of whole steps that hold, and why each is no danger. */
+const SAFE: Record<string, string> = {
+  'drop a make-dead: dead-leak': 'the way goes straight to an end, and close-out makes dead by itself',
+  'drop prove-returns: returns-after': 'no power follows: the way ends at a found fault, which claims nothing',
+  'forget to fit: reservoir-off': 'the lead is lifted for a truer reading, not for safety; the reading is made dead and no power follows',
+  'forget to fit: secondaries': 'with the windings still on the lamp limits as it did before; the test says less, and nothing that hands touch is live',
+  'forget to fit: primary-lift': 'the lead is lifted to part two readings, both made dead',
+  'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
+};
+
+/** Whether power, or an end that claims something, can still follow the exit of a mutant that was led on. */
+function powerFollows(tree: Tree, name: string): boolean {
+  const { layout } = layOut({ tree, callees: trees, profile: profileFor(tree), settings: defaultSettings });
+  const graph = graphOf(layout);
+  const at = name.split(': ')[1] ?? '';
+  const [step, exit] = at.split('>');
+  const from = [...graph.nodes.values()].filter((n) => n.key === step).flatMap((n) => n.edges.filter((e) => e.exit.id === exit).map((e) => e.to));
+  const seen = new Set(from);
+  const stack = [...from];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    const node = graph.nodes.get(key);
+    const kind = node?.placed.step.kind;
+    if (kind === 'energise' || kind === 'raise') return true;
+    for (const edge of node?.edges ?? []) if (!seen.has(edge.to)) { seen.add(edge.to); stack.push(edge.to); }
+  }
+  return false;
+}
+
+describe.each(trees.map((tree) => ({ id: tree.id, tree })))('mutants of $id', ({ tree }) => {
+  const all = mutantsOf(tree);
+  const taken = all.length > 150 ? all.filter((_, i) => i % SHARE === 0) : all;
+  it(`are refused, or safe for a reason (${taken.length} of ${all.length})`, { timeout: 120_000 }, () => {
+    const unexplained: string[] = [];
+    let refused = 0;
+    for (const mutant of taken) {
+      if (mutant.tree === null) {
+        expect(mutant.say).not.toBe('');
+        refused += 1;
+        continue;
+      }
+      if (!prove({ tree: mutant.tree, callees: trees, profile: profileFor(tree), settings: defaultSettings }).holds) refused += 1;
+      else if (mutant.name in SAFE) continue;
+      else if (mutant.kind !== 'an exit led past its check') unexplained.push(mutant.name);
+      // an answer that was led on is no danger where it owes nothing (it passes), or where no power follows it
+      else if (powerFollows(mutant.tree, mutant.name) && owes(tree, mutant.name)) unexplained.push(mutant.name);
+    }
+    expect(unexplained).toEqual([]);
+    expect(refused).toBeGreaterThan(taken.length / 3);
+  });
+});
+
+/** Whether the exit of a mutant is one that owes: unsure or failed, of a check or an act. */
+function owes(tree: Tree, name: string): boolean {
+  const [step, exit] = (name.split(': ')[1] ?? '').split('>');
+  const found = tree.steps.find((s) => s.id === step);
+  const taken = found?.exits.find((e) => e.id === exit);
+  if (found === undefined || taken === undefined || found.kind === 'raise') return false;
+  return taken.verdict === undefined ? taken.on.some((on) => on !== 'answer') : taken.verdict !== 'pass' && taken.verdict !== 'find';
+}
+
+describe('a make-dead without its proof', () => {
+  it('takes every tree with it that calls it', () => {
+    const broken = mutantsOf(trees.find((t) => t.id === 'make-dead')!).find((m) => m.name === 'drop prove-dead: prove');
+    const first = trees.find((t) => t.id === 'first-power')!;
+    const callees = [broken!.tree!];
+    const proof = prove({ tree: first, callees, profile: profileFor(first), settings: defaultSettings });
+    expect(proof.rules.filter((r) => !r.holds).map((r) => r.id)).toContain('H1');
+  });
+});
