@@ -12,6 +12,7 @@ import { Notice } from '@/shared/ui/components/Notice';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { RunFrame } from '@/shared/ui/screens/run/RunFrame';
 import { savedWords } from '@/shared/ui/screens/run/savedWords';
+import { useLongWait } from '@/shared/ui/screens/run/useLongWait';
 import { StaysFitted } from '@/shared/ui/screens/run/StaysFitted';
 import { StepHead } from '@/shared/ui/screens/run/StepHead';
 import { endingWords } from '@/shared/ui/screens/shell/runWords';
@@ -55,8 +56,9 @@ function HandIn({ run, handedIn, onHandedIn }: { run: Run; handedIn: boolean; on
   const [id] = useState(() => uuidv7());
   const [fault, setFault] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
-  if (handedIn) return <BodyText bold>Submitted for review.</BodyText>;
   const waiting = run.saved.waiting > 0;
+  const long = useLongWait(run.saved);
+  if (handedIn) return <BodyText bold>Submitted for review.</BodyText>;
   const submit = async () => {
     setBusy(true);
     const answer = await client.call('submit', { params: { run: run.bundle.run.id }, body: { id } });
@@ -66,7 +68,7 @@ function HandIn({ run, handedIn, onHandedIn }: { run: Run; handedIn: boolean; on
   };
   return (
     <>
-      {waiting ? <Notice live>{`Not yet: ${savedWords(run.saved)}.`}</Notice> : null}
+      {long ? <Notice live>{`Not yet: ${savedWords(run.saved)}.`}</Notice> : null}
       {fault === null ? null : <Notice live>{fault}</Notice>}
       <BigAnswer kind="primary" label={busy ? 'Submitting …' : 'Submit for review'} disabled={busy || waiting} onPress={() => void submit()} />
     </>

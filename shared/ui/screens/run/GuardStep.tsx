@@ -11,11 +11,13 @@ import { guardChecks, guardTold } from '@/shared/ui/screens/run/guardWords';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { RunFrame } from '@/shared/ui/screens/run/RunFrame';
 import { StepHead } from '@/shared/ui/screens/run/StepHead';
+import { useLongWait } from '@/shared/ui/screens/run/useLongWait';
 
 /** Phase `guard`. */
 export function GuardStep({ run }: { run: Run }) {
   const { view, program, refusal } = run;
   const [ticked, setTicked] = useState<readonly string[]>([]);
+  const unsent = useLongWait(run.saved);
   const { step } = view;
   if (step?.kind !== 'energise' && step?.kind !== 'raise') return null;
   const checks = guardChecks(step, program.layout.profile);
@@ -27,7 +29,7 @@ export function GuardStep({ run }: { run: Run }) {
     <RunFrame run={run} dock={<HoldButton key={refusal?.say ?? 'guard'} label={ready ? `Hold: ${step.kind === 'raise' ? 'raise the power' : 'power in'}` : 'Tick all three first'} holdMs={holdMs} disabled={!ready} onConfirm={held} />}>
       <StepHead run={run} />
       <Notice title={circuitOf(program, view.key)}>{guardTold(step, program)}</Notice>
-      {run.saved.waiting > 0 ? <Notice kind="alarm">The workshop does not know yet that you go live: what you answered has not reached the server.</Notice> : null}
+      {unsent ? <Notice kind="alarm">The workshop does not know yet that you go live: what you answered has not reached the server.</Notice> : null}
       <View>
         {checks.map((c) => (
           <Checkbox key={c.id} label={c.label} checked={ticked.includes(c.id)} onChange={(on) => setTicked(on ? [...ticked, c.id] : ticked.filter((id) => id !== c.id))} />

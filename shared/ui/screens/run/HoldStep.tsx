@@ -8,6 +8,7 @@ import { holdAsks, seniorsFor } from '@/shared/ui/screens/run/holdWords';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { RunFrame } from '@/shared/ui/screens/run/RunFrame';
 import { StepHead } from '@/shared/ui/screens/run/StepHead';
+import { useLongWait } from '@/shared/ui/screens/run/useLongWait';
 
 /** Phases `hold` and `hold-wait`, and a hold point of the tree. */
 export function HoldStep({ run }: { run: Run }) {
@@ -31,6 +32,7 @@ const SECOND_MS = 1_000;
 
 function Waiting({ run }: { run: Run }) {
   const now = useNow(SECOND_MS);
+  const unsent = useLongWait(run.saved);
   const asked = run.account.lines.findLast((line) => line.type === 'HOLD_ASKED');
   return (
     <>
@@ -38,7 +40,7 @@ function Waiting({ run }: { run: Run }) {
         {seniorsFor(run.bundle)}
       </Notice>
       <BodyText tone="soft">{asked === undefined ? '' : `Asked ${clockOf(now - asked.at)} ago. Their answer appears here by itself; every source stays out until then.`}</BodyText>
-      {run.saved.waiting > 0 ? <Notice kind="look">The question has not left this device yet: there is no network. No senior has seen it.</Notice> : null}
+      {unsent ? <Notice kind="look">The question has not left this device yet: there is no network. No senior has seen it.</Notice> : null}
     </>
   );
 }

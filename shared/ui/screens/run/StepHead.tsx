@@ -6,6 +6,7 @@ import { Heading } from '@/shared/ui/components/Heading';
 import { Icon } from '@/shared/ui/components/icons/Icon';
 import { Label } from '@/shared/ui/components/Label';
 import { savedWords } from '@/shared/ui/screens/run/savedWords';
+import { useLongWait } from '@/shared/ui/screens/run/useLongWait';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { space } from '@/shared/ui/theme/space';
 import { useTheme } from '@/shared/ui/theme/useTheme';
@@ -14,7 +15,7 @@ import { useTheme } from '@/shared/ui/theme/useTheme';
 export function StepHead({ run, title }: { run: Run; title?: string }) {
   const { colors } = useTheme();
   const { saved, view, bundle } = run;
-  const waits = saved.waiting > 0 || saved.trouble !== null;
+  const waits = useLongWait(saved);
   return (
     <View style={{ gap: space.xs }}>
       <Label>{view.builtIn ? 'Make safe' : bundle.tree.title}</Label>

@@ -12,11 +12,17 @@ import type { WayStep } from '@/shared/ui/screens/run/wayOf';
 import { line, space, stud } from '@/shared/ui/theme/space';
 import { useTheme } from '@/shared/ui/theme/useTheme';
 
-/** Steps where the run has been, the one where it stands, and the next few; the rest is only counted. */
+const BEFORE = 6;
+const AHEAD = 3;
+
+/** Where the run stands, with a few steps before and behind it; the rest is only counted. */
 export function WayList({ run }: { run: Run }) {
   const way = wayOf(run.program.layout, run.account, run.view.key);
-  const at = way.findIndex((s) => s.state === 'now');
-  const shown = way.filter((s, i) => s.state !== 'ahead' || (i > at && i <= at + 3));
+  const now = way.findIndex((s) => s.state === 'now');
+  // while the machine makes safe the run stands at no step of the tree: the last one visited is shown
+  const at = now === -1 ? way.findLastIndex((s) => s.state === 'done') : now;
+  const visited = way.slice(0, at + 1).filter((s) => s.state !== 'ahead');
+  const shown = [...visited.slice(-BEFORE - 1), ...way.slice(at + 1, at + 1 + AHEAD)];
   return (
     <View role="list" aria-label="The way so far" style={{ gap: space.s }}>
       <Label level={2}>The way</Label>
