@@ -49,7 +49,7 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings): R
     case 'series-lamp':
       return reference.lampWatts === undefined
         ? null
-        : { supplyVolts: mains.volts, lampVolts: mains.volts, lampWatts: reference.lampWatts, load: profile.supplyKind === 'switch-mode' ? 'switch-mode' : 'rectifier', loadWatts: mains.voltAmps };
+        : { supplyVolts: mains.volts, lampVolts: mains.volts, lampWatts: reference.lampWatts, load: profile.supplyKind === 'switch-mode' ? 'switch-mode' : 'rectifier', loadWatts: mains.voltAmps * (reference.loadShare ?? 1) };
     case 'bleed-down': {
       const stores = partsToDischarge(profile, settings).length > 0 ? partsToDischarge(profile, settings) : profile.stores;
       const store = profile.stores.find((s) => s.id === reference.store) ?? [...stores].sort((a, b) => b.farads * b.voltsWorked ** 2 - a.farads * a.voltsWorked ** 2)[0];
