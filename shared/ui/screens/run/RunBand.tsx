@@ -11,6 +11,8 @@ const SECOND_MS = 1_000;
 export function RunBand({ run, onPressPlace }: { run: Run; onPressPlace: () => void }) {
   const now = useNow(SECOND_MS);
   const { view, program, state } = run;
-  const place = view.end === null ? `${studOf(run)}/${view.total}` : undefined;
-  return <PowerBand state={view.band} detail={bandDetail(program, state, view, now)} place={place ?? 'end'} onPressPlace={onPressPlace} />;
+  const stud = studOf(run);
+  // the machine's own steps have no number among those of the tree
+  const place = view.end !== null ? 'end' : stud === '!' ? 'safe' : `${stud}/${view.total}`;
+  return <PowerBand state={view.band} detail={bandDetail(program, state, view, now)} place={place} onPressPlace={onPressPlace} />;
 }
