@@ -11,6 +11,7 @@ const WALKS: [string, string][] = [
   ['look-over', 'brindle-80'],
   ['returns-measured', 'wendle-5'],
   ['reform-in-place', 'ostrel-16'],
+  ['rail-low', 'ostrel-16'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

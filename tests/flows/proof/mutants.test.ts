@@ -28,6 +28,8 @@ const SAFE: Record<string, string> = {
   'forget to fit: reservoir-off': 'the lead is lifted for a truer reading, not for safety; the reading is made dead and no power follows',
   'forget to fit: secondaries': 'with the windings still on the lamp limits as it did before; the test says less, and nothing that hands touch is live',
   'forget to fit: primary-lift': 'the lead is lifted to part two readings, both made dead',
+  'bench limit away: full-low': 'the rails have passed on the limited bench supply, which is what opens full power into the raw node; the low start is a kindness to the new parts',
+  'drop prove-returns: returns-why': 'the returns are proved once more before any power, and until then the killer of the diode stays owed',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
 };
 

@@ -1,0 +1,30 @@
+/** The diagnosing trees of the library, each suspect played through them on the machines that they apply to. */
+import { describe, expect, it } from 'vitest';
+
+import { misfits } from '@/flows/document/admits';
+import { rehearse } from '@/flows/rehearsal/rehearse';
+import { demoProfile, libraryTree, programOf } from './walk';
+
+const TREES = ['rail-low'];
+const MACHINES = ['corvane-12', 'ostrel-16', 'brindle-80', 'wendle-5'];
+
+describe.each(TREES)('%s', (id) => {
+  const tree = libraryTree(id);
+  const applies = MACHINES.filter((name) => misfits(tree, demoProfile(name)).length === 0);
+
+  it('applies to a machine of the demo', () => {
+    expect(applies).not.toEqual([]);
+  });
+
+  it.each(applies)('leads each suspect to its own verdict or mends it, on %s', (name) => {
+    const { good, suspects } = rehearse(programOf(tree, name));
+    expect(suspects.filter((s) => s.reached !== 'verdict').map((s) => `${s.suspect}: ${s.reached} ${s.end?.key ?? s.stuck?.say ?? ''}`)).toEqual([]);
+    expect(good).toBe(true);
+  });
+
+  it('uses every step that it has', () => {
+    const unused = applies.map((name) => rehearse(programOf(tree, name)).neverUsed);
+    const everywhere = unused[0]?.filter((step) => unused.every((steps) => steps.includes(step))) ?? [];
+    expect(everywhere.filter((step) => tree.steps.find((s) => s.id === step)?.kind !== 'end')).toEqual([]);
+  });
+});
