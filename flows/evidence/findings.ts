@@ -12,9 +12,15 @@ export function findingsOf(layout: Layout, outcome: RunContext['outcome']): Find
   const exit = placed?.step.exits.find((e: Exit) => e.id === outcome.exit);
   if (placed === undefined || exit === undefined) return [];
   const { step, scope } = placed;
-  const worked = step.kind === 'work' && outcome.outcome === 'done' ? [...(step.replaces ?? []), ...(step.suspects ?? [])].map((id) => scope.check(id)) : [];
+  const worked =
+    step.kind === 'work' && outcome.outcome === 'done'
+      ? [...(step.replaces ?? []), ...(step.suspects ?? [])].map((id) => scope.check(id))
+      : [];
   const own: Finding = { check: outcome.key, evidence: evidenceOf(exit, scope.check), ...(worked.length > 0 ? { worked } : {}) };
-  const passed = follow(layout, scope.check(exit.to), () => false).through.map(({ call, exit: by }): Finding => ({ check: call, evidence: evidenceOf(by, layout.steps.get(call)?.scope.check ?? scope.check) }));
+  const passed = follow(layout, scope.check(exit.to), () => false).through.map(({ call, exit: by }): Finding => ({
+    check: call,
+    evidence: evidenceOf(by, layout.steps.get(call)?.scope.check ?? scope.check),
+  }));
   return [own, ...passed];
 }
 

@@ -15,7 +15,8 @@ export function classesOf(tree: Tree): Suspect[][] {
   for (const step of tree.steps) {
     if (!reached.has(step.id)) continue;
     for (const exit of step.exits as Exit[]) {
-      for (const { suspect, says } of exit.evidence ?? []) if (says !== 'says-nothing') heard.get(suspect)?.push(`${step.id}>${exit.id}=${says}`);
+      for (const { suspect, says } of exit.evidence ?? [])
+        if (says !== 'says-nothing') heard.get(suspect)?.push(`${step.id}>${exit.id}=${says}`);
     }
   }
   const groups = new Map<string, Suspect[]>();

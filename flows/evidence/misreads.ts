@@ -25,10 +25,20 @@ export interface Flip {
 export function misreads(tree: Tree): Flip[] {
   const steps = new Map(tree.steps.map((s) => [s.id, s]));
   const reached = reachedFrom(tree);
-  return tree.steps.flatMap((end) => (end.kind === 'end' && end.says === 'fault-found' && end.suspect !== undefined ? flipsOf(tree, steps, end, end.suspect, wayTo(reached, end.id) ?? []) : []));
+  return tree.steps.flatMap((end) =>
+    end.kind === 'end' && end.says === 'fault-found' && end.suspect !== undefined
+      ? flipsOf(tree, steps, end, end.suspect, wayTo(reached, end.id) ?? [])
+      : [],
+  );
 }
 
-function flipsOf(tree: Tree, steps: ReadonlyMap<string, Step>, end: StepOf<'end'>, suspect: string, way: { from: string; exit: Exit }[]): Flip[] {
+function flipsOf(
+  tree: Tree,
+  steps: ReadonlyMap<string, Step>,
+  end: StepOf<'end'>,
+  suspect: string,
+  way: { from: string; exit: Exit }[],
+): Flip[] {
   const findings = way.map(({ from, exit }): Finding => ({ check: from, evidence: exit.evidence ?? [] }));
   const stands = (heard: readonly Finding[]) => likeliest(tree, heard, suspect);
   const now = stands(findings);
@@ -38,7 +48,9 @@ function flipsOf(tree: Tree, steps: ReadonlyMap<string, Step>, end: StepOf<'end'
     const others = step === undefined ? [] : sureExits(step).filter((other) => other.id !== exit.id);
     return others.flatMap((truly): Flip[] => {
       const instead = stands(findings.map((finding, i) => (i === at ? { check: from, evidence: truly.evidence ?? [] } : finding)));
-      return instead === undefined || instead === suspect ? [] : [{ end: end.id, suspect, check: from, read: exit.id, truly: truly.id, instead }];
+      return instead === undefined || instead === suspect
+        ? []
+        : [{ end: end.id, suspect, check: from, read: exit.id, truly: truly.id, instead }];
     });
   });
 }

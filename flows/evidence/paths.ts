@@ -10,7 +10,9 @@ export interface Leg {
 
 /** Every way out of a step: `to` of each exit, and `then` of a counted one. */
 export function legsOf(step: Step): Leg[] {
-  return step.exits.flatMap((exit: Exit) => [exit.to, ...(exit.then === undefined ? [] : [exit.then])].map((to) => ({ from: step.id, exit, to })));
+  return step.exits.flatMap((exit: Exit) =>
+    [exit.to, ...(exit.then === undefined ? [] : [exit.then])].map((to) => ({ from: step.id, exit, to })),
+  );
 }
 
 /** The first leg on a shortest way to each step that can be reached from the tree's start or a re-entry; null at those places themselves. */
@@ -33,7 +35,13 @@ export function reachedFrom(tree: Tree, starts: readonly string[] = startsOf(tre
 /** Where a run of the tree can begin, or go on after Stop. */
 export function startsOf(tree: Tree): string[] {
   const first = tree.steps[0]?.id;
-  return [...new Set([...(first === undefined ? [] : [first]), ...tree.reentries.map((r) => r.step), ...tree.steps.flatMap((s) => (s.kind === 'energise' || s.kind === 'raise' ? [s.abort] : []))])];
+  return [
+    ...new Set([
+      ...(first === undefined ? [] : [first]),
+      ...tree.reentries.map((r) => r.step),
+      ...tree.steps.flatMap((s) => (s.kind === 'energise' || s.kind === 'raise' ? [s.abort] : [])),
+    ]),
+  ];
 }
 
 /** The legs of a shortest way from a start to a step, in order; null when it cannot be reached. */

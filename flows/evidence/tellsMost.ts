@@ -29,10 +29,16 @@ export function tellsMost(layout: Layout, facts: Facts, findings: readonly Findi
   const shares = ranked.map((r) => r.share);
   const made = madeSinceRepair(findings);
   return [...layout.steps.values()]
-    .filter((placed) => placed.caller === null && !placed.builtIn && !made.has(placed.key) && carriesEvidence(placed) && allowedNow(layout, placed, facts))
+    .filter(
+      (placed) =>
+        placed.caller === null && !placed.builtIn && !made.has(placed.key) && carriesEvidence(placed) && allowedNow(layout, placed, facts),
+    )
     .map((placed): Telling => {
       const exits = sureExits(placed.step);
-      const bits = expectedBits(shares, ranked.map((r) => chancesOf(exits, r.suspect.id)));
+      const bits = expectedBits(
+        shares,
+        ranked.map((r) => chancesOf(exits, r.suspect.id)),
+      );
       const { minutes, title } = placed.step;
       return { key: placed.key, title, minutes, bits, bitsPerMinute: bits / Math.max(minutes, LEAST_MINUTES) };
     })

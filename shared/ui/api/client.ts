@@ -8,9 +8,13 @@ import { routes } from '@/shared/contract/routes';
 import type { RouteName } from '@/shared/contract/routes';
 import type { Answer, ClientProblem, ClientProblemCode } from '@/shared/ui/api/answer';
 
-type Part<R extends RouteDef, K extends 'params' | 'query' | 'body'> = R[K] extends z.ZodType ? { [P in K]: z.input<R[K]> } : { [P in K]?: undefined };
+type Part<R extends RouteDef, K extends 'params' | 'query' | 'body'> = R[K] extends z.ZodType
+  ? { [P in K]: z.input<R[K]> }
+  : { [P in K]?: undefined };
 /** What a call of that route needs. */
-export type CallInput<N extends RouteName> = Part<(typeof routes)[N], 'params'> & Part<(typeof routes)[N], 'query'> & Part<(typeof routes)[N], 'body'>;
+export type CallInput<N extends RouteName> = Part<(typeof routes)[N], 'params'> &
+  Part<(typeof routes)[N], 'query'> &
+  Part<(typeof routes)[N], 'body'>;
 export type CallAnswer<N extends RouteName> = AnswerOf<(typeof routes)[N]>;
 
 export interface Client {
@@ -24,7 +28,15 @@ const PATIENCE_MS = 20_000;
 const NO_NETWORK = 'The server cannot be reached. Check the network; nothing that you have entered is lost.';
 const BAD_ANSWER = 'The server answered in a way that this page does not understand. Load the page again.';
 
-const problem = (code: ClientProblemCode, say: string, retryable: boolean, details: Record<string, unknown> = {}): ClientProblem => ({ kind: 'problem', code, say, retryable, rule: null, faults: [], details });
+const problem = (code: ClientProblemCode, say: string, retryable: boolean, details: Record<string, unknown> = {}): ClientProblem => ({
+  kind: 'problem',
+  code,
+  say,
+  retryable,
+  rule: null,
+  faults: [],
+  details,
+});
 
 /**
  * Makes a client.
@@ -77,7 +89,9 @@ export function createClient(send: typeof fetch): Client {
 
 function readAnswer(route: RouteDef, text: string): Answer<unknown> {
   const parsed = route.answer.safeParse(parseJson(text));
-  return parsed.success ? { kind: 'ok', data: parsed.data } : problem('bad-answer', BAD_ANSWER, false, { issues: parsed.error.issues.slice(0, 5) });
+  return parsed.success
+    ? { kind: 'ok', data: parsed.data }
+    : problem('bad-answer', BAD_ANSWER, false, { issues: parsed.error.issues.slice(0, 5) });
 }
 
 function readProblem(status: number, text: string): ClientProblem {
@@ -87,7 +101,9 @@ function readProblem(status: number, text: string): ClientProblem {
     return { kind: 'problem', code, say, retryable: isRetryable(code), rule: rule ?? null, faults: faults ?? [], details: parsed.data };
   }
   // a proxy answers for a server that is away
-  return status === 502 || status === 503 || status === 504 ? problem('no-network', NO_NETWORK, true) : problem('bad-answer', BAD_ANSWER, false, { status });
+  return status === 502 || status === 503 || status === 504
+    ? problem('no-network', NO_NETWORK, true)
+    : problem('bad-answer', BAD_ANSWER, false, { status });
 }
 
 function parseJson(text: string): unknown {

@@ -1,13 +1,11 @@
-/** The database of this browser: answers that wait to be sent, and the runs that can be gone on with. */
+/** The database of this browser: answers that wait to be sent. */
 import { openDB } from 'idb';
 import type { DBSchema, IDBPDatabase } from 'idb';
 
-import type { RunBundle } from '@/shared/contract/runs';
 import type { Queued } from '@/shared/ui/api/queued';
 
 export interface Device extends DBSchema {
   answers: { key: string; value: Queued; indexes: { run: string } };
-  bundles: { key: string; value: { run: string; bundle: RunBundle } };
 }
 
 let opening: Promise<IDBPDatabase<Device> | null> | null = null;
@@ -23,7 +21,6 @@ async function open(): Promise<IDBPDatabase<Device> | null> {
     return await openDB<Device>('lampstep', 1, {
       upgrade(db) {
         db.createObjectStore('answers', { keyPath: 'id' }).createIndex('run', 'run');
-        db.createObjectStore('bundles', { keyPath: 'run' });
       },
     });
   } catch {

@@ -57,7 +57,9 @@ export function takeOver(ledger: Ledger, server: readonly Entry[], replays: Repl
   const has = new Set(server.map((entry) => entry.id));
   const lost = ledger.held.flatMap((entry) => {
     const event = has.has(entry.id) ? null : eventOf(entry);
-    return event === null || SIGNED_EVENTS.includes(event.type) ? [] : [{ ...owner, id: entry.id, seq: entry.seq, event, notTaken: null, seen: false }];
+    return event === null || SIGNED_EVENTS.includes(event.type)
+      ? []
+      : [{ ...owner, id: entry.id, seq: entry.seq, event, notTaken: null, seen: false }];
   });
   const waiting = [...lost, ...ledger.waiting].filter((q) => !has.has(q.id));
   const refused = replays(server, waiting);

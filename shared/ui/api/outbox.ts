@@ -103,7 +103,15 @@ export function createOutbox(parts: Parts): Outbox {
     if (store !== null && put.length + gone.length > 0) await store.write(put, gone).catch(() => undefined);
   };
 
-  const queued = (event: MachineEvent): Queued => ({ id: v7(), run, person, seq: headSeq(ledger) + ledger.waiting.length + 1, event, notTaken: null, seen: false });
+  const queued = (event: MachineEvent): Queued => ({
+    id: v7(),
+    run,
+    person,
+    seq: headSeq(ledger) + ledger.waiting.length + 1,
+    event,
+    notTaken: null,
+    seen: false,
+  });
 
   /** After something was not taken, nobody knows what is true at the bench: the way to safety is queued behind the rest. */
   const withSafety = (next: Ledger, before: Ledger): Ledger => {
@@ -116,7 +124,11 @@ export function createOutbox(parts: Parts): Outbox {
   const takeServer = async (server: readonly Entry[]) => {
     const before = ledger;
     const next = withSafety(takeOver(before, server, replays, { run, person }), before);
-    const more = before.waiting.length === 0 && next.waiting.length === 0 && server.length >= before.held.length && before.held.every((entry, i) => server[i]?.hash === entry.hash);
+    const more =
+      before.waiting.length === 0 &&
+      next.waiting.length === 0 &&
+      server.length >= before.held.length &&
+      before.held.every((entry, i) => server[i]?.hash === entry.hash);
     if (more && server.length === before.held.length) return;
     await move(next, more ? { is: 'more', entries: server.slice(before.held.length) } : { is: 'other' });
     void pump();
@@ -149,7 +161,10 @@ export function createOutbox(parts: Parts): Outbox {
   /** Sends one batch. True when the next may follow at once. */
   const sendOnce = async (): Promise<boolean> => {
     const batch = ledger.waiting.slice(0, oneAtATime ? 1 : MOST_AT_ONCE);
-    const answer = await client.call('postEntries', { params: { run }, body: { entries: batch.map(({ id, seq, event }) => ({ id, seq, event })) } });
+    const answer = await client.call('postEntries', {
+      params: { run },
+      body: { entries: batch.map(({ id, seq, event }) => ({ id, seq, event })) },
+    });
     if (answer.kind === 'ok') {
       trouble = null;
       outOfStep = 0;
@@ -220,7 +235,8 @@ export function createOutbox(parts: Parts): Outbox {
     try {
       await disk.write([next]);
     } catch {
-      if (next.event.type !== 'STOP') return { ok: false, say: 'This device has no room left: the answer is not saved. Free some room, then answer again.' };
+      if (next.event.type !== 'STOP')
+        return { ok: false, say: 'This device has no room left: the answer is not saved. Free some room, then answer again.' };
     }
     ledger = { ...ledger, waiting: [...ledger.waiting, next] };
     const numbered = renumber(ledger);
@@ -235,7 +251,11 @@ export function createOutbox(parts: Parts): Outbox {
     async open(held) {
       const kept = store === null ? [] : await store.read(run).catch(() => []);
       const inOrder = [...kept].sort((a, b) => a.seq - b.seq || (a.id < b.id ? -1 : 1));
-      const before: Ledger = { held: [], waiting: inOrder.filter((q) => q.notTaken === null), notTaken: inOrder.filter((q) => q.notTaken !== null) };
+      const before: Ledger = {
+        held: [],
+        waiting: inOrder.filter((q) => q.notTaken === null),
+        notTaken: inOrder.filter((q) => q.notTaken !== null),
+      };
       ledger = before;
       await move(withSafety(takeOver(before, held, replays, { run, person }), before));
       void pump();

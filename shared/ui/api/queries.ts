@@ -30,7 +30,11 @@ export function queryOf<N extends RouteName>(name: N, input: CallInput<N>) {
 }
 
 /** Fetches a route that only reads. */
-export function useRoute<N extends RouteName>(name: N, input: CallInput<N>, { enabled = true, everyMs, once = false }: Options = {}): Fetched<N> {
+export function useRoute<N extends RouteName>(
+  name: N,
+  input: CallInput<N>,
+  { enabled = true, everyMs, once = false }: Options = {},
+): Fetched<N> {
   return useQuery<CallAnswer<N>, ApiError>({
     ...queryOf(name, input),
     enabled,

@@ -14,7 +14,8 @@ export function createQueryClient(): QueryClient {
         staleTime: FRESH_MS,
         // the server may be on this very machine: a browser's word "offline" says nothing about it
         networkMode: 'always',
-        retry: (count, error) => error instanceof ApiError && error.problem.retryable && error.problem.code !== 'session-expired' && count < MOST_TRIES,
+        retry: (count, error) =>
+          error instanceof ApiError && error.problem.retryable && error.problem.code !== 'session-expired' && count < MOST_TRIES,
       },
       mutations: { networkMode: 'always', retry: false },
     },

@@ -51,7 +51,9 @@ function wordsOf(program: Program, before: RunContext, event: MachineEvent): str
       return `${row?.label ?? event.row}: ${reading}${event.falling === true ? ', falling' : ''}`;
     }
     case 'ANSWER':
-      return layout.steps.get(event.step)?.step.exits.find((e: Exit) => e.id === event.answer)?.label ?? WORDS[event.answer] ?? event.answer;
+      return (
+        layout.steps.get(event.step)?.step.exits.find((e: Exit) => e.id === event.answer)?.label ?? WORDS[event.answer] ?? event.answer
+      );
     case 'PHOTO':
       return 'Photo taken';
     case 'WARNING_READ':
@@ -85,4 +87,11 @@ function wordsOf(program: Program, before: RunContext, event: MachineEvent): str
   }
 }
 
-const WORDS: Readonly<Record<string, string>> = { done: 'Done', on: 'It is on', 'not-sure': 'Not sure', cannot: 'Cannot be done', out: 'Out', 'not-out': 'Not out' };
+const WORDS: Readonly<Record<string, string>> = {
+  done: 'Done',
+  on: 'It is on',
+  'not-sure': 'Not sure',
+  cannot: 'Cannot be done',
+  out: 'Out',
+  'not-out': 'Not out',
+};

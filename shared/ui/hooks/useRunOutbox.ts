@@ -35,7 +35,14 @@ export function useRunOutbox(bundle: RunBundle, program: Program, person: string
     const online = () => opened.box?.kick();
     void (async () => {
       const store = await openOutboxStore();
-      const box = createOutbox({ run: first.current.bundle.run.id, person: first.current.person, store, client, ...engineOf(first.current.program, first.current.bundle), pause });
+      const box = createOutbox({
+        run: first.current.bundle.run.id,
+        person: first.current.person,
+        store,
+        client,
+        ...engineOf(first.current.program, first.current.bundle),
+        pause,
+      });
       await box.open(first.current.bundle.entries);
       await comeBack(box, first.current.program, first.current.bundle);
       if (opened.over) {
@@ -74,7 +81,8 @@ function engineOf(program: Program, { start }: RunBundle) {
       // what the server has taken stands, whatever this page thinks of it
       return at < 0 ? null : { at, why: { say: refused.refusal.say, rule: refused.refusal.rule } };
     },
-    toSafety: (ledger: Ledger) => (played(ledger).state.context.phase === 'closed' ? [] : [stamp({ type: 'RESTART' }), stamp({ type: 'STOP' })]),
+    toSafety: (ledger: Ledger) =>
+      played(ledger).state.context.phase === 'closed' ? [] : [stamp({ type: 'RESTART' }), stamp({ type: 'STOP' })],
   };
 }
 

@@ -7,7 +7,10 @@ import { Bench, lampTree, program } from '../support/bench';
 describe('findingsOf', () => {
   it('reads the evidence of the answer that was given', () => {
     const lamp = program(lampTree);
-    expect(findingsOf(lamp.layout, { key: 'see', outcome: 'bright', exit: 'bright', verdict: 'fail' })).toContainEqual({ check: 'see', evidence: [{ suspect: 'short', says: 'points-to' }] });
+    expect(findingsOf(lamp.layout, { key: 'see', outcome: 'bright', exit: 'bright', verdict: 'fail' })).toContainEqual({
+      check: 'see',
+      evidence: [{ suspect: 'short', says: 'points-to' }],
+    });
   });
 
   it('says nothing where no step was left', () => {

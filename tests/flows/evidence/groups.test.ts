@@ -19,7 +19,14 @@ const found = (id: string, suspect: string) => end(id, 'fault-found', { suspect,
 
 describe('groupsOf', () => {
   it('names the suspects of which every reachable exit says the same', () => {
-    const tree = treeOf([look('one'), check('one', 'two', 'refer', { a: 'rules-out', b: 'rules-out' }, { a: 'points-to', b: 'points-to' }), check('two', 'done', 'refer', {}, { c: 'points-to', d: 'says-nothing' })], { suspects });
+    const tree = treeOf(
+      [
+        look('one'),
+        check('one', 'two', 'refer', { a: 'rules-out', b: 'rules-out' }, { a: 'points-to', b: 'points-to' }),
+        check('two', 'done', 'refer', {}, { c: 'points-to', d: 'says-nothing' }),
+      ],
+      { suspects },
+    );
     expect(groupsOf(tree).map((g) => g.map((s) => s.id))).toEqual([['a', 'b']]);
   });
 
@@ -31,12 +38,22 @@ describe('groupsOf', () => {
 
 describe('misreads', () => {
   it('finds the one answer on which a verdict hangs', () => {
-    const tree = treeOf([look('one'), check('one', 'done', 'is-a', { a: 'points-away' }, { a: 'all-but-proves' }), found('is-a', 'a')], { suspects });
+    const tree = treeOf([look('one'), check('one', 'done', 'is-a', { a: 'points-away' }, { a: 'all-but-proves' }), found('is-a', 'a')], {
+      suspects,
+    });
     expect(misreads(tree)).toEqual([{ end: 'is-a', suspect: 'a', check: 'one', read: 'bad', truly: 'good', instead: 'b' }]);
   });
 
   it('finds none where two checks bear the verdict out, and either alone would do', () => {
-    const tree = treeOf([look('one'), check('one', 'done', 'two', {}, { a: 'all-but-proves' }), check('two', 'done', 'is-a', { a: 'points-away' }, { a: 'all-but-proves' }), found('is-a', 'a')], { suspects });
+    const tree = treeOf(
+      [
+        look('one'),
+        check('one', 'done', 'two', {}, { a: 'all-but-proves' }),
+        check('two', 'done', 'is-a', { a: 'points-away' }, { a: 'all-but-proves' }),
+        found('is-a', 'a'),
+      ],
+      { suspects },
+    );
     expect(misreads(tree)).toEqual([]);
   });
 

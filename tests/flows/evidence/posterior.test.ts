@@ -22,18 +22,30 @@ describe('posterior', () => {
   });
 
   it('lets the last answer of a check stand alone', () => {
-    const again = posterior([suspect('a', 1), suspect('b', 1)], [
-      { check: 'c', evidence: [{ suspect: 'a', says: 'all-but-proves' }] },
-      { check: 'c', evidence: [{ suspect: 'a', says: 'points-away' }] },
-    ]);
+    const again = posterior(
+      [suspect('a', 1), suspect('b', 1)],
+      [
+        { check: 'c', evidence: [{ suspect: 'a', says: 'all-but-proves' }] },
+        { check: 'c', evidence: [{ suspect: 'a', says: 'points-away' }] },
+      ],
+    );
     expect(shares(again)['a']).toBeCloseTo(0.1 / 1.1, 12);
   });
 
   it('forgets what was found out about a part that has been worked on', () => {
-    const ranked = posterior([suspect('a', 1), suspect('b', 1)], [
-      { check: 'c', evidence: [{ suspect: 'a', says: 'all-but-proves' }, { suspect: 'b', says: 'points-away' }] },
-      { check: 'w', evidence: [], worked: ['a'] },
-    ]);
+    const ranked = posterior(
+      [suspect('a', 1), suspect('b', 1)],
+      [
+        {
+          check: 'c',
+          evidence: [
+            { suspect: 'a', says: 'all-but-proves' },
+            { suspect: 'b', says: 'points-away' },
+          ],
+        },
+        { check: 'w', evidence: [], worked: ['a'] },
+      ],
+    );
     expect(shares(ranked)['a']).toBeCloseTo(1 / 1.1, 12);
   });
 
@@ -45,7 +57,10 @@ describe('posterior', () => {
     const words = fc.array(fc.tuple(fc.constantFrom('a', 'b', 'c'), fc.constantFrom(...EVIDENCE_WORDS)), { maxLength: 60 });
     fc.assert(
       fc.property(words, (said) => {
-        const ranked = posterior([suspect('a', 1), suspect('b', 5), suspect('c', 0.2)], said.map(([id, says], i) => ({ check: `c${i}`, evidence: [{ suspect: id, says }] })));
+        const ranked = posterior(
+          [suspect('a', 1), suspect('b', 5), suspect('c', 0.2)],
+          said.map(([id, says], i) => ({ check: `c${i}`, evidence: [{ suspect: id, says }] })),
+        );
         expect(ranked.reduce((sum, r) => sum + r.share, 0)).toBeCloseTo(1, 9);
         expect(ranked.every((r) => r.share >= 0 && Number.isFinite(r.share))).toBe(true);
         expect([...ranked].sort((x, y) => y.share - x.share)).toEqual(ranked);
@@ -54,7 +69,13 @@ describe('posterior', () => {
   });
 
   it('stays within the numbers after hundreds of checks', () => {
-    const many = Array.from({ length: 500 }, (_, i) => ({ check: `c${i}`, evidence: [{ suspect: 'a', says: 'rules-out' as const }, { suspect: 'b', says: 'rules-out' as const }] }));
+    const many = Array.from({ length: 500 }, (_, i) => ({
+      check: `c${i}`,
+      evidence: [
+        { suspect: 'a', says: 'rules-out' as const },
+        { suspect: 'b', says: 'rules-out' as const },
+      ],
+    }));
     expect(shares(posterior([suspect('a', 1), suspect('b', 3)], many))).toEqual({ b: expect.closeTo(0.75, 9), a: expect.closeTo(0.25, 9) });
   });
 });

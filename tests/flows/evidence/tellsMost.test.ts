@@ -28,8 +28,24 @@ const check = (id: string, to: string, minutes: number, word: string, extra = {}
 
 describe('expectedBits', () => {
   it('is one bit for a sure question between two equal causes, none for a question that all answer alike', () => {
-    expect(expectedBits([0.5, 0.5], [[1, 0], [0, 1]])).toBeCloseTo(1, 12);
-    expect(expectedBits([0.3, 0.7], [[0.4, 0.6], [0.4, 0.6]])).toBeCloseTo(0, 12);
+    expect(
+      expectedBits(
+        [0.5, 0.5],
+        [
+          [1, 0],
+          [0, 1],
+        ],
+      ),
+    ).toBeCloseTo(1, 12);
+    expect(
+      expectedBits(
+        [0.3, 0.7],
+        [
+          [0.4, 0.6],
+          [0.4, 0.6],
+        ],
+      ),
+    ).toBeCloseTo(0, 12);
   });
 
   it('is never less than nothing and never more than what is not known', () => {
@@ -39,7 +55,10 @@ describe('expectedBits', () => {
       fc.property(fc.array(fc.tuple(weight, chance), { minLength: 1, maxLength: 8 }), (causes) => {
         const total = causes.reduce((sum, [w]) => sum + w, 0);
         const shares = causes.map(([w]) => w / total);
-        const bits = expectedBits(shares, causes.map(([, row]) => row.map((r) => r / (row[0] + row[1] + row[2]))));
+        const bits = expectedBits(
+          shares,
+          causes.map(([, row]) => row.map((r) => r / (row[0] + row[1] + row[2]))),
+        );
         expect(bits).toBeGreaterThanOrEqual(0);
         expect(bits).toBeLessThanOrEqual(entropyBits(shares) + 1e-9);
       }),
@@ -57,7 +76,12 @@ describe('tellsMost', () => {
   });
 
   it('keeps a check back that a house rule forbids now', () => {
-    const tree = treeOf([look('d'), dead('d', 'hands'), check('hands', 'done', 1, 'points-to', { contact: 'hands' }), check('live', 'done', 1, 'points-to', { power: 'live' })]);
+    const tree = treeOf([
+      look('d'),
+      dead('d', 'hands'),
+      check('hands', 'done', 1, 'points-to', { contact: 'hands' }),
+      check('live', 'done', 1, 'points-to', { power: 'live' }),
+    ]);
     const bench = new Bench(program(tree)).pass();
     const offered = () => tellsMost(bench.program.layout, bench.state.context.facts, []).map((t) => t.key);
     expect(offered()).toEqual([]);
@@ -86,7 +110,9 @@ describe('tellsMost', () => {
           const { key } = state.context;
           if (wanted.key !== key) {
             const placed = of.layout.steps.get(key);
-            const outcomes = (placed?.step.exits ?? []).flatMap((e: Exit) => (e.on.includes('answer') ? [e.id] : (e.on as string[]))).filter((o) => placed !== undefined && canGive(of, placed, o));
+            const outcomes = (placed?.step.exits ?? [])
+              .flatMap((e: Exit) => (e.on.includes('answer') ? [e.id] : (e.on as string[])))
+              .filter((o) => placed !== undefined && canGive(of, placed, o));
             const die = chance.next().value ?? 0;
             wanted = { key, outcome: die < 80 || placed?.builtIn === true ? null : (outcomes[die % Math.max(outcomes.length, 1)] ?? null) };
           }
@@ -98,7 +124,11 @@ describe('tellsMost', () => {
           if (state.context.outcome !== null) wanted = { key: '', outcome: null };
           findings.push(...findingsOf(of.layout, state.context.outcome));
         }
-        for (const { key } of tellsMost(of.layout, state.context.facts, findings)) expect(arriveAt(of.layout, state.context, key)).toMatchObject({ ok: true, next: { goto: of.layout.calleeFirst.get(key) ?? key } });
+        for (const { key } of tellsMost(of.layout, state.context.facts, findings))
+          expect(arriveAt(of.layout, state.context, key)).toMatchObject({
+            ok: true,
+            next: { goto: of.layout.calleeFirst.get(key) ?? key },
+          });
       }),
       { numRuns: 40 },
     );

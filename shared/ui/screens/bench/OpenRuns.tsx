@@ -31,7 +31,9 @@ const columns: Column<RunSummary>[] = [
     grow: 2,
     cell: (r) => (
       <View style={{ gap: 4 }}>
-        <BodyText>{r.step === null ? 'the end: close the record' : r.step.stud === '' ? r.step.title : `${r.step.stud} ${r.step.title}`}</BodyText>
+        <BodyText>
+          {r.step === null ? 'the end: close the record' : r.step.stud === '' ? r.step.title : `${r.step.stud} ${r.step.title}`}
+        </BodyText>
         {r.awaitsHold ? <Tag word="waits for a countersign" kind="look" /> : null}
       </View>
     ),
@@ -49,7 +51,16 @@ export function OpenRuns({ runs, mayStart }: { runs: readonly RunSummary[]; mayS
       rows={runs}
       rowKey={(r) => r.id}
       rowTarget={(r) => ({ name: `Go on with ${r.machine.name}, serial ${r.machine.serial}`, href: `/bench/${r.id}` })}
-      empty={<EmptyState title="No run is open" text={mayStart ? 'Nothing of yours is on the bench. Start a run below: choose the machine, then the tree.' : 'Runs are led by restorers; here you would see your own.'} />}
+      empty={
+        <EmptyState
+          title="No run is open"
+          text={
+            mayStart
+              ? 'Nothing of yours is on the bench. Start a run below: choose the machine, then the tree.'
+              : 'Runs are led by restorers; here you would see your own.'
+          }
+        />
+      }
     />
   );
 }

@@ -15,7 +15,19 @@ export function PowerMark({ state }: { state: PowerState }) {
   const v = powerVisual(state);
   return (
     <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.s }}>
-      <View style={{ width: 44, height: 32, borderWidth: line.hair, borderColor: colors.ink, backgroundColor: v.ground, overflow: 'hidden', alignItems: 'center', justifyContent: 'center' }} aria-hidden>
+      <View
+        style={{
+          width: 44,
+          height: 32,
+          borderWidth: line.hair,
+          borderColor: colors.ink,
+          backgroundColor: v.ground,
+          overflow: 'hidden',
+          alignItems: 'center',
+          justifyContent: 'center',
+        }}
+        aria-hidden
+      >
         <View style={{ position: 'absolute', top: 0, left: 0 }}>
           <PowerPattern state={state} width={44} height={32} />
         </View>

@@ -18,11 +18,22 @@ export function StartRun({ machine: asked }: { machine?: string | undefined }) {
       {({ machines: all }) => {
         const free = all.filter((m) => m.openRun === null);
         const busy = all.filter((m) => m.openRun !== null);
-        if (free.length === 0) return <EmptyState title="No machine is free" text={busy.length === 0 ? 'The workshop has no machine yet.' : `A run is open on ${namesOf(busy)}. Close it first.`} />;
+        if (free.length === 0)
+          return (
+            <EmptyState
+              title="No machine is free"
+              text={busy.length === 0 ? 'The workshop has no machine yet.' : `A run is open on ${namesOf(busy)}. Close it first.`}
+            />
+          );
         const machine = free.find((m) => m.id === chosen) ?? null;
         return (
           <>
-            <Choice label="Machine" value={chosen} options={free.map((m) => ({ value: m.id, label: `${m.name}, serial ${m.serial}`, detail: detailOf(m) }))} onChange={setChosen} />
+            <Choice
+              label="Machine"
+              value={chosen}
+              options={free.map((m) => ({ value: m.id, label: `${m.name}, serial ${m.serial}`, detail: detailOf(m) }))}
+              onChange={setChosen}
+            />
             {busy.length > 0 ? <BodyText size="small" tone="soft">{`A run is open on ${namesOf(busy)}.`}</BodyText> : null}
             {machine === null ? null : <TreesFor key={machine.id} machine={machine} />}
           </>

@@ -62,13 +62,21 @@ function Start({ machine, profile, issued }: Props) {
     const document = documents[i]?.data?.document;
     return document !== undefined && !called.has(v.tree) && misfits(document, profile, machine.serial).length === 0;
   });
-  if (fitting.length === 0) return <EmptyState title="No tree applies" text={`No issued tree of this workshop applies to ${machine.name}. A senior can write one, or widen what a tree applies to.`} />;
+  if (fitting.length === 0)
+    return (
+      <EmptyState
+        title="No tree applies"
+        text={`No issued tree of this workshop applies to ${machine.name}. A senior can write one, or widen what a tree applies to.`}
+      />
+    );
   const version = fitting.find((v) => v.tree === chosen) ?? (fitting.length === 1 ? fitting[0] : undefined);
   const start = async () => {
     if (version === undefined) return;
     setBusy(true);
     setFault(null);
-    const started = await client.call('startRun', { body: { id, machine: machine.id, tree: version.tree, version: version.version, monotonic: steadyMs() } });
+    const started = await client.call('startRun', {
+      body: { id, machine: machine.id, tree: version.tree, version: version.version, monotonic: steadyMs() },
+    });
     setBusy(false);
     if (started.kind === 'problem') {
       setFault(started.say);
@@ -81,12 +89,22 @@ function Start({ machine, profile, issued }: Props) {
   };
   return (
     <View style={{ gap: space.m, alignSelf: 'stretch' }}>
-      <Choice label="Fault tree" value={version?.tree ?? null} options={fitting.map((v) => ({ value: v.tree, label: v.title, detail: `${v.symptom}. Version ${v.version}, ${v.steps} steps` }))} onChange={setChosen} />
+      <Choice
+        label="Fault tree"
+        value={version?.tree ?? null}
+        options={fitting.map((v) => ({ value: v.tree, label: v.title, detail: `${v.symptom}. Version ${v.version}, ${v.steps} steps` }))}
+        onChange={setChosen}
+      />
       <BodyText size="small" tone="soft">
         Local electrical codes, the maker’s data and licensed practice come first. Where they and a tree differ, stop and follow them.
       </BodyText>
       {fault === null ? null : <Notice live>{fault}</Notice>}
-      <BigAnswer kind="primary" label={busy ? 'Starting …' : 'Start the run'} disabled={busy || version === undefined} onPress={() => void start()} />
+      <BigAnswer
+        kind="primary"
+        label={busy ? 'Starting …' : 'Start the run'}
+        disabled={busy || version === undefined}
+        onPress={() => void start()}
+      />
     </View>
   );
 }

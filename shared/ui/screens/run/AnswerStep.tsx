@@ -24,7 +24,13 @@ export function AnswerStep({ run }: { run: Run }) {
         </Heading>
       ) : null}
       {answers.map((a) => (
-        <BigAnswer key={a.answer} kind={a === first ? 'primary' : 'plain'} label={a.label} disabled={run.busy} onPress={() => say(a.answer)} />
+        <BigAnswer
+          key={a.answer}
+          kind={a === first ? 'primary' : 'plain'}
+          label={a.label}
+          disabled={run.busy}
+          onPress={() => say(a.answer)}
+        />
       ))}
       <AnswerStack row>
         {view.answers.filter(declines).map((a) => (

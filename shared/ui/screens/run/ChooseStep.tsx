@@ -13,9 +13,20 @@ export function ChooseStep({ run }: { run: Run }) {
   const dock = (
     <>
       {view.reentries.map((r, i) => (
-        <BigAnswer key={r.key} kind={i === view.reentries.length - 1 ? 'primary' : 'plain'} label={`Go on from: ${r.title}`} disabled={run.busy} onPress={() => void run.send({ type: 'REENTER', step: r.key })} />
+        <BigAnswer
+          key={r.key}
+          kind={i === view.reentries.length - 1 ? 'primary' : 'plain'}
+          label={`Go on from: ${r.title}`}
+          disabled={run.busy}
+          onPress={() => void run.send({ type: 'REENTER', step: r.key })}
+        />
       ))}
-      <BigAnswer kind={view.reentries.length === 0 ? 'primary' : 'plain'} label="Close this run as stopped" disabled={run.busy} onPress={() => void run.send({ type: 'CLOSE' })} />
+      <BigAnswer
+        kind={view.reentries.length === 0 ? 'primary' : 'plain'}
+        label="Close this run as stopped"
+        disabled={run.busy}
+        onPress={() => void run.send({ type: 'CLOSE' })}
+      />
     </>
   );
   return (
@@ -23,7 +34,10 @@ export function ChooseStep({ run }: { run: Run }) {
       <StepHead run={run} />
       {view.step ? <StepLines step={view.step} /> : null}
       {view.reentries.length === 0 ? (
-        <Notice title="No place to go on from">A place is offered only where the run has been, what it stands on still holds, nothing is owed and nothing temporary is in. None is left, so this run can only be closed as stopped.</Notice>
+        <Notice title="No place to go on from">
+          A place is offered only where the run has been, what it stands on still holds, nothing is owed and nothing temporary is in. None
+          is left, so this run can only be closed as stopped.
+        </Notice>
       ) : null}
       <StaysFitted run={run} />
     </RunFrame>

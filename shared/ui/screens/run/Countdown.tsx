@@ -17,7 +17,11 @@ export function Countdown({ opensAt, what }: { opensAt: number; what: string }) 
   const left = opensAt - useNow(SECOND_MS);
   const over = left <= 0;
   return (
-    <View role="timer" aria-label={over ? `${what}: the wait is over` : what} style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'center', gap: space.s }}>
+    <View
+      role="timer"
+      aria-label={over ? `${what}: the wait is over` : what}
+      style={{ flexDirection: 'row', alignItems: 'center', justifyContent: 'center', gap: space.s }}
+    >
       <Icon name="clock" size={24} color={over ? colors.inkSoft : colors.brass} />
       {over ? <BodyText tone="soft">{`The wait is over, since ${clockOf(-left)}.`}</BodyText> : <Mono bold>{clockOf(left + 999)}</Mono>}
       {over ? null : (

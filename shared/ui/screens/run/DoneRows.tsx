@@ -15,20 +15,33 @@ export function DoneRows({ rows }: { rows: readonly RowView[] }) {
   const done = rows.filter((r) => r.answer !== null);
   if (done.length === 0) return null;
   return (
-    <View role="list" aria-label="Answered">
+    <View>
       <Label>{`Answered, ${done.length} of ${rows.length}`}</Label>
-      {[...done].reverse().map((r) => (
-        <View key={r.row.id} role="listitem" style={{ flexDirection: 'row', justifyContent: 'space-between', gap: space.m, paddingVertical: space.xs, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
-          <View style={{ flex: 1, minWidth: 0 }}>
-            <BodyText size="small" tone="soft">
-              {r.row.label}
+      <View role="list" aria-label="Answered">
+        {[...done].reverse().map((r) => (
+          <View
+            key={r.row.id}
+            role="listitem"
+            style={{
+              flexDirection: 'row',
+              justifyContent: 'space-between',
+              gap: space.m,
+              paddingVertical: space.xs,
+              borderBottomWidth: line.hair,
+              borderBottomColor: colors.rule,
+            }}
+          >
+            <View style={{ flex: 1, minWidth: 0 }}>
+              <BodyText size="small" tone="soft">
+                {r.row.label}
+              </BodyText>
+            </View>
+            <BodyText size="small" bold>
+              {answerWords(r)}
             </BodyText>
           </View>
-          <BodyText size="small" bold>
-            {answerWords(r)}
-          </BodyText>
-        </View>
-      ))}
+        ))}
+      </View>
     </View>
   );
 }

@@ -26,7 +26,17 @@ export function EndStep({ run }: { run: Run }) {
   const [handedIn, setHandedIn] = useState(bundle.run.state === 'submitted' || bundle.run.state === 'accepted');
   const step = end?.key == null ? undefined : program.layout.steps.get(end.key)?.step;
   return (
-    <RunFrame run={run} stop={!closed} dock={closed ? <HandIn run={run} handedIn={handedIn} onHandedIn={() => setHandedIn(true)} /> : <BigAnswer kind="primary" label="Close the record" disabled={run.busy} onPress={() => void run.send({ type: 'CLOSE' })} />}>
+    <RunFrame
+      run={run}
+      stop={!closed}
+      dock={
+        closed ? (
+          <HandIn run={run} handedIn={handedIn} onHandedIn={() => setHandedIn(true)} />
+        ) : (
+          <BigAnswer kind="primary" label="Close the record" disabled={run.busy} onPress={() => void run.send({ type: 'CLOSE' })} />
+        )
+      }
+    >
       <StepHead run={run} title={end?.title ?? 'Stopped'} />
       <Heading level={2} size="section">{`The run ends: ${endingWords(end?.says ?? 'stopped')}`}</Heading>
       {step ? (
@@ -41,7 +51,9 @@ export function EndStep({ run }: { run: Run }) {
       {end?.replace ? <Notice title="Replace">{end.replace}</Notice> : null}
       {end?.retest ? <Notice title="Test again">{end.retest}</Notice> : null}
       <StaysFitted run={run} />
-      {closed ? null : <BodyText tone="soft">Closing ends the work at the bench. Nothing can be added after it but what the review asks.</BodyText>}
+      {closed ? null : (
+        <BodyText tone="soft">Closing ends the work at the bench. Nothing can be added after it but what the review asks.</BodyText>
+      )}
       {closed ? (
         <View>
           <LinkText label="To the record" href={`/records/${bundle.run.id}`} />
@@ -70,7 +82,12 @@ function HandIn({ run, handedIn, onHandedIn }: { run: Run; handedIn: boolean; on
     <>
       {long ? <Notice live>{`Not yet: ${savedWords(run.saved)}.`}</Notice> : null}
       {fault === null ? null : <Notice live>{fault}</Notice>}
-      <BigAnswer kind="primary" label={busy ? 'Submitting …' : 'Submit for review'} disabled={busy || waiting} onPress={() => void submit()} />
+      <BigAnswer
+        kind="primary"
+        label={busy ? 'Submitting …' : 'Submit for review'}
+        disabled={busy || waiting}
+        onPress={() => void submit()}
+      />
     </>
   );
 }

@@ -26,13 +26,31 @@ export function GuardStep({ run }: { run: Run }) {
   // the engine wants the time that it was really held; the button confirms no earlier
   const held = () => void run.send({ type: 'GUARD_HELD', step: view.key, heldMs: holdMs });
   return (
-    <RunFrame run={run} dock={<HoldButton key={refusal?.say ?? 'guard'} label={ready ? `Hold: ${step.kind === 'raise' ? 'raise the power' : 'power in'}` : 'Tick all three first'} holdMs={holdMs} disabled={!ready} onConfirm={held} />}>
+    <RunFrame
+      run={run}
+      dock={
+        <HoldButton
+          key={refusal?.say ?? 'guard'}
+          label={ready ? `Hold: ${step.kind === 'raise' ? 'raise the power' : 'power in'}` : 'Tick all three first'}
+          holdMs={holdMs}
+          disabled={!ready}
+          onConfirm={held}
+        />
+      }
+    >
       <StepHead run={run} />
       <Notice title={circuitOf(program, view.key)}>{guardTold(step, program)}</Notice>
-      {unsent ? <Notice kind="alarm">The workshop does not know yet that you go live: what you answered has not reached the server.</Notice> : null}
+      {unsent ? (
+        <Notice kind="alarm">The workshop does not know yet that you go live: what you answered has not reached the server.</Notice>
+      ) : null}
       <View>
         {checks.map((c) => (
-          <Checkbox key={c.id} label={c.label} checked={ticked.includes(c.id)} onChange={(on) => setTicked(on ? [...ticked, c.id] : ticked.filter((id) => id !== c.id))} />
+          <Checkbox
+            key={c.id}
+            label={c.label}
+            checked={ticked.includes(c.id)}
+            onChange={(on) => setTicked(on ? [...ticked, c.id] : ticked.filter((id) => id !== c.id))}
+          />
         ))}
       </View>
       <BodyText size="small" tone="soft">

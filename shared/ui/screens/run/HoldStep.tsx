@@ -15,14 +15,19 @@ export function HoldStep({ run }: { run: Run }) {
   const { view, program, bundle } = run;
   const waits = view.phase === 'hold-wait';
   const ask = () => void run.send({ type: 'HOLD_ASKED', step: view.key });
-  const dock = waits ? <BigAnswer label="Look for the answer now" onPress={() => void run.poll()} /> : <BigAnswer kind="primary" label="Ask for the countersign" disabled={run.busy} onPress={ask} />;
+  const dock = waits ? (
+    <BigAnswer label="Look for the answer now" onPress={() => void run.poll()} />
+  ) : (
+    <BigAnswer kind="primary" label="Ask for the countersign" disabled={run.busy} onPress={ask} />
+  );
   return (
     <RunFrame run={run} dock={dock}>
       <StepHead run={run} />
       <BodyText size="instruction">{holdAsks(view, program)}</BodyText>
       {waits ? <Waiting run={run} /> : <Notice title="Who is asked">{seniorsFor(bundle)}</Notice>}
       <Notice kind="note" title="What happens next">
-        Given, the guard of this step opens and is good for one power-up. Refused, the run is led to make-safe, with the senior’s reason. You can stop at any time.
+        Given, the guard of this step opens and is good for one power-up. Refused, the run is led to make-safe, with the senior’s reason.
+        You can stop at any time.
       </Notice>
     </RunFrame>
   );
@@ -39,7 +44,11 @@ function Waiting({ run }: { run: Run }) {
       <Notice live title="Waiting for a senior">
         {seniorsFor(run.bundle)}
       </Notice>
-      <BodyText tone="soft">{asked === undefined ? '' : `Asked ${clockOf(now - asked.at)} ago. Their answer appears here by itself; every source stays out until then.`}</BodyText>
+      <BodyText tone="soft">
+        {asked === undefined
+          ? ''
+          : `Asked ${clockOf(now - asked.at)} ago. Their answer appears here by itself; every source stays out until then.`}
+      </BodyText>
       {unsent ? <Notice kind="look">The question has not left this device yet: there is no network. No senior has seen it.</Notice> : null}
     </>
   );

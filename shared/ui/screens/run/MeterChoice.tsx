@@ -28,10 +28,23 @@ export function MeterChoice({ run, row, meter, words }: Props) {
   const close = () => setOpen(false);
   return (
     <>
-      {words === null ? <Notice>{`No instrument of this workshop can be used for this reading. ${barred.map((m) => `${m.instrument.tag}: ${m.barred ?? ''}`).join('; ')}`}</Notice> : null}
-      <Button kind="quiet" icon="meter" label={words ?? 'Instruments'} name={words === null ? 'Instruments' : `Meter: ${words}. Choose another`} onPress={() => setOpen(true)} />
+      {words === null ? (
+        <Notice>{`No instrument of this workshop can be used for this reading. ${barred.map((m) => `${m.instrument.tag}: ${m.barred ?? ''}`).join('; ')}`}</Notice>
+      ) : null}
+      <Button
+        kind="quiet"
+        icon="meter"
+        label={words ?? 'Instruments'}
+        name={words === null ? 'Instruments' : `Meter: ${words}. Choose another`}
+        onPress={() => setOpen(true)}
+      />
       {open ? (
-        <Dialog title="Which instrument?" onClose={close} actions={<Button kind="primary" label="Back to the reading" onPress={close} />} foot={<StopBar onPress={() => void run.send({ type: 'STOP' })} />}>
+        <Dialog
+          title="Which instrument?"
+          onClose={close}
+          actions={<Button kind="primary" label="Back to the reading" onPress={close} />}
+          foot={<StopBar onPress={() => void run.send({ type: 'STOP' })} />}
+        >
           {usable.length > 0 ? (
             <Choice
               label="Instrument"

@@ -17,7 +17,9 @@ export function NotTakenNotice({ run }: { run: Run }) {
   return (
     <Notice live kind="alarm" title={title}>
       <View style={{ gap: space.s }}>
-        <BodyText>{first.notTaken?.rule ? `House rule ${first.notTaken.rule}: ${first.notTaken.say}` : (first.notTaken?.say ?? '')}</BodyText>
+        <BodyText>
+          {first.notTaken?.rule ? `House rule ${first.notTaken.rule}: ${first.notTaken.say}` : (first.notTaken?.say ?? '')}
+        </BodyText>
         <BodyText>{`Nobody can say what is true at the bench now: make it safe first. What you answered at ${clockWords(first.event.at)} and after is kept on this device.`}</BodyText>
         <Button label="I have read this" onPress={run.markSeen} />
       </View>

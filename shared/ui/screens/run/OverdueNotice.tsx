@@ -15,8 +15,14 @@ export function OverdueNotice({ run }: { run: Run }) {
   if (live === null || now <= live.until || run.view.step?.kind === 'isolate') return null;
   const abort = run.program.layout.steps.get(live.abort)?.step.title ?? 'Isolate';
   return (
-    <Dialog title="Time is up: isolate now" actions={<Button kind="primary" label={abort} onPress={() => void run.send({ type: 'ABORT' })} />} foot={<StopBar onPress={() => void run.send({ type: 'STOP' })} />}>
-      <BodyText size="instruction">The power has been on for as long as this step allows. Nothing else is taken until every source is out.</BodyText>
+    <Dialog
+      title="Time is up: isolate now"
+      actions={<Button kind="primary" label={abort} onPress={() => void run.send({ type: 'ABORT' })} />}
+      foot={<StopBar onPress={() => void run.send({ type: 'STOP' })} />}
+    >
+      <BodyText size="instruction">
+        The power has been on for as long as this step allows. Nothing else is taken until every source is out.
+      </BodyText>
     </Dialog>
   );
 }

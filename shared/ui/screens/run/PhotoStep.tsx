@@ -10,7 +10,18 @@ export function PhotoStep({ run }: { run: Run }) {
   const { view } = run;
   const decline = view.answers.find((a) => a.answer === 'cannot');
   return (
-    <RunFrame run={run} dock={decline ? <BigAnswer label={decline.label} disabled={run.busy} onPress={() => void run.send({ type: 'ANSWER', step: view.key, answer: decline.answer })} /> : undefined}>
+    <RunFrame
+      run={run}
+      dock={
+        decline ? (
+          <BigAnswer
+            label={decline.label}
+            disabled={run.busy}
+            onPress={() => void run.send({ type: 'ANSWER', step: view.key, answer: decline.answer })}
+          />
+        ) : undefined
+      }
+    >
       <StepBody run={run} row={null} />
       <Notice>This workshop keeps no photos yet, so none can be taken here.</Notice>
     </RunFrame>

@@ -51,7 +51,15 @@ export function ReadingRowStep({ run, current }: { run: Run; current: RowView & 
     }
     meter.use(meter.chosen);
     const instrument = { id: meter.chosen.id, twoPole: meter.chosen.twoPole, uncertainty: what.uncertainty };
-    void run.send({ type: 'READING', step: view.key, row: row.id, value: what.value, typed: text.trim(), instrument, ...(falling ? { falling: true } : {}) });
+    void run.send({
+      type: 'READING',
+      step: view.key,
+      row: row.id,
+      value: what.value,
+      typed: text.trim(),
+      instrument,
+      ...(falling ? { falling: true } : {}),
+    });
   };
   const decline = (word: string) => void run.send({ type: 'ROW', step: view.key, row: row.id, word });
   const doubted = typed.doubt !== null && asked === typed.echo;
@@ -78,10 +86,23 @@ export function ReadingRowStep({ run, current }: { run: Run; current: RowView & 
       <ReadingChoices choices={typed.choices} onChoose={setText} />
       {typed.value === null ? null : <ReadingScale {...scaleShown(row, typed.value, typed.uncertainty)} />}
       {opensAt !== null && !open ? <Countdown opensAt={opensAt} what="until it may be read" /> : null}
-      {typed.verdict ? <Verdict mark={typed.verdict.mark} word={`${typed.verdict.word}: ${typed.verdict.note}`} note={doubted ? (typed.doubt ?? undefined) : undefined} /> : null}
-      <BigAnswer kind="primary" label={typed.echo === null ? 'Record' : doubted ? `Yes, record ${typed.echo}` : `Record ${typed.echo}`} disabled={still || typed.value === null} onPress={() => record(typed, false)} />
+      {typed.verdict ? (
+        <Verdict
+          mark={typed.verdict.mark}
+          word={`${typed.verdict.word}: ${typed.verdict.note}`}
+          note={doubted ? (typed.doubt ?? undefined) : undefined}
+        />
+      ) : null}
+      <BigAnswer
+        kind="primary"
+        label={typed.echo === null ? 'Record' : doubted ? `Yes, record ${typed.echo}` : `Record ${typed.echo}`}
+        disabled={still || typed.value === null}
+        onPress={() => record(typed, false)}
+      />
       <AnswerStack row>
-        {row.mayFall && typed.high && typed.value !== 'over' ? <BigAnswer half label="It is falling" disabled={still} onPress={() => record(typed, true)} /> : null}
+        {row.mayFall && typed.high && typed.value !== 'over' ? (
+          <BigAnswer half label="It is falling" disabled={still} onPress={() => record(typed, true)} />
+        ) : null}
         <BigAnswer half label="Not sure" disabled={run.busy || !open} onPress={() => decline('not-sure')} />
         <BigAnswer half label="Cannot measure" disabled={run.busy || !open} onPress={() => decline('cannot')} />
       </AnswerStack>

@@ -20,29 +20,53 @@ export function RecordSide({ run }: { run: Run }) {
   return (
     <>
       <Suspects run={run} />
-      <View role="list" aria-label="Record so far">
+      <View>
         <Label level={2}>Record so far</Label>
         <BodyText size="small" tone="soft">
           {savedWords(run.saved)}
         </BodyText>
         {lines.length === 0 ? <BodyText size="small">Nothing has been answered yet.</BodyText> : null}
-        {[...lines].reverse().slice(0, MOST).map((l, i) => (
-          <View key={lines.length - i} role="listitem" style={{ flexDirection: 'row', gap: space.m, paddingVertical: space.s, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
-            <Mono soft>{clockWords(l.at)}</Mono>
-            <View style={{ flex: 1, minWidth: 0 }}>
-              <BodyText size="small" bold={l.verdict === 'fail'} tone={l.verdict === 'unsure' || l.verdict === 'fail' ? 'brass' : 'ink'}>
-                {l.words}
-              </BodyText>
-              <BodyText size="small" tone="soft">{l.stud === '' || l.stud === '!' ? l.title : `${l.stud} ${l.title}`}</BodyText>
-            </View>
-          </View>
-        ))}
+        <View role="list" aria-label="Record so far">
+          {[...lines]
+            .reverse()
+            .slice(0, MOST)
+            .map((l, i) => (
+              <View
+                key={lines.length - i}
+                role="listitem"
+                style={{
+                  flexDirection: 'row',
+                  gap: space.m,
+                  paddingVertical: space.s,
+                  borderBottomWidth: line.hair,
+                  borderBottomColor: colors.rule,
+                }}
+              >
+                <Mono soft>{clockWords(l.at)}</Mono>
+                <View style={{ flex: 1, minWidth: 0 }}>
+                  <BodyText
+                    size="small"
+                    bold={l.verdict === 'fail'}
+                    tone={l.verdict === 'unsure' || l.verdict === 'fail' ? 'brass' : 'ink'}
+                  >
+                    {l.words}
+                  </BodyText>
+                  <BodyText size="small" tone="soft">
+                    {l.stud === '' || l.stud === '!' ? l.title : `${l.stud} ${l.title}`}
+                  </BodyText>
+                </View>
+              </View>
+            ))}
+        </View>
       </View>
       {run.saved.notTaken.length > 0 ? (
-        <View role="list" aria-label="Not taken">
+        <View>
           <Label level={2}>Not taken, kept on this device</Label>
           {run.saved.notTaken.map((q) => (
-            <BodyText key={q.id} size="small">{`${clockWords(q.event.at)} ${q.event.type === 'READING' ? q.event.typed : q.event.type === 'ANSWER' ? q.event.answer : q.event.type.toLowerCase()}: ${q.notTaken?.say ?? ''}`}</BodyText>
+            <BodyText
+              key={q.id}
+              size="small"
+            >{`${clockWords(q.event.at)} ${q.event.type === 'READING' ? q.event.typed : q.event.type === 'ANSWER' ? q.event.answer : q.event.type.toLowerCase()}: ${q.notTaken?.say ?? ''}`}</BodyText>
           ))}
         </View>
       ) : null}

@@ -56,14 +56,32 @@ export function RunFrame({ run, dock, stop = true, children }: Props) {
   );
   const centre = (
     <Page bleed maxWidth={720} foot={foot}>
-      <StudRail number={studOf(run)} state={view.builtIn ? 'close' : 'now'} above={view.phase !== 'opening'} below={view.phase !== 'closed'} next={view.end === null} grow>
+      <StudRail
+        number={studOf(run)}
+        state={view.builtIn ? 'close' : 'now'}
+        above={view.phase !== 'opening'}
+        below={view.phase !== 'closed'}
+        next={view.end === null}
+        grow
+      >
         <NotTakenNotice run={run} />
         {children}
       </StudRail>
     </Page>
   );
   const side = (which: ReactNode, edge: 'left' | 'right', width: number) => (
-    <ScrollView role="complementary" style={{ flexGrow: 0, flexShrink: 0, width, backgroundColor: colors.raised, [edge === 'left' ? 'borderRightWidth' : 'borderLeftWidth']: line.rule, borderColor: colors.ink }} contentContainerStyle={{ padding: space.l, gap: space.xl }}>
+    <ScrollView
+      role="complementary"
+      style={{
+        flexGrow: 0,
+        flexShrink: 0,
+        width,
+        backgroundColor: colors.raised,
+        [edge === 'left' ? 'borderRightWidth' : 'borderLeftWidth']: line.rule,
+        borderColor: colors.ink,
+      }}
+      contentContainerStyle={{ padding: space.l, gap: space.xl }}
+    >
       {which}
     </ScrollView>
   );

@@ -11,13 +11,16 @@ export function RunScreen({ runId }: { runId: string }) {
   const me = useMe();
   const run = useRun(runId);
   // once led, a run goes on whatever becomes of the session: Stop must work
-  if (run.data !== undefined && me.data?.person.id === run.data.run.restorer) return <RunStage key={runId} bundle={run.data} person={me.data.person.id} />;
+  if (run.data !== undefined && me.data?.person.id === run.data.run.restorer)
+    return <RunStage key={runId} bundle={run.data} person={me.data.person.id} />;
   return (
     <Page>
       <Fetched query={me} what="who you are">
         {(who) => (
           <Fetched query={run} what="the run">
-            {(bundle) => (bundle.run.awaitsHold && who.roles.includes('senior') ? <HoldSheet runId={runId} people={bundle.people} /> : <OthersRun bundle={bundle} />)}
+            {(bundle) =>
+              bundle.run.awaitsHold && who.roles.includes('senior') ? <HoldSheet bundle={bundle} /> : <OthersRun bundle={bundle} />
+            }
           </Fetched>
         )}
       </Fetched>

@@ -16,11 +16,17 @@ import { RunStep } from '@/shared/ui/screens/run/RunStep';
 
 /** Compiles the run's own pinned documents; the server does the same with the same code. */
 export function RunStage({ bundle, person }: { bundle: RunBundle; person: string }) {
-  const compiled = useMemo(() => compile({ tree: bundle.tree, callees: bundle.callees, profile: bundle.profile, settings: bundle.settings }), [bundle]);
+  const compiled = useMemo(
+    () => compile({ tree: bundle.tree, callees: bundle.callees, profile: bundle.profile, settings: bundle.settings }),
+    [bundle],
+  );
   if (!compiled.ok) {
     return (
       <Page>
-        <ErrorState happened="This run cannot be led by this version of the application." todo="Make the bench safe: every source out, discharge, prove dead. Then load the page again, or tell a senior." />
+        <ErrorState
+          happened="This run cannot be led by this version of the application."
+          todo="Make the bench safe: every source out, discharge, prove dead. Then load the page again, or tell a senior."
+        />
       </Page>
     );
   }

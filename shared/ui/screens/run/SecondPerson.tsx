@@ -28,21 +28,48 @@ export function SecondPerson({ run }: { run: Run }) {
     setFault(null);
     // what waits here comes first: the sign-in takes the next place in the record
     await run.poll();
-    const answer = await client.call('secondPerson', { params: { run: bundle.run.id }, body: { id, seq: run.headSeq() + 1, person, password } });
+    const answer = await client.call('secondPerson', {
+      params: { run: bundle.run.id },
+      body: { id, seq: run.headSeq() + 1, person, password },
+    });
     if (answer.kind === 'problem') setFault(answer.say);
     else await run.poll();
     setPassword('');
     setBusy(false);
   };
   return (
-    <RunFrame run={run} dock={<BigAnswer kind="primary" label={busy ? 'Signing in …' : 'I am here, and I watch'} disabled={busy || person === null || password === ''} onPress={() => void sign()} />}>
+    <RunFrame
+      run={run}
+      dock={
+        <BigAnswer
+          kind="primary"
+          label={busy ? 'Signing in …' : 'I am here, and I watch'}
+          disabled={busy || person === null || password === ''}
+          onPress={() => void sign()}
+        />
+      }
+    >
       <StepHead run={run} />
       <Notice kind="alarm" title="A second person has to be here">
         {`This reading is taken by hand on a live point above ${secondPersonVoltsDc} V DC or ${secondPersonVoltsAc} V AC. Somebody else stays in the room, knows where the emergency-off is, and signs in now.`}
       </Notice>
       <BodyText>Hands off until then. Stop works as always.</BodyText>
-      <Select label="Second person" options={people.map((p) => ({ value: p.id, label: `${p.name}, ${p.code}` }))} value={person} onChange={setPerson} />
-      <Field label="Their password" value={password} onChangeText={setPassword} secret required autoComplete="off" error={fault ?? undefined} onSubmit={() => void sign()} />
+      <Select
+        label="Second person"
+        options={people.map((p) => ({ value: p.id, label: `${p.name}, ${p.code}` }))}
+        value={person}
+        onChange={setPerson}
+      />
+      <Field
+        label="Their password"
+        value={password}
+        onChangeText={setPassword}
+        secret
+        required
+        autoComplete="off"
+        error={fault ?? undefined}
+        onSubmit={() => void sign()}
+      />
     </RunFrame>
   );
 }

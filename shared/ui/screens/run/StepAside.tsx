@@ -20,7 +20,11 @@ export function StepAside({ run }: { run: Run }) {
   if (step === null) return null;
   const workings = workingsOf(step, profile, settings);
   const close = () => setOpen(null);
-  const frame = { onClose: close, actions: <Button label="Back to the step" onPress={close} />, foot: <StopBar onPress={() => void run.send({ type: 'STOP' })} /> };
+  const frame = {
+    onClose: close,
+    actions: <Button label="Back to the step" onPress={close} />,
+    foot: <StopBar onPress={() => void run.send({ type: 'STOP' })} />,
+  };
   return (
     <View style={{ flexDirection: 'row' }}>
       {workings?.answer.ok ? <Button kind="quiet" label="Workings" onPress={() => setOpen('workings')} /> : null}

@@ -17,18 +17,31 @@ export function Suspects({ run }: { run: Run }) {
   const ranked = posterior(run.program.layout.tree.suspects, run.account.findings);
   if (ranked.every((r) => r.heard === 0)) return null;
   return (
-    <View role="list" aria-label="Suspects">
+    <View>
       <Label level={2}>Suspects</Label>
-      {ranked.slice(0, MOST).map((r) => (
-        <View key={r.suspect.id} role="listitem" style={{ flexDirection: 'row', justifyContent: 'space-between', gap: space.m, paddingVertical: space.s, borderBottomWidth: line.hair, borderBottomColor: colors.rule }}>
-          <View style={{ flex: 1, minWidth: 0 }}>
-            <BodyText size="small">{`${r.suspect.part}, ${MODES[r.suspect.mode] ?? r.suspect.mode}`}</BodyText>
+      <View role="list" aria-label="Suspects">
+        {ranked.slice(0, MOST).map((r) => (
+          <View
+            key={r.suspect.id}
+            role="listitem"
+            style={{
+              flexDirection: 'row',
+              justifyContent: 'space-between',
+              gap: space.m,
+              paddingVertical: space.s,
+              borderBottomWidth: line.hair,
+              borderBottomColor: colors.rule,
+            }}
+          >
+            <View style={{ flex: 1, minWidth: 0 }}>
+              <BodyText size="small">{`${r.suspect.part}, ${MODES[r.suspect.mode] ?? r.suspect.mode}`}</BodyText>
+            </View>
+            <BodyText size="small" bold>
+              {shareInWords(r.share)}
+            </BodyText>
           </View>
-          <BodyText size="small" bold>
-            {shareInWords(r.share)}
-          </BodyText>
-        </View>
-      ))}
+        ))}
+      </View>
     </View>
   );
 }

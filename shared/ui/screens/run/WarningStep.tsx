@@ -12,7 +12,11 @@ export function WarningStep({ run }: { run: Run }) {
   return (
     <RunFrame run={run}>
       <StepHead run={run} />
-      <WarningGate hazards={hazardsShown(view.hazards, program.layout.profile, program.layout.settings)} acknowledged={false} onAcknowledge={read} />
+      <WarningGate
+        hazards={hazardsShown(view.hazards, program.layout.profile, program.layout.settings)}
+        acknowledged={false}
+        onAcknowledge={read}
+      />
     </RunFrame>
   );
 }

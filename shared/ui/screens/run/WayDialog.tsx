@@ -28,7 +28,11 @@ export function WayDialog({ run, onClose, foot }: { run: Run; onClose: () => voi
         </>
       }
     >
-      {live ? <BodyText>The bench may be live: nothing waits for a person now. Isolate first, or press Stop.</BodyText> : <LinkText label="To the bench; the run stays open" href="/bench" />}
+      {live ? (
+        <BodyText>The bench may be live: nothing waits for a person now. Isolate first, or press Stop.</BodyText>
+      ) : (
+        <LinkText label="To the bench; the run stays open" href="/bench" />
+      )}
       {run.refusal ? <BodyText bold>{run.refusal.say}</BodyText> : null}
       <RecordSide run={run} />
       <WayList run={run} />

@@ -24,12 +24,17 @@ export function WayList({ run }: { run: Run }) {
   const visited = way.slice(0, at + 1).filter((s) => s.state !== 'ahead');
   const shown = [...visited.slice(-BEFORE - 1), ...way.slice(at + 1, at + 1 + AHEAD)];
   return (
-    <View role="list" aria-label="The way so far" style={{ gap: space.s }}>
+    <View style={{ gap: space.s }}>
       <Label level={2}>The way</Label>
-      {shown.map((s) => (
-        <Line key={s.key} step={s} />
-      ))}
-      <BodyText size="small" tone="soft">{`${way.filter((s) => s.state === 'done').length} of ${way.length} steps of this tree visited`}</BodyText>
+      <View role="list" aria-label="The way" style={{ gap: space.s }}>
+        {shown.map((s) => (
+          <Line key={s.key} step={s} />
+        ))}
+      </View>
+      <BodyText
+        size="small"
+        tone="soft"
+      >{`${way.filter((s) => s.state === 'done').length} of ${way.length} steps of this tree visited`}</BodyText>
     </View>
   );
 }
@@ -45,7 +50,18 @@ function Line({ step }: { step: WayStep }) {
         </BodyText>
       </View>
       {step.band === null ? null : (
-        <View role="img" aria-label={powerVisual(step.band).word} style={{ width: 18, height: 32, borderWidth: line.hair, borderColor: colors.ink, backgroundColor: powerVisual(step.band).ground, overflow: 'hidden' }}>
+        <View
+          role="img"
+          aria-label={powerVisual(step.band).word}
+          style={{
+            width: 18,
+            height: 32,
+            borderWidth: line.hair,
+            borderColor: colors.ink,
+            backgroundColor: powerVisual(step.band).ground,
+            overflow: 'hidden',
+          }}
+        >
           <PowerPattern state={step.band} width={18} height={32} />
         </View>
       )}

@@ -5,15 +5,24 @@ import type { PowerStep } from '@/flows/facts/power';
 import type { Program } from '@/flows/machine/compile';
 import { formatDuration, formatQuantity } from '@/shared/quantity/formatQuantity';
 
-const LOADS: Readonly<Record<Load, string>> = { boards: 'The boards are in, as the step says', none: 'Nothing is connected to the rails', light: 'The light dummy load is on every rail', full: 'The full dummy load is on every rail' };
+const LOADS: Readonly<Record<Load, string>> = {
+  boards: 'The boards are in, as the step says',
+  none: 'Nothing is connected to the rails',
+  light: 'The light dummy load is on every rail',
+  full: 'The full dummy load is on every rail',
+};
 
 /** Three things, each ticked by hand. */
 export function guardChecks(step: PowerStep, profile: Profile): { id: string; label: string }[] {
-  const guarded = profile.mains.protection === 'rcd' ? 'through the RCD tried today' : 'through its isolating transformer, this one load only';
+  const guarded =
+    profile.mains.protection === 'rcd' ? 'through the RCD tried today' : 'through its isolating transformer, this one load only';
   return [
     { id: 'clear', label: 'Hands and tools are clear of the machine' },
     { id: 'load', label: step.node === 'part' ? 'Only the part itself is fed; its lead is lifted' : LOADS[step.load] },
-    { id: 'told', label: step.node === 'inlet' ? `Everybody here has been told; the plug goes in ${guarded}` : 'Everybody here has been told' },
+    {
+      id: 'told',
+      label: step.node === 'inlet' ? `Everybody here has been told; the plug goes in ${guarded}` : 'Everybody here has been told',
+    },
   ];
 }
 

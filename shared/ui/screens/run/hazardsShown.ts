@@ -13,7 +13,14 @@ const ORDER = ['danger', 'warning', 'caution'] as const;
 /** Worst first. */
 export function hazardsShown(kinds: readonly HazardKind[], profile: Profile, settings: Settings): Hazard[] {
   return kinds
-    .map((kind): Hazard => ({ id: kind, signal: HAZARDS[kind].signal, sign: signOf(kind), hazard: named(kind, profile, settings), result: HAZARDS[kind].result, avoid: [HAZARDS[kind].avoid] }))
+    .map((kind): Hazard => ({
+      id: kind,
+      signal: HAZARDS[kind].signal,
+      sign: signOf(kind),
+      hazard: named(kind, profile, settings),
+      result: HAZARDS[kind].result,
+      avoid: [HAZARDS[kind].avoid],
+    }))
     .sort((a, b) => ORDER.indexOf(a.signal as (typeof ORDER)[number]) - ORDER.indexOf(b.signal as (typeof ORDER)[number]));
 }
 
@@ -21,7 +28,8 @@ function named(kind: HazardKind, profile: Profile, settings: Settings): string {
   const { hazard } = HAZARDS[kind];
   if (kind === 'mains-shock') return `${hazard}: ${glued(formatQuantity(profile.mains.volts, 'V', { digits: 3 }))}`;
   const [most] = [...partsToDischarge(profile, settings)].sort((a, b) => storedJoules(b) - storedJoules(a));
-  if (kind === 'stored-charge' && most !== undefined) return `${hazard}: ${most.name}, ${glued(formatQuantity(storedJoules(most), 'J', { digits: 3 }))}`;
+  if (kind === 'stored-charge' && most !== undefined)
+    return `${hazard}: ${most.name}, ${glued(formatQuantity(storedJoules(most), 'J', { digits: 3 }))}`;
   return hazard;
 }
 

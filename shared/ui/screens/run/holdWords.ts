@@ -6,14 +6,18 @@ import type { RunView } from '@/flows/machine/view';
 import type { RunBundle } from '@/shared/contract/runs';
 
 const KINDS: Readonly<Record<PowerKind, string>> = {
-  bench: 'the first power from a bench supply', limited: 'the first limited mains power', full: 'the first full mains power', boards: 'the first power with boards fitted',
+  bench: 'the first power from a bench supply',
+  limited: 'the first limited mains power',
+  full: 'the first full mains power',
+  boards: 'the first power with boards fitted',
 };
 
 /** What the senior is asked. */
 export function holdAsks(view: RunView, { layout }: Program): string {
   const { step } = view;
   if (step?.kind === 'hold') return step.asks;
-  if (step?.kind === 'energise' || step?.kind === 'raise') return `A senior has to countersign ${KINDS[powerKind(step, layout.profile, layout.settings)]} of this run before it goes on.`;
+  if (step?.kind === 'energise' || step?.kind === 'raise')
+    return `A senior has to countersign ${KINDS[powerKind(step, layout.profile, layout.settings)]} of this run before it goes on.`;
   return 'A senior has to countersign before this run goes on.';
 }
 

@@ -34,7 +34,17 @@ export interface Typed {
   doubt: string | null;
 }
 
-const NOTHING: Typed = { value: null, echo: null, uncertainty: 0, range: null, high: false, verdict: null, fault: null, choices: [], doubt: null };
+const NOTHING: Typed = {
+  value: null,
+  echo: null,
+  uncertainty: 0,
+  range: null,
+  high: false,
+  verdict: null,
+  fault: null,
+  choices: [],
+  doubt: null,
+};
 
 /** Reads what was typed at a row, with the instrument in use. `live` is true where a source is in. */
 export function judgeTyped(row: ReadingRow, text: string, instrument: Instrument | null, live: boolean): Typed {
@@ -45,16 +55,29 @@ export function judgeTyped(row: ReadingRow, text: string, instrument: Instrument
   if (parsed.kind === 'over-range') return over(row, parsed.echo);
   const { value, echo } = parsed;
   const range = rangeFor(instrument, row.quantity, value);
-  if (range === null) return { ...NOTHING, fault: `${echo} lies beyond the largest range of ${instrument.tag}. Enter OL, or take another instrument.` };
+  if (range === null)
+    return { ...NOTHING, fault: `${echo} lies beyond the largest range of ${instrument.tag}. Enter OL, or take another instrument.` };
   const uncertainty = uncertaintyOf(range, value);
   const result = classifyReading(row, value, uncertainty, false);
-  return { ...NOTHING, value, echo, uncertainty, range, high: result === 'high', verdict: verdictOf(row, value, uncertainty, result), doubt: doubtOf(row, value, echo, live) };
+  return {
+    ...NOTHING,
+    value,
+    echo,
+    uncertainty,
+    range,
+    high: result === 'high',
+    verdict: verdictOf(row, value, uncertainty, result),
+    doubt: doubtOf(row, value, echo, live),
+  };
 }
 
 /** Over range, from the entry or from its button. */
 export function over(row: ReadingRow, echo = 'over range'): Typed {
   const result = classifyReading(row, 'over', 0, false);
-  const verdict: TypedVerdict = result === 'in' ? { mark: 'in', word: 'In', note: 'over range, and only a lower limit is asked' } : { mark: 'out', word: 'High', note: 'over range' };
+  const verdict: TypedVerdict =
+    result === 'in'
+      ? { mark: 'in', word: 'In', note: 'over range, and only a lower limit is asked' }
+      : { mark: 'out', word: 'High', note: 'over range' };
   return { ...NOTHING, value: 'over', echo, high: result === 'high', verdict };
 }
 
@@ -63,12 +86,19 @@ function verdictOf(row: ReadingRow, value: number, uncertainty: number, result: 
   const print = (n: number) => formatQuantity(n, unit, { digits: 3 });
   const size = row.bySize ? Math.abs(value) : value;
   const beyond = row.high !== null && size > row.high ? size - row.high : row.low !== null && size < row.low ? row.low - size : 0;
-  if (row.plain) return result === 'in' ? { mark: 'in', word: 'Dead', note: `at or below ${print(row.high ?? 0)}` } : { mark: 'out', word: 'Not dead', note: `above ${print(row.high ?? 0)}` };
+  if (row.plain)
+    return result === 'in'
+      ? { mark: 'in', word: 'Dead', note: `at or below ${print(row.high ?? 0)}` }
+      : { mark: 'out', word: 'Not dead', note: `above ${print(row.high ?? 0)}` };
   switch (result) {
     case 'in':
       return { mark: 'in', word: 'In', note: `clear of the limit (± ${print(uncertainty)})` };
     case 'close':
-      return { mark: 'close', word: beyond > 0 ? 'Out, but close' : 'In, but close', note: `the meter’s ± ${print(uncertainty)} cannot tell` };
+      return {
+        mark: 'close',
+        word: beyond > 0 ? 'Out, but close' : 'In, but close',
+        note: `the meter’s ± ${print(uncertainty)} cannot tell`,
+      };
     case 'reversed':
       return { mark: 'out', word: 'Reversed', note: 'the sign is the wrong way round: leads, or the rail itself' };
     default:
@@ -83,7 +113,9 @@ function doubtOf(row: ReadingRow, value: number, echo: string, live: boolean): s
   if (value === 0 && live) return 'Exactly 0 on a live bench: do the probes touch, and is the meter on the right range?';
   const most = Math.max(Math.abs(row.high ?? 0), Math.abs(row.low ?? 0));
   const volts = row.quantity === 'volts-dc' || row.quantity === 'volts-ac';
-  return volts && !row.plain && most > 0 && Math.abs(value) > FAR * most ? `${echo} is more than ${FAR} times what is expected here. Is it what the meter shows?` : null;
+  return volts && !row.plain && most > 0 && Math.abs(value) > FAR * most
+    ? `${echo} is more than ${FAR} times what is expected here. Is it what the meter shows?`
+    : null;
 }
 
 /** Limits in words: `4.75 V to 5.25 V`, `at most 150 mΩ`. */

@@ -40,15 +40,25 @@ export function metersFor(instruments: readonly Instrument[], { quantity, kind, 
  * list, else the most exact.
  * @param about the reading that is expected, in SI: most instruments can be used, and few are exact at that size
  */
-export function firstMeter(meters: readonly Meter[], remembered: string | null, tree: Tree, { quantity, about }: { quantity: Quantity; about: number }): Instrument | null {
+export function firstMeter(
+  meters: readonly Meter[],
+  remembered: string | null,
+  tree: Tree,
+  { quantity, about }: { quantity: Quantity; about: number },
+): Instrument | null {
   const doubt = (i: Instrument) => {
     const range = rangeFor(i, quantity, about);
     return range === null ? Infinity : uncertaintyOf(range, about);
   };
-  const usable = meters.filter((m) => m.barred === null).map((m) => m.instrument).sort((a, b) => doubt(a) - doubt(b));
+  const usable = meters
+    .filter((m) => m.barred === null)
+    .map((m) => m.instrument)
+    .sort((a, b) => doubt(a) - doubt(b));
   const listed = tree.opening.instruments.filter((i) => i.reads.includes(quantity)).map((i) => i.kind);
   const exact = (i: Instrument) => doubt(i) <= EXACT_SHARE * Math.abs(about);
-  return usable.find((i) => i.id === remembered && exact(i)) ?? usable.find((i) => listed.includes(i.kind) && exact(i)) ?? usable[0] ?? null;
+  return (
+    usable.find((i) => i.id === remembered && exact(i)) ?? usable.find((i) => listed.includes(i.kind) && exact(i)) ?? usable[0] ?? null
+  );
 }
 
 /** An instrument whose uncertainty is more than a tenth of the reading is not taken without being asked for. Common practice, no source. */
@@ -57,7 +67,10 @@ const EXACT_SHARE = 0.1;
 /** The range that reads the value most exactly; null when it lies beyond the largest. */
 export function rangeFor(instrument: Instrument, quantity: Quantity, value: number): InstrumentRange | null {
   const covering = instrument.ranges.filter((r) => r.quantity === quantity && Math.abs(value) <= r.fullScale);
-  return covering.reduce<InstrumentRange | null>((best, r) => (best === null || uncertaintyOf(r, value) < uncertaintyOf(best, value) ? r : best), null);
+  return covering.reduce<InstrumentRange | null>(
+    (best, r) => (best === null || uncertaintyOf(r, value) < uncertaintyOf(best, value) ? r : best),
+    null,
+  );
 }
 
 /** `M3, 60 V`: sticker and range, or the sticker alone while nothing is read. */

@@ -35,12 +35,16 @@ function draw(profile: Profile, red: readonly Point[], black: readonly Point[]):
   const lead = (p: Point) => (red.some((r) => r.id === p.id) ? 'red' : black.some((b) => b.id === p.id) ? 'black' : null);
   const strips = connectors.map((connector) => ({
     title: connector,
-    points: profile.points.filter((p) => p.connector === connector).map((p): FigurePoint => ({ id: p.id, name: shortName(p), highlight: lead(p) })),
+    points: profile.points
+      .filter((p) => p.connector === connector)
+      .map((p): FigurePoint => ({ id: p.id, name: shortName(p), highlight: lead(p) })),
   }));
   const bare = (words: string) => words.replaceAll(' ', '');
   const own = leads.flatMap((p) => [p.name, shortName(p), `${p.connector}-${p.pin}`]).map(bare);
   // a neighbour that carries the other lead is no danger
-  const neighbours = [...new Set(leads.flatMap((p) => p.neighbours))].filter((name) => !own.some((is) => bare(name) === is || bare(name).startsWith(`${is}(`)));
+  const neighbours = [...new Set(leads.flatMap((p) => p.neighbours))].filter(
+    (name) => !own.some((is) => bare(name) === is || bare(name).startsWith(`${is}(`)),
+  );
   return { strips, neighbours };
 }
 

@@ -19,9 +19,15 @@ export interface MeterInUse {
 /** Reads the instruments of the run's bundle. */
 export function useMeter(run: Run, row: ReadingRow): MeterInUse {
   const kind = run.view.step?.kind ?? 'measure';
-  const meters = metersFor(run.bundle.instruments, { quantity: row.quantity, kind, only: kind === 'prove-dead' ? run.state.context.proofInstrument : null });
+  const meters = metersFor(run.bundle.instruments, {
+    quantity: row.quantity,
+    kind,
+    only: kind === 'prove-dead' ? run.state.context.proofInstrument : null,
+  });
   const about = row.nominal ?? row.high ?? row.low ?? 1;
   const [picked, setPicked] = useState<string | null>(null);
-  const chosen = meters.find((m) => m.instrument.id === picked && m.barred === null)?.instrument ?? firstMeter(meters, rememberedMeter(row.quantity), run.bundle.tree, { quantity: row.quantity, about });
+  const chosen =
+    meters.find((m) => m.instrument.id === picked && m.barred === null)?.instrument ??
+    firstMeter(meters, rememberedMeter(row.quantity), run.bundle.tree, { quantity: row.quantity, about });
   return { meters, chosen, choose: (i) => setPicked(i.id), use: (i) => rememberMeter(row.quantity, i.id) };
 }

@@ -48,21 +48,35 @@ describe('createClient', () => {
   });
 
   it('says that the session is over when it cannot be renewed, and asks no third time', async () => {
-    const { client, asked } = serverOf([expired, { status: 401, body: { code: 'signed-out', say: 'You are not signed in. Sign in to go on.' } }]);
+    const { client, asked } = serverOf([
+      expired,
+      { status: 401, body: { code: 'signed-out', say: 'You are not signed in. Sign in to go on.' } },
+    ]);
     expect(await client.call('machines', {})).toMatchObject({ kind: 'problem', code: 'session-expired' });
     expect(asked).toHaveLength(2);
   });
 
   it('shares one renewal between calls that meet the same expired session', async () => {
-    const { client, asked } = serverOf([expired, expired, { status: 200, body: me }, { status: 200, body: { machines: [] } }, { status: 200, body: { machines: [] } }]);
+    const { client, asked } = serverOf([
+      expired,
+      expired,
+      { status: 200, body: me },
+      { status: 200, body: { machines: [] } },
+      { status: 200, body: { machines: [] } },
+    ]);
     const answers = await Promise.all([client.call('machines', {}), client.call('machines', {})]);
     expect(answers.map((a) => a.kind)).toEqual(['ok', 'ok']);
     expect(asked.filter((a) => a.line.includes('refresh'))).toHaveLength(1);
   });
 
   it('does not renew for a wrong password at sign-in', async () => {
-    const { client, asked } = serverOf([{ status: 401, body: { code: 'sign-in-failed', say: 'Mail address and password do not fit together.' } }]);
-    expect(await client.call('signIn', { body: { mail: 'a@example.org', password: 'x' } })).toMatchObject({ code: 'sign-in-failed', retryable: false });
+    const { client, asked } = serverOf([
+      { status: 401, body: { code: 'sign-in-failed', say: 'Mail address and password do not fit together.' } },
+    ]);
+    expect(await client.call('signIn', { body: { mail: 'a@example.org', password: 'x' } })).toMatchObject({
+      code: 'sign-in-failed',
+      retryable: false,
+    });
     expect(asked).toHaveLength(1);
   });
 
@@ -84,7 +98,9 @@ describe('createClient', () => {
   });
 
   it('keeps rule and details of a refusal', async () => {
-    const { client } = serverOf([{ status: 422, body: { code: 'refused', say: 'No power: earth is not proved.', rule: 'H7', entry: 'e1' } }]);
+    const { client } = serverOf([
+      { status: 422, body: { code: 'refused', say: 'No power: earth is not proved.', rule: 'H7', entry: 'e1' } },
+    ]);
     const answer = await client.call('machines', {});
     expect(answer).toMatchObject({ code: 'refused', rule: 'H7', say: 'No power: earth is not proved.', details: { entry: 'e1' } });
   });

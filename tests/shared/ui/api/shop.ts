@@ -18,7 +18,15 @@ export function event(bare: { type: 'ANSWER'; answer: string } | { type: 'STOP' 
 }
 export const say = (answer: string) => event({ type: 'ANSWER', answer });
 
-const problem = (code: ClientProblemCode, details: Record<string, unknown> = {}): ClientProblem => ({ kind: 'problem', code, say: `problem ${code}`, retryable: code === 'no-network', rule: code === 'refused' ? 'H7' : null, faults: [], details });
+const problem = (code: ClientProblemCode, details: Record<string, unknown> = {}): ClientProblem => ({
+  kind: 'problem',
+  code,
+  say: `problem ${code}`,
+  retryable: code === 'no-network',
+  rule: code === 'refused' ? 'H7' : null,
+  faults: [],
+  details,
+});
 
 export class Shop {
   entries: Entry[] = [];
@@ -45,13 +53,28 @@ export class Shop {
   private seal(id: string, of: MachineEvent): Entry {
     const seq = this.entries.length + 1;
     const prev = this.entries.at(-1)?.hash ?? '0'.repeat(64);
-    const entry = { id, run: RUN, seq, at: of.at, monotonic: 0, receivedAt: 0, actor: ANN, kind: 'answer', body: { event: of }, prev, hash: `h${seq}-${id}` } as unknown as Entry;
+    const entry = {
+      id,
+      run: RUN,
+      seq,
+      at: of.at,
+      monotonic: 0,
+      receivedAt: 0,
+      actor: ANN,
+      kind: 'answer',
+      body: { event: of },
+      prev,
+      hash: `h${seq}-${id}`,
+    } as unknown as Entry;
     this.entries.push(entry);
     return entry;
   }
 
   readonly client: Pick<Client, 'call'> = {
-    call: (async (name: string, input: { body?: { entries: { id: string; seq: number; event: MachineEvent }[] }; query?: { after: number } }) => {
+    call: (async (
+      name: string,
+      input: { body?: { entries: { id: string; seq: number; event: MachineEvent }[] }; query?: { after: number } },
+    ) => {
       await Promise.resolve();
       if (this.away) return problem('no-network');
       if (this.signedOut) return problem('session-expired');
@@ -111,6 +134,9 @@ export class Disk implements OutboxStore {
   }
 
   words(): string[] {
-    return [...this.kept.values()].filter((q) => q.notTaken === null).sort((a, b) => a.seq - b.seq).map((q) => wordOf(q.event));
+    return [...this.kept.values()]
+      .filter((q) => q.notTaken === null)
+      .sort((a, b) => a.seq - b.seq)
+      .map((q) => wordOf(q.event));
   }
 }

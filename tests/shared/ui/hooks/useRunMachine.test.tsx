@@ -13,7 +13,15 @@ const lamp = program(lampTree);
 const start = { run: RUN, restorer: ANN, restorerIsSenior: false, at: Date.UTC(2026, 0, 5), release: false, fitted: [], killers: [] };
 
 async function open(shop: Shop, disk: OutboxStore = new Disk(), held: Entry[] = []) {
-  const outbox = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, replays: () => null, toSafety: () => [], pause: (_ms, kicked) => kicked });
+  const outbox = createOutbox({
+    run: RUN,
+    person: ANN,
+    store: disk,
+    client: shop.client,
+    replays: () => null,
+    toSafety: () => [],
+    pause: (_ms, kicked) => kicked,
+  });
   await outbox.open(held);
   let again = 0;
   const hook = renderHook(() => useRunMachine(lamp, start, { outbox, again: () => (again += 1) }));

@@ -28,7 +28,10 @@ function ledTo(lead: (bench: Bench) => void, tree: Tree = lampTree): Shop {
   const bench = new Bench(program(tree));
   // led by the page's own two clocks: by others it would have lapsed
   bench.at = Date.now() - 5 * MINUTE_MS;
-  bench.stamp = (event: BareEvent) => ({ ...event, at: bench.at, monotonic: Math.round(performance.now() - (Date.now() - bench.at)), boot: BOOT }) as ReturnType<typeof stamp>;
+  bench.stamp = (event: BareEvent) =>
+    ({ ...event, at: bench.at, monotonic: Math.round(performance.now() - (Date.now() - bench.at)), boot: BOOT }) as ReturnType<
+      typeof stamp
+    >;
   const once = bench.try.bind(bench);
   bench.try = (event) => {
     const taken = once(event);
@@ -63,7 +66,23 @@ describe('RunStep', () => {
   });
 
   it('shows a refusal where the answer was given, with its house rule, and stays', async () => {
-    const unsafe = must(parseTree({ ...lampTreeJson, steps: lampTreeJson.steps.map((s) => (s.id === 'look' ? { ...s, exits: [{ id: 'sound', label: 'Sound', on: ['answer'], to: 'earth' }, { id: 'damaged', label: 'Damaged', on: ['answer'], to: 'dead1', verdict: 'fail' }, { id: 'unsure', on: ['not-sure', 'cannot'], to: 'refer' }] } : s)) }));
+    const unsafe = must(
+      parseTree({
+        ...lampTreeJson,
+        steps: lampTreeJson.steps.map((s) =>
+          s.id === 'look'
+            ? {
+                ...s,
+                exits: [
+                  { id: 'sound', label: 'Sound', on: ['answer'], to: 'earth' },
+                  { id: 'damaged', label: 'Damaged', on: ['answer'], to: 'dead1', verdict: 'fail' },
+                  { id: 'unsure', on: ['not-sure', 'cannot'], to: 'refer' },
+                ],
+              }
+            : s,
+        ),
+      }),
+    );
     await atBench({ tree: unsafe, shop: ledTo((bench) => bench.pass(), unsafe) });
     expect(title()).toBe('Look it over');
     await press('Sound');

@@ -16,12 +16,33 @@ import { benchProfile, lampTree, makeDeadTree, program } from '@/tests/flows/sup
 
 import { ANN, Disk, RUN, Shop } from '../../api/shop';
 
-const range = (quantity: RunBundle['instruments'][number]['ranges'][number]['quantity'], fullScale: number, resolution: number) => ({ quantity, fullScale, resolution, percent: 0.5, counts: 3 });
+const range = (quantity: RunBundle['instruments'][number]['ranges'][number]['quantity'], fullScale: number, resolution: number) => ({
+  quantity,
+  fullScale,
+  resolution,
+  percent: 0.5,
+  counts: 3,
+});
 const instrument = (tag: string, more: Partial<RunBundle['instruments'][number]>): RunBundle['instruments'][number] => ({
-  id: `0198c0de-0000-4000-8000-00000000000${tag.slice(1)}`, tag, name: `Meter ${tag}`, kind: 'multimeter', serial: tag, ranges: [], category: 'CAT III 600 V', twoPole: false, calibratedUntil: '2099-01-01', outOfDate: false, ...more,
+  id: `0198c0de-0000-4000-8000-00000000000${tag.slice(1)}`,
+  tag,
+  name: `Meter ${tag}`,
+  kind: 'multimeter',
+  serial: tag,
+  ranges: [],
+  category: 'CAT III 600 V',
+  twoPole: false,
+  calibratedUntil: '2099-01-01',
+  outOfDate: false,
+  ...more,
 });
 
-const person = (id: string, name: string, roles: RunBundle['people'][number]['roles']) => ({ id, code: name.slice(0, 2).toUpperCase(), name, roles });
+const person = (id: string, name: string, roles: RunBundle['people'][number]['roles']) => ({
+  id,
+  code: name.slice(0, 2).toUpperCase(),
+  name,
+  roles,
+});
 
 /** The bundle of a run of the lamp tree. */
 export function bundleOf(tree: Tree = lampTree): RunBundle {
@@ -29,19 +50,34 @@ export function bundleOf(tree: Tree = lampTree): RunBundle {
   const at = new Date(Date.UTC(2026, 0, 5)).toISOString();
   return {
     run: {
-      id: RUN, machine: { id: ANN, name: 'Corvane 12', serial: '0097' }, tree: { id: tree.id, title: tree.title, version: 1 }, restorer: ANN, state: 'open', ended: null, startedAt: at, closedAt: null, heardAt: at,
-      head: { seq: 0, hash }, band: 'unknown', step: null, awaitsHold: false,
+      id: RUN,
+      machine: { id: ANN, name: 'Corvane 12', serial: '0097' },
+      tree: { id: tree.id, title: tree.title, version: 1 },
+      restorer: ANN,
+      state: 'open',
+      ended: null,
+      startedAt: at,
+      closedAt: null,
+      heardAt: at,
+      head: { seq: 0, hash },
+      band: 'unknown',
+      step: null,
+      awaitsHold: false,
     },
     pins: { treeHash: hash, profileHash: hash, profileRevision: 1, settingsHash: hash, engine: 'test' },
     start: { run: RUN, restorer: ANN, restorerIsSenior: false, at: Date.UTC(2026, 0, 5), release: false, fitted: [], killers: [] },
-    tree, callees: [makeDeadTree], profile: benchProfile, settings: defaultSettings,
+    tree,
+    callees: [makeDeadTree],
+    profile: benchProfile,
+    settings: defaultSettings,
     instruments: [
       instrument('M1', { ranges: [range('ohms', 2, 0.0001), range('ohms', 6e7, 1e4), range('volts-dc', 60, 0.01)] }),
       instrument('M2', { kind: 'two-pole-tester', twoPole: true, ranges: [range('volts-dc', 690, 0.1), range('volts-ac', 690, 0.1)] }),
       instrument('M3', { kind: 'multimeter', outOfDate: true, calibratedUntil: '2025-01-01', ranges: [range('ohms', 2, 0.0001)] }),
     ],
     people: [person(ANN, 'Ann Bell', ['restorer']), person('33333333-3333-4333-8333-333333333333', 'Sam Holt', ['senior'])],
-    entries: [], head: { seq: 0, hash },
+    entries: [],
+    head: { seq: 0, hash },
   };
 }
 
@@ -59,7 +95,15 @@ export interface AtBench {
 /** Shows a run that stands where `held` has brought it. */
 export async function atBench({ tree = lampTree, shop = new Shop() }: { tree?: Tree; shop?: Shop } = {}): Promise<AtBench> {
   const disk = new Disk();
-  const outbox = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, replays: () => null, toSafety: () => [], pause: (_ms, kicked) => kicked });
+  const outbox = createOutbox({
+    run: RUN,
+    person: ANN,
+    store: disk,
+    client: shop.client,
+    replays: () => null,
+    toSafety: () => [],
+    pause: (_ms, kicked) => kicked,
+  });
   const held: Entry[] = [...shop.entries];
   await outbox.open(held);
   render(

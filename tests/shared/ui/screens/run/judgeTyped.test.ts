@@ -4,12 +4,47 @@ import type { ReadingRow } from '@/flows/machine/rows';
 import type { Instrument } from '@/shared/contract/instruments';
 import { judgeTyped, limitWords, over } from '@/shared/ui/screens/run/judgeTyped';
 
-const range = (quantity: Instrument['ranges'][number]['quantity'], fullScale: number, resolution: number) => ({ quantity, fullScale, resolution, percent: 0.5, counts: 3 });
+const range = (quantity: Instrument['ranges'][number]['quantity'], fullScale: number, resolution: number) => ({
+  quantity,
+  fullScale,
+  resolution,
+  percent: 0.5,
+  counts: 3,
+});
 const meter: Instrument = {
-  id: '0198c0de-0000-4000-8000-000000000001', tag: 'M1', name: 'Meter', kind: 'multimeter', serial: '1', category: 'CAT III 600 V', twoPole: false, calibratedUntil: '2027-03-31', outOfDate: false,
-  ranges: [range('volts-dc', 6, 0.001), range('volts-dc', 60, 0.01), range('volts-dc', 600, 0.1), range('ohms', 600, 0.1), range('ohms', 6e7, 1e4)],
+  id: '0198c0de-0000-4000-8000-000000000001',
+  tag: 'M1',
+  name: 'Meter',
+  kind: 'multimeter',
+  serial: '1',
+  category: 'CAT III 600 V',
+  twoPole: false,
+  calibratedUntil: '2027-03-31',
+  outOfDate: false,
+  ranges: [
+    range('volts-dc', 6, 0.001),
+    range('volts-dc', 60, 0.01),
+    range('volts-dc', 600, 0.1),
+    range('ohms', 600, 0.1),
+    range('ohms', 6e7, 1e4),
+  ],
 };
-const row = (of: Partial<ReadingRow>): ReadingRow => ({ id: 'r', label: '+5 V', wait: null, ask: 'reading', quantity: 'volts-dc', low: 4.75, high: 5.25, nominal: 5, bySize: false, plain: false, mayFall: false, red: null, black: null, ...of });
+const row = (of: Partial<ReadingRow>): ReadingRow => ({
+  id: 'r',
+  label: '+5 V',
+  wait: null,
+  ask: 'reading',
+  quantity: 'volts-dc',
+  low: 4.75,
+  high: 5.25,
+  nominal: 5,
+  bySize: false,
+  plain: false,
+  mayFall: false,
+  red: null,
+  black: null,
+  ...of,
+});
 const rail = row({});
 const minus = row({ low: -12.6, high: -11.4, nominal: -12 });
 const dead = row({ low: null, high: 5, nominal: null, bySize: true, plain: true, mayFall: true });

@@ -51,7 +51,11 @@ describe('guardChecks', () => {
   it('names the load that is declared and the protection', () => {
     const step = toGuard().view.step;
     if (step?.kind !== 'energise') throw new Error('not at the guard');
-    expect(guardChecks(step, benchProfile).map((c) => c.label)).toEqual(['Hands and tools are clear of the machine', 'Nothing is connected to the rails', expect.stringContaining('RCD')]);
+    expect(guardChecks(step, benchProfile).map((c) => c.label)).toEqual([
+      'Hands and tools are clear of the machine',
+      'Nothing is connected to the rails',
+      expect.stringContaining('RCD'),
+    ]);
     expect(guardTold(step, lamp)).toMatch(/At most 500 mA, for 10 min/);
   });
 });
@@ -73,12 +77,34 @@ describe('holdAsks', () => {
 describe('stripsOf', () => {
   const rail = lamp.layout.steps.get('lamp')?.step;
   const points = Object.fromEntries(benchProfile.points.map((p) => [p.id, p]));
-  const row = { id: 'p5', label: '+5 V', wait: null, ask: 'reading', quantity: 'volts-dc', low: 4.75, high: 5.25, nominal: 5, bySize: false, plain: false, mayFall: false, red: points['t5'] ?? null, black: points['t0'] ?? null } as const;
+  const row = {
+    id: 'p5',
+    label: '+5 V',
+    wait: null,
+    ask: 'reading',
+    quantity: 'volts-dc',
+    low: 4.75,
+    high: 5.25,
+    nominal: 5,
+    bySize: false,
+    plain: false,
+    mayFall: false,
+    red: points['t5'] ?? null,
+    black: points['t0'] ?? null,
+  } as const;
 
   it('draws the strip of both leads, and names no neighbour that carries the other lead', () => {
     if (!rail) throw new Error('no step');
     expect(stripsOf(benchProfile, rail, row)).toEqual({
-      strips: [{ title: 'TB1', points: [{ id: 't5', name: '+5V', highlight: 'red' }, { id: 't0', name: '0V', highlight: 'black' }] }],
+      strips: [
+        {
+          title: 'TB1',
+          points: [
+            { id: 't5', name: '+5V', highlight: 'red' },
+            { id: 't0', name: '0V', highlight: 'black' },
+          ],
+        },
+      ],
       neighbours: [],
     });
   });
@@ -101,16 +127,30 @@ describe('wayOf', () => {
     };
     bench.pass();
     bench.answer('sound').pass();
-    const { account, state } = play(lamp, { run: 'r', restorer: 'ann', restorerIsSenior: false, at: Date.UTC(2026, 0, 5, 9), release: false, fitted: [], killers: [] }, events);
+    const { account, state } = play(
+      lamp,
+      { run: 'r', restorer: 'ann', restorerIsSenior: false, at: Date.UTC(2026, 0, 5, 9), release: false, fitted: [], killers: [] },
+      events,
+    );
     const way = wayOf(lamp.layout, account, state.context.key);
-    expect(way.map((s) => [s.stud, s.state])).toEqual([['1', 'done'], ['2', 'now'], ['3', 'ahead'], ['4', 'ahead'], ['5', 'ahead'], ['6', 'ahead'], ['7', 'ahead'], ['8', 'ahead']]);
+    expect(way.map((s) => [s.stud, s.state])).toEqual([
+      ['1', 'done'],
+      ['2', 'now'],
+      ['3', 'ahead'],
+      ['4', 'ahead'],
+      ['5', 'ahead'],
+      ['6', 'ahead'],
+      ['7', 'ahead'],
+      ['8', 'ahead'],
+    ]);
     expect(way[1]?.band).toBe('off');
   });
 });
 
 describe('savedWords', () => {
   const saved: Saved = { waiting: 0, notTaken: [], trouble: null, onDevice: true };
-  const trouble = (code: 'no-network' | 'session-expired') => ({ kind: 'problem', code, say: '', retryable: true, rule: null, faults: [], details: {} }) as const;
+  const trouble = (code: 'no-network' | 'session-expired') =>
+    ({ kind: 'problem', code, say: '', retryable: true, rule: null, faults: [], details: {} }) as const;
   it.each([
     [saved, 'all saved'],
     [{ ...saved, waiting: 1 }, '1 answer waits to be sent'],
@@ -124,7 +164,21 @@ describe('savedWords', () => {
 
 describe('scaleShown', () => {
   it('rules an earth path in milliohms and an insulation in megohms', () => {
-    const row = { id: 'e', label: 'earth', wait: null, ask: 'reading', quantity: 'ohms', low: null, high: 0.15, nominal: null, bySize: false, plain: false, mayFall: false, red: null, black: null } as const;
+    const row = {
+      id: 'e',
+      label: 'earth',
+      wait: null,
+      ask: 'reading',
+      quantity: 'ohms',
+      low: null,
+      high: 0.15,
+      nominal: null,
+      bySize: false,
+      plain: false,
+      mayFall: false,
+      red: null,
+      black: null,
+    } as const;
     expect(scaleShown(row, 0.08, 0.01)).toMatchObject({ unit: 'mΩ', high: 150, value: 80, guard: 10 });
     expect(scaleShown({ ...row, low: 1e6, high: null }, 'over', 0)).toMatchObject({ unit: 'MΩ', low: 1, value: Infinity });
   });
@@ -132,13 +186,32 @@ describe('scaleShown', () => {
 
 describe('metersFor', () => {
   const of = (id: string, more: Partial<Instrument>): Instrument => ({
-    id, tag: id, name: id, kind: 'multimeter', serial: '1', category: null, twoPole: false, calibratedUntil: '2027-01-01', outOfDate: false, ranges: [{ quantity: 'volts-dc', fullScale: 60, resolution: 0.01, percent: 0.5, counts: 3 }], ...more,
+    id,
+    tag: id,
+    name: id,
+    kind: 'multimeter',
+    serial: '1',
+    category: null,
+    twoPole: false,
+    calibratedUntil: '2027-01-01',
+    outOfDate: false,
+    ranges: [{ quantity: 'volts-dc', fullScale: 60, resolution: 0.01, percent: 0.5, counts: 3 }],
+    ...more,
   });
-  const all = [of('old', { outOfDate: true }), of('meter', {}), of('tester', { twoPole: true, kind: 'two-pole-tester' }), of('ohms', { ranges: [] })];
+  const all = [
+    of('old', { outOfDate: true }),
+    of('meter', {}),
+    of('tester', { twoPole: true, kind: 'two-pole-tester' }),
+    of('ohms', { ranges: [] }),
+  ];
 
   it('says why an instrument cannot be used', () => {
     const meters = metersFor(all, { quantity: 'volts-dc', kind: 'prove-dead', only: null });
-    expect(meters.map((m) => [m.instrument.id, m.barred])).toEqual([['tester', null], ['old', 'Out of date since 2027-01-01'], ['meter', 'Not a two-pole tester']]);
+    expect(meters.map((m) => [m.instrument.id, m.barred])).toEqual([
+      ['tester', null],
+      ['old', 'Out of date since 2027-01-01'],
+      ['meter', 'Not a two-pole tester'],
+    ]);
   });
 
   it('begins with the one used before, else with one of the kind that the tree lists', () => {
@@ -150,14 +223,21 @@ describe('metersFor', () => {
   });
 
   it('does not begin with one that cannot tell at this size, even when it was used before', () => {
-    const fine = of('fine', { kind: 'low-ohm-meter', ranges: [{ quantity: 'ohms', fullScale: 2, resolution: 0.0001, percent: 0.2, counts: 3 }] });
+    const fine = of('fine', {
+      kind: 'low-ohm-meter',
+      ranges: [{ quantity: 'ohms', fullScale: 2, resolution: 0.0001, percent: 0.2, counts: 3 }],
+    });
     const coarse = of('coarse', { ranges: [{ quantity: 'ohms', fullScale: 600, resolution: 0.1, percent: 0.9, counts: 3 }] });
     const meters = metersFor([coarse, fine], { quantity: 'ohms', kind: 'prove-earth', only: null });
     expect(firstMeter(meters, 'coarse', lampTree, { quantity: 'ohms', about: 0.15 })?.id).toBe('fine');
   });
 
   it('takes an insulation tester for insulation, never a multimeter', () => {
-    const meters = metersFor([of('meter', { ranges: [{ quantity: 'ohms', fullScale: 6e7, resolution: 1e4, percent: 1, counts: 5 }] })], { quantity: 'ohms', kind: 'prove-insulation', only: null });
+    const meters = metersFor([of('meter', { ranges: [{ quantity: 'ohms', fullScale: 6e7, resolution: 1e4, percent: 1, counts: 5 }] })], {
+      quantity: 'ohms',
+      kind: 'prove-insulation',
+      only: null,
+    });
     expect(meters[0]?.barred).toMatch(/volts/);
   });
 });
