@@ -12,6 +12,8 @@ const WALKS: [string, string][] = [
   ['returns-measured', 'wendle-5'],
   ['reform-in-place', 'ostrel-16'],
   ['rail-low', 'ostrel-16'],
+  ['trip-fires', 'corvane-12'],
+  ['raw-on-rail', 'ostrel-16'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

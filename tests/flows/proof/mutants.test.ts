@@ -30,6 +30,9 @@ const SAFE: Record<string, string> = {
   'forget to fit: primary-lift': 'the lead is lifted to part two readings, both made dead',
   'bench limit away: full-low': 'the rails have passed on the limited bench supply, which is what opens full power into the raw node; the low start is a kindness to the new parts',
   'drop prove-returns: returns-why': 'the returns are proved once more before any power, and until then the killer of the diode stays owed',
+  'drop prove-rails: rails-creep': 'the trip is known to be right by then, the supply is limited and the boards are out; the end claims no rail',
+  'drop prove-rails: rails-raw': 'what follows feeds the output alone and needs no regulator; the end claims no rail',
+  'an exit led past its check: loads-away>unsure': 'boards count as in until a load step says what is on the rails; the light load does, and nothing is powered before it',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
 };
 
