@@ -20,7 +20,8 @@ export function RunStage({ bundle, person }: { bundle: RunBundle; person: string
     () => compile({ tree: bundle.tree, callees: bundle.callees, profile: bundle.profile, settings: bundle.settings }),
     [bundle],
   );
-  if (!compiled.ok) {
+  // the rules of another engine may lead elsewhere: neither side goes on under them
+  if (!compiled.ok || bundle.pins.engine !== compiled.program.engine) {
     return (
       <Page>
         <ErrorState
