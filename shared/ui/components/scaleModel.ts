@@ -41,7 +41,9 @@ export function roundStep(atLeast: number): number {
 function extent({ value, low, high, guard, nominal }: ScaleInput): [number, number] {
   if (low !== null && high !== null) {
     const room = Math.max(high - low, 4 * guard, Math.abs(low) * 1e-3) * 0.7 || 1;
-    return [low - room, high + room];
+    // limits above zero and a reading that is not below it: the scale shows no values that cannot be
+    const from = low - room;
+    return [low > 0 && from < 0 && (value ?? 0) >= 0 ? 0 : from, high + room];
   }
   const anchor = low ?? high;
   if (anchor !== null) {
