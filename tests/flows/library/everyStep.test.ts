@@ -14,6 +14,8 @@ const WALKS: [string, string][] = [
   ['rail-low', 'ostrel-16'],
   ['trip-fires', 'corvane-12'],
   ['raw-on-rail', 'ostrel-16'],
+  ['ripple', 'corvane-12'],
+  ['ticking', 'brindle-80'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {
