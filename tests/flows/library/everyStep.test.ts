@@ -16,6 +16,7 @@ const WALKS: [string, string][] = [
   ['raw-on-rail', 'ostrel-16'],
   ['ripple', 'corvane-12'],
   ['ticking', 'brindle-80'],
+  ['lost-return', 'wendle-5'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {
