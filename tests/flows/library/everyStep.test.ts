@@ -17,6 +17,7 @@ const WALKS: [string, string][] = [
   ['ripple', 'corvane-12'],
   ['ticking', 'brindle-80'],
   ['lost-return', 'wendle-5'],
+  ['dies-twice', 'ostrel-16'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

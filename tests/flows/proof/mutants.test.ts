@@ -33,6 +33,7 @@ const SAFE: Record<string, string> = {
   'drop prove-rails: rails-creep': 'the trip is known to be right by then, the supply is limited and the boards are out; the end claims no rail',
   'drop prove-rails: rails-raw': 'what follows feeds the output alone and needs no regulator; the end claims no rail',
   'an exit led past its check: loads-away>unsure': 'boards count as in until a load step says what is on the rails; the light load does, and nothing is powered before it',
+  'drop prove-rails: rails-held': 'what follows is a reading of heat at the same limited power; the end claims no rail',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
 };
 
