@@ -12,8 +12,10 @@ export default defineConfig({
   expect: { timeout: 10_000 },
   reporter: 'list',
   use: {
+    actionTimeout: 15_000,
     screenshot: 'only-on-failure',
-    trace: 'retain-on-failure',
+    // without a film of each action, which costs a third of the time of a long run
+    trace: { mode: 'retain-on-failure', screenshots: false },
     launchOptions: {
       executablePath: process.env['CHROMIUM'] ?? '/usr/bin/chromium',
       args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],

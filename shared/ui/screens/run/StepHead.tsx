@@ -5,6 +5,7 @@ import { BodyText } from '@/shared/ui/components/BodyText';
 import { Heading } from '@/shared/ui/components/Heading';
 import { Icon } from '@/shared/ui/components/icons/Icon';
 import { Label } from '@/shared/ui/components/Label';
+import { LinkText } from '@/shared/ui/components/LinkText';
 import { savedWords } from '@/shared/ui/screens/run/savedWords';
 import { useLongWait } from '@/shared/ui/screens/run/useLongWait';
 import type { Run } from '@/shared/ui/screens/run/Run';
@@ -15,6 +16,7 @@ import { useTheme } from '@/shared/ui/theme/useTheme';
 export function StepHead({ run, title }: { run: Run; title?: string }) {
   const { colors } = useTheme();
   const { saved, view, bundle } = run;
+  const signedOut = saved.waiting > 0 && (saved.trouble?.code === 'signed-out' || saved.trouble?.code === 'session-expired');
   const waits = useLongWait(saved);
   return (
     <View style={{ gap: space.xs }}>
@@ -32,6 +34,7 @@ export function StepHead({ run, title }: { run: Run; title?: string }) {
           </>
         ) : null}
       </View>
+      {signedOut ? <LinkText label="Sign in, and come back here" href={`/sign-in?from=${encodeURIComponent(`/bench/${bundle.run.id}`)}&expired=1`} /> : null}
     </View>
   );
 }
