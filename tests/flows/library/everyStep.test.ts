@@ -18,6 +18,7 @@ const WALKS: [string, string][] = [
   ['ticking', 'brindle-80'],
   ['lost-return', 'wendle-5'],
   ['dies-twice', 'ostrel-16'],
+  ['earth-insulation', 'brindle-80'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

@@ -34,6 +34,12 @@ const SAFE: Record<string, string> = {
   'drop prove-rails: rails-raw': 'what follows feeds the output alone and needs no regulator; the end claims no rail',
   'an exit led past its check: loads-away>unsure': 'boards count as in until a load step says what is on the rails; the light load does, and nothing is powered before it',
   'drop prove-rails: rails-held': 'what follows is a reading of heat at the same limited power; the end claims no rail',
+  'forget to fit: part-filter': 'the filter is lifted to part two readings; no power follows in this tree',
+  'forget to fit: part-primary': 'the primary is lifted to part two readings; no power follows in this tree',
+  'drop a make-dead: dead-filter': 'the way goes straight to an end, and close-out makes dead by itself',
+  'drop a make-dead: dead-winding': 'the way goes straight to an end, and close-out makes dead by itself',
+  'drop a make-dead: dead-inlet': 'the way goes straight to an end, and close-out makes dead by itself',
+  'drop a make-dead: dead-unclear': 'the way goes straight to an end, and close-out makes dead by itself',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
 };
 
