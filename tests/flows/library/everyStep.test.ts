@@ -19,6 +19,7 @@ const WALKS: [string, string][] = [
   ['lost-return', 'wendle-5'],
   ['dies-twice', 'ostrel-16'],
   ['earth-insulation', 'brindle-80'],
+  ['heat-and-fan', 'corvane-12'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

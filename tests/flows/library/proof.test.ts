@@ -5,7 +5,7 @@ import { defaultSettings } from '@/flows/document/settings';
 import { prove } from '@/flows/proof/prove';
 import { demoProfile, libraryTree, makeDead } from './walk';
 
-const TREES = ['make-dead', 'first-power', 'lamp-bright', 'look-over', 'returns-measured', 'reform-in-place', 'rail-low', 'trip-fires', 'raw-on-rail', 'ripple', 'ticking', 'lost-return', 'dies-twice', 'earth-insulation'];
+const TREES = ['make-dead', 'first-power', 'lamp-bright', 'look-over', 'returns-measured', 'reform-in-place', 'rail-low', 'trip-fires', 'raw-on-rail', 'ripple', 'ticking', 'lost-return', 'dies-twice', 'earth-insulation', 'heat-and-fan'];
 const MACHINES = ['corvane-12', 'ostrel-16', 'brindle-80', 'wendle-5'];
 
 describe.each(TREES)('the house rules on every path of %s', (id) => {

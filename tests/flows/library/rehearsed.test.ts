@@ -5,7 +5,7 @@ import { misfits } from '@/flows/document/admits';
 import { rehearse } from '@/flows/rehearsal/rehearse';
 import { demoProfile, libraryTree, programOf } from './walk';
 
-const TREES = ['rail-low', 'trip-fires', 'raw-on-rail', 'ripple', 'ticking', 'lost-return', 'dies-twice', 'earth-insulation'];
+const TREES = ['rail-low', 'trip-fires', 'raw-on-rail', 'ripple', 'ticking', 'lost-return', 'dies-twice', 'earth-insulation', 'heat-and-fan'];
 const MACHINES = ['corvane-12', 'ostrel-16', 'brindle-80', 'wendle-5'];
 
 describe.each(TREES)('%s', (id) => {

@@ -40,6 +40,7 @@ const SAFE: Record<string, string> = {
   'drop a make-dead: dead-winding': 'the way goes straight to an end, and close-out makes dead by itself',
   'drop a make-dead: dead-inlet': 'the way goes straight to an end, and close-out makes dead by itself',
   'drop a make-dead: dead-unclear': 'the way goes straight to an end, and close-out makes dead by itself',
+  'drop prove-rails: rails-unheated': 'what follows is a reading of heat at the same limited power; the end claims no rail',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
 };
 
