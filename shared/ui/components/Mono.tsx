@@ -4,7 +4,7 @@ import { Text } from 'react-native';
 
 import { face, type } from '@/shared/ui/theme/type';
 import { useTheme } from '@/shared/ui/theme/useTheme';
-import { webStyle } from '@/shared/ui/theme/webStyle';
+import { webTextStyle } from '@/shared/ui/theme/webStyle';
 
 interface Props {
   children: ReactNode;
@@ -26,7 +26,7 @@ export function Mono({ children, bold = false, soft = false, whole = false, inli
         inline ? { fontFamily: face.mono } : type[size],
         inline && !soft ? null : { color: soft ? colors.inkSoft : colors.ink },
         bold ? { fontFamily: face.monoBold } : null,
-        whole ? webStyle({ whiteSpace: 'nowrap' }) : null,
+        whole ? webTextStyle({ whiteSpace: 'nowrap' }) : null,
       ]}
     >
       {children}
