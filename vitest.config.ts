@@ -14,6 +14,8 @@ export default defineConfig({
         test: {
           ...node,
           name: 'unit',
+          // how fast the engine is, its benchmark says; here a slow machine is no failure
+          testTimeout: 60_000,
           include: ['tests/{flows,outside,checks,db/unit}/**/*.test.ts', 'tests/shared/{contract,quantity,workings,record}/**/*.test.ts', 'tests/server/unit/**/*.test.ts'],
         },
       },

@@ -48,11 +48,14 @@ export function HoldSheet({ bundle }: { bundle: RunBundle }) {
 
 function NoHold() {
   return (
-    <EmptyState
-      title="No countersign is awaited here"
-      text="It was answered, or the run has gone on or was stopped."
-      action={<LinkText label="To the bench" href="/bench" />}
-    />
+    <View style={{ gap: space.l }}>
+      <Heading level={1}>Countersign</Heading>
+      <EmptyState
+        title="No countersign is awaited here"
+        text="It was answered, or the run has gone on or was stopped."
+        action={<LinkText label="To the bench" href="/bench" />}
+      />
+    </View>
   );
 }
 

@@ -13,7 +13,7 @@ export function OthersRun({ bundle }: { bundle: RunBundle }) {
   const stands = run.step === null ? 'It has reached its end.' : `It stands at step ${run.step.stud}, “${run.step.title}”.`;
   return (
     <EmptyState
-      title={`${run.machine.name}: this run is led by ${who}`}
+      title={`This run is led by ${who}`}
       text={`${run.tree.title}. ${stands} Supply when last heard of, ${dateTimeWords(run.heardAt)}: ${powerVisual(run.band).word.toLowerCase()}. Only ${who} can answer its steps.`}
       action={<LinkText label="To the bench" href="/bench" />}
     />

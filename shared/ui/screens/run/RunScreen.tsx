@@ -13,14 +13,14 @@ export function RunScreen({ runId }: { runId: string }) {
   // once led, a run goes on whatever becomes of the session: Stop must work
   if (run.data !== undefined && me.data?.person.id === run.data.run.restorer)
     return <RunStage key={runId} bundle={run.data} person={me.data.person.id} />;
+  const countersigns = run.data?.run.awaitsHold === true && me.data?.roles.includes('senior') === true;
+  const machine = run.data?.run.machine;
   return (
-    <Page>
+    <Page title={countersigns ? undefined : machine === undefined ? 'Run' : `${machine.name}, serial ${machine.serial}`}>
       <Fetched query={me} what="who you are">
-        {(who) => (
+        {() => (
           <Fetched query={run} what="the run">
-            {(bundle) =>
-              bundle.run.awaitsHold && who.roles.includes('senior') ? <HoldSheet bundle={bundle} /> : <OthersRun bundle={bundle} />
-            }
+            {(bundle) => (countersigns ? <HoldSheet bundle={bundle} /> : <OthersRun bundle={bundle} />)}
           </Fetched>
         )}
       </Fetched>

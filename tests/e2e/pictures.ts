@@ -1,0 +1,106 @@
+/** Makes the pictures of the documentation from a fresh demo: `npm run pictures`. A few minutes; needs Chromium. */
+import { mkdirSync } from 'node:fs';
+
+import { chromium, type Browser, type Page } from '@playwright/test';
+
+import { DEMO_PASSWORD, type DemoPersonKey } from '@/db/seeds/demoPeople';
+import { inProject } from '@/server/cli/projectFiles';
+
+import { BenchPage } from './BenchPage';
+import { findPlaces } from './findPlaces';
+import { startStack, type Stack } from './harness';
+import type { Seen } from './readScreen';
+import { signIn } from './signIn';
+
+const folder = inProject('docs/pictures');
+const sizes = [
+  { width: 390, height: 844 },
+  { width: 1440, height: 900 },
+];
+const schemes = ['light', 'dark'] as const;
+const TREE = 'Dormant three-rail supply: first power';
+
+/** The page as it stands, in both sizes and by day and by night. */
+async function take(page: Page, what: string): Promise<void> {
+  for (const size of sizes) {
+    for (const colorScheme of schemes) {
+      await page.setViewportSize(size);
+      await page.emulateMedia({ colorScheme, reducedMotion: 'reduce' });
+      await page.evaluate('document.fonts.ready.then(() => undefined)');
+      await page.screenshot({ path: `${folder}/${what}-${size.width}-${colorScheme}.png`, caret: 'hide', animations: 'disabled' });
+    }
+  }
+  process.stdout.write(`${what}\n`);
+}
+
+async function openPage(browser: Browser, stack: Stack, who: DemoPersonKey): Promise<Page> {
+  const context = await browser.newContext({ baseURL: stack.url, viewport: { width: 390, height: 844 } });
+  const page = await context.newPage();
+  await page.clock.install();
+  await signIn(page, who);
+  return page;
+}
+
+async function still(browser: Browser, stack: Stack): Promise<void> {
+  const door = await (await browser.newContext({ baseURL: stack.url })).newPage();
+  await door.goto('/sign-in');
+  await door.getByRole('button', { name: 'Sign in' }).waitFor();
+  await take(door, 'sign-in');
+  const page = await openPage(browser, stack, 'reviewer');
+  for (const { path, heading, picture } of await findPlaces(stack.ownerUrl, 'reviewer')) {
+    if (picture === undefined) continue;
+    await page.goto(path);
+    await page.getByRole('heading', { level: 1, name: heading }).waitFor();
+    await page.getByText(/^(Fetching|Reading the entries)/).first().waitFor({ state: 'detached' });
+    await take(page, picture);
+  }
+  await page.context().close();
+}
+
+async function run(browser: Browser, stack: Stack): Promise<void> {
+  const page = await openPage(browser, stack, 'restorer');
+  await page.getByRole('radiogroup', { name: 'Machine' }).waitFor();
+  await take(page, 'bench');
+  const senior = await openPage(browser, stack, 'senior');
+  const bench = new BenchPage(page, { answers: { 'Which kind of regulator': 'No, it is linear' } });
+  const upTo = async (wanted: (seen: Seen) => boolean) => {
+    await page.setViewportSize({ width: 390, height: 844 });
+    await bench.playUntil(wanted);
+  };
+  const waits = (seen: Seen) => seen.answers.some((b) => b.name === 'Look for the answer now');
+  await bench.start('Corvane 12, serial C12-0417', TREE);
+  await take(page, 'run-opening');
+  await upTo((seen) => seen.title === 'Take every source out');
+  await take(page, 'run-isolate');
+  await upTo((seen) => seen.title === 'Insulation' && seen.buttons.some((b) => b.name === 'I have read this'));
+  await take(page, 'run-warning');
+  await upTo(waits);
+  await bench.countersign(senior, DEMO_PASSWORD);
+  await upTo((seen) => seen.title === 'First mains, through the lamp' && waits(seen));
+  await take(page, 'run-hold');
+  await senior.goto('/bench');
+  await senior.locator(`a[href$="${bench.run}"]`).click();
+  await senior.getByRole('button', { name: 'Give the countersign' }).waitFor();
+  await take(senior, 'holds');
+  await bench.countersign(senior, DEMO_PASSWORD);
+  await upTo((seen) => seen.title === 'First mains, through the lamp' && seen.unticked.length > 0);
+  await take(page, 'run-guard');
+  await upTo((seen) => seen.title === 'Rails on the lamp' && seen.entry !== null);
+  await bench.takeMeter('Q-02');
+  await bench.type('4.97');
+  await take(page, 'run-reading');
+  await bench.stop();
+  await page.getByRole('heading', { level: 1, name: /^Make safe/ }).waitFor();
+  await take(page, 'run-stop');
+}
+
+mkdirSync(folder, { recursive: true });
+const stack = await startStack();
+const browser = await chromium.launch({ executablePath: process.env['CHROMIUM'] ?? '/usr/bin/chromium', args: ['--no-sandbox', '--disable-gpu'] });
+try {
+  await still(browser, stack);
+  await run(browser, stack);
+} finally {
+  await browser.close();
+  await stack.stop();
+}
