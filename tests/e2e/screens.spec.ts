@@ -7,42 +7,54 @@ import { findPlaces, type Place } from './findPlaces';
 import { signIn } from './signIn';
 
 /** The senior's pages are everybody's: they are seen on both sizes, the others' on the one that they mostly use. */
-const looks: readonly [DemoPersonKey, 'phone' | 'wide'][] = [['senior', 'phone'], ['senior', 'wide'], ['restorer', 'phone'], ['reviewer', 'wide'], ['keeper', 'phone']];
+const looks: readonly [DemoPersonKey, 'phone' | 'wide'][] = [
+  ['senior', 'phone'],
+  ['senior', 'wide'],
+  ['restorer', 'phone'],
+  ['reviewer', 'wide'],
+  ['keeper', 'phone'],
+];
 const sizes = { phone, wide };
 
 /** Rules of WCAG 2.2 AA, and the good practice that axe knows. */
 const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
 
 for (const [who, name] of looks) {
-    const viewport = sizes[name];
+  const viewport = sizes[name];
   test(`${who} opens every place on a ${name} screen, by day and by night`, async ({ stack, openDevice }) => {
-      test.setTimeout(180_000);
-      const page = await openDevice({ viewport, colorScheme: 'light' });
-      const said: string[] = [];
-      page.on('console', (message) => {
-        if (message.type() === 'error') said.push(`${page.url()}: ${message.text()}`);
-      });
-      await signIn(page, who);
-      said.length = 0; // asking who one is, before signing in, is answered 401
-      const places: Place[] = await findPlaces(stack.ownerUrl, who);
-      for (const { path, heading, own } of places) {
-        await test.step(path, async () => {
-          await page.goto(path);
-          await expect(page.getByRole('heading', { level: 1, name: heading }), path).toBeVisible();
-          await expect(page.getByText(/^(Fetching|Reading the entries)/), path).toHaveCount(0);
-          expect(await page.evaluate<number>('document.documentElement.scrollWidth - document.documentElement.clientWidth'), `${path} scrolls sideways`).toBeLessThanOrEqual(0);
-          // what is the same for everybody is looked at once
-          if (own !== true && who !== 'senior') return;
-          for (const colorScheme of ['light', 'dark'] as const) {
-            await page.emulateMedia({ colorScheme });
-            // pages without frames: the one-piece way of axe is five times faster on the longest of them
-            const axe = new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).setLegacyMode(true);
-            // only colours change by night
-            const { violations } = await (colorScheme === 'light' ? axe.withTags(tags) : axe.withRules(['color-contrast'])).analyze();
-            expect(violations.map((v) => `${v.id}: ${v.nodes.map((n) => n.target.join(' ')).join(', ')}`), `${path}, ${colorScheme}`).toEqual([]);
-          }
-        });
-      }
-      expect(said, 'errors on the console').toEqual([]);
+    test.setTimeout(180_000);
+    const page = await openDevice({ viewport, colorScheme: 'light' });
+    const said: string[] = [];
+    page.on('console', (message) => {
+      if (message.type() === 'error') said.push(`${page.url()}: ${message.text()}`);
     });
+    await signIn(page, who);
+    said.length = 0; // asking who one is, before signing in, is answered 401
+    const places: Place[] = await findPlaces(stack.ownerUrl, who);
+    for (const { path, heading, own } of places) {
+      await test.step(path, async () => {
+        await page.goto(path);
+        await expect(page.getByRole('heading', { level: 1, name: heading }), path).toBeVisible();
+        await expect(page.getByText(/^(Fetching|Reading the entries)/), path).toHaveCount(0);
+        expect(
+          await page.evaluate<number>('document.documentElement.scrollWidth - document.documentElement.clientWidth'),
+          `${path} scrolls sideways`,
+        ).toBeLessThanOrEqual(0);
+        // what is the same for everybody is looked at once
+        if (own !== true && who !== 'senior') return;
+        for (const colorScheme of ['light', 'dark'] as const) {
+          await page.emulateMedia({ colorScheme });
+          // pages without frames: the one-piece way of axe is five times faster on the longest of them
+          const axe = new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).setLegacyMode(true);
+          // only colours change by night
+          const { violations } = await (colorScheme === 'light' ? axe.withTags(tags) : axe.withRules(['color-contrast'])).analyze();
+          expect(
+            violations.map((v) => `${v.id}: ${v.nodes.map((n) => n.target.join(' ')).join(', ')}`),
+            `${path}, ${colorScheme}`,
+          ).toEqual([]);
+        }
+      });
+    }
+    expect(said, 'errors on the console').toEqual([]);
+  });
 }
