@@ -4,8 +4,9 @@ export default defineConfig({
   testDir: 'tests/e2e',
   testMatch: '**/*.spec.ts',
   outputDir: 'test-results',
-  // One stack of database, mail fake and server serves all files: they run one after the other.
-  workers: 1,
+  globalSetup: './tests/e2e/buildOnce.ts',
+  // Each has a database, a mail fake and a server of its own; a file's tests run one after the other.
+  workers: 2,
   forbidOnly: true,
   retries: 0,
   timeout: 90_000,

@@ -1,5 +1,6 @@
 /** Bench facts in the words of a senior who was not there. */
 import type { Facts } from '@/flows/facts/facts';
+import type { Layout } from '@/flows/machine/program';
 
 const SOURCE: Readonly<Record<Facts['sources'][number]['state'], string>> = {
   unknown: 'not known, treat as live', lapsed: 'lapsed, treat as live', full: 'in, full power', limited: 'in, limited', out: 'out',
@@ -9,16 +10,19 @@ const PROVING: Readonly<Record<Facts['proving'], string>> = { none: 'none yet', 
 const LOAD: Readonly<Record<Facts['load'], string>> = { boards: 'boards', none: 'none', light: 'light dummy load', full: 'full dummy load' };
 
 /** One line a fact. Safety of the bench first, then what has been proved, then what is owed. */
-export function factsInWords(facts: Facts): { name: string; value: string }[] {
+export function factsInWords(facts: Facts, { steps, tree, profile }: Pick<Layout, 'steps' | 'tree' | 'profile'>): { name: string; value: string }[] {
   const { owed } = facts;
-  const doubts = [...owed.doubts, ...owed.fails.filter((fail) => !fail.fixed).map((fail) => fail.check), ...owed.killers.map((killer) => `${killer.killer} for ${killer.part}`)];
+  const check = (key: string) => steps.get(key)?.step.title ?? key;
+  const part = (id: string) => tree.suspects.find((suspect) => suspect.id === id)?.part ?? id;
+  const rail = (id: string) => profile.rails.find((one) => one.id === id)?.name ?? id;
+  const doubts = [...owed.doubts.map(check), ...owed.fails.filter((fail) => !fail.fixed).map((fail) => check(fail.check)), ...owed.killers.map((owes) => `${part(owes.killer)} for ${part(owes.part)}`)];
   return [
     ...facts.sources.map((source) => ({ name: `Source ${source.id}`, value: SOURCE[source.state] })),
     { name: 'Stored charge', value: STORED[facts.stored] },
     { name: 'Earth', value: facts.earth === 'proved' ? 'proved' : 'not proved' },
     { name: 'Insulation', value: facts.insulation === 'proved' ? 'proved' : 'not proved' },
     { name: 'Returns', value: facts.returns === 'proved' ? 'proved' : 'not proved' },
-    ...facts.trips.map((trip) => ({ name: `Trip of ${trip.rail}`, value: trip.proved ? 'proved' : 'not tested' })),
+    ...facts.trips.map((trip) => ({ name: `Trip of ${rail(trip.rail)}`, value: trip.proved ? 'proved' : 'not tested' })),
     { name: 'Proving', value: PROVING[facts.proving] },
     { name: 'Load', value: LOAD[facts.load] },
     { name: 'Fitted', value: facts.fitted.length === 0 ? 'nothing' : facts.fitted.map((thing) => thing.name).join(', ') },

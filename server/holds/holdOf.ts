@@ -41,7 +41,7 @@ export async function holdOf(tx: Tx, parts: Parts, row: RunSummaryRow, person: s
     askedBy: asked.actor,
     askedAt: asked.at,
     band: bandOf(state.context.facts),
-    facts: factsInWords(state.context.facts),
+    facts: factsInWords(state.context.facts, program.layout),
     readings: entries.filter((entry) => entry.kind === 'reading').slice(-READINGS).reverse(),
     mayAnswer: run.restorer !== person,
   };

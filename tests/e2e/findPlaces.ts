@@ -7,6 +7,8 @@ export interface Place {
   heading: string | RegExp;
   /** true where the page is not the same for everybody */
   own?: boolean;
+  /** true where another page of the list is made of the same parts */
+  again?: boolean;
   /** name of its picture in the documentation */
   picture?: string;
 }
@@ -24,12 +26,13 @@ export async function findPlaces(ownerUrl: string, who: DemoPersonKey): Promise<
         .orderBy('runs.started_at', 'asc')
         .execute();
       const one = (state: string) => runs.find((run) => run.state === state) ?? wanted(state);
-      const records = ['accepted', 'returned', 'submitted', 'closed'].map((state) => ({ path: `/records/${one(state).id}`, heading: /^(Supply|Fault|Stopped|Referred)/, ...(state === 'submitted' ? { own: true } : {}), ...(state === 'accepted' ? { picture: 'record' } : {}) }));
-      const open = runs.filter((run) => run.state === 'open');
+      const records = ['accepted', 'returned', 'submitted', 'closed'].map((state) => ({ path: `/records/${one(state).id}`, heading: /^(Supply|Fault|Stopped|Referred)/, ...(state === 'submitted' ? { own: true } : {}), ...(state === 'returned' || state === 'closed' ? { again: true } : {}), ...(state === 'accepted' ? { picture: 'record' } : {}) }));
+      const open = runs.filter((run) => run.state === 'open' && run.restorer !== demoPeople[who].id);
+      const others = [open.find((run) => run.hold !== null), open.find((run) => run.hold === null)].filter((run) => run !== undefined);
       return [
         { path: '/bench', heading: 'Bench', own: true },
         // a senior countersigns what waits; a restorer's own run is led on in tests of its own
-        ...open.filter((run) => run.restorer !== demoPeople[who].id).map((run) => ({ path: `/bench/${run.id}`, heading: run.hold !== null && who === 'senior' ? /^Countersign wanted/ : `${run.name}, serial ${run.serial}`, own: true })),
+        ...others.map((run) => ({ path: `/bench/${run.id}`, heading: run.hold !== null && who === 'senior' ? /^Countersign wanted/ : `${run.name}, serial ${run.serial}`, own: true })),
         { path: '/trees', heading: 'Fault trees', picture: 'trees' },
         { path: '/trees/first-power', heading: 'Dormant three-rail supply: first power', picture: 'tree' },
         { path: '/machines', heading: 'Machines', picture: 'machines' },

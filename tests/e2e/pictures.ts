@@ -1,7 +1,7 @@
 /** Makes the pictures of the documentation from a fresh demo: `npm run pictures`. A few minutes; needs Chromium. */
 import { mkdirSync } from 'node:fs';
 
-import { chromium, type Browser, type Page } from '@playwright/test';
+import { chromium, expect, type Browser, type Page } from '@playwright/test';
 
 import { DEMO_PASSWORD, type DemoPersonKey } from '@/db/seeds/demoPeople';
 import { inProject } from '@/server/cli/projectFiles';
@@ -10,6 +10,7 @@ import { BenchPage } from './BenchPage';
 import { findPlaces } from './findPlaces';
 import { startStack, type Stack } from './harness';
 import type { Seen } from './readScreen';
+import { showScheme } from './showScheme';
 import { signIn } from './signIn';
 
 const folder = inProject('docs/pictures');
@@ -20,22 +21,30 @@ const sizes = [
 const schemes = ['light', 'dark'] as const;
 const TREE = 'Dormant three-rail supply: first power';
 
-/** The page as it stands, in both sizes and by day and by night. */
+/** The page as it stands, from its top, in both sizes and by day and by night. */
 async function take(page: Page, what: string): Promise<void> {
   for (const size of sizes) {
     for (const colorScheme of schemes) {
       await page.setViewportSize(size);
-      await page.emulateMedia({ colorScheme, reducedMotion: 'reduce' });
-      await page.evaluate('document.fonts.ready.then(() => undefined)');
+      await settle(page, colorScheme);
       await page.screenshot({ path: `${folder}/${what}-${size.width}-${colorScheme}.png`, caret: 'hide', animations: 'disabled' });
     }
   }
   process.stdout.write(`${what}\n`);
 }
 
+/** Everything is fetched, the sheet has the colours asked for and stands at its top, and nothing lies under the pointer. */
+async function settle(page: Page, colorScheme: (typeof schemes)[number]): Promise<void> {
+  await page.mouse.move(0, 0);
+  await expect(page.getByText(/^(Fetching|Reading the entries)/)).toHaveCount(0, { timeout: 30_000 });
+  await showScheme(page, colorScheme);
+  await page.evaluate(`document.querySelectorAll('[role=main] div').forEach((box) => (box.scrollTop = 0))`);
+  await page.evaluate('document.fonts.ready.then(() => undefined)');
+}
+
 /** `clock` where waits of the bench are passed over. */
 async function openPage(browser: Browser, stack: Stack, who: DemoPersonKey, clock = true): Promise<Page> {
-  const context = await browser.newContext({ baseURL: stack.url, viewport: { width: 390, height: 844 } });
+  const context = await browser.newContext({ baseURL: stack.url, viewport: { width: 390, height: 844 }, reducedMotion: 'reduce' });
   const page = await context.newPage();
   if (clock) await page.clock.install();
   await signIn(page, who);
@@ -52,10 +61,6 @@ async function still(browser: Browser, stack: Stack): Promise<void> {
     if (picture === undefined) continue;
     await page.goto(path);
     await page.getByRole('heading', { level: 1, name: heading }).waitFor();
-    await page
-      .getByText(/^(Fetching|Reading the entries)/)
-      .first()
-      .waitFor({ state: 'detached' });
     await take(page, picture);
   }
   await page.context().close();
@@ -105,8 +110,9 @@ const browser = await chromium.launch({
   args: ['--no-sandbox', '--disable-gpu'],
 });
 try {
-  await run(browser, stack);
+  // the places first, as a new workshop finds them
   await still(browser, stack);
+  await run(browser, stack);
 } finally {
   await browser.close();
   await stack.stop();

@@ -63,7 +63,7 @@ export function DataTable<Row>({ caption, columns, rows, rowKey, rowTarget, sort
           </View>
         </View>
       )}
-      <View role="rowgroup" style={stacked ? { borderTopWidth: line.rule, borderTopColor: colors.ink } : null}>
+      <View role="rowgroup">
         {rows.map((row) => {
           const to = rowTarget?.(row);
           return (

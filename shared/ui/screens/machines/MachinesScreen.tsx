@@ -33,7 +33,7 @@ const columns: Column<Machine>[] = [
   {
     key: 'release',
     title: 'Release',
-    grow: 1.2,
+    grow: 1.8,
     cell: (m) => <BodyText tone={m.release?.valid ? 'ink' : 'soft'}>{releaseWord(m.release)}</BodyText>,
   },
 ];

@@ -126,7 +126,7 @@ function Suspects({ tree }: { tree: Tree }) {
             grow: 1.6,
             cell: (s) => (
               <BodyText tone={s.killedBy.length > 0 ? 'ink' : 'soft'}>
-                {s.killedBy.map((id) => tree.suspects.find((k) => k.id === id)?.part ?? id).join(', ') || 'none'}
+                {s.killedBy.map((id) => killerWords(tree, id)).join('; ') || 'none'}
               </BodyText>
             ),
           },
@@ -134,6 +134,12 @@ function Suspects({ tree }: { tree: Tree }) {
       />
     </Section>
   );
+}
+
+/** A part can be a killer in more than one way: its mode tells which. */
+function killerWords(tree: Tree, id: string): string {
+  const killer = tree.suspects.find((k) => k.id === id);
+  return killer === undefined ? id : `${killer.part}, ${MODE_WORDS[killer.mode]}`;
 }
 
 function OtherVersions({ version, versions }: Props) {
