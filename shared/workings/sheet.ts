@@ -4,6 +4,7 @@ import { z } from 'zod';
 import { formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { Unit } from '@/shared/quantity/units';
 import { UNITS } from '@/shared/quantity/units';
+import type { Circuit, Plot } from '@/shared/workings/plot';
 
 /** What a form needs to know about one input besides its schema; read it with `fieldsOf`. */
 export interface FieldInfo {
@@ -30,6 +31,10 @@ export interface SheetAnswer<Result> {
   readonly caution?: string;
   readonly validity: string;
   readonly source: string;
+  /** The answer drawn, where a curve says more than the line. */
+  readonly plot?: Plot;
+  /** The circuit with its volts and amps. */
+  readonly drawing?: Circuit;
 }
 
 /** A refused input: the field that it belongs to and a sentence for the person who typed it. */
