@@ -8,7 +8,17 @@ const cell = (text: string): string => text.replaceAll('|', '\\|');
 
 function whenNotGiven({ fallback }: FieldInfo): string {
   if (fallback === undefined) return 'must be given';
+  if (Array.isArray(fallback)) return fallback.length === 0 ? 'none' : JSON.stringify(fallback);
   return fallback === null ? 'none' : String(fallback);
+}
+
+function inputLines(inputs: readonly (readonly [string, FieldInfo])[], before = ''): readonly string[] {
+  return inputs.flatMap(([name, field]) => {
+    const what =
+      field.choices === null ? field.description : `${field.description}: ${field.choices.map((choice) => `\`${choice}\``).join(', ')}`;
+    const line = `| ${field.title} (\`${before}${name}\`) | ${cell(what)} | ${field.unit ?? ''} | ${whenNotGiven(field)} |`;
+    return [line, ...(field.rows === null ? [] : inputLines(field.rows.columns, `${name}[].`))];
+  });
 }
 
 function section(sheet: AnySheet): readonly string[] {
@@ -22,11 +32,7 @@ function section(sheet: AnySheet): readonly string[] {
     '| input | what it is | unit | when not given |',
     '| --- | --- | --- | --- |',
   ];
-  for (const [name, field] of fieldsOf(sheet.inputs)) {
-    const what =
-      field.choices === null ? field.description : `${field.description}: ${field.choices.map((choice) => `\`${choice}\``).join(', ')}`;
-    lines.push(`| ${field.title} (\`${name}\`) | ${cell(what)} | ${field.unit ?? ''} | ${whenNotGiven(field)} |`);
-  }
+  lines.push(...inputLines(fieldsOf(sheet.inputs)));
   lines.push('', '**Formula**', '', ...sheet.law.map((line) => `- ${line}`));
   lines.push(
     '',

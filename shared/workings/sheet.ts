@@ -6,14 +6,29 @@ import type { Unit } from '@/shared/quantity/units';
 import { UNITS } from '@/shared/quantity/units';
 import type { Circuit, Plot } from '@/shared/workings/plot';
 
+/** How an input is entered: `numberField`, `choiceField`, `textField` and `rowsField` make one each. */
+export type FieldKind = 'number' | 'choice' | 'text' | 'rows';
+
+/** What a form needs to know about a list of rows; its columns are inputs like any other. */
+export interface RowsInfo {
+  /** One row in a word or two, such as `rail`; a form writes “rail 2” and “add a rail” with it. */
+  readonly rowName: string;
+  readonly fewest: number;
+  readonly most: number;
+  readonly columns: readonly (readonly [string, FieldInfo])[];
+}
+
 /** What a form needs to know about one input besides its schema; read it with `fieldsOf`. */
 export interface FieldInfo {
+  readonly kind: FieldKind;
   readonly title: string;
   readonly description: string;
   /** Null for a plain number or a choice. */
   readonly unit: Unit | null;
   /** The choices of a choice, else null. */
   readonly choices: readonly string[] | null;
+  /** The rows of a list, else null. */
+  readonly rows: RowsInfo | null;
   /** Whether it may be left empty (null). */
   readonly mayBeEmpty: boolean;
   /** What stands in when it is not given; undefined where it must be given. */
@@ -37,7 +52,10 @@ export interface SheetAnswer<Result> {
   readonly drawing?: Circuit;
 }
 
-/** A refused input: the field that it belongs to and a sentence for the person who typed it. */
+/**
+ * A refused input: the field that it belongs to and a sentence for the person who typed it. A cell of a list is named
+ * `list.row.column`, rows counted from zero (`rails.1.volts`); a whole row is `rails.1`. The sentence counts from one.
+ */
 export interface SheetRefusal {
   readonly ok: false;
   readonly field: string;
@@ -104,6 +122,55 @@ export function choiceField<const Choice extends readonly [string, ...string[]]>
   return z.enum(choices, `${title} must be one of: ${choices.join(', ')}.`).meta({ title, description, unit: null });
 }
 
+/** A short text, such as the name by which other rows speak of this one; spaces at its ends are dropped. */
+export function textField(title: string, description: string, most = 60): z.ZodString {
+  return z
+    .string({ error: (issue) => (issue.input === undefined ? `${title} is missing.` : `${title} must be a text.`) })
+    .trim()
+    .min(1, `${title} is missing.`)
+    .max(most, `${title} must be ${String(most)} characters or fewer.`)
+    .meta({ title, description, unit: null });
+}
+
+interface RowsFieldOptions<Row extends z.ZodObject> {
+  readonly title: string;
+  readonly description: string;
+  /** One row in a word or two, without article: `rail`, `capacitor`, `reading`. */
+  readonly rowName: string;
+  /** A strict object of `numberField`, `choiceField` and `textField`, each with `.nullable().default(…)` where it may stay empty. */
+  readonly row: Row;
+  readonly fewest: number;
+  readonly most: number;
+}
+
+/**
+ * A list of alike rows: rails, capacitors, the readings of a logged curve. In JSON it is an array of objects, in a form a
+ * table whose columns `fieldsOf` describes under `rows.columns`; a list in a list is not made. A refused cell is named
+ * `list.row.column` (see SheetRefusal), also where the sheet itself refuses it; `runSheet` puts “Rail 2: ” before a
+ * sentence of a column's own schema.
+ */
+export function rowsField<Row extends z.ZodObject>(options: RowsFieldOptions<Row>): z.ZodArray<Row> {
+  const { title, description, rowName, row, fewest, most } = options;
+  return z
+    .array(row, { error: (issue) => (issue.input === undefined ? `${title} is missing.` : `${title} must be a list.`) })
+    .min(fewest, `${title} must be a list of ${String(fewest)} or more.`)
+    .max(most, `${title} must be a list of ${String(most)} or fewer.`)
+    .meta({ title, description, unit: null, rowName, fewest, most });
+}
+
+function rowsInfo(schema: z.core.$ZodType, meta: Readonly<Record<string, unknown>>): RowsInfo | null {
+  if (!(schema instanceof z.ZodArray) || !(schema.element instanceof z.ZodObject)) return null;
+  const count = (value: unknown, fallback: number): number => (typeof value === 'number' ? value : fallback);
+  const rowName = typeof meta['rowName'] === 'string' ? meta['rowName'] : 'row';
+  return { rowName, fewest: count(meta['fewest'], 0), most: count(meta['most'], Infinity), columns: fieldsOf(schema.element) };
+}
+
+function kindOf(schema: z.core.$ZodType): FieldKind {
+  if (schema instanceof z.ZodEnum) return 'choice';
+  if (schema instanceof z.ZodArray) return 'rows';
+  return schema instanceof z.ZodString ? 'text' : 'number';
+}
+
 function fieldInfo(name: string, schema: z.core.$ZodType): FieldInfo {
   let [inner, mayBeEmpty, fallback]: [z.core.$ZodType, boolean, unknown] = [schema, false, undefined];
   for (;;) {
@@ -118,7 +185,8 @@ function fieldInfo(name: string, schema: z.core.$ZodType): FieldInfo {
   const meta = z.globalRegistry.get(inner as z.ZodType) ?? {};
   const unit = typeof meta['unit'] === 'string' && meta['unit'] in UNITS ? (meta['unit'] as Unit) : null;
   const choices = inner instanceof z.ZodEnum ? inner.options.map(String) : null;
-  return { title: meta.title ?? name, description: meta.description ?? '', unit, choices, mayBeEmpty, fallback };
+  const words = { title: meta.title ?? name, description: meta.description ?? '' };
+  return { kind: kindOf(inner), ...words, unit, choices, rows: rowsInfo(inner, meta), mayBeEmpty, fallback };
 }
 
 /** What a form needs to know about every input of a sheet, in the order of the form. */
@@ -138,11 +206,21 @@ export function runSheet<Inputs extends z.ZodObject, Result>(
   const parsed = sheet.inputs.safeParse(input);
   if (parsed.success) return sheet.compute(parsed.data);
   const [issue] = parsed.error.issues;
-  if (issue === undefined) return { ok: false, field: '', say: 'The inputs cannot be read.' };
+  return issue === undefined ? { ok: false, field: '', say: 'The inputs cannot be read.' } : refusalOf(sheet, issue);
+}
+
+function refusalOf(sheet: Pick<Sheet, 'title' | 'inputs'>, issue: z.core.$ZodIssue): SheetRefusal {
+  const path = issue.path.map(String);
+  const [list = '', row] = path;
+  const rows = fieldsOf(sheet.inputs).find(([name]) => name === list)?.[1].rows ?? null;
+  const where = rows === null || row === undefined ? null : `${rows.rowName} ${String(Number(row) + 1)}`;
+  const Where = where === null ? '' : `${where.charAt(0).toUpperCase()}${where.slice(1)}`;
   if (issue.code === 'unrecognized_keys') {
     const [key = ''] = issue.keys;
-    return { ok: false, field: key, say: `${sheet.title} has no input “${key}”.` };
+    return { ok: false, field: [...path, key].join('.'), say: `${where === null ? sheet.title : Where} has no input “${key}”.` };
   }
-  const field = issue.path.map(String).join('.');
-  return { ok: false, field, say: field === '' ? `${sheet.title} takes an object with its inputs.` : issue.message };
+  const field = path.join('.');
+  if (field === '') return { ok: false, field, say: `${sheet.title} takes an object with its inputs.` };
+  if (where === null) return { ok: false, field, say: issue.message };
+  return { ok: false, field, say: path.length === 2 ? `${Where} must be a row with its columns.` : `${Where}: ${issue.message}` };
 }

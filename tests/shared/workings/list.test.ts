@@ -31,8 +31,16 @@ describe('SHEETS', () => {
   );
 
   it.each(SHEETS.map((sheet) => [sheet.id, sheet] as const))('%s refuses nonsense with a sentence at the field', (_, sheet) => {
-    for (const name of Object.keys(sheet.inputs.shape)) {
-      for (const nonsense of ['x', {}, [], true, Number.NaN, Number.POSITIVE_INFINITY, -1e300]) {
+    for (const [name, { kind, rows }] of fieldsOf(sheet.inputs)) {
+      for (const nonsense of [
+        kind === 'text' ? ' ' : 'x',
+        {},
+        rows?.fewest === 0 ? 'x' : [],
+        true,
+        Number.NaN,
+        Number.POSITIVE_INFINITY,
+        -1e300,
+      ]) {
         const answer = runSheet(sheet, { ...sheet.example, [name]: nonsense });
         expect(answer).toMatchObject({ ok: false, field: name });
         expect(answer.ok ? '' : answer.say).toMatch(/^[A-Z].* (must be|is missing).*\.$/);
