@@ -1,6 +1,8 @@
 /** The one door for tree and profile documents: after it nothing is checked again. */
 import type { z } from 'zod';
 
+import { migrate, profileMigrations, treeMigrations } from './migrations';
+import type { Migration } from './migrations';
 import { profileSchema } from './profile';
 import type { Profile } from './profile';
 import { treeShape } from './tree';
@@ -21,16 +23,21 @@ export const treeSchema = treeShape.superRefine((tree, ctx) => {
   for (const fault of treeFaults(tree)) ctx.addIssue({ code: 'custom', path: fault.path, message: fault.message });
 });
 
-/** Reads a tree from parsed JSON. All faults are reported, with step and key. */
-export function parseTree(json: unknown): Parsed<Tree> {
-  const parsed = treeSchema.safeParse(json);
-  return parsed.success ? { ok: true, value: parsed.data } : { ok: false, faults: toFaults(parsed.error, json) };
+/** Reads a tree from parsed JSON of any format up to today's. All faults are reported, with step and key. */
+export function parseTree(json: unknown, migrations: readonly Migration[] = treeMigrations): Parsed<Tree> {
+  return read(json, migrations, treeSchema);
 }
 
-/** Reads a profile from parsed JSON. All faults are reported, with their key. */
-export function parseProfile(json: unknown): Parsed<Profile> {
-  const parsed = profileSchema.safeParse(json);
-  return parsed.success ? { ok: true, value: parsed.data } : { ok: false, faults: toFaults(parsed.error, json) };
+/** Reads a profile from parsed JSON of any format up to today's. All faults are reported, with their key. */
+export function parseProfile(json: unknown, migrations: readonly Migration[] = profileMigrations): Parsed<Profile> {
+  return read(json, migrations, profileSchema);
+}
+
+function read<T>(json: unknown, migrations: readonly Migration[], schema: z.ZodType<T>): Parsed<T> {
+  const migrated = migrate(json, migrations);
+  if (!migrated.ok) return { ok: false, faults: [{ step: null, key: 'format', message: migrated.message }] };
+  const parsed = schema.safeParse(migrated.json);
+  return parsed.success ? { ok: true, value: parsed.data } : { ok: false, faults: toFaults(parsed.error, migrated.json) };
 }
 
 function toFaults(error: z.ZodError, json: unknown): DocumentFault[] {

@@ -84,6 +84,8 @@ const each = z.enum(['rails', 'returns', 'stores', 'points']).optional();
 const power = z.enum(['live', 'dead']).optional();
 const reading = {
   quantity: z.enum(QUANTITY_NAMES),
+  /** the unit that the figures of the limit are in; only the SI unit of the quantity is taken, so that millivolts are never read as volts */
+  unit: text(8).optional(),
   /** red and black probe; for a row-wise step the row's own point takes the place of red */
   points: z.strictObject({ red: idSchema.optional(), black: idSchema.optional() }).optional(),
   /** how the probe gets there: clipped by an earlier dead step, one insulated probe by hand, or no contact */

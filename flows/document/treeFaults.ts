@@ -1,5 +1,5 @@
 /** What a tree document can get wrong beyond its shape: every fault at once, each with step and key. */
-import { DEAD_QUANTITIES } from './ids';
+import { DEAD_QUANTITIES, QUANTITIES } from './ids';
 import { DEFAULT_VERDICT, OUTCOMES_OF } from './outcomes';
 import type { Outcome } from './outcomes';
 import type { Exit, Step } from './steps';
@@ -12,7 +12,8 @@ export interface TreeFault {
 
 /** Each check is a list of faults of one kind; together they are all that `parseTree` reports after the shape. */
 export function treeFaults(tree: Tree): TreeFault[] {
-  return [...duplicateIds(tree), ...headFaults(tree), ...tree.steps.flatMap((step, i) => stepFaults(tree, names(tree), step, i)), ...reentryFaults(tree)];
+  const known = names(tree);
+  return [...duplicateIds(tree), ...headFaults(tree), ...tree.steps.flatMap((step, i) => stepFaults(known, step, i)), ...reentryFaults(tree)];
 }
 
 interface Names {
@@ -60,7 +61,7 @@ function headFaults(tree: Tree): TreeFault[] {
   return faults;
 }
 
-function stepFaults(tree: Tree, known: Names, step: Step, at: number): TreeFault[] {
+function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
   const faults: TreeFault[] = [];
   const add = (key: (string | number)[], message: string) => faults.push({ path: ['steps', at, ...key], message });
   step.exits.forEach((exit: Exit, j) => {
@@ -88,6 +89,7 @@ function stepFaults(tree: Tree, known: Names, step: Step, at: number): TreeFault
       break;
     case 'measure':
     case 'soak':
+      if (step.unit !== undefined && step.unit !== QUANTITIES[step.quantity]) add(['unit'], `a limit of ${step.quantity} is in ${QUANTITIES[step.quantity]}, not in ${step.unit}`);
       if (step.probe === 'clipped' && step.contact !== 'none') add(['contact'], 'a clipped reading needs no contact');
       if (step.probe === 'hand' && step.contact === 'none') add(['contact'], 'a probe held by hand is contact `probe`');
       if (DEAD_QUANTITIES.includes(step.quantity) && step.power === 'live') add(['power'], 'this quantity is only read dead');

@@ -37,7 +37,7 @@ describe('parseTree', () => {
   });
   it.each([
     ['an unknown key', (t: Json) => (t['colour'] = 'red'), /Unrecognized key/],
-    ['a format of another day', (t: Json) => (t['format'] = 2), /expected 1/],
+    ['a format of another day', (t: Json) => (t['format'] = 9), /of format 9, and this program reads formats up to/],
     ['a prior that is no number', (t: Json) => ((t['suspects'] as Json[])[0]!['prior'] = 'likely'), /expected number/],
     ['a negative prior', (t: Json) => ((t['suspects'] as Json[])[0]!['prior'] = -1), />0/],
     ['an id like 10', (t: Json) => ((t['suspects'] as Json[])[0]!['id'] = '10'), /starts with a letter/],
@@ -59,6 +59,7 @@ describe('parseTree', () => {
     ['an earthed clip on the primary', [step('do', 'clip', 'done', { contact: 'hands', fits: [{ id: 'scope', name: 'scope', class: 'clip', area: 'primary', earthed: true, point: 'raw' }] })], /never clipped to the primary/],
     ['ohms read live', [step('measure', 'ohms', 'done', { contact: 'probe', probe: 'hand', quantity: 'ohms', power: 'live', limit: { is: 'above', low: 1 } })], /only read dead/],
     ['a nominal of its row without rows', [step('measure', 'm', 'done', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', limit: { is: 'nominal', of: 'row', tolerance: 'row' } })], /over rails/],
+    ['a limit in another unit than its quantity', [step('measure', 'm', 'done', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', unit: 'mV', limit: { is: 'below', high: 50 } })], /m\|unit\|a limit of volts-dc is in V, not in mV/],
     ['an empty limit', [step('measure', 'm', 'done', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', limit: { is: 'between', low: 5, high: 4 } })], /low end lies above/],
     ['mains into the raw node', [lamp('l', 'done', { node: 'raw' })], /mains goes into the inlet/],
     ['a lamp that is not named', [{ ...lamp('l', 'done'), lampWatts: undefined }], /names no lamp/],
