@@ -1,7 +1,6 @@
 /** The theme of the page: scheme, colours, and the way to change them. */
 import { createContext, useContext, useEffect, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
-import { useColorScheme } from 'react-native';
 import { PaperProvider } from 'react-native-paper';
 
 import { palettes } from '@/shared/ui/theme/palette';
@@ -9,6 +8,7 @@ import type { Palette, Scheme } from '@/shared/ui/theme/palette';
 import { paperTheme } from '@/shared/ui/theme/paperTheme';
 import { keepSchemeChoice, readSchemeChoice, schemeFor } from '@/shared/ui/theme/schemeChoice';
 import type { SchemeChoice } from '@/shared/ui/theme/schemeChoice';
+import { useSystemScheme } from '@/shared/ui/theme/useSystemScheme';
 
 export interface Theme {
   scheme: Scheme;
@@ -21,7 +21,7 @@ const ThemeContext = createContext<Theme>({ scheme: 'light', colors: palettes.li
 
 /** Colours and scheme for the page below; follows the system until a person chooses. */
 export function ThemeProvider({ children }: { children: ReactNode }) {
-  const system = useColorScheme();
+  const system = useSystemScheme();
   const [choice, setKept] = useState<SchemeChoice>(readSchemeChoice);
   const scheme = schemeFor(choice, system);
   const theme = useMemo<Theme>(
