@@ -46,6 +46,18 @@ const TIME_SPELLINGS: Readonly<Record<string, number>> = {
   hours: 3600,
 };
 
+/** Other lengths are taken for metres; foot and inch are exact since the international yard of 1959. */
+const LENGTH_SPELLINGS: Readonly<Record<string, number>> = {
+  mm: 0.001,
+  cm: 0.01,
+  ft: 0.3048,
+  foot: 0.3048,
+  feet: 0.3048,
+  in: 0.0254,
+  inch: 0.0254,
+  inches: 0.0254,
+};
+
 /** Markings of old capacitors: MFD is microfarads, MMF and UUF are picofarads. Common practice, no source. */
 const OLD_CAPACITOR_SPELLINGS: Readonly<Record<string, Prefix>> = {
   mfd: 'μ',
@@ -75,6 +87,10 @@ function meaningOf(suffix: string, unit: Unit, current: 'ac' | 'dc' | null): Suf
     const factor = TIME_SPELLINGS[suffix.toLowerCase()];
     // A capital H is the henry.
     if (factor !== undefined && suffix !== 'H') return { unit, prefix: '', factor, current };
+  }
+  if (unit === 'm') {
+    const factor = LENGTH_SPELLINGS[suffix.toLowerCase()];
+    if (factor !== undefined && !suffix.startsWith('M')) return { unit, prefix: '', factor, current };
   }
   if (unit === 'F') {
     const prefix = OLD_CAPACITOR_SPELLINGS[suffix.toLowerCase()];

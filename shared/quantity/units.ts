@@ -16,7 +16,7 @@ export const PREFIXES: Readonly<Record<Prefix, { readonly exponent: number; read
 };
 
 /** Printed symbols of the units, always with Ω U+03A9; the empty one is a plain number. */
-export type Unit = '' | 'V' | 'A' | 'Ω' | 'F' | 'W' | 'VA' | 'J' | 'C' | 'Hz' | 'H' | 's' | '°C' | '%';
+export type Unit = '' | 'V' | 'A' | 'Ω' | 'F' | 'W' | 'VA' | 'J' | 'C' | 'Hz' | 'H' | 's' | '°C' | '%' | 'm' | 'mm²' | 'A²s';
 
 /** What is known about one unit. */
 export interface UnitInfo {
@@ -142,6 +142,34 @@ export const UNITS: Readonly<Record<Unit, UnitInfo>> = {
     anyCase: ['°c', 'degc', 'deg c', 'celsius', 'degrees celsius', 'degrees'],
     pointLetter: null,
     absurdAbove: 1500,
+  },
+  m: {
+    singular: 'metre',
+    plural: 'metres',
+    // No milli: `350m` must be 350 metres on entry, and so a printed length never takes it.
+    prefixes: ['', 'k'],
+    exactCase: ['m'],
+    anyCase: ['metre', 'metres', 'meter', 'meters'],
+    pointLetter: null,
+    absurdAbove: 100e3,
+  },
+  'mm²': {
+    singular: 'square millimetre',
+    plural: 'square millimetres',
+    prefixes: [''],
+    exactCase: [],
+    anyCase: ['mm²', 'mm2', 'sqmm', 'sq mm', 'square millimetre', 'square millimetres'],
+    pointLetter: null,
+    absurdAbove: 10e3,
+  },
+  'A²s': {
+    singular: 'amp-squared second',
+    plural: 'amp-squared seconds',
+    prefixes: ['μ', 'm', '', 'k', 'M'],
+    exactCase: [],
+    anyCase: ['a²s', 'a2s', 'a²·s'],
+    pointLetter: null,
+    absurdAbove: 1e9,
   },
   '': {
     singular: 'plain number',

@@ -4,12 +4,19 @@ import { sheet as railLimits } from '@/shared/workings/railLimits';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
 import type { Sheet } from '@/shared/workings/sheet';
+import { sheet as wireDrop } from '@/shared/workings/wireDrop';
 
 /** A sheet whose own types are not known where it is listed; feed it through `runSheet`, which parses first. */
 export type AnySheet = Sheet;
 
 // A list forgets each sheet's own input type; only runSheet, which parses by that sheet's schema, may call compute.
-export const SHEETS: readonly AnySheet[] = [seriesLamp, bleedDown, railLimits, readingLimit] as readonly unknown[] as readonly AnySheet[];
+export const SHEETS: readonly AnySheet[] = [
+  seriesLamp,
+  bleedDown,
+  railLimits,
+  readingLimit,
+  wireDrop,
+] as readonly unknown[] as readonly AnySheet[];
 
 /** The sheet of that id, or undefined. */
 export function sheetById(id: string): AnySheet | undefined {
