@@ -127,6 +127,7 @@ function machineOf(layout: Layout): RunMachine {
       RESUME: away,
       PAUSE: [{ guard: taken, actions: apply, target: '#~paused' }],
       SECOND_PRESENT: [{ guard: taken, actions: apply }],
+      NOTE: [{ guard: taken, actions: apply }],
       TICK: [{ guard: goes(null), actions: apply }, ...away],
     },
     states: {

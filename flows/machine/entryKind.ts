@@ -3,7 +3,7 @@ import type { RunContext } from './context';
 import type { MachineEvent } from './events';
 
 export const ENTRY_KINDS_OF_RUN = [
-  'answer', 'reading', 'photo', 'part', 'warning-read', 'energised', 'isolated', 'lapsed', 'hold-asked', 'hold-given', 'hold-refused', 'tag', 'paused', 'resumed', 'stopped', 'closed',
+  'answer', 'reading', 'photo', 'part', 'warning-read', 'energised', 'isolated', 'lapsed', 'hold-asked', 'hold-given', 'hold-refused', 'tag', 'paused', 'resumed', 'stopped', 'closed', 'addendum',
 ] as const;
 export type RunEntryKind = (typeof ENTRY_KINDS_OF_RUN)[number];
 
@@ -43,5 +43,7 @@ export function entryKindOf(event: MachineEvent, after: RunContext): RunEntryKin
       return 'lapsed';
     case 'CLOSE':
       return 'closed';
+    case 'NOTE':
+      return 'addendum';
   }
 }

@@ -15,6 +15,10 @@ const common = {
   boot: z.string().min(1).max(60),
 };
 
+const workingsValue = z.union([z.number(), z.string().max(200), z.boolean(), z.null()]);
+/** Inputs of a sheet of workings in SI, rows of a list included. */
+const workingsInputs = z.record(z.string().max(60), z.union([workingsValue, z.array(z.record(z.string().max(60), workingsValue)).max(100)]));
+
 const instrument = z.strictObject({
   id: z.string().min(1).max(60),
   twoPole: z.boolean(),
@@ -47,6 +51,8 @@ export const machineEventSchema = z.discriminatedUnion('type', [
   /** nothing but the passing of time */
   z.strictObject({ ...common, type: z.literal('TICK') }),
   z.strictObject({ ...common, type: z.literal('CLOSE') }),
+  /** workings put into the record; it moves nothing, so it may come from any page of the restorer's */
+  z.strictObject({ ...common, type: z.literal('NOTE'), sheet: z.string().regex(/^[a-z][a-z0-9-]{0,39}$/), inputs: workingsInputs, headline: z.string().trim().min(1).max(500) }),
 ]);
 
 export type MachineEvent = z.infer<typeof machineEventSchema>;

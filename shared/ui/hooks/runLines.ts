@@ -8,6 +8,7 @@ import type { MachineEvent } from '@/flows/machine/events';
 import { SAFE } from '@/flows/machine/program';
 import { formatQuantity } from '@/shared/quantity/formatQuantity';
 import { QUANTITIES } from '@/shared/quantity/quantities';
+import { sheetById } from '@/shared/workings/list';
 
 export interface RunLine {
   /** epoch milliseconds */
@@ -84,6 +85,8 @@ function wordsOf(program: Program, before: RunContext, event: MachineEvent): str
       return 'Proved dead has lapsed';
     case 'CLOSE':
       return 'Closed';
+    case 'NOTE':
+      return `Noted, ${sheetById(event.sheet)?.title ?? event.sheet}: ${event.headline}`;
   }
 }
 

@@ -178,6 +178,20 @@ describe('posting entries', () => {
     expect((await BenchDevice.start(restorer, server, { machine: workshop.machine }, workshop.instruments.tester)).run).not.toBe(device.run);
   });
 
+  it('takes noted workings from another page of the restorer’s as an entry that moves nothing, and keeps them in the record', async () => {
+    device.pass();
+    await device.send();
+    const before = device.view.key;
+    const event = { ...device.stamp({ type: 'NOTE', sheet: 'rail-limits', inputs: { nominalVolts: 5, tolerancePercent: 5 }, headline: '4.75 V to 5.25 V.' }), boot: 'another-tab' };
+    const { entries } = postedEntriesSchema.parse((await post([{ id: uuidv7(), seq: device.seq + 1, event }])).body);
+    expect(entries[0]).toMatchObject({ kind: 'addendum', body: { event, step: before, then: before } });
+    await device.fetch();
+    device.answer('sound').do({ type: 'STOP' }).dead().do({ type: 'CLOSE' }).do({ type: 'CLOSE' });
+    await device.send();
+    const record = await restorer.get(`/api/records/${device.run}`);
+    expect(JSON.stringify(record.body['entries'])).toContain('4.75 V to 5.25 V.');
+  });
+
   it('goes on from the entries alone when the kept snapshot is gone or belongs to something else', async () => {
     device.pass();
     await device.send();

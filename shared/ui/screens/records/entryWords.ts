@@ -2,6 +2,7 @@
 import type { Instrument } from '@/shared/contract/instruments';
 import type { RecordEntry } from '@/shared/record/recordEntry';
 import type { ReadingLine } from '@/shared/ui/screens/records/readingsOf';
+import { noteWords } from '@/shared/ui/screens/records/noteWords';
 import type { ReplayedEntry } from '@/shared/ui/screens/records/replayRecord';
 
 export interface EntryWords {
@@ -87,6 +88,7 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'conflict':
     case 'correction':
     case 'addendum':
+      if (event?.type === 'NOTE') return noteWords(event);
       return says(
         {
           part: 'Part replaced',

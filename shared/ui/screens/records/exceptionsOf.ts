@@ -128,7 +128,7 @@ const BY_HAND = ['ROW', 'READING', 'ANSWER', 'PHOTO', 'WARNING_READ'];
 /** Answers that came sooner than the act can be done; a row of them is told once. */
 function hurried(entries: readonly ReplayedEntry[]): RecordException[] {
   const found: (RecordException & { count: number; last: number; place: string; soonestMs: number })[] = [];
-  const played = entries.filter((e) => e.event !== null);
+  const played = entries.filter((e) => e.event !== null && e.event.type !== 'NOTE');
   played.forEach((here, i) => {
     const earlier = played[i - 1];
     if (!here.event || !earlier?.event || !BY_HAND.includes(here.event.type)) return;
