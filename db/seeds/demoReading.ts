@@ -25,6 +25,7 @@ export function goodValue(row: ReadingRow, salt = ''): number {
   // a dead circuit reads next to nothing, whatever its limit allows
   if (row.plain) return significant((row.high ?? 1) * 0.01 * scatter(`${salt}/${row.id}`));
   const off = (scatter(`${salt}/${row.id}`) - 0.5) * 2 * SCATTER_SHARE;
+  if (row.twin?.is === 'twin') return significant(0.6 * (1 + off * 0.02));
   if (row.low !== null && row.high !== null) {
     const middle = row.nominal ?? (row.low + row.high) / 2;
     return significant(middle + off * Math.min(row.high - middle, middle - row.low));

@@ -1,4 +1,5 @@
 /** What differs in one step that both versions have. */
+import { SHOWN } from '../document/outcomes';
 import type { Exit, Step } from '../document/steps';
 import { same, shown } from './change';
 import type { Change, Risk } from './change';
@@ -78,6 +79,7 @@ function exitChanges(older: Step, newer: Step): Change[] {
     if (was.to !== is.to) add('exit', 'order', `${name} now leads to ${is.to}, not to ${was.to}.`);
     if (was.then !== is.then || was.atMost !== is.atMost) add('exit', 'order', `${name} is now ${countOf(is)}, it was ${countOf(was)}.`);
     if (was.verdict !== is.verdict) add('exit', 'order', `${name} is now judged ${is.verdict ?? 'as usual'}, it was ${was.verdict ?? 'as usual'}.`);
+    if (was.shows !== is.shows) add('evidence', 'order', `${name} now shows ${shownAs(is)}, before: ${shownAs(was)}.`);
     if (was.label !== is.label || was.reason !== is.reason) add('reworded', 'text', `the words of ${name} have changed.`);
     changes.push(...evidenceChanges(was, is).map(({ say, risk }): Change => ({ what: 'evidence', step: id, risk, say: `“${title}”: ${name} ${say}` })));
   }
@@ -100,6 +102,10 @@ function byAnswer(step: Step): Map<string, Exit> {
 
 function labelOf(exit: Exit | undefined, answer: string): string {
   return answer.startsWith('answer ') ? `“${exit?.label ?? answer.slice(7)}”` : `“${answer}”`;
+}
+
+function shownAs(exit: Exit): string {
+  return exit.shows === undefined ? 'nothing of a part' : SHOWN[exit.shows].name.toLowerCase();
 }
 
 function countOf(exit: Exit): string {

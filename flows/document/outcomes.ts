@@ -64,6 +64,14 @@ export const CHECK_KINDS: readonly Kind[] = ['observe', 'measure', 'soak', 'prov
 /** Acts whose unsure answer is a doubt too: what is perhaps not fitted, or perhaps not mended, bars power like an unsure reading. */
 export const ACT_KINDS: readonly Kind[] = ['do', 'work'];
 
+/** What an answer of a look shows about a part, beside which answer it was. */
+export const SHOWN = {
+  'not-original': { name: 'Not original', say: 'It is of another maker or batch than its neighbours, or its lead was cut or soldered again.' },
+  'large-over-current': { name: 'Large over-current', say: 'Burnt through and spattered inside: age does not do this. What drove the current is looked for before power.' },
+} as const;
+export type Shown = keyof typeof SHOWN;
+export const SHOWN_KINDS = Object.keys(SHOWN) as [Shown, ...Shown[]];
+
 /** What evidence an exit carries on a suspect, and its likelihood ratio (steps of Jeffreys' scale; nothing is ever zero). */
 export const EVIDENCE = { 'rules-out': 0.01, 'points-away': 0.1, 'says-nothing': 1, 'points-to': 10, 'all-but-proves': 100 } as const;
 export type EvidenceWord = keyof typeof EVIDENCE;

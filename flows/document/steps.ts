@@ -3,7 +3,7 @@ import { z } from 'zod';
 
 import { HAZARD_KINDS } from './hazards';
 import { AREAS, idSchema, QUANTITY_NAMES } from './ids';
-import { EVIDENCE_WORDS, OUTCOMES, VERDICTS } from './outcomes';
+import { EVIDENCE_WORDS, OUTCOMES, SHOWN_KINDS, VERDICTS } from './outcomes';
 
 const text = (max: number) => z.string().trim().min(1).max(max);
 
@@ -29,6 +29,8 @@ const exitSchema = z
     atMost: z.number().int().min(1).max(99).optional(),
     then: idSchema.optional(),
     evidence: z.array(evidence).max(64).optional(),
+    /** what this answer of a look shows about the part that it speaks of */
+    shows: z.enum(SHOWN_KINDS).optional(),
   })
   .refine((e) => (e.atMost === undefined) === (e.then === undefined), 'a counted exit says both `atMost` and `then`')
   .refine((e) => e.verdict !== 'find' || e.reason !== undefined, 'a find says its reason');
@@ -39,6 +41,8 @@ export const limitSchema = z.discriminatedUnion('is', [
   z.strictObject({ is: z.literal('between'), low: z.number(), high: z.number() }).refine((l) => l.low < l.high, 'the low end lies above the high end'),
   z.strictObject({ is: z.literal('below'), high: z.number() }),
   z.strictObject({ is: z.literal('above'), low: z.number() }),
+  /** like its twin: the same point of an identical circuit is read first, and this one lies within a share of it */
+  z.strictObject({ is: z.literal('twin'), of: text(80), within: z.number().min(0.001).max(0.5) }),
   z.strictObject({ is: z.literal('workings'), sheet: idSchema, low: text(40).nullable(), high: text(40).nullable() }),
 ]);
 export type Limit = z.infer<typeof limitSchema>;
@@ -87,7 +91,7 @@ const reading = {
   /** the unit that the figures of the limit are in; only the SI unit of the quantity is taken, so that millivolts are never read as volts */
   unit: text(8).optional(),
   /** red and black probe; for a row-wise step the row's own point takes the place of red */
-  points: z.strictObject({ red: idSchema.optional(), black: idSchema.optional() }).optional(),
+  points: z.strictObject({ red: idSchema.optional(), black: idSchema.optional(), twin: idSchema.optional() }).optional(),
   /** how the probe gets there: clipped by an earlier dead step, one insulated probe by hand, or no contact */
   probe: z.enum(['clipped', 'hand', 'none']),
   limit: limitSchema,

@@ -72,6 +72,9 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
     });
   });
   for (const message of partitionFaults(step)) add(['exits'], message);
+  step.exits.forEach((exit: Exit, j) => {
+    for (const message of shownFaults(step, exit)) add(['exits', j, 'shows'], message);
+  });
   step.tools.forEach((t, j) => {
     if (!known.tools.has(t)) add(['tools', j], `"${t}" is not on the opening list`);
   });
@@ -95,6 +98,8 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
       if (DEAD_QUANTITIES.includes(step.quantity) && step.power === 'live') add(['power'], 'this quantity is only read dead');
       if (step.limit.is === 'nominal' && (step.limit.of === 'row' || step.limit.tolerance === 'row') && step.each !== 'rails') add(['limit'], 'only a step over rails has a nominal and tolerance for its row');
       if (step.each === 'rails' && step.quantity !== 'volts-dc' && step.limit.is === 'nominal') add(['limit'], 'the nominal of a rail is in volts');
+      if (step.limit.is === 'twin') for (const fault of twinFaults(step)) add(...fault);
+      else if (step.points?.twin !== undefined) add(['points', 'twin'], 'only a reading that is held against its twin has one');
       if (step.kind === 'soak' && step.everyMinutes > step.holdMinutes) add(['everyMinutes'], 'longer than the soak itself');
       break;
     case 'discharge':
@@ -129,6 +134,24 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
       break;
   }
   return faults;
+}
+
+/** A twin is one reading at one point, taken with the probe in the hand: a clip stays where it is. */
+function twinFaults(step: Extract<Step, { kind: 'measure' | 'soak' }>): [(string | number)[], string][] {
+  return [
+    ...(step.kind === 'soak' ? [[['limit'], 'a soak is not held against a twin: only a measure step reads both'] satisfies [string[], string]] : []),
+    ...(step.each !== undefined ? [[['each'], 'one point is held against its twin, not a row each'] satisfies [string[], string]] : []),
+    ...(step.probe === 'clipped' ? [[['probe'], 'a clip stays where it is: the twin is read with the probe by hand, or without contact'] satisfies [string[], string]] : []),
+  ];
+}
+
+/** What an answer shows belongs to a look, and speaks for a suspect. */
+function shownFaults(step: Step, exit: Exit): string[] {
+  if (exit.shows === undefined) return [];
+  if (step.kind !== 'observe' || !exit.on.includes('answer')) return ['only an answer of an observation shows something of a part'];
+  const words = (exit.evidence ?? []).map((e) => e.says);
+  if (exit.shows === 'not-original' && words.includes('all-but-proves')) return ['a part that is not original is a reason to suspect it and no proof: `points-to`'];
+  return words.includes('points-to') || words.includes('all-but-proves') ? [] : ['it shows something of a part and raises no suspect'];
 }
 
 function powerFaults(known: Names, step: Extract<Step, { kind: 'energise' | 'raise' }>, add: (key: (string | number)[], message: string) => void): void {

@@ -15,6 +15,7 @@ import { follow, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 import { partsToDischarge } from '../facts/stores';
 import { liveAboveLimits } from './secondPerson';
+import { likeTwin } from './rows';
 import type { Row, WordRow } from './rows';
 
 type Answering = Extract<MachineEvent, { type: 'ROW' | 'READING' }>;
@@ -27,7 +28,8 @@ export function currentRows(layout: Layout, context: RunContext): readonly Row[]
   if (context.key === SAFE.opening) return layout.opening;
   if (context.key === SAFE.takeOut) return toTakeOut(context.facts.fitted).map((f) => thingRow(f, 'taken out'));
   if (context.key === SAFE.putBack) return context.facts.fitted.map((f) => thingRow(f, 'back as built'));
-  return layout.steps.get(context.key)?.rows ?? [];
+  const rows = layout.steps.get(context.key)?.rows ?? [];
+  return rows.some((row) => row.ask === 'reading' && row.twin !== undefined) ? rows.map((row) => likeTwin(row, context.rows.find((r) => r.id === 'twin'))) : rows;
 }
 
 /** Wall time in milliseconds from which a row may be answered, or null when it waits for nothing that has begun. */
@@ -76,6 +78,7 @@ function rowAnswer(row: Row, placed: ProgramStep | undefined, context: RunContex
   if (event.instrument === null) return no('instrument', 'Say with which instrument.');
   if (event.value !== 'over' && !Number.isFinite(event.value)) return no('bad-answer', 'That is not a number.');
   const result = classifyReading(row, event.value, event.instrument.uncertainty, event.falling === true);
+  if (row.twin?.is === 'twin') return { ok: true, answer: { id: row.id, result, value: event.value, uncertainty: event.instrument.uncertainty, at: event.at }, instrument: context.proofInstrument };
   if (placed?.step.kind !== 'prove-dead') return answer(result, event.value);
   if (!event.instrument.twoPole) return no('instrument', 'Proving dead takes a two-pole tester.', 'H2');
   if (context.proofInstrument !== null && context.proofInstrument !== event.instrument.id) return no('instrument', 'One instrument for the whole proof: this is another one.', 'H2');
@@ -88,7 +91,9 @@ function finish(layout: Layout, context: RunContext, placed: ProgramStep | undef
   const last = results.at(-1) ?? '';
   const good = ['in', 'out', 'done'];
   const endsHere = context.key === SAFE.opening ? last === 'cannot' : placed !== undefined && STOP_AT_FIRST.includes(placed.step.kind) && !good.includes(last);
-  if (!endsHere && context.rows.length < rows.length) return accept(context);
+  // without the twin there is nothing to hold the other reading against
+  const noTwin = rows.some((row) => row.ask === 'reading' && row.twin?.is === 'twin' && context.rows.some((r) => r.id === row.id && r.value === null));
+  if (!endsHere && !noTwin && context.rows.length < rows.length) return accept(context);
   if (context.key === SAFE.opening) {
     if (results.includes('cannot')) return accept({ ...context, rows: [], goto: SAFE.opening });
     return arriveAtFirst(layout, { ...context, facts: applyOps(context.facts, [{ op: 'opened' }]) });

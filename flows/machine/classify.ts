@@ -13,7 +13,10 @@ export function classifyReading(row: ReadingRow, value: number | 'over', uncerta
   const size = row.bySize ? Math.abs(value) : value;
   if (row.plain) return row.high === null || size <= row.high ? 'in' : 'high';
   const rail = railLimitsOf(row);
-  const decision = rail === null ? decide(size, { low: row.low, high: row.high }, uncertainty) : classifyRail(value, rail, uncertainty);
+  // a twin that reads nothing at all is like everything: there is no share of it
+  if (row.twin?.is === 'like' && row.nominal === 0) return 'cannot';
+  const both = row.twin?.is === 'like' ? Math.hypot(uncertainty, row.twin.uncertainty) : uncertainty;
+  const decision = rail === null ? decide(size, { low: row.low, high: row.high }, both) : classifyRail(value, rail, both);
   return decision === 'close-in' || decision === 'close-out' ? 'close' : decision;
 }
 

@@ -18,6 +18,8 @@ export interface RowAnswer {
   id: string;
   result: string;
   value: number | 'over' | null;
+  /** expanded uncertainty of a twin's reading: what is held against it carries both */
+  uncertainty?: number;
   at: number;
 }
 

@@ -127,7 +127,7 @@ function placeFaults({ step, rows, scope }: ProgramStep): DocumentFault[] {
     const tool = dischargeTool(step, scope.profile, scope.settings);
     return tooSmallFor(tool, scope.profile, scope.settings).map((part) => ({ step: step.id, key: 'toolWatts', message: `H3: the resistor of ${tool.ohms} Ω, ${tool.watts} W is too small for ${part.name}` }));
   }
-  if (rows.length > 0) return rows.flatMap((row) => (row.ask === 'reading' && row.low === null && row.high === null ? [{ step: step.id, key: 'limit', message: `the profile gives no limit for ${row.label}` }] : []));
+  if (rows.length > 0) return rows.flatMap((row) => (row.ask === 'reading' && row.twin === undefined && row.low === null && row.high === null ? [{ step: step.id, key: 'limit', message: `the profile gives no limit for ${row.label}` }] : []));
   const wants = NEEDS_ROWS.includes(step.kind) || ('each' in step && step.each !== undefined);
   return wants ? [{ step: step.id, key: 'each' in step && step.each !== undefined ? 'each' : 'kind', message: 'the profile has no row for this step' }] : [];
 }

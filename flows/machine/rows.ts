@@ -5,7 +5,7 @@ import type { Quantity } from '../document/ids';
 import type { RowResult } from '../document/outcomes';
 import { resolvePoint } from '../document/profile';
 import type { Point, Profile, Rail } from '../document/profile';
-import type { Step, StepOf } from '../document/steps';
+import type { Limit, Step, StepOf } from '../document/steps';
 import type { StepScope } from '../facts/effects';
 import { dischargeSeconds, dischargeTool, partsOf } from './dischargeTool';
 import { workingsLimits } from './stepWorkings';
@@ -42,7 +42,11 @@ export interface ReadingRow extends RowBase {
   mayFall: boolean;
   red: Point | null;
   black: Point | null;
+  /** set where a point is held against its twin: the twin's own row is taken down and not judged, the other has its limits from it */
+  twin?: TwinPart;
 }
+
+export type TwinPart = { is: 'twin' } | { is: 'like'; row: string; within: number; /** of the twin's reading, at the limits */ uncertainty: number };
 
 export type Row = WordRow | ReadingRow;
 
@@ -126,6 +130,7 @@ interface ReadingOptions {
   red?: Point | null;
   black?: Point | null;
   wait?: RowWait | null;
+  twin?: TwinPart;
 }
 
 function reading(id: string, label: string, o: ReadingOptions): ReadingRow {
@@ -143,6 +148,7 @@ function reading(id: string, label: string, o: ReadingOptions): ReadingRow {
     red: o.red ?? null,
     black: o.black ?? null,
     wait: o.wait ?? null,
+    ...(o.twin === undefined ? {} : { twin: o.twin }),
   };
 }
 
@@ -230,6 +236,7 @@ function eachOf(each: 'rails' | 'returns' | 'stores' | 'points', profile: Profil
 
 function measureRows(step: StepOf<'measure'> | StepOf<'soak'>, scope: StepScope, suffix = '', wait: RowWait | null = null): ReadingRow[] {
   const black = resolvePoint(scope.profile, step.points?.black ?? 'zero', null);
+  if (step.limit.is === 'twin') return twinRows(step, step.limit, scope, black);
   if (step.each === undefined) {
     const red = step.points?.red === undefined ? null : resolvePoint(scope.profile, step.points.red, null);
     const { low, high, nominal } = limitsOf(step, null, null, scope);
@@ -245,6 +252,26 @@ function measureRows(step: StepOf<'measure'> | StepOf<'soak'>, scope: StepScope,
     const { low, high, nominal } = limitsOf(step, null, item.id, scope);
     return reading(`${item.id}${suffix}`, item.name, { quantity: step.quantity, low, high, nominal, bySize: isBySize(step), red: resolvePoint(scope.profile, step.each === 'stores' ? 'each-store' : item.id, item.id), black, wait });
   });
+}
+
+/** The twin first: its reading is what the other one is held against. */
+function twinRows(step: StepOf<'measure'> | StepOf<'soak'>, limit: Extract<Limit, { is: 'twin' }>, scope: StepScope, black: Point | null): ReadingRow[] {
+  const at = (name: string | undefined) => (name === undefined ? null : resolvePoint(scope.profile, name, null));
+  const [red, twin] = [at(step.points?.red), at(step.points?.twin)];
+  const common = { quantity: step.quantity, black: step.quantity === 'celsius' ? null : black };
+  return [
+    reading('twin', `Twin: ${limit.of}${twin === null ? '' : `, ${twin.name}`}`, { ...common, red: twin, twin: { is: 'twin' } }),
+    reading('reading', red?.name ?? step.title, { ...common, red, twin: { is: 'like', row: 'twin', within: limit.within, uncertainty: 0 } }),
+  ];
+}
+
+/** A row that is held against its twin, with the limits that the twin's reading gives; as it was while the twin has not been read. */
+export function likeTwin(row: Row, twin: { value: number | 'over' | null; uncertainty?: number } | undefined): Row {
+  if (row.ask !== 'reading' || row.twin?.is !== 'like' || twin === undefined || twin.value === null) return row;
+  // an open twin: nothing that can be read is like it
+  if (twin.value === 'over') return { ...row, low: Infinity, high: null };
+  const [low, high] = railLimits(twin.value, row.twin.within);
+  return { ...row, low, high, nominal: twin.value, twin: { ...row.twin, uncertainty: (twin.uncertainty ?? 0) * (1 + row.twin.within) } };
 }
 
 function soakRows(step: StepOf<'soak'>, scope: StepScope): ReadingRow[] {
@@ -276,6 +303,8 @@ function limitsOf(step: StepOf<'measure'> | StepOf<'soak'>, rail: Rail | null, r
       return { low: null, high: limit.high, nominal: null };
     case 'above':
       return { low: limit.low, high: null, nominal: null };
+    case 'twin':
+      return { low: null, high: null, nominal: null };
     case 'workings':
       return { low: null, high: null, ...workingsLimits(limit, row, step.workings, scope.profile, scope.settings), nominal: rail?.nominal ?? null };
   }

@@ -1,5 +1,6 @@
 /** What a person at the bench is shown of a run: read off the program and the state, nothing kept. */
 import type { HazardKind } from '../document/hazards';
+import type { Shown } from '../document/outcomes';
 import type { Exit, Step } from '../document/steps';
 import { bandOf } from '../facts/band';
 import type { PowerBandState } from '../facts/band';
@@ -11,6 +12,8 @@ import type { Phase, Purpose, RowAnswer, RunEnd } from './context';
 import { reentriesOpen } from './judge';
 import { SAFE } from './program';
 import type { Row } from './rows';
+import { stepNotes } from './stepNotes';
+import type { StepNote } from './stepNotes';
 
 export interface RowView {
   row: Row;
@@ -25,6 +28,8 @@ export interface AnswerView {
   label: string;
   /** the plain way on; the others are set smaller */
   primary: boolean;
+  /** what the answer shows of a part, or null */
+  shows: Shown | null;
 }
 
 export interface RunView {
@@ -41,6 +46,8 @@ export interface RunView {
   current: RowView | null;
   /** answers of a step without rows */
   answers: AnswerView[];
+  /** what the step asks beyond its instruction */
+  notes: StepNote[];
   reentries: { key: string; title: string }[];
   facts: Facts;
   band: PowerBandState;
@@ -78,6 +85,7 @@ export function view(program: Program, state: RunState): RunView {
     rows,
     current: rows.find((r) => r.answer === null) ?? null,
     answers: shown === undefined || shown.rows.length > 0 || shown.builtIn ? [] : answersOf(shown.step),
+    notes: shown === undefined ? [] : stepNotes(shown.step),
     reentries: context.key === SAFE.choose ? reentriesOpen(layout, context).map((key) => ({ key, title: layout.steps.get(key)?.step.title ?? key })) : [],
     facts: context.facts,
     band: bandOf(context.facts),
@@ -96,10 +104,10 @@ function titleOf(phase: Phase, key: string, step: Step | null): string {
 }
 
 function answersOf(step: Step): AnswerView[] {
-  return step.exits.flatMap((exit: Exit) =>
+  return step.exits.flatMap((exit: Exit): AnswerView[] =>
     step.kind === 'observe' && exit.on.includes('answer')
-      ? [{ answer: exit.id, label: exit.label ?? exit.id, primary: true }]
-      : (exit.on as string[]).filter((on) => on !== 'given' && on !== 'refused').map((on) => ({ answer: on, label: exit.on.length === 1 && exit.label !== undefined ? exit.label : (LABELS[on] ?? on), primary: on === 'done' || on === 'on' })),
+      ? [{ answer: exit.id, label: exit.label ?? exit.id, primary: true, shows: exit.shows ?? null }]
+      : (exit.on as string[]).filter((on) => on !== 'given' && on !== 'refused').map((on) => ({ answer: on, label: exit.on.length === 1 && exit.label !== undefined ? exit.label : (LABELS[on] ?? on), primary: on === 'done' || on === 'on', shows: null })),
   );
 }
 

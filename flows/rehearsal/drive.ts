@@ -9,9 +9,10 @@ import type { MachineEvent } from '../machine/events';
 import type { RunState } from '../machine/advance';
 import { SAFE } from '../machine/program';
 import type { ProgramStep } from '../machine/program';
-import type { Row } from '../machine/rows';
 import { liveAboveLimits } from '../machine/secondPerson';
-import { readingGiving } from './reading';
+import { likeTwin } from '../machine/rows';
+import type { Row } from '../machine/rows';
+import { readingGiving, TWIN } from './reading';
 
 type Bare<E> = E extends MachineEvent ? Omit<E, 'at' | 'monotonic' | 'boot'> : never;
 type BareEvent = Bare<MachineEvent>;
@@ -107,7 +108,9 @@ function resultsFor(step: Step, outcome: string): string[] {
 }
 
 function rowGives(step: Step, row: Row, outcome: string): boolean {
-  return resultsFor(step, outcome).some((result) => answerTo('', row, result) !== null);
+  // before its twin has been read, a row is asked as it will be then
+  const asked = row.ask === 'reading' && row.twin?.is === 'like' && row.nominal === null ? likeTwin(row, { value: TWIN }) : row;
+  return resultsFor(step, outcome).some((result) => answerTo('', asked, result) !== null);
 }
 
 function goodResult(row: Row): string {

@@ -9,9 +9,14 @@ export interface GivenReading {
   falling: boolean;
 }
 
+/** What the twin reads in a rehearsal, whatever is read. */
+export const TWIN = 1;
+
 /** A reading of this row that is judged `result`, or null where its limits leave none (no upper limit, no sign). */
 export function readingGiving(row: ReadingRow, result: string): GivenReading | null {
   const { low, high, nominal } = row;
+  // a twin can read anything, so long as there is something to hold the other reading against
+  if (row.twin?.is === 'twin') return result === 'in' ? { value: TWIN, uncertainty: TWIN * 1e-6, falling: false } : null;
   const scale = Math.max(Math.abs(low ?? 0), Math.abs(high ?? 0), Math.abs(nominal ?? 0), 1e-12);
   const uncertainty = scale * 1e-6;
   const span = low !== null && high !== null ? high - low : scale;

@@ -113,6 +113,8 @@ function readingFor(row: Row, outcome: string, last: boolean): number | 'over' |
     const word = row.words.find((w) => w.result === outcome);
     return word?.word ?? (last ? null : goodReading(row));
   }
+  // the twin itself is not judged: the row after it comes to the outcome
+  if (row.twin?.is === 'twin') return outcome === 'not-sure' || outcome === 'cannot' ? outcome : goodReading(row);
   return readingOf(row, outcome);
 }
 

@@ -1,4 +1,5 @@
 /** An entry of a record in words: what was done. */
+import { SHOWN } from '@/flows/document/outcomes';
 import type { Instrument } from '@/shared/contract/instruments';
 import type { RecordEntry } from '@/shared/record/recordEntry';
 import type { ReadingLine } from '@/shared/ui/screens/records/readingsOf';
@@ -125,11 +126,12 @@ function answer({ event, before }: ReplayedEntry): EntryWords | null {
     const word = row?.ask === 'word' ? row.words.find((w) => w.word === event.word)?.label : undefined;
     return { what: `${row?.label ?? event.row}: ${word ?? WORDS[event.word] ?? event.word}`, detail: null };
   }
-  if (event?.type === 'ANSWER')
-    return {
-      what: before?.answers.find((a) => a.answer === event.answer)?.label ?? WORDS[event.answer] ?? event.answer,
-      detail: event.note ?? null,
-    };
+  if (event?.type === 'ANSWER') {
+    const given = before?.answers.find((a) => a.answer === event.answer);
+    const shows = given?.shows == null ? [] : [`${SHOWN[given.shows].name}: ${SHOWN[given.shows].say}`];
+    const detail = [...shows, ...(event.note === undefined ? [] : [event.note])].join(' ');
+    return { what: given?.label ?? WORDS[event.answer] ?? event.answer, detail: detail === '' ? null : detail };
+  }
   if (event?.type === 'SECOND_PRESENT') return { what: 'Second person present', detail: null };
   return null;
 }

@@ -47,6 +47,8 @@ const WORDS: Readonly<Record<string, Verdict>> = {
   falling: { mark: 'unsure', verdict: 'a charge that falls', out: false },
 };
 
+const TWIN_READ: Verdict = { mark: 'none', verdict: 'read: the other is held against it', out: false };
+
 /** One line for each reading entry that could be played, in their order. */
 export function readingsOf(entries: readonly ReplayedEntry[]): ReadingLine[] {
   return entries.flatMap(({ entry, event, before }) => {
@@ -55,15 +57,17 @@ export function readingsOf(entries: readonly ReplayedEntry[]): ReadingLine[] {
     if (row?.ask !== 'reading') return [];
     const unit: Unit = QUANTITIES[row.quantity];
     const uncertainty = event.instrument?.uncertainty ?? 0;
-    const guard = row.plain ? 0 : uncertainty;
+    const guard = row.plain ? 0 : Math.hypot(uncertainty, row.twin?.is === 'like' ? row.twin.uncertainty : 0);
     const result = classifyReading(row, event.value, uncertainty, event.falling === true);
     const size = event.value === 'over' ? Infinity : row.bySize ? Math.abs(event.value) : event.value;
     const said: Verdict =
-      result === 'close'
-        ? decide(size, row, guard) === 'close-in'
-          ? { mark: 'close', verdict: 'in, but close', out: false }
-          : { mark: 'close', verdict: 'out, but close', out: true }
-        : (WORDS[result] ?? { mark: 'none', verdict: result, out: false });
+      row.twin?.is === 'twin'
+        ? TWIN_READ
+        : result === 'close'
+          ? decide(size, row, guard) === 'close-in'
+            ? { mark: 'close', verdict: 'in, but close', out: false }
+            : { mark: 'close', verdict: 'out, but close', out: true }
+          : (WORDS[result] ?? { mark: 'none', verdict: result, out: false });
     return [
       {
         id: entry.id,
@@ -74,8 +78,8 @@ export function readingsOf(entries: readonly ReplayedEntry[]): ReadingLine[] {
         value: event.value,
         reading: event.value === 'over' ? 'over range' : formatQuantity(event.value, unit, { digits: 4 }),
         typed: event.typed,
-        low: row.low,
-        high: row.high,
+        low: finite(row.low),
+        high: finite(row.high),
         nominal: row.nominal,
         guard,
         needle: size,
@@ -86,6 +90,11 @@ export function readingsOf(entries: readonly ReplayedEntry[]): ReadingLine[] {
       },
     ];
   });
+}
+
+/** A twin that is over range leaves no limit that a scale can show. */
+function finite(limit: number | null): number | null {
+  return limit !== null && Number.isFinite(limit) ? limit : null;
 }
 
 /** True when a reading was taken after the last day on which its instrument might be used. */

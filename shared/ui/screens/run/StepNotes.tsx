@@ -1,4 +1,4 @@
-/** What will be seen and heard, and what the workings say for this machine. */
+/** What will be seen and heard, what the step asks beyond its instruction, and what the workings say for this machine. */
 import { workingsOf } from '@/flows/machine/stepWorkings';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Notice } from '@/shared/ui/components/Notice';
@@ -11,7 +11,8 @@ export function StepNotes({ run }: { run: Run }) {
   if (step === null) return null;
   const workings = workingsOf(step, profile, settings);
   const headline = workings?.answer.ok ? workings.answer.headline : null;
-  if (step.expect === undefined && headline === null) return null;
+  const { notes } = run.view;
+  if (step.expect === undefined && headline === null && notes.length === 0) return null;
   return (
     <Notice>
       {step.expect !== undefined ? (
@@ -22,6 +23,14 @@ export function StepNotes({ run }: { run: Run }) {
           {step.expect}
         </BodyText>
       ) : null}
+      {notes.map((note) => (
+        <BodyText key={note.name}>
+          <BodyText inline bold>
+            {note.name}:
+          </BodyText>{' '}
+          {note.say}
+        </BodyText>
+      ))}
       {headline !== null ? (
         <BodyText>
           <BodyText inline bold>

@@ -71,12 +71,23 @@ export function judgeTyped(row: ReadingRow, text: string, instrument: Instrument
   };
 }
 
+const TWIN_READ = 'the other one is held against it';
+
 /** Over range, from the entry or from its button. */
 export function over(row: ReadingRow, echo = 'over range'): Typed {
   const result = classifyReading(row, 'over', 0, false);
   const verdict: TypedVerdict =
     result === 'in'
-      ? { mark: 'in', word: 'In', note: 'over range, and only a lower limit is asked' }
+      ? {
+          mark: 'in',
+          word: row.twin?.is === 'twin' ? 'Read' : 'In',
+          note:
+            row.twin === undefined
+              ? 'over range, and only a lower limit is asked'
+              : row.twin.is === 'twin'
+                ? TWIN_READ
+                : 'over range, as its twin is',
+        }
       : { mark: 'out', word: 'High', note: 'over range' };
   return { ...NOTHING, value: 'over', echo, high: result === 'high', verdict };
 }
@@ -86,11 +97,14 @@ function verdictOf(row: ReadingRow, value: number, uncertainty: number, result: 
   const print = (n: number) => formatQuantity(n, unit, { digits: 3 });
   const size = row.bySize ? Math.abs(value) : value;
   const beyond = row.high !== null && size > row.high ? size - row.high : row.low !== null && size < row.low ? row.low - size : 0;
+  if (row.twin?.is === 'twin') return { mark: 'in', word: 'Read', note: TWIN_READ };
   if (row.plain)
     return result === 'in'
       ? { mark: 'in', word: 'Dead', note: `at or below ${print(row.high ?? 0)}` }
       : { mark: 'out', word: 'Not dead', note: `above ${print(row.high ?? 0)}` };
   switch (result) {
+    case 'cannot':
+      return { mark: 'close', word: 'Cannot tell', note: 'the twin reads nothing, so there is no share of it' };
     case 'in':
       return { mark: 'in', word: 'In', note: `clear of the limit (± ${print(uncertainty)})` };
     case 'close':
@@ -102,7 +116,11 @@ function verdictOf(row: ReadingRow, value: number, uncertainty: number, result: 
     case 'reversed':
       return { mark: 'out', word: 'Reversed', note: 'the sign is the wrong way round: leads, or the rail itself' };
     default:
-      return { mark: 'out', word: result === 'low' ? 'Low' : 'High', note: `${print(beyond)} beyond the limit` };
+      return {
+        mark: 'out',
+        word: result === 'low' ? 'Low' : 'High',
+        note: Number.isFinite(beyond) ? `${print(beyond)} beyond the limit` : 'its twin is over range',
+      };
   }
 }
 
@@ -122,6 +140,8 @@ function doubtOf(row: ReadingRow, value: number, echo: string, live: boolean): s
 export function limitWords(row: ReadingRow): string {
   const { unit } = QUANTITIES[row.quantity];
   const print = (n: number) => formatQuantity(n, unit, { digits: 4 });
+  if (row.twin?.is === 'twin') return 'none: it is what the next one is held against';
+  if (row.low === Infinity) return 'over range, as its twin';
   if (row.low !== null && row.high !== null) {
     const [near, far] = Math.abs(row.low) <= Math.abs(row.high) ? [row.low, row.high] : [row.high, row.low];
     return `${print(near)} to ${print(far)}`;

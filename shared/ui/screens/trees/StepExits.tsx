@@ -5,7 +5,7 @@ import type { Exit, Step } from '@/flows/document/steps';
 import type { Tree } from '@/flows/document/tree';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Icon } from '@/shared/ui/components/icons/Icon';
-import { EVIDENCE_SAYS, exitVerdict, exitWords } from '@/shared/ui/screens/trees/treeWords';
+import { EVIDENCE_SAYS, exitVerdict, exitWords, shownWords } from '@/shared/ui/screens/trees/treeWords';
 import { line, space } from '@/shared/ui/theme/space';
 import { useTheme } from '@/shared/ui/theme/useTheme';
 
@@ -42,7 +42,7 @@ export function StepExits({ tree, callee, step }: Props) {
           <View style={{ flexGrow: 2, flexShrink: 1, flexBasis: 150, minWidth: 0 }}>
             <BodyText bold>{exitWords(exit, ends)}</BodyText>
             <BodyText size="small" tone="soft">
-              {exitVerdict(exit)}
+              {[exitVerdict(exit), ...(exit.shows === undefined ? [] : [shownWords(exit.shows)])].join(', ')}
             </BodyText>
           </View>
           <View style={{ flexGrow: 3, flexShrink: 1, flexBasis: 190, minWidth: 0 }}>

@@ -2,8 +2,8 @@
 import { HAZARDS } from '@/flows/document/hazards';
 import type { HazardKind } from '@/flows/document/hazards';
 import { QUANTITIES } from '@/flows/document/ids';
-import { DEFAULT_VERDICT } from '@/flows/document/outcomes';
-import type { Kind, Outcome, Verdict } from '@/flows/document/outcomes';
+import { DEFAULT_VERDICT, SHOWN } from '@/flows/document/outcomes';
+import type { Kind, Outcome, Shown, Verdict } from '@/flows/document/outcomes';
 import type { Claim, Exit, Limit, Step } from '@/flows/document/steps';
 import type { Suspect, Tree } from '@/flows/document/tree';
 import type { Unit } from '@/shared/quantity/units';
@@ -122,6 +122,11 @@ export function exitWords(exit: Exit, ends: ReadonlyMap<string, string> = new Ma
   return exit.on.map((on) => ends.get(on) ?? OUTCOME_WORDS[on as Outcome] ?? on).join(', ');
 }
 
+/** What an answer shows of a part. */
+export function shownWords(shows: Shown): string {
+  return SHOWN[shows].name.toLowerCase();
+}
+
 /** Pass, fail, unsure or find, said or by default. */
 export function exitVerdict(exit: Exit): Verdict {
   if (exit.verdict !== undefined) return exit.verdict;
@@ -144,6 +149,8 @@ export function limitWords(limit: Limit, quantity: keyof typeof QUANTITIES): str
       return `${print(limit.high)} or less`;
     case 'above':
       return `${print(limit.low)} or more`;
+    case 'twin':
+      return `like its twin (${limit.of}), within ${formatNumber(limit.within * 100)} %`;
     case 'workings':
       return `from the workings “${limit.sheet}”`;
   }
