@@ -29,6 +29,7 @@ export type Op =
   | { op: 'owe-killer'; part: string; killer: string }
   | { op: 'release-void' }
   | { op: 'opened' }
+  | { op: 'opened-lapses' }
   | { op: 'powered'; kind: PowerKind }
   | { op: 'powered-void' };
 
@@ -91,6 +92,8 @@ function applyOp(facts: Facts, op: Op): Facts {
       return { ...facts, release: 'none' };
     case 'opened':
       return { ...facts, opened: true };
+    case 'opened-lapses':
+      return { ...facts, opened: false };
     case 'powered':
       return facts.powered.includes(op.kind) ? facts : { ...facts, powered: [...facts.powered, op.kind] };
     case 'powered-void':

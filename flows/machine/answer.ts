@@ -11,6 +11,7 @@ import type { Judged } from './arrive';
 import { classifyReading, worstOf } from './classify';
 import type { RowAnswer, RunContext } from './context';
 import type { MachineEvent } from './events';
+import { readBack, readBackRows } from './handOver';
 import { follow, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 import { partsToDischarge } from '../facts/stores';
@@ -27,6 +28,7 @@ const STOP_AT_FIRST: readonly Step['kind'][] = ['isolate', 'discharge', 'prove-d
 export function currentRows(layout: Layout, context: RunContext): readonly Row[] {
   if (context.key === SAFE.opening) return layout.opening;
   if (context.key === SAFE.takeOut) return toTakeOut(context.facts.fitted).map((f) => thingRow(f, 'taken out'));
+  if (context.key === SAFE.readBack) return readBackRows(layout, context);
   if (context.key === SAFE.putBack) return context.facts.fitted.map((f) => thingRow(f, 'back as built'));
   const rows = layout.steps.get(context.key)?.rows ?? [];
   return rows.some((row) => row.ask === 'reading' && row.twin !== undefined) ? rows.map((row) => likeTwin(row, context.rows.find((r) => r.id === 'twin'))) : rows;
@@ -96,7 +98,9 @@ function finish(layout: Layout, context: RunContext, placed: ProgramStep | undef
   if (!endsHere && !noTwin && context.rows.length < rows.length) return accept(context);
   if (context.key === SAFE.opening) {
     if (results.includes('cannot')) return accept({ ...context, rows: [], goto: SAFE.opening });
-    return arriveAtFirst(layout, { ...context, facts: applyOps(context.facts, [{ op: 'opened' }]) });
+    const opened: RunContext = { ...context, facts: applyOps(context.facts, [{ op: 'opened' }]) };
+    // opened anew in mid-run: what was under way goes on only behind a bench that is made dead
+    return opened.purpose.is === 'none' ? arriveAtFirst(layout, opened) : accept({ ...opened, goto: SAFE.isolate });
   }
   if (placed === undefined) return refuse('not-now', 'This step is not there.');
   const authored = placed.step.kind === 'observe' ? rankOfAnswers(placed.step.exits) : ROW_ORDER;
@@ -197,6 +201,11 @@ function leaveBuiltIn(layout: Layout, context: RunContext, placed: ProgramStep, 
     case SAFE.prove:
       if (outcome === 'falling') return go(SAFE.discharge);
       return outcome === 'in' ? safeAgain(layout, next) : go(SAFE.isolate);
+    case SAFE.readBack: {
+      const told = readBack(context);
+      const known: RunContext = { ...next, facts: told.facts, readBack: false };
+      return told.so ? safeAgain(layout, known) : afterStop(known);
+    }
     case SAFE.putBack:
       // what cannot be put back needs a person who decides, not a tree that does not know of it
       return next.facts.fitted.length > 0 ? accept({ ...next, goto: SAFE.ended, end: { says: 'stopped', key: null } }) : arriveAtFirst(layout, next);
@@ -206,6 +215,7 @@ function leaveBuiltIn(layout: Layout, context: RunContext, placed: ProgramStep, 
 }
 
 function safeAgain(layout: Layout, context: RunContext): Judged {
+  if (context.readBack) return accept({ ...context, goto: SAFE.readBack });
   switch (context.purpose.is) {
     case 'end':
       return closeOut(context, layout);

@@ -85,10 +85,22 @@ export function makeSafe(context: RunContext): RunContext {
   return { ...context, goto: SAFE.isolate, purpose: { is: 'stop' }, grant: null };
 }
 
+/**
+ * Opens the bench anew for whoever leads now, then makes dead, proves and reads back; the way comes back to where the run stood, or goes on
+ * with what the machine was doing.
+ */
+export function openAnew(layout: Layout, context: RunContext): Judged {
+  const at = context.goto ?? context.key;
+  if (at === SAFE.ended) return accept(context);
+  const own = at === SAFE.opening || layout.steps.get(at)?.builtIn === true;
+  return accept({ ...context, purpose: own ? context.purpose : { is: 'mend', to: at }, goto: context.facts.opened ? SAFE.isolate : SAFE.opening });
+}
+
 /** After a lapse: back to the step if its needs still hold, through mending if they would, to make-safe if the bench may be live. */
 export function comeBack(layout: Layout, context: RunContext, wasLive: boolean): Judged {
   if (context.key === SAFE.opening) return accept({ ...context, goto: SAFE.opening });
   if (context.key === SAFE.ended) return accept({ ...context, goto: SAFE.ended });
+  if (context.readBack && !wasLive) return openAnew(layout, context);
   if (wasLive || layout.steps.get(context.key)?.builtIn === true) return accept(context.purpose.is === 'none' || wasLive ? makeSafe(context) : { ...context, goto: SAFE.isolate });
   const arrived = arriveAt(layout, context, context.key);
   return arrived.ok ? arrived : accept(makeSafe(context));

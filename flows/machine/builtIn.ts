@@ -7,7 +7,7 @@ const common = { tools: [], minutes: 2, hazards: [] };
 // the machine leads on by itself from these; the exits only carry the outcomes
 const exits = (on: Exit['on']): Exit[] => [{ id: 'on', on, to: 'on' }];
 
-/** Isolate, discharge, prove dead, take out, and the place after Stop. */
+/** Isolate, discharge, prove dead, put back, take out, read back, and the place after Stop. */
 export function builtInSteps(profile: Profile, settings: Settings): Step[] {
   return [
     {
@@ -52,6 +52,15 @@ export function builtInSteps(profile: Profile, settings: Settings): Step[] {
       kind: 'do',
       title: 'Take out what was put in',
       lines: ['Count each thing out of the machine.', 'What cannot come out stays named on the machine.'],
+      contact: 'hands',
+      exits: exits(['done', 'not-sure', 'cannot']),
+    },
+    {
+      ...common,
+      id: '~read-back',
+      kind: 'do',
+      title: 'Read back what is on and what is in',
+      lines: ['The record says what is connected and what is fitted.', 'Look at each with your own eyes and touch it: is it so?', 'What is not so ends this run as stopped.'],
       contact: 'hands',
       exits: exits(['done', 'not-sure', 'cannot']),
     },

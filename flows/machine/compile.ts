@@ -15,7 +15,7 @@ import { follow, layOut, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 
 /** Changes whenever the same entries could lead to another state; snapshots of another engine are dropped. */
-export const ENGINE = 'lampstep-engine-2';
+export const ENGINE = 'lampstep-engine-3';
 
 interface Args {
   context: RunContext;
@@ -128,6 +128,8 @@ function machineOf(layout: Layout): RunMachine {
       PAUSE: [{ guard: taken, actions: apply, target: '#~paused' }],
       SECOND_PRESENT: [{ guard: taken, actions: apply }],
       NOTE: [{ guard: taken, actions: apply }],
+      HANDED_OVER: [{ guard: taken, actions: apply, target: '#~paused' }],
+      TAKEN_OVER: away,
       TICK: [{ guard: goes(null), actions: apply }, ...away],
     },
     states: {
@@ -158,7 +160,7 @@ function arrive(key: string) {
 
 /** Every key that an exit of this step can lead to directly, counted or not. */
 function leadsOf(layout: Layout, placed: ProgramStep): string[] {
-  if (placed.builtIn) return [SAFE.isolate, SAFE.discharge, SAFE.prove, SAFE.takeOut, SAFE.putBack, SAFE.choose, SAFE.ended];
+  if (placed.builtIn) return [SAFE.isolate, SAFE.discharge, SAFE.prove, SAFE.takeOut, SAFE.putBack, SAFE.readBack, SAFE.choose, SAFE.ended];
   const targets = placed.step.exits.flatMap((e: Exit) => [e.to, ...(e.then === undefined ? [] : [e.then])]).map((to) => placed.scope.check(to));
   const landed = targets.flatMap((to) => [false, true].map((over) => follow(layout, to, () => over).key)).filter((key) => {
     const kind = layout.steps.get(key)?.step.kind;

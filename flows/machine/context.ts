@@ -44,6 +44,12 @@ export interface RunContext {
   visited: string[];
   restorer: string;
   restorerIsSenior: boolean;
+  /** everybody who has led this run, the first one first: none of them is ever its witness */
+  restorers: string[];
+  /** the run is offered to this person, who has not taken it yet */
+  handing: { to: string; at: number } | null;
+  /** somebody else leads now, or nobody was here for long: load and fitted are read back before the run goes on */
+  readBack: boolean;
   second: string | null;
   /** wall time of the last prove-dead that passed */
   provedAt: number | null;

@@ -3,7 +3,7 @@ import type { RunContext } from './context';
 import type { MachineEvent } from './events';
 
 export const ENTRY_KINDS_OF_RUN = [
-  'answer', 'reading', 'photo', 'part', 'warning-read', 'energised', 'isolated', 'lapsed', 'hold-asked', 'hold-given', 'hold-refused', 'tag', 'paused', 'resumed', 'stopped', 'closed', 'addendum',
+  'answer', 'reading', 'photo', 'part', 'warning-read', 'energised', 'isolated', 'lapsed', 'hold-asked', 'hold-given', 'hold-refused', 'tag', 'paused', 'resumed', 'handed-over', 'taken-over', 'stopped', 'closed', 'addendum',
 ] as const;
 export type RunEntryKind = (typeof ENTRY_KINDS_OF_RUN)[number];
 
@@ -30,6 +30,10 @@ export function entryKindOf(event: MachineEvent, after: RunContext): RunEntryKin
       return 'hold-refused';
     case 'SECOND_PRESENT':
       return 'answer';
+    case 'HANDED_OVER':
+      return 'handed-over';
+    case 'TAKEN_OVER':
+      return 'taken-over';
     case 'ABORT':
     case 'STOP':
       return 'stopped';

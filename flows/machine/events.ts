@@ -41,6 +41,9 @@ export const machineEventSchema = z.discriminatedUnion('type', [
   z.strictObject({ ...common, type: z.literal('HOLD_REFUSED'), step: key, by: person, reason: note }),
   /** a second person signs in for live work above the limits */
   z.strictObject({ ...common, type: z.literal('SECOND_PRESENT'), by: person }),
+  /** the restorer offers the run to somebody else, who takes it with a password of their own */
+  z.strictObject({ ...common, type: z.literal('HANDED_OVER'), by: person, to: person, meaning: note, note: note.optional() }),
+  z.strictObject({ ...common, type: z.literal('TAKEN_OVER'), by: person, senior: z.boolean(), meaning: note }),
   z.strictObject({ ...common, type: z.literal('ABORT') }),
   z.strictObject({ ...common, type: z.literal('STOP') }),
   z.strictObject({ ...common, type: z.literal('REENTER'), step: key }),
@@ -59,4 +62,4 @@ export type MachineEvent = z.infer<typeof machineEventSchema>;
 export type EventType = MachineEvent['type'];
 
 /** Events that only the server may bring in, after it has checked a password: the restorer's device cannot send them. */
-export const SIGNED_EVENTS: readonly EventType[] = ['HOLD_GIVEN', 'HOLD_REFUSED', 'SECOND_PRESENT'];
+export const SIGNED_EVENTS: readonly EventType[] = ['HOLD_GIVEN', 'HOLD_REFUSED', 'SECOND_PRESENT', 'HANDED_OVER', 'TAKEN_OVER'];

@@ -6,16 +6,18 @@ import { powerKind } from '../facts/power';
 import { holds } from '../facts/atoms';
 import { needs } from '../facts/needs';
 import { unmetClaims } from '../facts/claims';
+import { lapseOps } from '../facts/lapse';
 import { applyOps } from '../facts/ops';
-import { accept, arriveAt, closeOut, comeBack, enter, makeSafe, mayBeLive, refuse } from './arrive';
+import { accept, arriveAt, closeOut, comeBack, enter, makeSafe, mayBeLive, openAnew, refuse } from './arrive';
 import type { Judged } from './arrive';
 import { answerRow, answerWord } from './answer';
 import type { RunContext } from './context';
 import { SIGNED_EVENTS } from './events';
 import type { MachineEvent } from './events';
+import { offer, takeOver } from './handOver';
 import { SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
-import { passTime } from './time';
+import { afterLongGap, isLongGap, passTime } from './time';
 
 /** Judges one event. Stop is always taken, before anything else is asked. */
 export function judge(layout: Layout, given: RunContext, event: MachineEvent): Judged {
@@ -23,7 +25,7 @@ export function judge(layout: Layout, given: RunContext, event: MachineEvent): J
   if (before.phase === 'closed') return refuse('closed', 'This run is closed.');
   // neither time nor a load of the page is read off a note: it says nothing about the bench
   if (event.type === 'NOTE') return accept(before);
-  if (event.type === 'STOP') return accept(makeSafe({ ...before, last: timeOf(event) }));
+  if (event.type === 'STOP') return accept(makeSafe({ ...before, handing: null, last: timeOf(event) }));
   if (event.type === 'RESTART') return restart(layout, before, event);
   if (before.last.boot !== '' && event.boot !== before.last.boot && !SIGNED_EVENTS.includes(event.type)) return refuse('restarted', 'The page was loaded anew: the run has to come back first.');
   const wasLive = mayBeLive(before);
@@ -31,7 +33,8 @@ export function judge(layout: Layout, given: RunContext, event: MachineEvent): J
   const judged = take(layout, context, event);
   if (!judged.ok || lapse === 'none') return judged;
   // the answer stands; what follows is led out of what has lapsed
-  if (lapse === 'clock' && wasLive) return accept(makeSafe(judged.next));
+  if (lapse !== 'time' && wasLive) return accept(makeSafe(judged.next));
+  if (lapse === 'long-gap' && judged.next.readBack && judged.next.phase !== 'paused') return openAnew(layout, judged.next);
   return judged.next.goto === null && judged.next.phase !== 'paused' ? comeBack(layout, judged.next, false) : judged;
 }
 
@@ -48,7 +51,7 @@ function take(layout: Layout, context: RunContext, event: MachineEvent): Judged 
     case 'PAUSE':
       return pause(context);
     case 'RESUME':
-      return context.phase === 'paused' ? comeBack(layout, context, false) : refuse('not-now', 'The run is not paused.');
+      return context.phase === 'paused' ? comeBack(layout, { ...context, handing: null }, false) : refuse('not-now', 'The run is not paused.');
     case 'ABORT':
       return context.live === null ? refuse('not-now', 'Nothing is on.') : arriveAt(layout, { ...context, grant: null }, context.live.abort);
     case 'CLOSE':
@@ -57,6 +60,10 @@ function take(layout: Layout, context: RunContext, event: MachineEvent): Judged 
       return reenter(layout, context, event.step);
     case 'SECOND_PRESENT':
       return event.by === context.restorer ? refuse('not-allowed', 'The second person is somebody else.', 'H20') : accept({ ...context, second: event.by });
+    case 'HANDED_OVER':
+      return offer(context, event);
+    case 'TAKEN_OVER':
+      return takeOver(layout, context, event);
     case 'WARNING_READ':
       return context.phase === 'warning' ? accept(context) : refuse('not-now', 'No warning is shown now.');
     case 'HOLD_ASKED':
@@ -92,14 +99,16 @@ function restart(layout: Layout, context: RunContext, event: MachineEvent): Judg
   const wasLive = mayBeLive(context);
   const last = timeOf(event);
   if (context.last.boot === '' || context.phase === 'ended') return accept({ ...context, last });
-  const facts = applyOps(context.facts, [{ op: 'stored-lapses' }, { op: 'sources', to: 'lapsed' }]);
-  return comeBack(layout, { ...context, facts, last, grant: null, provedAt: null, second: null }, wasLive);
+  const base = isLongGap(context, event.at) ? afterLongGap(context) : { ...context, facts: applyOps(context.facts, lapseOps('gap')), grant: null, provedAt: null, second: null };
+  // an offer stands until it is taken or taken back
+  if (base.handing !== null) return accept({ ...base, last });
+  return comeBack(layout, { ...base, last }, wasLive);
 }
 
 function pause(context: RunContext): Judged {
   if (context.phase === 'ended' || context.phase === 'paused') return refuse('not-now', 'There is nothing to pause.');
   if (mayBeLive(context)) return refuse('house-rule', 'The bench is live: isolate first, or press Stop. Nothing waits for a person while live.', 'H11');
-  const facts = applyOps(context.facts, [{ op: 'stored-lapses' }, { op: 'sources', to: 'lapsed' }]);
+  const facts = applyOps(context.facts, lapseOps('gap'));
   return accept({ ...context, facts, grant: null, provedAt: null, second: null, goto: '~paused' });
 }
 
@@ -123,6 +132,7 @@ export function reentriesOpen(layout: Layout, context: RunContext): string[] {
 function reenter(layout: Layout, context: RunContext, key: string): Judged {
   if (context.key !== SAFE.choose) return refuse('not-now', 'Going on from another place is offered after Stop, once the bench is proved dead.', 'H21');
   if (!reentriesOpen(layout, context).includes(key)) return refuse('house-rule', 'The run cannot go on from there: what that place stands on does not hold now.', 'H21');
+  if (!context.facts.opened) return accept({ ...context, goto: SAFE.opening, purpose: { is: 'mend', to: key } });
   return arriveAt(layout, { ...context, purpose: { is: 'none' } }, key);
 }
 
@@ -134,7 +144,7 @@ function askHold(context: RunContext, placed: ProgramStep | undefined): Judged {
 
 function answerHold(layout: Layout, context: RunContext, placed: ProgramStep | undefined, event: Extract<MachineEvent, { type: 'HOLD_GIVEN' | 'HOLD_REFUSED' }>): Judged {
   if (context.phase !== 'hold-wait' || placed === undefined) return refuse('not-now', 'No countersign is awaited for this step.');
-  if (event.by === context.restorer) return refuse('not-allowed', 'The one who does the work cannot countersign it.', 'H20');
+  if (context.restorers.includes(event.by)) return refuse('not-allowed', 'One who does the work of this run, or did, cannot countersign it.', 'H20');
   const given = event.type === 'HOLD_GIVEN';
   if (placed.step.kind === 'hold') {
     const answered = answerWord(layout, context, placed, { ...event, type: 'ANSWER', answer: given ? 'given' : 'refused' });

@@ -43,7 +43,7 @@ export interface Layout {
 }
 
 /** The keys of the machine's own make-safe steps, in order. */
-export const SAFE = { opening: '~opening', isolate: '~isolate', discharge: '~discharge', prove: '~prove', putBack: '~put-back', takeOut: '~take-out', choose: '~choose', ended: '~ended' } as const;
+export const SAFE = { opening: '~opening', isolate: '~isolate', discharge: '~discharge', prove: '~prove', putBack: '~put-back', takeOut: '~take-out', readBack: '~read-back', choose: '~choose', ended: '~ended' } as const;
 
 /** Lays a tree out for a profile. Faults are those that only the pair can show: a callee that is missing, rows that the profile lacks. */
 export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: Profile; settings: Settings }): { layout: Layout; faults: DocumentFault[] } {

@@ -53,6 +53,10 @@ export interface RunView {
   band: PowerBandState;
   live: { since: number; until: number } | null;
   purpose: Purpose;
+  /** who leads the run now */
+  restorer: string;
+  /** the run is offered to this person */
+  handing: { to: string; at: number } | null;
   builtIn: boolean;
   end: (RunEnd & { title: string; replace: string | null; retest: string | null }) | null;
 }
@@ -80,7 +84,7 @@ export function view(program: Program, state: RunState): RunView {
     step: shown?.step ?? null,
     stud: placed?.stud ?? '',
     total: layout.total,
-    title: titleOf(context.phase, context.key, shown?.step ?? null),
+    title: titleOf(context.phase, context.key, shown?.step ?? null, context.handing !== null),
     hazards: shown?.hazards ?? [],
     rows,
     current: rows.find((r) => r.answer === null) ?? null,
@@ -91,13 +95,15 @@ export function view(program: Program, state: RunState): RunView {
     band: bandOf(context.facts),
     live: context.live === null ? null : { since: context.live.since, until: context.live.until },
     purpose: context.purpose,
+    restorer: context.restorer,
+    handing: context.handing,
     builtIn: placed?.builtIn ?? false,
     end: endOf(program, context.end),
   };
 }
 
-function titleOf(phase: Phase, key: string, step: Step | null): string {
-  if (phase === 'paused') return 'Paused';
+function titleOf(phase: Phase, key: string, step: Step | null, offered: boolean): string {
+  if (phase === 'paused') return offered ? 'Offered' : 'Paused';
   if (phase === 'ended') return 'The run has reached its end';
   if (phase === 'closed') return 'Closed';
   return key === SAFE.opening ? 'Open the bench' : (step?.title ?? '');

@@ -221,6 +221,8 @@ function applyBits(op: Op, names: BitNames, set: (name: string) => void, clear: 
       return off('release');
     case 'opened':
       return set('opened');
+    case 'opened-lapses':
+      return off('opened');
     case 'doubt':
     case 'lift-doubt':
     case 'fail':

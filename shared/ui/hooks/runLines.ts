@@ -69,6 +69,10 @@ function wordsOf(program: Program, before: RunContext, event: MachineEvent): str
       return `Countersign refused: ${event.reason}`;
     case 'SECOND_PRESENT':
       return 'A second person has signed in';
+    case 'HANDED_OVER':
+      return event.note === undefined ? 'Offered to the next restorer' : `Offered to the next restorer: ${event.note}`;
+    case 'TAKEN_OVER':
+      return 'Taken over: what had been proved dead has lapsed';
     case 'ABORT':
       return 'Switched off before its time';
     case 'STOP':

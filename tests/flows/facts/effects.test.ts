@@ -102,7 +102,7 @@ describe('any sequence of events at the bench', () => {
     { weight: 14, arbitrary: fc.record({ act: fc.constant('good' as const) }) },
     { weight: 4, arbitrary: fc.record({ act: fc.constant('word' as const), word: fc.constantFrom(...words) }) },
     { weight: 3, arbitrary: fc.record({ act: fc.constant('value' as const), value: fc.constantFrom(0, 2, 40, -3, 1e7) }) },
-    { weight: 1, arbitrary: fc.record({ act: fc.constantFrom('STOP', 'ABORT', 'PAUSE', 'RESUME', 'TICK', 'RESTART', 'CLOSE', 'late') }) },
+    { weight: 1, arbitrary: fc.record({ act: fc.constantFrom('STOP', 'ABORT', 'PAUSE', 'RESUME', 'TICK', 'RESTART', 'CLOSE', 'late', 'next day', 'offer', 'take') }) },
   );
   it('never shows hands a bench that is not proved dead, nor power without its guard', () => {
     const compiled = program(lampTree);
@@ -122,6 +122,9 @@ describe('any sequence of events at the bench', () => {
           } else if (e.act === 'word') b.try(before.current ? { type: 'ROW', step: before.key, row: before.current.row.id, word: e.word } : { type: 'ANSWER', step: before.key, answer: e.word });
           else if (e.act === 'value' && before.current) b.try({ type: 'READING', step: before.key, row: before.current.row.id, value: e.value, typed: 'x', instrument: { id: 'tester', twoPole: true, uncertainty: 0.01 } });
           else if (e.act === 'late') b.at += 40 * 60_000;
+          else if (e.act === 'next day') b.at += 20 * 3_600_000;
+          else if (e.act === 'offer') b.try({ type: 'HANDED_OVER', by: before.restorer, to: before.restorer === 'ann' ? 'bo' : 'ann', meaning: 'gives' });
+          else if (e.act === 'take') b.try({ type: 'TAKEN_OVER', by: before.restorer === 'ann' ? 'bo' : 'ann', senior: false, meaning: 'takes' });
           else if (e.act !== 'value') {
             if (e.act === 'RESTART') b.boot = `boot-${b.at}`;
             b.try({ type: e.act });
@@ -129,6 +132,9 @@ describe('any sequence of events at the bench', () => {
           const now = b.view;
           const live = now.facts.sources.some((s) => s.state === 'full' || s.state === 'limited');
           if (now.phase === 'act' && now.step?.contact === 'hands' && now.key !== before.key) expect(isProvedDead(now.facts) || now.step.kind === 'prove-insulation').toBe(true);
+          // nobody goes on in a tree whose load and fitted things have not been read back
+          if (b.state.context.readBack) expect(now.builtIn || ['opening', 'paused', 'ended', 'closed'].includes(now.phase)).toBe(true);
+          if (now.restorer !== before.restorer) expect([e.act, before.phase, before.handing?.to]).toEqual(['take', 'paused', now.restorer]);
           if (live && !before.facts.sources.some((s) => s.state === 'full' || s.state === 'limited')) expect(before.phase).toBe('guard');
         }
       }),

@@ -81,11 +81,13 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'answer':
     case 'isolated':
       return answer({ entry, event, before, after: null }) ?? says(entry.kind === 'isolated' ? 'Isolated' : 'Answered');
+    case 'handed-over':
+      return says('Handed over, signed', event?.type === 'HANDED_OVER' ? [event.meaning, ...(event.note === undefined ? [] : [`Left word: ${event.note}`])].join('\n') : body['text']);
+    case 'taken-over':
+      return says('Taken over, signed', event?.type === 'TAKEN_OVER' ? event.meaning : body['text']);
     case 'part':
     case 'tag':
     case 'deviation':
-    case 'handed-over':
-    case 'taken-over':
     case 'conflict':
     case 'correction':
     case 'addendum':
@@ -95,8 +97,6 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
           part: 'Part replaced',
           tag: 'Tag written',
           deviation: 'Deviation',
-          'handed-over': 'Handed over',
-          'taken-over': 'Taken over',
           conflict: 'Conflict',
           correction: 'Reading corrected',
           addendum: 'Addendum',
