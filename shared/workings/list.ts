@@ -1,5 +1,6 @@
 /** Every sheet, in the order in which a list shows them. */
 import { sheet as bleedDown } from '@/shared/workings/bleedDown';
+import { sheet as fuseInrush } from '@/shared/workings/fuseInrush';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
@@ -16,6 +17,7 @@ export const SHEETS: readonly AnySheet[] = [
   railLimits,
   readingLimit,
   wireDrop,
+  fuseInrush,
 ] as readonly unknown[] as readonly AnySheet[];
 
 /** The sheet of that id, or undefined. */

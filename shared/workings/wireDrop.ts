@@ -80,10 +80,20 @@ const inputs = z.strictObject({
     max: 50,
   }).default(1),
   amps: numberField({ title: 'Current', description: 'Through all of them together', unit: 'A', min: 0, max: 1000 }),
-  celsius: numberField({ title: 'Copper temperature', description: 'Of the copper, not of the air', unit: '°C', min: -40, max: 200 }).default(
-    20,
-  ),
-  contacts: numberField({ title: 'Contacts', description: 'Pins, lugs and screws in each conductor', unit: null, min: 0, max: 100 }).default(0),
+  celsius: numberField({
+    title: 'Copper temperature',
+    description: 'Of the copper, not of the air',
+    unit: '°C',
+    min: -40,
+    max: 200,
+  }).default(20),
+  contacts: numberField({
+    title: 'Contacts',
+    description: 'Pins, lugs and screws in each conductor',
+    unit: null,
+    min: 0,
+    max: 100,
+  }).default(0),
   contactOhms: numberField({
     title: 'Ohms a contact',
     description: 'Of a sound one, from the maker of the connector; 5 to 20 mΩ is usual',
@@ -91,7 +101,13 @@ const inputs = z.strictObject({
     min: 0,
     max: 10,
   }).default(0.01),
-  allowedVolts: numberField({ title: 'Allowed drop', description: 'Most volts that may be lost; empty for none', unit: 'V', min: 0.0001, max: 1000 })
+  allowedVolts: numberField({
+    title: 'Allowed drop',
+    description: 'Most volts that may be lost; empty for none',
+    unit: 'V',
+    min: 0.0001,
+    max: 1000,
+  })
     .nullable()
     .default(null),
   readOhms: numberField({
@@ -136,7 +152,8 @@ const m = (value: number): string => formatQuantity(value, 'm', { digits: 4 });
 
 function sizeOf(given: Inputs): number | SheetRefusal {
   const { awg, squareMillimetres } = given;
-  if (awg === null && squareMillimetres === null) return { ok: false, field: 'squareMillimetres', say: 'Give the size: AWG or square millimetres.' };
+  if (awg === null && squareMillimetres === null)
+    return { ok: false, field: 'squareMillimetres', say: 'Give the size: AWG or square millimetres.' };
   if (awg !== null && squareMillimetres !== null)
     return { ok: false, field: 'awg', say: 'Give the size once: AWG or square millimetres, and leave the other empty.' };
   if (squareMillimetres !== null) return squareMillimetres;
@@ -249,7 +266,11 @@ export const sheet = defineSheet({
       if (!Number.isInteger(given[field]))
         return { ok: false, field, say: `${field === 'contacts' ? 'Contacts' : 'In parallel'} must be a whole number.` };
     if (given.readOhms !== null && given.readOhms < given.leadOhms)
-      return { ok: false, field: 'leadOhms', say: 'The leads alone must not read more than leads and wire together. Hold the probes together and read again.' };
+      return {
+        ok: false,
+        field: 'leadOhms',
+        say: 'The leads alone must not read more than leads and wire together. Hold the probes together and read again.',
+      };
     const ohmsPerMetre = copperOhmsPerMetre(squareMillimetres);
     const scale = metresOf(given) * copperFactor(given.celsius);
     const wireOhms = ohmsPerMetre * scale;
@@ -275,6 +296,15 @@ export const sheet = defineSheet({
       fourWire: ohms < FOUR_WIRE_BELOW_OHMS,
       reading: judge(given, ohms, worstOhms, wireOhms),
     };
-    return { ok: true, result, headline: headlineOf(given, result), formula: formulaOf(given, result), caution, validity, source, plot: plotOf(given, result) };
+    return {
+      ok: true,
+      result,
+      headline: headlineOf(given, result),
+      formula: formulaOf(given, result),
+      caution,
+      validity,
+      source,
+      plot: plotOf(given, result),
+    };
   },
 });

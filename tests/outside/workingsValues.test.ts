@@ -18,7 +18,9 @@ function got(row: OutsideValue): unknown {
   if (sheet === undefined) throw new Error(`There is no sheet ${row.sheet}.`);
   const answer = runSheet(sheet, row.given);
   if (!answer.ok) throw new Error(`${answer.field}: ${answer.say}`);
-  const found = row.read.split('.').reduce<unknown>((value, key) => (value as Readonly<Record<string, unknown>> | null)?.[key], answer.result);
+  const found = row.read
+    .split('.')
+    .reduce<unknown>((value, key) => (value as Readonly<Record<string, unknown>> | null)?.[key], answer.result);
   return typeof found === 'number' ? found * (row.times ?? 1) : found;
 }
 
@@ -28,7 +30,10 @@ describe.each(SHEETS.map((sheet) => [sheet.id, rows.filter((row) => row.sheet ==
     it.each(of.map((row) => [row.what, row.source, row] as const))('%s (%s)', (_what, _source, row) => {
       const value = got(row);
       if (typeof row.expected === 'string') expect(value).toBe(row.expected);
-      else expect(Math.abs((value as number) - row.expected), `${String(value)} for ${String(row.expected)}`).toBeLessThanOrEqual(row.within ?? 0);
+      else
+        expect(Math.abs((value as number) - row.expected), `${String(value)} for ${String(row.expected)}`).toBeLessThanOrEqual(
+          row.within ?? 0,
+        );
     });
   },
 );

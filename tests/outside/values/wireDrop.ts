@@ -1,7 +1,8 @@
 /** Published values of copper wire. */
 import type { OutsideValue } from '@/tests/outside/outsideValue';
 
-const floyd = 'Floyd, Electric Circuit Fundamentals, wire gauge table as printed by HyperPhysics; same in a cable tester maker’s calculator';
+const floyd =
+  'Floyd, Electric Circuit Fundamentals, wire gauge table as printed by HyperPhysics; same in a cable tester maker’s calculator';
 const iec = 'IEC 60228, table of maximum d.c. resistance at 20 °C, from four agreeing cable makers’ pages';
 
 // Ohms per 1000 ft at 20 °C as printed.

@@ -25,17 +25,24 @@ describe('wire drop', () => {
         const close = (value: number, wanted: number) => Math.abs(value / wanted - 1) < 1e-12;
         return (
           close(work({ metres: 2 * length, amps: current, squareMillimetres: size, celsius: degrees }).volts, 2 * one.volts) &&
-          (current > 500 || close(work({ metres: length, amps: 2 * current, squareMillimetres: size, celsius: degrees }).watts, 4 * one.watts)) &&
-          (size > 250 || close(work({ metres: length, amps: current, squareMillimetres: 2 * size, celsius: degrees }).volts, one.volts / 2)) &&
+          (current > 500 ||
+            close(work({ metres: length, amps: 2 * current, squareMillimetres: size, celsius: degrees }).watts, 4 * one.watts)) &&
+          (size > 250 ||
+            close(work({ metres: length, amps: current, squareMillimetres: 2 * size, celsius: degrees }).volts, one.volts / 2)) &&
           close(work({ metres: length, amps: current, squareMillimetres: size, celsius: degrees, inParallel: 2 }).volts, one.volts / 2) &&
-          close(work({ metres: length, amps: current, squareMillimetres: size, celsius: degrees, path: 'there-and-back' }).volts, 2 * one.volts)
+          close(
+            work({ metres: length, amps: current, squareMillimetres: size, celsius: degrees, path: 'there-and-back' }).volts,
+            2 * one.volts,
+          )
         );
       }),
     );
   });
 
   it('rises with temperature and falls with the gauge number’s size', () => {
-    fc.assert(fc.property(celsius, celsius, (a, b) => b - a < 1e-9 || work({ ...base, celsius: a }).ohms < work({ ...base, celsius: b }).ohms));
+    fc.assert(
+      fc.property(celsius, celsius, (a, b) => b - a < 1e-9 || work({ ...base, celsius: a }).ohms < work({ ...base, celsius: b }).ohms),
+    );
     for (let awg = -3; awg < 40; awg += 1)
       expect(work({ awg, metres: 1, amps: 1 }).ohms).toBeLessThan(work({ awg: awg + 1, metres: 1, amps: 1 }).ohms);
   });
