@@ -1,6 +1,7 @@
 /** Every sheet, in the order in which a list shows them. */
 import { sheet as bleedDown } from '@/shared/workings/bleedDown';
 import { sheet as fuseInrush } from '@/shared/workings/fuseInrush';
+import { sheet as overVoltageTrip } from '@/shared/workings/overVoltageTrip';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
@@ -18,6 +19,7 @@ export const SHEETS: readonly AnySheet[] = [
   readingLimit,
   wireDrop,
   fuseInrush,
+  overVoltageTrip,
 ] as readonly unknown[] as readonly AnySheet[];
 
 /** The sheet of that id, or undefined. */
