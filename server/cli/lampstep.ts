@@ -9,8 +9,9 @@ import { replay } from './commands/replay';
 import { schema } from './commands/schema';
 import { verify } from './commands/verify';
 import { walk } from './commands/walk';
+import { workings } from './commands/workings';
 
-const COMMANDS: readonly Command[] = [walk, prove, rehearse, draft, compare, replay, schema, verify];
+const COMMANDS: readonly Command[] = [walk, prove, rehearse, draft, compare, replay, schema, verify, workings];
 
 function help(): string {
   return [
@@ -31,7 +32,8 @@ async function main(argv: string[]): Promise<number> {
   const command = COMMANDS.find((c) => c.name === name);
   if (command === undefined) throw new BadInput(`There is no command "${name}". Try: ${COMMANDS.map((c) => c.name).join(', ')}, help.`);
   const { good, output } = await command.run(rest);
-  process.stdout.write(`${JSON.stringify(output, null, 2)}\n`);
+  // A page is text already; everything else is JSON.
+  process.stdout.write(typeof output === 'string' ? output : `${JSON.stringify(output, null, 2)}\n`);
   return good ? 0 : 1;
 }
 
