@@ -10,6 +10,7 @@ import { hazardsOf } from '../facts/derivedHazards';
 import type { StepScope } from '../facts/effects';
 import { builtInSteps } from './builtIn';
 import { dischargeTool, tooSmallFor } from './dischargeTool';
+import { forClass } from './noEarth';
 import { openingRows, rowsOf } from './rows';
 import type { Row, WordRow } from './rows';
 
@@ -55,7 +56,8 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
   const add = (own: Tree, caller: string | null, studOf: (i: number) => string) => {
     const prefix = caller === null ? '' : `${caller}/`;
     const scope = scopeOf(own, prefix, profile, settings);
-    own.steps.forEach((step, i) => {
+    own.steps.forEach((written, i) => {
+      const step = forClass(written, profile);
       const key = `${prefix}${step.id}`;
       const placed: ProgramStep = { key, step, scope, rows: rowsOf(step, scope), hazards: hazardsOf(step, scope), caller, stud: studOf(i), builtIn: false };
       steps.set(key, placed);

@@ -8,6 +8,7 @@ import type { Point, Profile, Rail } from '../document/profile';
 import type { Limit, Step, StepOf } from '../document/steps';
 import type { StepScope } from '../facts/effects';
 import { dischargeSeconds, dischargeTool, partsOf } from './dischargeTool';
+import { NO_EARTH } from './noEarth';
 import { workingsLimits } from './stepWorkings';
 
 /** When a row may be answered: seconds after the step was entered, or after another row was answered. */
@@ -64,6 +65,7 @@ export function rowsOf(step: Step, scope: StepScope): Row[] {
     case 'prove-dead':
       return proveDeadRows(scope);
     case 'prove-earth':
+      if (scope.profile.mains.protectiveClass === 'II') return [NO_EARTH];
       return [reading('earth', 'Earth pin of the plug to bare metal of the case', { quantity: 'ohms', high: scope.settings.earthOhms + scope.profile.mains.earthLeadOhms })];
     case 'prove-insulation': {
       const { mains } = scope.profile;

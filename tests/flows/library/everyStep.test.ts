@@ -20,6 +20,12 @@ const WALKS: [string, string][] = [
   ['dies-twice', 'ostrel-16'],
   ['earth-insulation', 'brindle-80'],
   ['heat-and-fan', 'corvane-12'],
+  ['discharge', 'brindle-80'],
+  ['reform-lifted', 'wendle-5'],
+  ['lamp-first', 'brindle-80'],
+  ['lamp-first', 'corvane-12'],
+  ['regulator-bench', 'ostrel-16'],
+  ['full-load', 'brindle-80'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

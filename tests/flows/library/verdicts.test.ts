@@ -55,7 +55,16 @@ describe('the verdicts of first power', () => {
   });
 
   it('covers every suspect of the tree', () => {
-    expect(tree.suspects.map((s) => s.id).filter((id) => !VERDICTS.some((v) => v.fault === id))).toEqual([]);
+    const mended = tree.steps.flatMap((s) => (s.kind === 'work' ? (s.suspects ?? []) : []));
+    expect(tree.suspects.map((s) => s.id).filter((id) => !VERDICTS.some((v) => v.fault === id) && !mended.includes(id))).toEqual([]);
+  });
+
+  it('mends a wrong fuse on the way, looks again and goes on', () => {
+    const bench = new Bench(programOf(tree, 'corvane-12'));
+    walk(bench, { ...LINEAR, 'look-outside': 'wrong-fuse' }, (b) => b.view.key === 'fuse-right');
+    walk(bench, LINEAR);
+    expect(bench.state.context.visited.filter((key) => key === 'look-outside' || key === 'fuse-right')).toEqual(['look-outside', 'fuse-right']);
+    expect(bench.view.end?.says).toBe('supply-proven');
   });
 
   it('finds a lost return also by a rail that reads reversed under load', () => {

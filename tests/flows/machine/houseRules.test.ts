@@ -147,6 +147,18 @@ describe('H6 and H7: limited first, earth and insulation before any inlet power'
     const classTwo = { ...benchProfile, mains: { ...benchProfile.mains, protectiveClass: 'II' as const } };
     expect(play(treeOf([look('d1'), dead('d1', 'insulation'), insulation('d2'), dead('d2', 'lamp'), lamp('lamp', 'abort')]), {}, classTwo).rule).toBeNull();
   });
+  it('asks on Class II, where a tree proves the earth, whether there is none; an earth that is there is a failure', () => {
+    const classTwo = { ...benchProfile, mains: { ...benchProfile.mains, protectiveClass: 'II' as const } };
+    const atEarth = () => new Bench(program(treeOf([dead('d1', 'earth'), earth('done')]), classTwo)).pass().dead().do({ type: 'WARNING_READ', step: 'earth' });
+    const bench = atEarth();
+    expect(bench.view).toMatchObject({ key: 'earth', title: 'Class II: no earth to prove' });
+    expect(bench.view.current?.row).toMatchObject({ ask: 'word' });
+    expect(bench.try({ type: 'READING', step: 'earth', row: 'earth', value: 0.05, typed: '0.05', instrument: { id: 'ohms', twoPole: false, uncertainty: 0 } }).ok).toBe(false);
+    bench.row({ earth: 'high' });
+    expect(bench.view.facts.earth).toBe('unknown');
+    expect(bench.view.facts.owed.fails.map((fail) => fail.check)).toEqual(['earth']);
+    expect(atEarth().row({ earth: 'in' }).view.facts.earth).toBe('proved');
+  });
 });
 
 describe('H8: live steps only read or trim', () => {
