@@ -1,8 +1,10 @@
 /** The sheet of workings that a step shows, filled in from the machine's profile. */
 import { sheetById } from '@/shared/workings/list';
 import type { AnySheet } from '@/shared/workings/list';
+import type { AccuracySpec } from '@/shared/workings/readingLimit';
 
-import type { Profile } from '../document/profile';
+import type { Quantity } from '../document/ids';
+import type { Profile, Rail } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { Limit, Step } from '../document/steps';
 import { partsToDischarge } from '../facts/stores';
@@ -16,9 +18,21 @@ export interface StepWorkings {
   answer: ReturnType<AnySheet['compute']>;
 }
 
-/** The workings of a step for this machine, or null where it shows none or the profile cannot fill it. */
-export function workingsOf(step: Step, profile: Profile, settings: Settings): StepWorkings | null {
+/** The row that is to be read now and what is read there, with the accuracy of the instrument in hand on its range. */
+export interface ReadingNow {
+  quantity: Quantity;
+  /** signed limits in SI, or of size where the row is judged by size; null where there is none */
+  low: number | null;
+  high: number | null;
+  accuracy: Pick<AccuracySpec, 'percent' | 'counts' | 'resolution'>;
+  /** as the row judges it; null while nothing is typed, or over range */
+  value: number | null;
+}
+
+/** The workings of a step for this machine, or null where it shows none or what is known cannot fill it. A reading is set against its limit only with the instrument that takes it. */
+export function workingsOf(step: Step, profile: Profile, settings: Settings, now: ReadingNow | null = null): StepWorkings | null {
   if (step.workings === undefined) return null;
+  if (step.workings.sheet === 'reading-limit') return now === null ? null : work('reading-limit', { quantity: now.quantity, reading: now.value, low: now.low, high: now.high, ...now.accuracy });
   const lamp = step.kind === 'energise' || step.kind === 'raise' ? step.lampWatts : undefined;
   return fill({ ...(lamp === undefined ? {} : { lampWatts: lamp }), ...step.workings }, profile, settings);
 }
@@ -36,11 +50,14 @@ export function workingsLimits(limit: Extract<Limit, { is: 'workings' }>, row: s
 }
 
 function fill(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
-  const sheet = sheetById(reference.sheet);
   const inputs = inputsOf(reference, profile, settings);
-  if (sheet === undefined || inputs === null) return null;
-  const parsed = sheet.inputs.safeParse(inputs);
-  return parsed.success ? { sheet, inputs, answer: sheet.compute(parsed.data) } : null;
+  return inputs === null ? null : work(reference.sheet, inputs);
+}
+
+function work(id: string, inputs: Record<string, unknown>): StepWorkings | null {
+  const sheet = sheetById(id);
+  const parsed = sheet?.inputs.safeParse(inputs);
+  return sheet !== undefined && parsed?.success === true ? { sheet, inputs, answer: sheet.compute(parsed.data) } : null;
 }
 
 function inputsOf(reference: Reference, profile: Profile, settings: Settings): Record<string, unknown> | null {
@@ -55,15 +72,59 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings): R
       const store = profile.stores.find((s) => s.id === reference.store) ?? [...stores].sort((a, b) => b.farads * b.voltsWorked ** 2 - a.farads * a.voltsWorked ** 2)[0];
       return store === undefined ? null : { farads: store.farads, volts: store.voltsWorked, safeVolts: settings.deadVolts, bleederOhms: null, toolOhms: reference.toolOhms ?? null };
     }
-    case 'rail-limits':
-    case 'reading-limit': {
-      const rail = profile.rails.find((r) => r.id === reference.rail) ?? profile.rails[0];
-      if (rail === undefined) return null;
-      if (reference.sheet === 'rail-limits') return { nominalVolts: rail.nominal, tolerancePercent: rail.tolerance * 100 };
-      const edges = [rail.nominal * (1 - rail.tolerance), rail.nominal * (1 + rail.tolerance)];
-      return { quantity: 'volts-dc', reading: rail.nominal, low: Math.min(...edges), high: Math.max(...edges) };
+    case 'rail-limits': {
+      const rail = railOf(reference, profile.rails);
+      return rail === undefined ? null : { nominalVolts: rail.nominal, tolerancePercent: percent(rail.tolerance) };
     }
+    case 'reading-limit':
+      // the limits of a step never come from it: it wants a reading
+      return null;
+    case 'wire-drop':
+      return wireInputs(reference, profile);
+    case 'fuse-inrush':
+      return fuseInputs(profile);
+    case 'over-voltage-trip':
+      return tripInputs(railOf(reference, profile.rails.filter((r) => r.trip !== null)));
   }
+}
+
+/** The rail that the author or the row names, else the first. */
+function railOf(reference: Reference, rails: readonly Rail[]): Rail | undefined {
+  return rails.find((r) => r.id === reference.rail) ?? rails[0];
+}
+
+/** A tolerance is a fraction in the profile and percent on a sheet; twelve figures drop what binary adds. */
+const percent = (fraction: number) => Number((fraction * 100).toPrecision(12));
+
+/** A return or feed end to end, with a contact at each end, at the most amps of the rails that it serves. */
+function wireInputs(reference: Reference, profile: Profile): Record<string, unknown> | null {
+  const wire = profile.conductors.find((c) => c.id === reference.conductor) ?? profile.conductors.find((c) => c.kind === 'return') ?? profile.conductors[0];
+  if (wire === undefined) return null;
+  const amps = Math.max(0, ...profile.rails.filter((r) => wire.rails.includes(r.id)).map((r) => r.maxAmps));
+  return { squareMillimetres: wire.squareMillimetres, metres: wire.metres, amps, contacts: 2, ...(amps > 0 && { allowedVolts: amps * wire.maxOhms }) };
+}
+
+/** Below 200 V the fuse of the plate is taken for one to UL 248-14, else to IEC 60127: common practice, no source. */
+function fuseInputs({ mains }: Profile): Record<string, unknown> {
+  return { standard: mains.volts < 200 ? 'ul-248-14' : 'iec-60127', speed: mains.fuse.kind, ratedAmps: mains.fuse.amps, loadAmps: mains.voltAmps / mains.volts };
+}
+
+/** Most volts of 54 and 74 series logic, taken for what stands on a rail of 5 V (data sheets, absolute maximum). */
+const LOGIC_MOST_VOLTS = 7;
+
+function tripInputs(rail: Rail | undefined): Record<string, unknown> | null {
+  if (rail === undefined || rail.trip === null) return null;
+  const { lowVolts, highVolts } = rail.trip;
+  const middle = (lowVolts + highVolts) / 2;
+  return {
+    nominalVolts: rail.nominal,
+    tolerancePercent: percent(rail.tolerance),
+    mostVolts: Math.abs(rail.nominal) === 5 ? LOGIC_MOST_VOLTS : null,
+    kind: 'set-point',
+    tripVolts: middle,
+    tripTolerancePercent: percent((highVolts - lowVolts) / 2 / middle),
+    limitAmps: rail.limitAmps,
+  };
 }
 
 function numberAt(result: unknown, path: string): number | null {

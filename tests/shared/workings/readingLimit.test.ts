@@ -1,7 +1,7 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
-import { decide, errorLimitOf, sheet, uncertaintyOf } from '@/shared/workings/readingLimit';
+import { chanceWithin, clearOf, decide, errorLimitOf, sheet, uncertaintyOf } from '@/shared/workings/readingLimit';
 import { runSheet } from '@/shared/workings/sheet';
 
 const rail = { low: 4.75, high: 5.25 };
@@ -91,11 +91,63 @@ describe('uncertaintyOf', () => {
   });
 });
 
+describe('chanceWithin', () => {
+  const guard = fc.double({ min: 0, max: 20, noNaN: true });
+  it('is one half on a limit, all or nothing without uncertainty, and falls as the reading leaves the middle', () => {
+    expect(chanceWithin(5.25, { low: null, high: 5.25 }, 0.05)).toBeCloseTo(0.5, 12);
+    expect([4.7, 4.75, 5, 5.26].map((value) => chanceWithin(value, rail, 0))).toEqual([0, 1, 1, 0]);
+    fc.assert(
+      fc.property(fc.double({ min: 0, max: 2, noNaN: true }), fc.double({ min: 0, max: 2, noNaN: true }), guard, (a, b, w) => {
+        const [near, far] = [Math.min(a, b), Math.max(a, b)];
+        const chance = chanceWithin(5 + near, rail, w);
+        return chance >= chanceWithin(5 + far, rail, w) - 1e-12 && chance >= 0 && chance <= 1;
+      }),
+    );
+  });
+});
+
+describe('clearOf', () => {
+  it('is the reading that just keeps its own guard band from the limit', () => {
+    const spec = { percent: 0.5, counts: 3, resolution: 0.001 };
+    const [low, high] = [clearOf(spec, 4.75, 1), clearOf(spec, 5.25, -1)];
+    expect([low, low - 1e-6, high, high + 1e-6].map((reading) => decide(reading, rail, uncertaintyOf(spec, reading)))).toEqual([
+      'in',
+      'close-in',
+      'in',
+      'close-in',
+    ]);
+  });
+});
+
 describe('sheet', () => {
   it('says that a reading inside the guard band is close', () => {
     const answer = runSheet(sheet, sheet.example);
     expect(answer).toMatchObject({ ok: true, result: { decision: 'close-in' } });
-    expect(answer.ok ? answer.headline : '').toBe('In, but close: this instrument cannot be sure: 4.77 V ± 31.004 mV.');
+    expect(answer.ok ? answer.headline : '').toBe(
+      'In, but close: this instrument cannot be sure. 4.77 V ± 31 mV; the chance that it is the other way round is 9.8 %.',
+    );
+  });
+
+  it('gives the limits alone while nothing is read', () => {
+    const answer = runSheet(sheet, { ...sheet.example, reading: null });
+    expect(answer).toMatchObject({ ok: true, result: { decision: null, chanceIn: null, chanceWrong: null } });
+    expect(answer.ok ? answer.headline : '').toBe('Clearly in from 4.7811 V to 5.2164 V with this instrument.');
+  });
+
+  it('says when the instrument is too coarse for the limits', () => {
+    const answer = runSheet(sheet, { ...sheet.example, reading: null, percent: 10 });
+    expect(answer.ok ? answer.headline : '').toBe('Too coarse: with this instrument no reading can be clearly in.');
+  });
+
+  it('counts an analogue meter from its full scale', () => {
+    const needle = { reading: 5, low: 4.75, high: 5.25, percent: 0, counts: 0, resolution: 0.1, rangePercent: 2.5, fullScale: 10 };
+    expect(runSheet(sheet, needle)).toMatchObject({ ok: true, result: { errorLimit: 0.25, decision: 'close-in' } });
+    expect(runSheet(sheet, { ...needle, fullScale: null })).toEqual({
+      ok: false,
+      field: 'fullScale',
+      say: 'Percent of full scale needs the full scale of the range.',
+    });
+    expect(runSheet(sheet, { ...needle, reading: 12 })).toMatchObject({ ok: false, field: 'reading' });
   });
 
   it('names the field that is wrong', () => {

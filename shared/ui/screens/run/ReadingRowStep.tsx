@@ -23,6 +23,7 @@ import { ReadingChoices } from '@/shared/ui/screens/run/ReadingChoices';
 import { RowTitle } from '@/shared/ui/screens/run/RowTitle';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { RunFrame } from '@/shared/ui/screens/run/RunFrame';
+import { readingNow } from '@/shared/ui/screens/run/readingNow';
 import { scaleShown } from '@/shared/ui/screens/run/scaleShown';
 import { SecondPerson } from '@/shared/ui/screens/run/SecondPerson';
 import { StepBody } from '@/shared/ui/screens/run/StepBody';
@@ -110,7 +111,7 @@ export function ReadingRowStep({ run, current }: { run: Run; current: RowView & 
   );
   return (
     <RunFrame run={run} dock={dock}>
-      <StepBody run={run} row={row} />
+      <StepBody run={run} row={row} now={readingNow(row, typed, meter.chosen)} />
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', justifyContent: 'space-between', gap: space.s }}>
         <MeterChoice run={run} row={row} meter={meter} words={meter.chosen === null ? null : meterWords(meter.chosen, typed.range)} />
         <Button kind="quiet" label="Over range" disabled={run.busy || meter.chosen === null} onPress={() => setText('OL')} />

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { View } from 'react-native';
 
 import { workingsOf } from '@/flows/machine/stepWorkings';
+import type { ReadingNow } from '@/flows/machine/stepWorkings';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Button } from '@/shared/ui/components/Button';
 import { Dialog } from '@/shared/ui/components/Dialog';
@@ -12,13 +13,13 @@ import { SheetGrounds, SheetHeadline } from '@/shared/ui/screens/workings/SheetA
 
 type Open = 'why' | 'workings' | null;
 
-/** Quiet buttons; each opens over the step, with Stop in reach. */
-export function StepAside({ run }: { run: Run }) {
+/** Quiet buttons; each opens over the step, with Stop in reach. `now` is the reading that is being taken. */
+export function StepAside({ run, now = null }: { run: Run; now?: ReadingNow | null }) {
   const [open, setOpen] = useState<Open>(null);
   const { step } = run.view;
   const { profile, settings } = run.program.layout;
   if (step === null) return null;
-  const workings = workingsOf(step, profile, settings);
+  const workings = workingsOf(step, profile, settings, now);
   const close = () => setOpen(null);
   const frame = {
     onClose: close,

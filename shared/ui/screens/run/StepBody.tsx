@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { View } from 'react-native';
 
 import type { Row } from '@/flows/machine/rows';
+import type { ReadingNow } from '@/flows/machine/stepWorkings';
 import { Button } from '@/shared/ui/components/Button';
 import type { Run } from '@/shared/ui/screens/run/Run';
 import { StepAside } from '@/shared/ui/screens/run/StepAside';
@@ -11,8 +12,8 @@ import { StepHead } from '@/shared/ui/screens/run/StepHead';
 import { StepLines } from '@/shared/ui/screens/run/StepLines';
 import { StepNotes } from '@/shared/ui/screens/run/StepNotes';
 
-/** `row` is the one to be answered now, or null. */
-export function StepBody({ run, row }: { run: Run; row: Row | null }) {
+/** `row` is the one to be answered now, or null; `now` the reading that is being taken there. */
+export function StepBody({ run, row, now = null }: { run: Run; row: Row | null; now?: ReadingNow | null }) {
   const { step, rows } = run.view;
   const begun = rows.some((r) => r.answer !== null);
   const [shown, setShown] = useState(false);
@@ -21,8 +22,8 @@ export function StepBody({ run, row }: { run: Run; row: Row | null }) {
       <StepHead run={run} />
       {step !== null && (!begun || shown) ? (
         <>
-          <StepLines step={step} aside={<StepAside run={run} />} />
-          <StepNotes run={run} />
+          <StepLines step={step} aside={<StepAside run={run} now={now} />} />
+          <StepNotes run={run} now={now} />
         </>
       ) : null}
       {step !== null && begun && !shown ? (

@@ -1,0 +1,69 @@
+import { describe, expect, it } from 'vitest';
+
+import type { Profile } from '@/flows/document/profile';
+import { defaultSettings } from '@/flows/document/settings';
+import type { Step } from '@/flows/document/steps';
+import { WORKINGS_SHEETS } from '@/flows/document/steps';
+import { workingsOf } from '@/flows/machine/stepWorkings';
+import type { ReadingNow } from '@/flows/machine/stepWorkings';
+import { sheetById } from '@/shared/workings/list';
+import { benchProfile } from '@/tests/flows/support/bench';
+
+type Reference = NonNullable<Step['workings']>;
+
+const step = (workings: Reference): Step => ({
+  id: 'look',
+  kind: 'observe',
+  title: 'Look',
+  lines: ['Look.'],
+  contact: 'none',
+  tools: [],
+  minutes: 1,
+  hazards: [],
+  exits: [],
+  asks: 'What?',
+  workings,
+});
+const headline = (workings: Reference, profile: Profile = benchProfile, now: ReadingNow | null = null): string | null => {
+  const worked = workingsOf(step(workings), profile, defaultSettings, now);
+  if (worked === null) return null;
+  return worked.answer.ok ? worked.answer.headline : worked.answer.say;
+};
+
+describe('workingsOf', () => {
+  it('knows every sheet that a step may name', () => {
+    for (const id of WORKINGS_SHEETS) expect(sheetById(id), id).toBeDefined();
+  });
+
+  it('sets the reading of the step against its limit with the accuracy of the instrument', () => {
+    const now: ReadingNow = { quantity: 'volts-dc', low: 4.75, high: 5.25, accuracy: { percent: 0.5, counts: 3, resolution: 0.001 }, value: null };
+    expect(headline({ sheet: 'reading-limit' }, benchProfile, now)).toMatch(/^Clearly in from 4\.781\d* V to 5\.216\d* V with this instrument\.$/);
+    expect(headline({ sheet: 'reading-limit' }, benchProfile, { ...now, value: 4.77 })).toMatch(/^In, but close: .* 4\.77 V ± 31 mV/);
+    expect(headline({ sheet: 'reading-limit' }, benchProfile, { ...now, value: 5.4 })).toBe('Out, high: 5.4 V ± 35 mV.');
+  });
+
+  it('says nothing of a reading while nobody knows the instrument', () => {
+    expect(headline({ sheet: 'reading-limit' })).toBeNull();
+    expect(headline({ sheet: 'reading-limit' }, benchProfile, { quantity: 'ohms', low: null, high: null, accuracy: { percent: 1, counts: 2, resolution: 0.1 }, value: 3 })).toBe('Give a low limit, a high limit, or both.');
+  });
+
+  it('works a return out at the most amps of its rail, with a contact at each end', () => {
+    // 4 mm², 0.4 m: 1.72 mΩ of copper and two contacts of 10 mΩ at 12 A; the profile allows 10 mΩ end to end.
+    expect(headline({ sheet: 'wire-drop' })).toBe('21.72 mΩ: 261 mV lost at 12 A, at most 264 mV with a cable to IEC 60228. More than the 120 mV allowed.');
+    expect(headline({ sheet: 'wire-drop', conductor: 'r1' })).toBe(headline({ sheet: 'wire-drop' }));
+    expect(headline({ sheet: 'wire-drop' }, { ...benchProfile, conductors: [] })).toBeNull();
+  });
+
+  it('takes the fuse and the plate of the machine', () => {
+    expect(headline({ sheet: 'fuse-inrush' })).toBe('Carries the 522 mA. Blows from 2.1 A on, within 2 min.');
+    const american = { ...benchProfile, mains: { ...benchProfile.mains, volts: 120 } };
+    expect(headline({ sheet: 'fuse-inrush' }, american)).toMatch(/^Too small: it may carry 750 mA for good, the load draws 1 A\. The least usual rating is 1\.5 A\.$/);
+  });
+
+  it('puts the trip of a rail between rail and logic, and is silent where no rail has one', () => {
+    expect(headline({ sheet: 'over-voltage-trip' })).toBe('In order: rail at most 5.25 V, trip 5.8 V to 6.6 V, parts stand 7 V.');
+    const [rail] = benchProfile.rails;
+    if (rail === undefined) throw new Error('no rail');
+    expect(headline({ sheet: 'over-voltage-trip' }, { ...benchProfile, rails: [{ ...rail, trip: null }] })).toBeNull();
+  });
+});
