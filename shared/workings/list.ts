@@ -2,10 +2,13 @@
 import { sheet as bleedDown } from '@/shared/workings/bleedDown';
 import { sheet as fuseInrush } from '@/shared/workings/fuseInrush';
 import { sheet as overVoltageTrip } from '@/shared/workings/overVoltageTrip';
+import { sheet as passElement } from '@/shared/workings/passElement';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
 import type { Sheet } from '@/shared/workings/sheet';
+import { sheet as smoothingRipple } from '@/shared/workings/smoothingRipple';
+import { sheet as switchingRegulator } from '@/shared/workings/switchingRegulator';
 import { sheet as wireDrop } from '@/shared/workings/wireDrop';
 
 /** A sheet whose own types are not known where it is listed; feed it through `runSheet`, which parses first. */
@@ -15,6 +18,9 @@ export type AnySheet = Sheet;
 export const SHEETS: readonly AnySheet[] = [
   seriesLamp,
   bleedDown,
+  passElement,
+  switchingRegulator,
+  smoothingRipple,
   railLimits,
   readingLimit,
   wireDrop,

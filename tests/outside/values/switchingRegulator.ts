@@ -1,0 +1,163 @@
+/** Published values of step-down switching regulators. */
+import type { OutsideValue } from '@/tests/outside/outsideValue';
+
+const sheet = 'switching-regulator';
+const ti = 'TI SLVA477, Basic Calculation of a Buck Converter’s Power Stage: I = I out × (1 − D)';
+const hart1 = 'Hart, Power Electronics, example 6-1 (from memory, recomputed)';
+const hart2 = 'Hart, Power Electronics, example 6-2 (from memory, recomputed)';
+const onsemi = 'MC34063A data sheet, formula table, step-down; inputs of AN920/D (from memory)';
+const ideal = { switchVolts: 0, diodeVolts: 0, control: 'fixed' };
+const buck25 = {
+  inputVolts: 25,
+  outputVolts: 5,
+  amps: 0.5,
+  henries: 1e-3,
+  farads: 1e-4,
+  esrOhms: 0,
+  control: 'fixed',
+  hertz: 100e3,
+  switchVolts: 1,
+  diodeVolts: 0.4,
+};
+const example1 = { ...ideal, inputVolts: 50, outputVolts: 20, amps: 1, henries: 400e-6, farads: 100e-6, esrOhms: 0, hertz: 20e3 };
+const example2 = { ...ideal, inputVolts: 48, outputVolts: 18, amps: 1.8, henries: 97.5e-6, farads: 100e-6, esrOhms: 0, hertz: 40e3 };
+const stepDown = {
+  inputVolts: 21.6,
+  outputVolts: 5,
+  amps: 0.0501,
+  henries: 848.5e-6,
+  farads: 10e-6,
+  esrOhms: 0,
+  control: 'fixed',
+  hertz: 50e3,
+  switchVolts: 0.8,
+  diodeVolts: 0.8,
+};
+const tps = {
+  inputVolts: 5,
+  outputVolts: 1.8,
+  amps: 4,
+  henries: 6e-6,
+  farads: 680e-6,
+  esrOhms: 0.04,
+  control: 'hysteretic',
+  windowVolts: 0.0097,
+  delaySeconds: 1.5e-6,
+};
+
+export const values: readonly OutsideValue[] = [
+  { sheet, what: '25 V to 5 V, 1.0 V and 0.4 V, duty', source: ti, expected: 0.2213, within: 0.0001, given: buck25, read: 'duty' },
+  {
+    sheet,
+    what: '25 V to 5 V, 0.5 A, diode on average',
+    source: ti,
+    expected: 0.3893,
+    within: 0.0001,
+    given: buck25,
+    read: 'diodeAverageAmps',
+  },
+  { sheet, what: '50 V to 20 V, duty', source: hart1, expected: 0.4, within: 1e-9, given: example1, read: 'duty' },
+  { sheet, what: '50 V to 20 V, peak of the choke', source: hart1, expected: 1.75, within: 0.005, given: example1, read: 'peakAmps' },
+  { sheet, what: '50 V to 20 V, valley of the choke', source: hart1, expected: 0.25, within: 0.005, given: example1, read: 'valleyAmps' },
+  {
+    sheet,
+    what: '50 V to 20 V, ripple in percent',
+    source: hart1,
+    expected: 0.469,
+    within: 0.0005,
+    given: example1,
+    read: 'rippleVolts',
+    times: 100 / 20,
+  },
+  { sheet, what: '48 V to 18 V, duty', source: hart2, expected: 0.375, within: 1e-9, given: example2, read: 'duty' },
+  { sheet, what: '48 V to 18 V, ripple current', source: hart2, expected: 2.88, within: 0.006, given: example2, read: 'rippleAmps' },
+  { sheet, what: '48 V to 18 V, peak', source: hart2, expected: 3.24, within: 0.005, given: example2, read: 'peakAmps' },
+  {
+    sheet,
+    what: '48 V to 18 V, ripple in percent',
+    source: hart2,
+    expected: 0.5,
+    within: 0.005,
+    given: example2,
+    read: 'rippleVolts',
+    times: 100 / 18,
+  },
+  {
+    sheet,
+    what: 'step-down column, on time in μs',
+    source: onsemi,
+    expected: 5.37,
+    within: 0.005,
+    given: stepDown,
+    read: 'onSeconds',
+    times: 1e6,
+  },
+  {
+    sheet,
+    what: 'step-down column, off time in μs',
+    source: onsemi,
+    expected: 14.63,
+    within: 0.005,
+    given: stepDown,
+    read: 'offSeconds',
+    times: 1e6,
+  },
+  {
+    sheet,
+    what: 'step-down column, peak in mA is twice the load',
+    source: onsemi,
+    expected: 100,
+    within: 0.2,
+    given: stepDown,
+    read: 'peakAmps',
+    times: 1e3,
+  },
+  {
+    sheet,
+    what: 'step-down column, 10 μF for 25 mV',
+    source: onsemi,
+    expected: 25,
+    within: 0.1,
+    given: stepDown,
+    read: 'rippleVolts',
+    times: 1e3,
+  },
+  {
+    sheet,
+    what: 'TPS5103 example, kHz',
+    source: 'TPS5103 data sheet, p. 22: 122 kHz, stated ± 30 %',
+    expected: 122,
+    within: 1,
+    given: tps,
+    read: 'hertz',
+    times: 1e-3,
+  },
+  {
+    sheet,
+    what: '12 V to 5 V at 2 A with 30 % ripple, peak',
+    source: 'Converter calculator with worked example (aionlinecalculator.com, June 2026)',
+    expected: 2.3,
+    within: 0.01,
+    given: { ...ideal, inputVolts: 12, outputVolts: 5, amps: 2, henries: 9.72e-6, farads: 10e-6, esrOhms: 0, hertz: 500e3 },
+    read: 'peakAmps',
+  },
+  {
+    sheet,
+    what: '0.6 A at 400 kHz into 3.75 μF, mV',
+    source: 'Design guide (rftools.io, February 2026): C = ΔI ÷ (8 f ΔV)',
+    expected: 50,
+    within: 0.5,
+    given: {
+      ...ideal,
+      inputVolts: 12,
+      outputVolts: 5,
+      amps: 2,
+      henries: (5 * 7) / (12 * 0.6 * 400e3),
+      farads: 3.75e-6,
+      esrOhms: 0,
+      hertz: 400e3,
+    },
+    read: 'rippleVolts',
+    times: 1e3,
+  },
+];
