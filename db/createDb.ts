@@ -19,7 +19,7 @@ const parsers: Record<number, (text: string) => unknown> = { [INT8]: Number, [DA
  * one opens a connection anew. Without a listener Node would end the process.
  */
 export function createPool(url: string, options: { connections?: number; onBroken?: (error: Error) => void } = {}): Pool {
-  const onBroken = options.onBroken ?? (() => undefined);
+  const onBroken = (error: Error) => options.onBroken?.(withoutClient(error));
   const pool = new Pool({
     connectionString: url,
     max: options.connections ?? 10,
@@ -30,6 +30,12 @@ export function createPool(url: string, options: { connections?: number; onBroke
   // While it is lent out the pool itself does not listen to it.
   pool.on('connect', (client) => client.on('error', onBroken));
   return pool;
+}
+
+/** The driver hangs the whole client, with its password, on the error of a connection that broke; no log is to print that. */
+function withoutClient(error: Error): Error {
+  Reflect.deleteProperty(error, 'client');
+  return error;
 }
 
 /** The typed door to the database. `destroy()` closes its connections. */

@@ -137,8 +137,11 @@ export interface RunsTable {
   settings: FixedJson<Settings>;
   settings_hash: Fixed<string>;
   engine: Fixed<string>;
-  restorer: Fixed<string>;
-  restorer_roles: Fixed<string[]>;
+  /** who leads it now */
+  restorer: string;
+  restorer_roles: string[];
+  /** everybody who led it before */
+  former: Generated<string[]>;
   state: 'open' | 'closed' | 'submitted' | 'returned' | 'accepted';
   ended: string | null;
   started_at: FixedTime;
@@ -159,6 +162,8 @@ export interface RunHeadsTable {
   step_total: number;
   /** the `hold-asked` entry that waits for an answer */
   hold_entry: string | null;
+  /** the person whom the run is offered to */
+  offered_to: Generated<string | null>;
 }
 
 export interface EntriesTable {

@@ -7,6 +7,7 @@ import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 
 import { addEntryRoutes } from './entries/routes';
+import { addHandOverRoutes } from './handOver/routes';
 import { addHealthRoutes } from './health/routes';
 import { addHoldRoutes } from './holds/routes';
 import { refuseCrossSite } from './http/refuseCrossSite';
@@ -81,9 +82,10 @@ export function createApp(parts: Parts): Express {
   addInstrumentRoutes(router, parts);
   addPeopleRoutes(router, parts);
   addSettingsRoutes(router, parts);
-  addRunRoutes(router, parts);
+  addRunRoutes(router, parts, confirm);
   addEntryRoutes(router, parts);
   addHoldRoutes(router, parts, confirm);
+  addHandOverRoutes(router, parts, confirm);
   addRecordRoutes(router, parts, confirm);
   addKeyRoutes(router, parts);
   addOpenApiRoutes(router, parts);

@@ -17,6 +17,7 @@ import { createApp } from './createApp';
 import { mailTasks } from './mail/mailTasks';
 import type { Parts } from './parts';
 import { createProgramCache } from './program/programCache';
+import { sessionTasks, sweepNightly } from './session/sweepSessions';
 
 /** Requests under way get this long to finish when the server stops. */
 const STOP_MS = 8_000;
@@ -30,7 +31,7 @@ export async function startServer(config: Config, log: Logger = pino({ level: co
     const port = await listen(server, config.host, config.port);
     const publicUrl = config.publicUrl ?? `http://localhost:${String(port)}`;
     const mailer = createMailer(config, log);
-    const jobs = await startJobs(config.databaseUrl, mailTasks({ db, mailer, publicUrl }), log);
+    const jobs = await startJobs(config.databaseUrl, { ...mailTasks({ db, mailer, publicUrl }), ...sessionTasks(parts) }, log, [sweepNightly]);
     log.info({ port, host: config.host }, 'listening');
     let stopping: Promise<void> | undefined;
     const stop = async () => {

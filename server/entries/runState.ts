@@ -13,6 +13,7 @@ import type { RecordEntry } from '@/shared/record/recordEntry';
 import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
 import { getProgram, programKey } from '../program/runDocuments';
+import { wantThisEngine } from '../runs/stranded';
 import { findEntries } from './queries';
 
 export interface Standing {
@@ -20,8 +21,9 @@ export interface Standing {
   state: RunState;
 }
 
-/** Program and state of a run at its head. */
+/** Program and state of a run at its head. Throws `other-engine` for a run of another engine. */
 export async function getStanding(tx: Tx, parts: Parts, run: RunRow, head: Pick<RunHeadRow, 'seq'>): Promise<Standing> {
+  wantThisEngine(run);
   const program = await getProgram(tx, parts.programs, run);
   const key = snapshotKey(run, program);
   const kept = await tx.selectFrom('snapshots').select(['program', 'seq', 'state']).where('run', '=', run.id).executeTakeFirst();

@@ -12,6 +12,7 @@ import { askForCountersign } from '../mail/askForCountersign';
 import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
 import { headOf } from '../program/headOf';
+import { setRestorer } from '../runs/queries';
 import { appendEntries } from './appendEntries';
 import type { NewEntry } from './appendEntries';
 import { closeRun } from './closeRun';
@@ -23,6 +24,8 @@ export interface TakenEvent {
   id: string;
   actor: string;
   event: MachineEvent;
+  /** of the one who takes the run over, as they stand now */
+  roles?: readonly string[];
 }
 
 /**
@@ -37,7 +40,8 @@ export async function takeEvents(tx: Tx, parts: Parts, run: RunRow, head: RunHea
   let voidedBy: string | null = null;
   const drafts: NewEntry[] = [];
   const asked: { entry: string; step: string }[] = [];
-  for (const { id, actor, event } of events) {
+  let led: { restorer: string; roles: readonly string[] } | null = null;
+  for (const { id, actor, event, roles } of events) {
     const from = state.context;
     const taken = advance(program, state, event);
     if (!taken.ok) {
@@ -47,6 +51,7 @@ export async function takeEvents(tx: Tx, parts: Parts, run: RunRow, head: RunHea
     state = taken.state;
     const title = program.layout.steps.get(from.key)?.step.title ?? null;
     drafts.push({ id, actor, kind: taken.kind, at: new Date(event.at).toISOString(), monotonic: Math.round(event.monotonic), body: bodyOf(event, from.key, title, state) });
+    if (state.context.restorer !== from.restorer) led = { restorer: state.context.restorer, roles: roles ?? [] };
     if (event.type === 'HOLD_ASKED') {
       hold = id;
       asked.push({ entry: id, step: title ?? from.key });
@@ -57,7 +62,8 @@ export async function takeEvents(tx: Tx, parts: Parts, run: RunRow, head: RunHea
   const entries = await appendEntries(tx, head, drafts, now);
   await setHead(tx, run.id, { ...headOf(program, state), hold_entry: hold });
   await keepSnapshot(tx, run, { program, state }, head.seq);
-  for (const ask of asked) if (ask.entry === hold) await askForCountersign(tx, { workshop: run.workshop, run: run.id, restorer: run.restorer, ...ask });
+  if (led !== null) await setRestorer(tx, run, led);
+  for (const ask of asked) if (ask.entry === hold) await askForCountersign(tx, { workshop: run.workshop, run: run.id, ledBy: state.context.restorers, ...ask });
   if (voidedBy !== null) await voidReleases(tx, run, voidedBy, now);
   if (state.context.phase === 'closed') await closeRun(tx, run, state, now);
   return entries;

@@ -13,7 +13,7 @@ const REASON = 'work on the supply after the release';
  * Makes every release of the run's machine void that is not so already. The record that carries the release says so too.
  * @param entry the entry of `run` that did it
  */
-export async function voidReleases(tx: Tx, run: RunRow, entry: string, now: number): Promise<void> {
+export async function voidReleases(tx: Tx, run: RunRow, entry: string, now: number, reason: string = REASON): Promise<void> {
   const standing = await tx
     .selectFrom('releases')
     .leftJoin('release_voids', 'release_voids.release', 'releases.id')
@@ -24,10 +24,10 @@ export async function voidReleases(tx: Tx, run: RunRow, entry: string, now: numb
   for (const release of standing) {
     await tx
       .insertInto('release_voids')
-      .values({ release: release.id, workshop: run.workshop, run: run.id, entry, voided_at: new Date(now), reason: REASON })
+      .values({ release: release.id, workshop: run.workshop, run: run.id, entry, voided_at: new Date(now), reason })
       .execute();
     const head = await lockHead(tx, release.run);
-    const body = { release: release.id, byRun: run.id, byEntry: entry, reason: REASON };
+    const body = { release: release.id, byRun: run.id, byEntry: entry, reason };
     await appendEntries(tx, head, [{ id: uuidv7(), actor: run.restorer, kind: 'void', at: new Date(now).toISOString(), monotonic: 0, body }], now);
   }
 }

@@ -9,7 +9,9 @@ import { findEntries } from '../entries/queries';
 import { getStanding } from '../entries/runState';
 import type { Parts } from '../parts';
 import type { RunSummaryRow } from '../runs/queries';
+import { everLed } from '../runs/access';
 import { findRun } from '../runs/queries';
+import { isStranded } from '../runs/stranded';
 import { runSummaryToWire } from '../runs/toWire';
 import { factsInWords } from './factsInWords';
 
@@ -23,7 +25,7 @@ const READINGS = 10;
 /** The hold at which the run of `row` waits, as `person` is shown it; null when it waits no more. */
 export async function holdOf(tx: Tx, parts: Parts, row: RunSummaryRow, person: string): Promise<Hold | null> {
   const run = await findRun(tx, row.id);
-  if (run === undefined || row.hold_entry === null) return null;
+  if (run === undefined || row.hold_entry === null || isStranded(run)) return null;
   const { program, state } = await getStanding(tx, parts, run, row);
   const placed = program.layout.steps.get(state.context.key);
   const entries = await findEntries(tx, run.id);
@@ -43,6 +45,6 @@ export async function holdOf(tx: Tx, parts: Parts, row: RunSummaryRow, person: s
     band: bandOf(state.context.facts),
     facts: factsInWords(state.context.facts, program.layout),
     readings: entries.filter((entry) => entry.kind === 'reading').slice(-READINGS).reverse(),
-    mayAnswer: run.restorer !== person,
+    mayAnswer: !everLed(person, run),
   };
 }

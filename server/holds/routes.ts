@@ -7,11 +7,11 @@ import { routes } from '@/shared/contract/routes';
 
 import { bindRoute } from '../http/bindRoute';
 import type { Parts } from '../parts';
-import { getRunFor, wantOtherThanRestorer, wantRestorer } from '../runs/access';
+import { getRunFor, wantNeverRestorer, wantOtherThanRestorer, wantRestorer } from '../runs/access';
 import type { ConfirmPassword } from '../session/confirmPassword';
 import { holdOf } from './holdOf';
 import { findWaitingRuns } from './queries';
-import { addSecondPerson, answerHold, wantMember } from './service';
+import { addSecondPerson, answerHold, OWN_RUN, wantMember } from './service';
 
 /** Adds the routes of hold points and second persons. */
 export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPassword): void {
@@ -27,7 +27,7 @@ export function addHoldRoutes(router: Router, parts: Parts, confirm: ConfirmPass
   );
   bindRoute(router, parts, routes.answerHold, async ({ who, params, body }) => {
     await inWorkshop(parts.db, who.workshop, async (tx) =>
-      wantOtherThanRestorer(who, await getRunFor(tx, params.run), 'This is your own run: another senior has to countersign it.'),
+      wantNeverRestorer(who, await getRunFor(tx, params.run), OWN_RUN),
     );
     await confirm(who.person, body.password);
     return inWorkshop(parts.db, who.workshop, (tx) => answerHold(tx, parts, who, params.run, body));

@@ -1,29 +1,28 @@
 /** Countersigns and second persons: what somebody else than the restorer puts into a run. */
 import type { Tx } from '@/db/createDb';
-import type { RunHeadRow, RunRow } from '@/db/tables';
 import type { MachineEvent } from '@/flows/machine/events';
 import type { BodyOf } from '@/shared/contract/defineRoute';
 import type { routes } from '@/shared/contract/routes';
-import type { Head } from '@/shared/contract/runSummary';
-import type { RecordEntry } from '@/shared/record/recordEntry';
 
 import { outOfSequence } from '../entries/postEntries';
-import { findEntriesById, lockHead } from '../entries/queries';
+import { lockHead } from '../entries/queries';
 import { getStanding } from '../entries/runState';
-import { takeEvents } from '../entries/takeEvents';
 import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
-import { getRunFor, wantOtherThanRestorer } from '../runs/access';
-import { signedTime } from './signedEvent';
+import { signedBefore, takeSigned } from '../entries/signedEntry';
+import type { Signed } from '../entries/signedEntry';
+import { signedTime } from '../entries/signedTime';
+import { getRunFor, wantNeverRestorer, wantOtherThanRestorer } from '../runs/access';
+
+export const OWN_RUN = 'This is your own run: another senior has to countersign it.';
 
 type Answer = Pick<BodyOf<typeof routes.answerHold>, 'id' | 'seq' | 'answer' | 'reason'>;
-type Signed = { entry: RecordEntry; head: Head };
 
 /** Gives or refuses the countersign that the run waits for. The password has been checked. */
 export async function answerHold(tx: Tx, parts: Parts, who: { person: string }, runId: string, answer: Answer): Promise<Signed> {
   const head = await lockHead(tx, (await getRunFor(tx, runId)).id);
   const run = await getRunFor(tx, runId);
-  wantOtherThanRestorer(who, run, 'This is your own run: another senior has to countersign it.');
+  wantNeverRestorer(who, run, OWN_RUN);
   const type = answer.answer === 'given' ? 'HOLD_GIVEN' : 'HOLD_REFUSED';
   const before = await signedBefore(tx, run, head, answer.id, who.person, type);
   if (before !== null) return before;
@@ -57,20 +56,4 @@ export async function addSecondPerson(tx: Tx, parts: Parts, runId: string, secon
 export async function wantMember(tx: Tx, person: string): Promise<void> {
   const member = await tx.selectFrom('members').select('person').where('person', '=', person).where('left_at', 'is', null).executeTakeFirst();
   if (member === undefined) throw new ProblemError('bad-input', 'The second person is no member of this workshop.', { faults: [{ path: 'person', message: 'is no member of this workshop' }] });
-}
-
-async function takeSigned(tx: Tx, parts: Parts, run: RunRow, head: RunHeadRow, taken: { id: string; actor: string; event: MachineEvent }): Promise<Signed> {
-  const [entry] = await takeEvents(tx, parts, run, head, [taken]);
-  if (entry === undefined) throw new Error('an event was taken without an entry');
-  return { entry, head: { seq: head.seq, hash: head.hash } };
-}
-
-/** The entry that this very request made before, or null; throws `id-taken` when the id was used for something else. */
-async function signedBefore(tx: Tx, run: RunRow, head: RunHeadRow, id: string, actor: string, type: MachineEvent['type']): Promise<Signed | null> {
-  const [entry] = await findEntriesById(tx, run.id, [id]);
-  if (entry === undefined) return null;
-  const event = entry.body['event'];
-  const same = entry.actor === actor && typeof event === 'object' && event !== null && 'type' in event && event.type === type;
-  if (!same) throw new ProblemError('id-taken', 'The id of this entry was used before.', { entry: id });
-  return { entry, head: { seq: head.seq, hash: head.hash } };
 }

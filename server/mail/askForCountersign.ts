@@ -13,13 +13,13 @@ export interface CountersignJob {
   to: string;
 }
 
-/** One job for each senior but the restorer, so that a letter that fails is tried again alone. */
-export async function askForCountersign(tx: Tx, ask: { workshop: string; run: string; entry: string; step: string; restorer: string }): Promise<void> {
+/** One job for each senior who never led the run, so that a letter that fails is tried again alone. */
+export async function askForCountersign(tx: Tx, ask: { workshop: string; run: string; entry: string; step: string; ledBy: readonly string[] }): Promise<void> {
   const seniors = await tx
     .selectFrom('members')
     .select('person')
     .where('workshop', '=', ask.workshop)
-    .where('person', '!=', ask.restorer)
+    .where('person', 'not in', ask.ledBy)
     .where('left_at', 'is', null)
     .where((eb) => eb(eb.val('senior'), '=', eb.fn.any('roles')))
     .execute();

@@ -3,6 +3,7 @@ import { bandSchema, endingSchema } from '@/shared/contract/runSummary';
 import type { RunSummary } from '@/shared/contract/runSummary';
 
 import type { RunSummaryRow } from './queries';
+import { isStranded } from './stranded';
 
 /** A row of `findRunSummaries` in the form of the contract. */
 export function runSummaryToWire(row: RunSummaryRow): RunSummary {
@@ -11,6 +12,9 @@ export function runSummaryToWire(row: RunSummaryRow): RunSummary {
     machine: { id: row.machine, name: row.machine_name, serial: row.serial },
     tree: { id: row.tree, title: row.tree_title, version: row.tree_version },
     restorer: row.restorer,
+    former: row.former,
+    offeredTo: row.offered_to,
+    stranded: isStranded(row),
     state: row.state,
     ended: row.ended === null ? null : endingSchema.parse(row.ended),
     startedAt: row.started_at.toISOString(),

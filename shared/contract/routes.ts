@@ -3,6 +3,7 @@ import { z } from 'zod';
 
 import { defineRoute } from './defineRoute';
 import { entriesQuery, entriesSchema, postedEntriesSchema, postEntriesBody } from './entries';
+import { handOverBody, takeOverBody } from './handOver';
 import { answeredHoldSchema, answerHoldBody, holdsSchema, secondPersonBody } from './holds';
 import { machineIdSchema, runIdSchema, treeIdSchema, versionSchema } from './ids';
 import { instrumentsSchema } from './instruments';
@@ -12,6 +13,7 @@ import { acceptBody, findingBody, jwksSchema, recordSchema, recordsQuery, record
 import { runBundleSchema, runsQuery, runsSchema, startRunBody } from './runs';
 import { meSchema, signInBody } from './session';
 import { workshopSettingsSchema } from './settings';
+import { closeStrandedBody } from './strandedRun';
 import { treeDocumentSchema, treesSchema } from './trees';
 
 const done = z.object({ done: z.literal(true) });
@@ -38,18 +40,21 @@ export const routes = {
   startRun: defineRoute({ method: 'post', path: '/api/runs', summary: 'Start a run', who: ['restorer', 'senior'], body: startRunBody, status: 201, answer: runBundleSchema, problems: ['not-found', 'machine-busy', 'id-taken', 'not-startable'] }),
   run: defineRoute({ method: 'get', path: '/api/runs/:run', summary: 'All that a device needs to go on with a run', who: 'member', params: runParams, status: 200, answer: runBundleSchema, problems: ['not-found'] }),
   entries: defineRoute({ method: 'get', path: '/api/runs/:run/entries', summary: 'Entries after a place', who: 'member', params: runParams, query: entriesQuery, status: 200, answer: entriesSchema, problems: ['not-found'] }),
-  postEntries: defineRoute({ method: 'post', path: '/api/runs/:run/entries', summary: 'Add entries, in order; sending one twice is answered as the first time', who: ['restorer', 'senior'], params: runParams, body: postEntriesBody, status: 200, answer: postedEntriesSchema, problems: ['not-found', 'not-your-run', 'out-of-sequence', 'id-taken', 'wrong-state', 'refused', 'instrument'] }),
+  postEntries: defineRoute({ method: 'post', path: '/api/runs/:run/entries', summary: 'Add entries, in order; sending one twice is answered as the first time', who: ['restorer', 'senior'], params: runParams, body: postEntriesBody, status: 200, answer: postedEntriesSchema, problems: ['not-found', 'not-your-run', 'out-of-sequence', 'id-taken', 'wrong-state', 'refused', 'instrument', 'handed-over', 'other-engine'] }),
 
   holds: defineRoute({ method: 'get', path: '/api/holds', summary: 'Hold points that await a countersign', who: ['senior'], status: 200, answer: holdsSchema, problems: [] }),
-  answerHold: defineRoute({ method: 'post', path: '/api/runs/:run/holds', summary: 'Give or refuse a countersign', who: ['senior'], params: runParams, body: answerHoldBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'own-run', 'wrong-password', 'no-hold', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
-  secondPerson: defineRoute({ method: 'post', path: '/api/runs/:run/second-person', summary: 'A second person who is present signs in at the restorer’s device', who: ['restorer', 'senior'], params: runParams, body: secondPersonBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'not-your-run', 'own-run', 'wrong-password', 'wrong-state', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  answerHold: defineRoute({ method: 'post', path: '/api/runs/:run/holds', summary: 'Give or refuse a countersign', who: ['senior'], params: runParams, body: answerHoldBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'own-run', 'wrong-password', 'no-hold', 'other-engine', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  secondPerson: defineRoute({ method: 'post', path: '/api/runs/:run/second-person', summary: 'A second person who is present signs in at the restorer’s device', who: ['restorer', 'senior'], params: runParams, body: secondPersonBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'not-your-run', 'handed-over', 'own-run', 'wrong-password', 'wrong-state', 'other-engine', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  handOver: defineRoute({ method: 'post', path: '/api/runs/:run/hand-over', summary: 'Offer a run to another restorer, signed by the one who gives', who: ['restorer', 'senior'], params: runParams, body: handOverBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'not-your-run', 'handed-over', 'wrong-password', 'wrong-state', 'other-engine', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  takeOver: defineRoute({ method: 'post', path: '/api/runs/:run/take-over', summary: 'Take a run that is offered, signed by the one who takes', who: ['restorer', 'senior'], params: runParams, body: takeOverBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'not-offered', 'wrong-password', 'wrong-state', 'other-engine', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),
+  closeStranded: defineRoute({ method: 'post', path: '/api/runs/:run/close', summary: 'Close a run that was begun under rules which the server no longer runs, with a reason', who: ['senior'], params: runParams, body: closeStrandedBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'wrong-password', 'wrong-state', 'out-of-sequence', 'id-taken', 'too-many'] }),
 
-  submit: defineRoute({ method: 'post', path: '/api/runs/:run/submit', summary: 'Submit a closed run for review', who: ['restorer', 'senior'], params: runParams, body: submitBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'not-your-run', 'wrong-state', 'id-taken'] }),
+  submit: defineRoute({ method: 'post', path: '/api/runs/:run/submit', summary: 'Submit a closed run for review', who: ['restorer', 'senior'], params: runParams, body: submitBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'not-your-run', 'handed-over', 'wrong-state', 'id-taken'] }),
   records: defineRoute({ method: 'get', path: '/api/records', summary: 'Records; a restorer sees the own ones only', who: 'member', query: recordsQuery, status: 200, answer: recordsSchema, problems: [] }),
   record: defineRoute({ method: 'get', path: '/api/records/:record', summary: 'One record', who: 'member', params: recordParams, status: 200, answer: recordSchema, problems: ['not-found'] }),
   addFinding: defineRoute({ method: 'post', path: '/api/records/:record/findings', summary: 'Remark on one entry', who: ['reviewer'], params: recordParams, body: findingBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'own-run', 'wrong-state', 'id-taken'] }),
   returnRecord: defineRoute({ method: 'post', path: '/api/records/:record/return', summary: 'Send back with questions', who: ['reviewer'], params: recordParams, body: returnBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'own-run', 'wrong-state', 'id-taken'] }),
-  reply: defineRoute({ method: 'post', path: '/api/records/:record/reply', summary: 'Answer the questions of a returned record', who: ['restorer', 'senior'], params: recordParams, body: replyBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'not-your-run', 'wrong-state', 'id-taken'] }),
+  reply: defineRoute({ method: 'post', path: '/api/records/:record/reply', summary: 'Answer the questions of a returned record', who: ['restorer', 'senior'], params: recordParams, body: replyBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'not-your-run', 'handed-over', 'wrong-state', 'id-taken'] }),
   accept: defineRoute({ method: 'post', path: '/api/records/:record/accept', summary: 'Accept and sign a record', who: ['reviewer'], params: recordParams, body: acceptBody, status: 201, answer: reviewedSchema, problems: ['not-found', 'own-run', 'countersigned-run', 'wrong-password', 'wrong-state', 'id-taken', 'too-many'] }),
   exportRecord: defineRoute({ method: 'get', path: '/api/records/:record/export', summary: 'A closed record, signed', who: 'member', params: recordParams, status: 200, answer: signedRecordSchema, problems: ['not-found', 'wrong-state'] }),
 

@@ -24,6 +24,12 @@ export const runSummarySchema = z
     machine: z.object({ id: machineIdSchema, name: z.string(), serial: z.string() }),
     tree: z.object({ id: treeIdSchema, title: z.string(), version: versionSchema }),
     restorer: personIdSchema,
+    /** everybody who led it before */
+    former: z.array(personIdSchema),
+    /** the person whom it is offered to, or null */
+    offeredTo: personIdSchema.nullable(),
+    /** open, and begun under rules that the server no longer runs: nobody can be led on, a senior closes it */
+    stranded: z.boolean(),
     state: runStateSchema,
     ended: endingSchema.nullable(),
     startedAt: instantSchema,

@@ -11,7 +11,7 @@ import { personSchema } from './people';
 import { headSchema, runSummarySchema } from './runSummary';
 
 export const runsQuery = z.strictObject({
-  /** `1` for the runs of the person signed in */
+  /** `1` for the runs that the person signed in leads or is offered */
   mine: z.enum(['0', '1']).optional(),
   /** `1` for runs that are still open */
   open: z.enum(['0', '1']).optional(),

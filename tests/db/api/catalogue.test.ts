@@ -54,7 +54,7 @@ describe('the catalogue of the database', () => {
     const columns = await rows<{ column_name: string }>(
       `select column_name from information_schema.column_privileges where grantee = 'lampstep_server' and table_name = 'runs' and privilege_type = 'UPDATE' order by column_name`,
     );
-    expect(columns.map(({ column_name }) => column_name)).toEqual(['closed_at', 'ended', 'state']);
+    expect(columns.map(({ column_name }) => column_name)).toEqual(['closed_at', 'ended', 'former', 'restorer', 'restorer_roles', 'state']);
   });
 
   it('gives the keeper no right on any table, and nobody a right as PUBLIC', async () => {
@@ -80,7 +80,7 @@ describe('the catalogue of the database', () => {
   });
 
   it('has on each walled table one policy, by the workshop of the transaction', async () => {
-    const policies = await rows<{ tablename: string; qual: string; with_check: string | null; permissive: string; cmd: string }>(`select tablename, qual, with_check, permissive, cmd from pg_policies where schemaname = 'public' order by tablename`);
+    const policies = await rows<{ tablename: string; qual: string; with_check: string | null; permissive: string; cmd: string }>(`select tablename, qual, with_check, permissive, cmd from pg_policies where schemaname = 'public' and policyname <> 'sessions_ended' order by tablename`);
     const special = ['credentials', 'members', 'people', 'workshops'];
     for (const policy of policies.filter(({ tablename }) => !special.includes(tablename))) {
       expect(policy).toMatchObject({ qual: '(workshop = current_workshop())', with_check: '(workshop = current_workshop())', permissive: 'PERMISSIVE', cmd: 'ALL' });
@@ -88,8 +88,15 @@ describe('the catalogue of the database', () => {
     expect(new Set(policies.map(({ tablename }) => tablename)).size).toBe(policies.length);
   });
 
-  it('lets no function pass for its owner but the purge', async () => {
-    const definers = await rows<{ proname: string; proconfig: string[] }>(`select proname, proconfig from pg_proc where pronamespace = 'public'::regnamespace and prosecdef`);
-    expect(definers).toEqual([{ proname: 'purge_records', proconfig: ['search_path=public, pg_temp'] }]);
+  it('lets the owner alone reach sessions of every workshop, and only ended ones', async () => {
+    expect(await rows(`select tablename, roles::text, qual from pg_policies where policyname = 'sessions_ended'`)).toEqual([
+      { tablename: 'sessions', roles: '{lampstep_owner}', qual: `(LEAST(expires_at, revoked_at) < (clock_timestamp() - '1 day'::interval))` },
+    ]);
+  });
+
+  it('lets no function pass for its owner but the purge and the sweeping of ended sessions', async () => {
+    const definers = await rows<{ proname: string; proconfig: string[] }>(`select proname, proconfig from pg_proc where pronamespace = 'public'::regnamespace and prosecdef order by proname`);
+    expect(definers).toEqual(['purge_records', 'sweep_sessions'].map((proname) => ({ proname, proconfig: ['search_path=public, pg_temp'] })));
+    expect(await rows(`select has_function_privilege('lampstep_keeper', 'sweep_sessions(timestamptz)', 'execute') as keeper, has_function_privilege('lampstep_server', 'sweep_sessions(timestamptz)', 'execute') as server`)).toEqual([{ keeper: false, server: true }]);
   });
 });

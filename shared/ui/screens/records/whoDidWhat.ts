@@ -21,6 +21,8 @@ const COUNTED: readonly { kinds: readonly EntryKind[]; one: string; many: string
   { kinds: ['stopped'], one: 'Stop', many: 'Stops' },
   { kinds: ['hold-given'], one: 'countersign', many: 'countersigns' },
   { kinds: ['hold-refused'], one: 'refusal', many: 'refusals' },
+  { kinds: ['handed-over'], one: 'handing over', many: 'handings over' },
+  { kinds: ['taken-over'], one: 'taking over', many: 'takings over' },
   { kinds: ['finding'], one: 'finding', many: 'findings' },
   { kinds: ['returned'], one: 'return', many: 'returns' },
   { kinds: ['reply'], one: 'reply', many: 'replies' },
