@@ -85,6 +85,8 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings): R
       return fuseInputs(profile);
     case 'over-voltage-trip':
       return tripInputs(railOf(reference, profile.rails.filter((r) => r.trip !== null)));
+    case 'refit-trip':
+      return refitInputs(reference, profile);
   }
 }
 
@@ -125,6 +127,16 @@ function tripInputs(rail: Rail | undefined): Record<string, unknown> | null {
     tripTolerancePercent: percent((highVolts - lowVolts) / 2 / middle),
     limitAmps: rail.limitAmps,
   };
+}
+
+/** The board that the author names, else the first, on the rail that it draws most from; the boards before it in the profile are in. */
+function refitInputs(reference: Reference, { boards: { fitted }, rails }: Profile): Record<string, unknown> | null {
+  const at = reference.board === undefined ? 0 : fitted.findIndex((b) => b.id === reference.board);
+  const drawn = [...(fitted[at]?.draws ?? [])].sort((a, b) => b.amps - a.amps).find((d) => d.amps > 0 && (reference.rail === undefined || d.rail === reference.rail));
+  const rail = rails.find((r) => r.id === drawn?.rail);
+  if (drawn === undefined || rail === undefined) return null;
+  const before = fitted.slice(0, at).flatMap((b) => b.draws.filter((d) => d.rail === rail.id));
+  return { nominalVolts: rail.nominal, lastAmps: before.reduce((sum, d) => sum + d.amps, 0), boardAmps: drawn.amps, railAmps: rail.maxAmps, ownLimitAmps: rail.limitAmps };
 }
 
 function numberAt(result: unknown, path: string): number | null {

@@ -1,10 +1,12 @@
 /** Every sheet, in the order in which a list shows them. */
 import { sheet as bleedDown } from '@/shared/workings/bleedDown';
 import { sheet as fuseInrush } from '@/shared/workings/fuseInrush';
+import { sheet as junctionTest } from '@/shared/workings/junctionTest';
 import { sheet as overVoltageTrip } from '@/shared/workings/overVoltageTrip';
 import { sheet as passElement } from '@/shared/workings/passElement';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
+import { sheet as refitTrip } from '@/shared/workings/refitTrip';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
 import type { Sheet } from '@/shared/workings/sheet';
 import { sheet as smoothingRipple } from '@/shared/workings/smoothingRipple';
@@ -26,6 +28,8 @@ export const SHEETS: readonly AnySheet[] = [
   wireDrop,
   fuseInrush,
   overVoltageTrip,
+  junctionTest,
+  refitTrip,
 ] as readonly unknown[] as readonly AnySheet[];
 
 /** The sheet of that id, or undefined. */

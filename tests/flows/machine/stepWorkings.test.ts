@@ -66,4 +66,13 @@ describe('workingsOf', () => {
     if (rail === undefined) throw new Error('no rail');
     expect(headline({ sheet: 'over-voltage-trip' }, { ...benchProfile, rails: [{ ...rail, trip: null }] })).toBeNull();
   });
+
+  it('sets the limit for the next board from the boards before it', () => {
+    const board = (id: string, amps: number) => ({ id, name: id, slot: id, draws: [{ rail: 'p5', amps }], biasFirst: null });
+    const profile = { ...benchProfile, boards: { removable: true, fitted: [board('cpu', 2), board('store', 1.5), board('panel', 0.4)] } };
+    expect(headline({ sheet: 'refit-trip' }, profile)).toMatch(/^Set the limit to 2\.5 A: 0 A so far, 2 A for this board\./);
+    expect(headline({ sheet: 'refit-trip', board: 'panel' }, profile)).toMatch(/^Set the limit to 4 A: 3\.5 A so far, 400 mA for this board\./);
+    expect(headline({ sheet: 'refit-trip', board: 'none' }, profile)).toBeNull();
+    expect(headline({ sheet: 'refit-trip' })).toBeNull();
+  });
 });
