@@ -5,7 +5,6 @@ import { formatDuration, formatNumber, formatQuantity } from '@/shared/quantity/
 import { nextE24, RESISTOR_WATTS } from '@/shared/workings/preferred';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { defineSheet, numberField } from '@/shared/workings/sheet';
-import type { TouchLimit } from '@/shared/workings/touchLimits';
 import { DEAD_VOLTS, HARMLESS_COULOMBS, HARMLESS_JOULES, TOUCH_LIMITS } from '@/shared/workings/touchLimits';
 
 /** Most times its rated watts that a wire-wound resistor takes at the first moment. Common practice, no source. */
@@ -15,37 +14,44 @@ export const JOULES_PER_WATT = 25;
 /** Share of the first volts that an old electrolytic may come back to (dielectric absorption 10 to 15 %; from memory). */
 export const REBOUND_SHARE = 0.15;
 
+const verdict = z.enum(['continuous', 'pulse', 'too-small', 'none']);
+
 /** How a resistor stands the discharge. */
-export type ResistorVerdict = 'continuous' | 'pulse' | 'too-small' | 'none';
+export type ResistorVerdict = z.output<typeof verdict>;
+
+const choice = z.strictObject({ ohms: z.number(), watts: z.number(), secondsToSafe: z.number() });
 
 /** A discharge resistor that does it. */
-export interface ResistorChoice {
-  readonly ohms: number;
-  readonly watts: number;
-  readonly secondsToSafe: number;
-}
+export type ResistorChoice = z.output<typeof choice>;
+
+const output = z.strictObject({
+  joules: z.number(),
+  worstJoules: z.number(),
+  coulombs: z.number(),
+  ohms: z.number(),
+  timeConstantSeconds: z.number(),
+  secondsToSafe: z.number(),
+  worstSecondsToSafe: z.number(),
+  /** Through the bleeder alone, worst case; null without one. */
+  bleederSeconds: z.number().nullable(),
+  toolPeakWatts: z.number().nullable(),
+  toolPeakAmps: z.number().nullable(),
+  toolJoules: z.number().nullable(),
+  toolVerdict: verdict,
+  suggestion: choice.nullable(),
+  reboundVolts: z.number(),
+  thresholds: z.array(
+    z.strictObject({
+      limit: z.strictObject({ volts: z.number(), name: z.string(), withinSeconds: z.number().nullable() }),
+      worstSeconds: z.number(),
+    }),
+  ),
+  /** Whether it must be discharged through a resistor before it is proved dead. */
+  needsDischarge: z.boolean(),
+});
 
 /** Result of the sheet; SI, nothing rounded, worst case means the capacitor at its upper tolerance. */
-export interface BleedDownResult {
-  readonly joules: number;
-  readonly worstJoules: number;
-  readonly coulombs: number;
-  readonly ohms: number;
-  readonly timeConstantSeconds: number;
-  readonly secondsToSafe: number;
-  readonly worstSecondsToSafe: number;
-  /** Through the bleeder alone, worst case; null without one. */
-  readonly bleederSeconds: number | null;
-  readonly toolPeakWatts: number | null;
-  readonly toolPeakAmps: number | null;
-  readonly toolJoules: number | null;
-  readonly toolVerdict: ResistorVerdict;
-  readonly suggestion: ResistorChoice | null;
-  readonly reboundVolts: number;
-  readonly thresholds: readonly { readonly limit: TouchLimit; readonly worstSeconds: number }[];
-  /** Whether it must be discharged through a resistor before it is proved dead. */
-  readonly needsDischarge: boolean;
-}
+export type BleedDownResult = z.output<typeof output>;
 
 /** Energy of a capacitor, ½CV², in joules. */
 export const energyJoules = (farads: number, volts: number): number => (farads * volts * volts) / 2;
@@ -225,6 +231,7 @@ export const sheet = defineSheet({
   title: 'Bleed-down',
   question: 'What does this capacitor hold, and how long until it is safe?',
   inputs,
+  output,
   law,
   validity,
   source,

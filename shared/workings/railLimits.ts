@@ -47,13 +47,17 @@ export function classifyRail(readingVolts: number, limits: RailLimits, guardVolt
   return decide(size, { low: sign * limits.lowVolts, high: sign * limits.highVolts }, guardVolts);
 }
 
-/** Result of the sheet, in volts. */
-export interface RailLimitsResult extends RailLimits {
+const output = z.strictObject({
+  lowVolts: z.number(),
+  highVolts: z.number(),
   /** Between these the rail is good beyond doubt; null when the guard band is wider than the tolerance. */
-  readonly acceptLowVolts: number | null;
-  readonly acceptHighVolts: number | null;
-  readonly reading: RailReading | null;
-}
+  acceptLowVolts: z.number().nullable(),
+  acceptHighVolts: z.number().nullable(),
+  reading: z.enum(['in', 'close-in', 'close-out', 'low', 'high', 'reversed']).nullable(),
+});
+
+/** Result of the sheet, in volts. */
+export type RailLimitsResult = z.output<typeof output>;
 
 const WORDS: Readonly<Record<RailReading, string>> = {
   in: 'in',
@@ -101,6 +105,7 @@ export const sheet = defineSheet({
   title: 'Rail limits',
   question: 'Between which readings is this rail good?',
   inputs,
+  output,
   law,
   validity,
   source,

@@ -8,17 +8,19 @@ import { brightnessInWords, coldOhms, CURRENT_EXPONENT, floorVolts, hotOhms, lam
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
 
-/** One state in which lamp and load agree. */
-export interface OperatingPoint {
-  readonly lampVolts: number;
-  readonly loadVolts: number;
-  readonly amps: number;
-  readonly lampWatts: number;
-  readonly loadWatts: number;
+const point = z.strictObject({
+  lampVolts: z.number(),
+  loadVolts: z.number(),
+  amps: z.number(),
+  lampWatts: z.number(),
+  loadWatts: z.number(),
   /** False where the least disturbance carries it away, as on the upper branch of a constant-power load. */
-  readonly stable: boolean;
-  readonly brightness: string;
-}
+  stable: z.boolean(),
+  brightness: z.string(),
+});
+
+/** One state in which lamp and load agree. */
+export type OperatingPoint = z.output<typeof point>;
 
 /** What the lamp is in series with. */
 export type LampLoad =
@@ -26,23 +28,33 @@ export type LampLoad =
   | { readonly kind: 'resistance'; readonly ohms: number }
   | { readonly kind: 'constant-power'; readonly watts: number };
 
-/** Result of the sheet; nothing rounded. */
-export interface SeriesLampResult {
-  readonly points: readonly OperatingPoint[];
+const output = z.strictObject({
+  points: z.array(point),
   /** The stable point, or null where there is none or the supply gives up there. */
-  readonly settled: OperatingPoint | null;
+  settled: point.nullable(),
   /** What a dead short behind the lamp does: the lamp takes the whole supply. */
-  readonly deadShort: OperatingPoint;
+  deadShort: point,
   /** Switch-mode only: it starts, starves and stops over and over. */
-  readonly willTick: boolean;
+  willTick: z.boolean(),
   /** Most watts that any load can draw through this lamp. */
-  readonly mostLoadWatts: number;
-  readonly hotOhms: number;
-  readonly coldOhms: number;
+  mostLoadWatts: z.number(),
+  hotOhms: z.number(),
+  coldOhms: z.number(),
   /** First moment of a dead short, at the peak of the mains, filament cold. */
-  readonly coldPeakAmps: number;
-  readonly recommended: LampChoice | null;
-}
+  coldPeakAmps: z.number(),
+  recommended: z
+    .strictObject({
+      leastWatts: z.number(),
+      mostWatts: z.number().nullable(),
+      count: z.number(),
+      eachWatts: z.number(),
+      totalWatts: z.number(),
+    })
+    .nullable(),
+});
+
+/** Result of the sheet; nothing rounded. */
+export type SeriesLampResult = z.output<typeof output>;
 
 /** Share of the mains volts below which a switch-mode supply is taken to give up. Common practice, no source. */
 export const GIVES_UP_SHARE = 0.7;
@@ -72,7 +84,7 @@ function peakVolts(lamp: Lamp, supplyVolts: number): number {
  * @param supplyVolts rms
  * @returns one point for a resistance or a short; two, one or none for constant power
  */
-export function operatingPoints(lamp: Lamp, supplyVolts: number, load: LampLoad): readonly OperatingPoint[] {
+export function operatingPoints(lamp: Lamp, supplyVolts: number, load: LampLoad): OperatingPoint[] {
   if (load.kind === 'short') return [pointAt(lamp, supplyVolts, 0, true)];
   if (load.kind === 'resistance') {
     const { ohms } = load;
@@ -205,6 +217,7 @@ export const sheet = defineSheet({
   title: 'Series lamp',
   question: 'What do the lamp and the supply behind it get, and which lamp is right?',
   inputs,
+  output,
   law,
   validity,
   source,
