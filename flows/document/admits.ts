@@ -18,12 +18,18 @@ export function misfits(tree: Tree, profile: Profile, serial?: string): string[]
   const missing = (appliesTo.rails ?? []).filter((id) => !profile.rails.some((r) => r.id === id));
   const trips = new Set(tree.steps.flatMap((s) => (s.kind === 'prove-trip' ? [s.rail] : [])));
   const noTrip = [...trips].filter((id) => !tripRails(profile).some((r) => r.id === id));
+  const fitsBoards = tree.steps.some((s) => s.kind === 'connect-load' && s.load === 'boards');
+  const standsOnTrips = fitsBoards || tree.steps.some((s) => s.kind === 'end' && (s.says === 'supply-proven' || s.says === 'in-service'));
+  const tripsElsewhere = tree.needsAtStart.includes('trips') || tree.steps.some((s) => s.kind === 'call' && (s.results ?? []).includes('trips'));
+  const untested = standsOnTrips && !tripsElsewhere ? tripRails(profile).filter((r) => !trips.has(r.id)) : [];
   return [
     ...(appliesTo.protectiveClasses.includes(profile.mains.protectiveClass) ? [] : [`it is for protective class ${appliesTo.protectiveClasses.join(' or ')}`]),
     ...(appliesTo.supplyKinds.includes(profile.supplyKind) ? [] : [`it is for a supply of the kind ${appliesTo.supplyKinds.join(' or ')}`]),
     ...(rails < appliesTo.fewestRails || rails > appliesTo.mostRails ? [`it is for ${appliesTo.fewestRails} to ${appliesTo.mostRails} rails, and this supply has ${rails}`] : []),
     ...missing.map((id) => `it speaks of a rail “${id}”, which this supply does not have`),
     ...noTrip.map((id) => `it tests the over-voltage trip of “${id}”, which this supply does not have`),
+    ...untested.map((r) => `it does not test the over-voltage trip of ${r.name}, on which it would have to stand`),
+    ...(fitsBoards && !profile.boards.removable ? ['it fits boards, and those of this machine cannot be parted from the supply'] : []),
     ...(appliesTo.has ?? []).filter((what) => !has[what]).map((what) => `its profile names no ${what}`),
     ...(serial !== undefined && appliesTo.serials !== undefined && !appliesTo.serials.includes(serial) ? ['it is for other serial numbers'] : []),
   ];

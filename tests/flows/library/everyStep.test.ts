@@ -26,6 +26,8 @@ const WALKS: [string, string][] = [
   ['lamp-first', 'corvane-12'],
   ['regulator-bench', 'ostrel-16'],
   ['full-load', 'brindle-80'],
+  ['fuse-switch-mode', 'brindle-80'],
+  ['refit', 'wendle-5'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

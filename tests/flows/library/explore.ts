@@ -45,7 +45,7 @@ export function explore(program: Program): Exploration {
       queue.push(bench);
     }
   };
-  const start = new Bench(program);
+  const start = new Bench(program, false, { release: program.layout.tree.needsAtStart.includes('release') });
   while (start.view.phase === 'opening') move(start, {});
   arrive(start);
   for (let bench = queue.shift(); bench !== undefined; bench = queue.shift()) {
