@@ -1,6 +1,8 @@
 /** The sheet of workings that a step shows, filled in from the machine's profile. */
+import { copperOhmsPerMetre, mostOhmsPerMetre } from '@/shared/workings/copper';
 import { sheetById } from '@/shared/workings/list';
 import type { AnySheet } from '@/shared/workings/list';
+import { uncertaintyOf } from '@/shared/workings/readingLimit';
 import type { AccuracySpec } from '@/shared/workings/readingLimit';
 
 import type { Quantity } from '../document/ids';
@@ -20,6 +22,8 @@ export interface StepWorkings {
 
 /** The row that is to be read now and what is read there, with the accuracy of the instrument in hand on its range. */
 export interface ReadingNow {
+  /** id of the row: a rail, a conductor, a part, or the step's own reading */
+  row: string;
   quantity: Quantity;
   /** signed limits in SI, or of size where the row is judged by size; null where there is none */
   low: number | null;
@@ -34,7 +38,25 @@ export function workingsOf(step: Step, profile: Profile, settings: Settings, now
   if (step.workings === undefined) return null;
   if (step.workings.sheet === 'reading-limit') return now === null ? null : work('reading-limit', { quantity: now.quantity, reading: now.value, low: now.low, high: now.high, ...now.accuracy });
   const lamp = step.kind === 'energise' || step.kind === 'raise' ? step.lampWatts : undefined;
-  return fill({ ...(lamp === undefined ? {} : { lampWatts: lamp }), ...step.workings }, profile, settings);
+  // a soak reads each row again and again: `p5-2` is the second reading of p5
+  const row = now === null ? {} : ofRow(isOfProfile(profile, now.row) ? now.row : now.row.replace(/-\d+$/, ''));
+  const reference = { ...(lamp === undefined ? {} : { lampWatts: lamp }), ...row, ...step.workings };
+  const inputs = inputsOf(reference, profile, settings);
+  return inputs === null ? null : work(reference.sheet, { ...inputs, ...(now === null ? {} : taken(reference.sheet, step.kind, now, inputs)) });
+}
+
+const ofRow = (id: string) => ({ rail: id, conductor: id, store: id });
+
+const isOfProfile = ({ rails, conductors, stores }: Profile, id: string) => [...rails, ...conductors, ...stores].some((thing) => thing.id === id);
+
+/** What is being read, where the sheet has a place for it. */
+function taken(sheet: Reference['sheet'], kind: Step['kind'], { quantity, value, accuracy }: ReadingNow, inputs: Record<string, unknown>): Record<string, unknown> {
+  if (value === null) return {};
+  const doubt = uncertaintyOf(accuracy, value);
+  if (sheet === 'rail-limits' && quantity === 'volts-dc') return { readingVolts: value, guardVolts: doubt };
+  // the row of a trip test is judged by size, the sheet wants the sign of the rail
+  if (sheet === 'over-voltage-trip' && kind === 'prove-trip') return { readVolts: value * Math.sign(Number(inputs['nominalVolts'])), meterVolts: doubt };
+  return sheet === 'wire-drop' && quantity === 'ohms' ? { readOhms: value } : {};
 }
 
 /** Limits that come from a sheet: the named numbers of its result. Null where the profile cannot fill the sheet or the result has no such number. */
@@ -98,12 +120,17 @@ function railOf(reference: Reference, rails: readonly Rail[]): Rail | undefined 
 /** A tolerance is a fraction in the profile and percent on a sheet; twelve figures drop what binary adds. */
 const percent = (fraction: number) => Number((fraction * 100).toPrecision(12));
 
-/** A return or feed end to end, with a contact at each end, at the most amps of the rails that it serves. */
+/** The sheet gives a reading a tenth to spare, and the profile's limit is to be the edge of that. */
+const SPARE = 1.1;
+
+/** A return or feed end to end at the most amps of the rails that it serves; its two contacts have what the limit of the profile leaves them. */
 function wireInputs(reference: Reference, profile: Profile): Record<string, unknown> | null {
   const wire = profile.conductors.find((c) => c.id === reference.conductor) ?? profile.conductors.find((c) => c.kind === 'return') ?? profile.conductors[0];
   if (wire === undefined) return null;
   const amps = Math.max(0, ...profile.rails.filter((r) => wire.rails.includes(r.id)).map((r) => r.maxAmps));
-  return { squareMillimetres: wire.squareMillimetres, metres: wire.metres, amps, contacts: 2, ...(amps > 0 && { allowedVolts: amps * wire.maxOhms }) };
+  const copper = wire.metres * (mostOhmsPerMetre(wire.squareMillimetres, 'flexible') ?? copperOhmsPerMetre(wire.squareMillimetres));
+  const contactOhms = Math.min(10, Math.max(0, wire.maxOhms / SPARE - copper) / 2);
+  return { squareMillimetres: wire.squareMillimetres, metres: wire.metres, amps, contacts: 2, contactOhms, ...(amps > 0 && { allowedVolts: amps * wire.maxOhms }) };
 }
 
 /** Below 200 V the fuse of the plate is taken for one to UL 248-14, else to IEC 60127: common practice, no source. */

@@ -36,7 +36,7 @@ describe('workingsOf', () => {
   });
 
   it('sets the reading of the step against its limit with the accuracy of the instrument', () => {
-    const now: ReadingNow = { quantity: 'volts-dc', low: 4.75, high: 5.25, accuracy: { percent: 0.5, counts: 3, resolution: 0.001 }, value: null };
+    const now: ReadingNow = { row: 'reading', quantity: 'volts-dc', low: 4.75, high: 5.25, accuracy: { percent: 0.5, counts: 3, resolution: 0.001 }, value: null };
     expect(headline({ sheet: 'reading-limit' }, benchProfile, now)).toMatch(/^Clearly in from 4\.781\d* V to 5\.216\d* V with this instrument\.$/);
     expect(headline({ sheet: 'reading-limit' }, benchProfile, { ...now, value: 4.77 })).toMatch(/^In, but close: .* 4\.77 V ± 31 mV/);
     expect(headline({ sheet: 'reading-limit' }, benchProfile, { ...now, value: 5.4 })).toBe('Out, high: 5.4 V ± 35 mV.');
@@ -44,14 +44,28 @@ describe('workingsOf', () => {
 
   it('says nothing of a reading while nobody knows the instrument', () => {
     expect(headline({ sheet: 'reading-limit' })).toBeNull();
-    expect(headline({ sheet: 'reading-limit' }, benchProfile, { quantity: 'ohms', low: null, high: null, accuracy: { percent: 1, counts: 2, resolution: 0.1 }, value: 3 })).toBe('Give a low limit, a high limit, or both.');
+    expect(headline({ sheet: 'reading-limit' }, benchProfile, { row: 'reading', quantity: 'ohms', low: null, high: null, accuracy: { percent: 1, counts: 2, resolution: 0.1 }, value: 3 })).toBe('Give a low limit, a high limit, or both.');
   });
 
-  it('works a return out at the most amps of its rail, with a contact at each end', () => {
-    // 4 mm², 0.4 m: 1.72 mΩ of copper and two contacts of 10 mΩ at 12 A; the profile allows 10 mΩ end to end.
-    expect(headline({ sheet: 'wire-drop' })).toBe('21.72 mΩ: 261 mV lost at 12 A, at most 264 mV with a cable to IEC 60228. More than the 120 mV allowed.');
+  it('works a return out at the most amps of its rail, its contacts with what the limit of the profile leaves them', () => {
+    expect(headline({ sheet: 'wire-drop' })).toBe('8.835 mΩ: 106 mV lost at 12 A, at most 109 mV with a cable to IEC 60228.');
     expect(headline({ sheet: 'wire-drop', conductor: 'r1' })).toBe(headline({ sheet: 'wire-drop' }));
     expect(headline({ sheet: 'wire-drop' }, { ...benchProfile, conductors: [] })).toBeNull();
+  });
+
+  it('takes the reading of the row into the sheet, and agrees with the limit of the row', () => {
+    const ohms = (value: number | null): ReadingNow => ({ row: 'r1', quantity: 'ohms', low: null, high: 0.01, accuracy: { percent: 0.5, counts: 2, resolution: 1e-5 }, value });
+    expect(headline({ sheet: 'wire-drop' }, benchProfile, ohms(null))).toMatch(/^8\.835 mΩ:/);
+    expect(headline({ sheet: 'wire-drop' }, benchProfile, ohms(0.0099))).toMatch(/^9\.9 mΩ read, as expected\./);
+    expect(headline({ sheet: 'wire-drop' }, benchProfile, ohms(0.0101))).toMatch(/^10\.1 mΩ read where .*: look for a bad contact\./);
+    const volts = (value: number): ReadingNow => ({ row: 'p5-2', quantity: 'volts-dc', low: 4.75, high: 5.25, accuracy: { percent: 0.5, counts: 3, resolution: 0.001 }, value });
+    expect(headline({ sheet: 'rail-limits' }, benchProfile, volts(4.4))).toBe('4.75 V to 5.25 V; 4.4 V is low.');
+    const trip: Step = { ...step({ sheet: 'over-voltage-trip' }), kind: 'prove-trip', rail: 'p5', series: 's', probe: 'clipped', ceilingVolts: 6.9 } as unknown as Step;
+    const worked = workingsOf(trip, benchProfile, defaultSettings, { ...volts(6.2), row: 'p5' });
+    expect(worked?.answer.ok === true ? worked.answer.headline : '').toMatch(/^Fired at 6\.2 V: it fires between rail and parts\. In order:/);
+    const negative = { ...benchProfile, rails: benchProfile.rails.map((r) => ({ ...r, nominal: -5 })) };
+    const mirrored = workingsOf(trip, negative, defaultSettings, { ...volts(6.2), row: 'p5' });
+    expect(mirrored?.answer.ok === true ? mirrored.answer.headline : '').toMatch(/^Fired at −6\.2 V: it fires between rail and parts\./);
   });
 
   it('takes the fuse and the plate of the machine', () => {

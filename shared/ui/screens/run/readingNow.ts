@@ -12,5 +12,5 @@ export function readingNow(row: ReadingRow, typed: Pick<Typed, 'value' | 'range'
   if (range === null) return null;
   const { percent, counts, resolution } = range;
   const value = typeof typed.value === 'number' ? (row.bySize ? Math.abs(typed.value) : typed.value) : null;
-  return { quantity: row.quantity, low: row.low, high: row.high, accuracy: { percent, counts, resolution }, value };
+  return { row: row.id, quantity: row.quantity, low: row.low, high: row.high, accuracy: { percent, counts, resolution }, value };
 }

@@ -44,6 +44,7 @@ const accuracy = { percent: 0.5, counts: 3, resolution: 0.001 };
 describe('readingNow', () => {
   it('takes the range that the limits want while nothing is typed, then the one that was read on', () => {
     expect(readingNow(row, { value: null, range: null }, meter)).toEqual({
+      row: 'r',
       quantity: 'volts-dc',
       low: 4.75,
       high: 5.25,
