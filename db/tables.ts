@@ -223,6 +223,26 @@ export interface DemoContentTable {
   hash: string;
 }
 
+export interface FilesTable {
+  workshop: Fixed<string>;
+  /** SHA-256 of the bytes, which lie in the object store */
+  hash: Fixed<string>;
+  media: Fixed<'image/jpeg' | 'application/pdf'>;
+  bytes: Fixed<number>;
+  width: Fixed<number | null>;
+  height: Fixed<number | null>;
+  added_at: FixedTime;
+}
+
+export interface FileUsesTable {
+  workshop: Fixed<string>;
+  hash: Fixed<string>;
+  /** the run for whose record it was sent; null: for the whole workshop */
+  run: Fixed<string | null>;
+  added_by: Fixed<string>;
+  added_at: FixedTime;
+}
+
 export interface Database {
   workshops: WorkshopsTable;
   people: PeopleTable;
@@ -242,6 +262,8 @@ export interface Database {
   releases: ReleasesTable;
   release_voids: ReleaseVoidsTable;
   machine_tags: MachineTagsTable;
+  files: FilesTable;
+  file_uses: FileUsesTable;
   demo_content: DemoContentTable;
 }
 
@@ -253,6 +275,8 @@ export type RunHeadRow = Selectable<RunHeadsTable>;
 export type UpdateableRunHeadRow = Updateable<RunHeadsTable>;
 export type SessionRow = Selectable<SessionsTable>;
 export type InsertableSessionRow = Insertable<SessionsTable>;
+export type FileRow = Selectable<FilesTable>;
+export type InsertableFileRow = Insertable<FilesTable>;
 export type InstrumentRow = Selectable<InstrumentsTable>;
 export type InsertableInstrumentRow = Insertable<InstrumentsTable>;
 export type TreeVersionRow = Selectable<TreeVersionsTable>;

@@ -22,12 +22,28 @@ const envSchema = z.object({
   SIGNING_KEY: z.string().optional(),
   SMTP_URL: url(/^smtps?:\/\//, 'a mail server').optional(),
   MAIL_FROM: z.string().min(3).optional(),
+  S3_BUCKET: z.string().regex(/^[a-z0-9][a-z0-9.-]{1,61}[a-z0-9]$/, 'is not the name of a bucket').optional(),
+  S3_ENDPOINT: url(/^https?:\/\//, 'an object store').optional(),
+  S3_REGION: z.string().min(1).default('us-east-1'),
+  S3_ACCESS_KEY: z.string().min(1).optional(),
+  S3_SECRET_KEY: z.string().min(1).optional(),
   BCRYPT_COST: wholeNumber(4, 15).optional(),
   SIGN_IN_TRIES: wholeNumber(1, 1_000_000).default(30),
   TRUST_PROXY: wholeNumber(0, 10).default(0),
   WEB_ROOT: z.string().min(1).optional(),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
 });
+
+/** A bucket of a store that speaks the S3 protocol. */
+export interface ObjectStoreConfig {
+  bucket: string;
+  /** null: the address that the SDK makes of the region */
+  endpoint: string | null;
+  region: string;
+  /** null: the SDK looks where it always looks, such as the role of the machine */
+  accessKey: string | null;
+  secretKey: string | null;
+}
 
 export interface Config {
   production: boolean;
@@ -44,6 +60,8 @@ export interface Config {
   signingKey: SigningKey;
   smtpUrl: string | null;
   mailFrom: string;
+  /** where photos and papers lie; null: nowhere, and every upload is refused */
+  objectStore: ObjectStoreConfig | null;
   bcryptCost: number;
   /** tries to give a password in 15 minutes, for one address or person */
   signInTries: number;
@@ -56,7 +74,7 @@ export interface Config {
 /** What a password hash costs in production; a lower number would make a stolen table cheap to break. */
 export const PRODUCTION_BCRYPT_COST = 12;
 
-const WANTED_IN_PRODUCTION = ['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM'] as const;
+const WANTED_IN_PRODUCTION = ['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM', 'S3_BUCKET'] as const;
 
 /**
  * Reads and checks the environment. Throws one error that names every variable at fault, never a value. Outside production the secrets
@@ -89,6 +107,10 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     signingKey: signingKey ?? makeSigningKey(),
     smtpUrl: e.SMTP_URL ?? null,
     mailFrom: e.MAIL_FROM ?? 'Lampstep <lampstep@example.org>',
+    objectStore:
+      e.S3_BUCKET === undefined
+        ? null
+        : { bucket: e.S3_BUCKET, endpoint: e.S3_ENDPOINT ?? null, region: e.S3_REGION, accessKey: e.S3_ACCESS_KEY ?? null, secretKey: e.S3_SECRET_KEY ?? null },
     bcryptCost: e.BCRYPT_COST ?? PRODUCTION_BCRYPT_COST,
     signInTries: e.SIGN_IN_TRIES,
     trustProxy: e.TRUST_PROXY,

@@ -8,6 +8,7 @@ import { pinoHttp } from 'pino-http';
 
 import { addEntryRoutes } from './entries/routes';
 import { addHandOverRoutes } from './handOver/routes';
+import { addFileRoutes } from './files/routes';
 import { addHealthRoutes } from './health/routes';
 import { addHoldRoutes } from './holds/routes';
 import { refuseCrossSite } from './http/refuseCrossSite';
@@ -77,6 +78,7 @@ export function createApp(parts: Parts): Express {
   const router = Router();
   addHealthRoutes(router, parts);
   addSessionRoutes(router, parts);
+  addFileRoutes(router, parts);
   addMachineRoutes(router, parts);
   addTreeRoutes(router, parts);
   addInstrumentRoutes(router, parts);

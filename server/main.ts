@@ -11,6 +11,7 @@ import { createDb } from '@/db/createDb';
 
 import { startJobs } from './adapters/jobs';
 import { createMailer } from './adapters/mail';
+import { createObjectStore } from './adapters/objectStore';
 import { readConfig } from './config';
 import type { Config } from './config';
 import { createApp } from './createApp';
@@ -25,7 +26,7 @@ const STOP_MS = 8_000;
 /** Starts server and job worker; resolves when it listens. `stop` ends both and closes the database pool. */
 export async function startServer(config: Config, log: Logger = pino({ level: config.logLevel })): Promise<{ port: number; stop: () => Promise<void> }> {
   const db = createDb(config.databaseUrl, { onBroken: (error) => log.warn({ err: error }, 'a database connection broke') });
-  const parts: Parts = { db, config, clock: () => Date.now(), log, programs: createProgramCache() };
+  const parts: Parts = { db, config, clock: () => Date.now(), log, programs: createProgramCache(), objects: createObjectStore(config) };
   const server = createServer(createApp(parts));
   try {
     const port = await listen(server, config.host, config.port);
@@ -42,6 +43,7 @@ export async function startServer(config: Config, log: Logger = pino({ level: co
       clearTimeout(late);
       await jobs.stop();
       mailer.close();
+      parts.objects.close();
       await db.destroy();
     };
     return { port, stop: () => (stopping ??= stop()) };

@@ -3,6 +3,7 @@ import type { Logger } from 'pino';
 
 import type { Db } from '@/db/createDb';
 
+import type { ObjectStore } from './adapters/objectStore';
 import type { Config } from './config';
 import type { ProgramCache } from './program/programCache';
 
@@ -15,4 +16,6 @@ export interface Parts {
   readonly clock: Clock;
   readonly log: Logger;
   readonly programs: ProgramCache;
+  /** photos and papers */
+  readonly objects: ObjectStore;
 }

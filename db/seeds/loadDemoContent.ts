@@ -6,6 +6,7 @@ import { v7 as uuidv7 } from 'uuid';
 import { createDb, inWorkshop } from '@/db/createDb';
 import type { Db, Tx } from '@/db/createDb';
 import { ENGINE } from '@/flows/machine/compile';
+import { createObjectStore } from '@/server/adapters/objectStore';
 import { readConfig } from '@/server/config';
 import type { Parts } from '@/server/parts';
 import { hashOf } from '@/server/program/hashOf';
@@ -85,7 +86,7 @@ async function load(db: Db, content: DemoContent, now: number, bcryptCost: numbe
   }
   const time = { now };
   const config = { ...readConfig({ NODE_ENV: 'development', DATABASE_URL: ownerUrl }), bcryptCost };
-  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache() };
+  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache(), objects: createObjectStore(config) };
   for (const run of content.runs) {
     try {
       await loadRun(parts, time, run, now, machineIds);

@@ -6,6 +6,7 @@ import { migrateToLatest } from '@/db/migrate';
 import { DEMO_PASSWORD, demoPeople, demoWorkshops } from '@/db/seeds/demoPeople';
 import { loadDemo } from '@/db/seeds/loadDemo';
 import { startMailFake } from '@/server/adapters/fakes/mailFake';
+import { startObjectStoreFake } from '@/server/adapters/fakes/objectStoreFake';
 import { readConfig } from '@/server/config';
 import { startServer } from '@/server/main';
 
@@ -57,6 +58,13 @@ async function start(parts: Parts): Promise<void> {
     parts.closeWith(() => fake.stop());
     env['SMTP_URL'] = fake.smtpUrl;
     say(`✓ Local mail fake: no letter leaves this machine, each is kept in ${dir}`);
+  }
+  if (plan.storeFake) {
+    const dir = join(stateFolder, 'objects');
+    const fake = await startObjectStoreFake({ dir });
+    parts.closeWith(() => fake.stop());
+    Object.assign(env, fake.env);
+    say(`✓ Local object store: photos and papers are kept in ${dir}`);
   }
   if (plan.demo) completeForDevelopment(env);
 

@@ -9,6 +9,8 @@ export type StartPlan = {
   demo: boolean;
   /** Whether letters go to the local fake. */
   mailFake: boolean;
+  /** Whether photos and papers go to the local fake. */
+  storeFake: boolean;
   /** Whether another port is taken when the wanted one is not free. */
   mayMovePort: boolean;
 };
@@ -23,7 +25,7 @@ export function planStart(env: Env): StartPlan {
   const missing: string[] = [];
   if (production && !given('DATABASE_URL')) missing.push('DATABASE_URL');
   if ((production || given('DATABASE_URL')) && !given('DATABASE_OWNER_URL')) missing.push('DATABASE_OWNER_URL');
-  if (production) missing.push(...['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM'].filter((name) => !given(name)));
+  if (production) missing.push(...['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM', 'S3_BUCKET'].filter((name) => !given(name)));
   if (missing.length > 0) {
     const why = production ? 'With NODE_ENV=production nothing is made up' : 'A database is given by DATABASE_URL';
     throw new Error(`${why}: set ${missing.join(', ')} (see .env.example).`);
@@ -32,6 +34,7 @@ export function planStart(env: Env): StartPlan {
     database: given('DATABASE_URL') ? 'given' : 'private',
     demo: !production,
     mailFake: !production && !given('SMTP_URL'),
+    storeFake: !production && !given('S3_BUCKET'),
     mayMovePort: !production,
   };
 }

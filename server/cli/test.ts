@@ -17,7 +17,7 @@ const reports = join(stateFolder, 'reports');
 /** What points a server at real services must never reach a test. */
 const servicesOfTheCaller = [
   ...['DATABASE_URL', 'DATABASE_OWNER_URL', 'DATABASE_KEEPER_URL', 'HOST', 'PORT', 'PUBLIC_URL', 'TRUST_PROXY', 'SESSION_SECRET'],
-  ...['SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM', 'BCRYPT_COST', 'SIGN_IN_TRIES', 'WEB_ROOT', 'LOG_LEVEL', 'NODE_ENV'],
+  ...['SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM', 'S3_BUCKET', 'S3_ENDPOINT', 'S3_REGION', 'S3_ACCESS_KEY', 'S3_SECRET_KEY', 'BCRYPT_COST', 'SIGN_IN_TRIES', 'WEB_ROOT', 'LOG_LEVEL', 'NODE_ENV'],
 ];
 
 const env: NodeJS.ProcessEnv = { ...process.env, NO_COLOR: '1', FORCE_COLOR: '0' };

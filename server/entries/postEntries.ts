@@ -9,6 +9,7 @@ import type { RecordEntry } from '@/shared/record/recordEntry';
 import type { Parts } from '../parts';
 import { ProblemError } from '../problems';
 import { checkInstruments } from './checkInstruments';
+import { checkPhotos } from './checkPhotos';
 import { findEntries, findEntriesById } from './queries';
 import { takeEvents } from './takeEvents';
 
@@ -29,6 +30,7 @@ export async function postEntries(tx: Tx, parts: Parts, run: RunRow, head: RunHe
   }
   if (fresh.length > 0) {
     if (run.state !== 'open') throw new ProblemError('wrong-state', 'This run is closed; nothing can be added at the bench any more.');
+    await checkPhotos(tx, run, fresh);
     await checkInstruments(tx, parts, run, head, fresh);
     const taken = await takeEvents(tx, parts, run, head, fresh.map(({ id, event }) => ({ id, event, actor: run.restorer })));
     for (const entry of taken) held.set(entry.id, entry);

@@ -29,6 +29,7 @@ export function bindRoute<const R extends RouteDef>(router: Router, parts: Parts
     const query = route.query === undefined ? undefined : read(route.query, req.query, inputProblem);
     const body = route.body === undefined ? undefined : read(route.body, await readBody(req, res), inputProblem);
     const answer = await handle({ who, params, query, body, req, res } as unknown as Call<R>);
+    if (route.media !== undefined) return; // the handler has sent it
     // An answer that does not fit the contract is a fault of the server; it must not leave unnoticed while it is made.
     const sent = parts.config.checkAnswers ? route.answer.parse(answer) : answer;
     res.setHeader('Cache-Control', 'no-store');

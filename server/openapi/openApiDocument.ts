@@ -9,6 +9,8 @@ import { ROUTE_NAMES, routes } from '@/shared/contract/routes';
 
 import { ACCESS_COOKIE } from '../session/cookies';
 
+const FILE_FORM: { type: 'object'; required: string[]; properties: Record<string, object> } = { type: 'object', required: ['file'], properties: { file: { type: 'string', format: 'binary' } } };
+const bytes = (media: readonly string[]) => Object.fromEntries(media.map((type) => [type, { schema: { type: 'string', format: 'binary' } as const }]));
 const json = (schema: RouteDef['answer']) => ({ 'application/json': { schema } });
 
 /** Makes the document; it depends on nothing but the table. */
@@ -35,6 +37,7 @@ function operation(name: string, route: RouteDef): ZodOpenApiOperationObject {
   if (route.who !== 'anyone') problems.push('signed-out', 'session-expired');
   if (Array.isArray(route.who)) problems.push('role-missing');
   if (route.method !== 'get') problems.push('cross-site');
+  if (route.upload === true) problems.push('bad-input', 'too-large');
   if (route.body !== undefined) problems.push('bad-json', 'not-json', 'too-large', 'bad-input');
   if (route.query !== undefined) problems.push('bad-input');
   if (route.params !== undefined) problems.push('not-found');
@@ -50,6 +53,7 @@ function operation(name: string, route: RouteDef): ZodOpenApiOperationObject {
     ...(Array.isArray(route.who) ? { description: `Roles: ${route.who.join(', ')}.` } : {}),
     requestParams: { ...(route.params === undefined ? {} : { path: route.params as never }), ...(route.query === undefined ? {} : { query: route.query as never }) },
     ...(route.body === undefined ? {} : { requestBody: { required: true, content: json(route.body) } }),
-    responses: { [String(route.status)]: { description: 'Done', content: json(route.answer) }, ...failures },
+    ...(route.upload === true ? { requestBody: { required: true, content: { 'multipart/form-data': { schema: FILE_FORM } } } } : {}),
+    responses: { [String(route.status)]: { description: 'Done', content: route.media === undefined ? json(route.answer) : bytes(route.media) }, ...failures },
   };
 }

@@ -16,6 +16,10 @@ export interface RouteDef {
   readonly params?: ObjectSchema;
   readonly query?: ObjectSchema;
   readonly body?: ObjectSchema;
+  /** a multipart form with one file in the field `file`, in place of a JSON body */
+  readonly upload?: true;
+  /** media types of an answer that is not JSON; the handler sends it itself */
+  readonly media?: readonly string[];
   readonly status: 200 | 201;
   readonly answer: ObjectSchema;
   /** what it can answer besides the problems that every route has */

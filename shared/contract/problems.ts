@@ -2,7 +2,7 @@
 import { z } from 'zod';
 
 interface ProblemKind {
-  readonly status: 400 | 401 | 403 | 404 | 409 | 413 | 422 | 429 | 500 | 503;
+  readonly status: 400 | 401 | 403 | 404 | 409 | 413 | 416 | 422 | 429 | 500 | 503;
   /** true where the same request may succeed later without a change by a person */
   readonly retryable: boolean;
   /** what a person reads when the server has nothing more exact to say */
@@ -29,7 +29,10 @@ export const PROBLEMS = {
   'not-offered': { status: 409, retryable: false, say: 'This run is not offered to you, or the offer was taken back.' },
   'other-engine': { status: 409, retryable: false, say: 'This run was begun under rules that this server no longer runs. Make the bench safe; a senior has to close the run.' },
   'no-hold': { status: 409, retryable: false, say: 'No countersign is awaited here any more.' },
+  'photo-missing': { status: 409, retryable: true, say: 'A photo of this entry has not reached the server. Send the photo, then the entry again.' },
   'too-large': { status: 413, retryable: false, say: 'The request is too large.' },
+  'bad-range': { status: 416, retryable: false, say: 'The file has no such part.' },
+  'bad-file': { status: 422, retryable: false, say: 'This file cannot be kept.' },
   'bad-input': { status: 422, retryable: false, say: 'Something in the request does not fit.' },
   'wrong-password': { status: 422, retryable: false, say: 'The password is not right. Nothing was signed.' },
   refused: { status: 422, retryable: false, say: 'A house rule refuses this step. The run is as it was.' },

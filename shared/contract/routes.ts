@@ -4,6 +4,7 @@ import { z } from 'zod';
 import { defineRoute } from './defineRoute';
 import { entriesQuery, entriesSchema, postedEntriesSchema, postEntriesBody } from './entries';
 import { handOverBody, takeOverBody } from './handOver';
+import { fileParams, fileQuery, fileSizeQuery, keptFileSchema } from './files';
 import { answeredHoldSchema, answerHoldBody, holdsSchema, secondPersonBody } from './holds';
 import { machineIdSchema, runIdSchema, treeIdSchema, versionSchema } from './ids';
 import { instrumentsSchema } from './instruments';
@@ -36,11 +37,14 @@ export const routes = {
   people: defineRoute({ method: 'get', path: '/api/people', summary: 'Members of the workshop', who: 'member', status: 200, answer: peopleSchema, problems: [] }),
   settings: defineRoute({ method: 'get', path: '/api/settings', summary: 'Settings of the workshop', who: 'member', status: 200, answer: workshopSettingsSchema, problems: [] }),
 
+  addFile: defineRoute({ method: 'post', path: '/api/files', summary: 'Keep a photo or a paper (multipart form, field “file”); sending one twice is answered as the first time', who: 'member', query: fileQuery, upload: true, status: 201, answer: keptFileSchema, problems: ['not-found', 'not-your-run', 'wrong-state', 'role-missing', 'bad-file', 'too-large', 'bad-input'] }),
+  file: defineRoute({ method: 'get', path: '/api/files/:hash', summary: 'A photo or a paper, to those who may see it; takes a range', who: 'member', params: fileParams, query: fileSizeQuery, media: ['image/jpeg', 'application/pdf'], status: 200, answer: z.object({}), problems: ['not-found', 'bad-range'] }),
+
   runs: defineRoute({ method: 'get', path: '/api/runs', summary: 'Runs, newest first', who: 'member', query: runsQuery, status: 200, answer: runsSchema, problems: [] }),
   startRun: defineRoute({ method: 'post', path: '/api/runs', summary: 'Start a run', who: ['restorer', 'senior'], body: startRunBody, status: 201, answer: runBundleSchema, problems: ['not-found', 'machine-busy', 'id-taken', 'not-startable'] }),
   run: defineRoute({ method: 'get', path: '/api/runs/:run', summary: 'All that a device needs to go on with a run', who: 'member', params: runParams, status: 200, answer: runBundleSchema, problems: ['not-found'] }),
   entries: defineRoute({ method: 'get', path: '/api/runs/:run/entries', summary: 'Entries after a place', who: 'member', params: runParams, query: entriesQuery, status: 200, answer: entriesSchema, problems: ['not-found'] }),
-  postEntries: defineRoute({ method: 'post', path: '/api/runs/:run/entries', summary: 'Add entries, in order; sending one twice is answered as the first time', who: ['restorer', 'senior'], params: runParams, body: postEntriesBody, status: 200, answer: postedEntriesSchema, problems: ['not-found', 'not-your-run', 'out-of-sequence', 'id-taken', 'wrong-state', 'refused', 'instrument', 'handed-over', 'other-engine'] }),
+  postEntries: defineRoute({ method: 'post', path: '/api/runs/:run/entries', summary: 'Add entries, in order; sending one twice is answered as the first time', who: ['restorer', 'senior'], params: runParams, body: postEntriesBody, status: 200, answer: postedEntriesSchema, problems: ['not-found', 'not-your-run', 'out-of-sequence', 'id-taken', 'wrong-state', 'refused', 'instrument', 'handed-over', 'other-engine', 'photo-missing'] }),
 
   holds: defineRoute({ method: 'get', path: '/api/holds', summary: 'Hold points that await a countersign', who: ['senior'], status: 200, answer: holdsSchema, problems: [] }),
   answerHold: defineRoute({ method: 'post', path: '/api/runs/:run/holds', summary: 'Give or refuse a countersign', who: ['senior'], params: runParams, body: answerHoldBody, status: 201, answer: answeredHoldSchema, problems: ['not-found', 'own-run', 'wrong-password', 'no-hold', 'other-engine', 'out-of-sequence', 'id-taken', 'refused', 'too-many'] }),

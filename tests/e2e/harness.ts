@@ -1,4 +1,4 @@
-/** The whole product for a browser test: durable database, demo workshops, mail fake, built client, server process. */
+/** The whole product for a browser test: durable database, demo workshops, mail fake, object store, built client, server process. */
 import { spawn, type ChildProcess } from 'node:child_process';
 import { generateKeyPairSync, randomBytes } from 'node:crypto';
 import { mkdtempSync, rmSync } from 'node:fs';
@@ -6,6 +6,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 
 import { startMailFake } from '@/server/adapters/fakes/mailFake';
+import { startObjectStoreFake } from '@/server/adapters/fakes/objectStoreFake';
 import type { Letter } from '@/server/adapters/fakes/readLetter';
 import { buildWeb, webRoot } from '@/server/cli/buildWeb';
 import type { DatabaseUrls } from '@/server/cli/cluster';
@@ -34,6 +35,8 @@ export async function startStack(): Promise<Stack> {
   const cluster = await openThrowAwayCluster({ durable: true });
   const letterFolder = mkdtempSync(join(tmpdir(), 'lampstep-letters-'));
   const mail = await startMailFake({ dir: letterFolder });
+  const objectFolder = mkdtempSync(join(tmpdir(), 'lampstep-objects-'));
+  const objects = await startObjectStoreFake({ dir: objectFolder });
   const port = await findFreePort(0);
   const url = `http://localhost:${String(port)}`;
   const env: NodeJS.ProcessEnv = {
@@ -53,6 +56,7 @@ export async function startStack(): Promise<Stack> {
     MAIL_FROM: 'Lampstep <lampstep@example.org>',
     BCRYPT_COST: '4',
     SIGN_IN_TRIES: '1000',
+    ...objects.env,
     WEB_ROOT: webRoot,
     LOG_LEVEL: 'warn',
   };
@@ -60,8 +64,10 @@ export async function startStack(): Promise<Stack> {
   const stop = async () => {
     await server?.end('SIGTERM');
     await mail.stop();
+    await objects.stop();
     await cluster.stop();
     rmSync(letterFolder, { recursive: true, force: true });
+    rmSync(objectFolder, { recursive: true, force: true });
   };
   try {
     await runTool(process.execPath, ['--import', 'tsx', inProject('tests/e2e/prepare.ts')], { cwd: projectRoot, env });

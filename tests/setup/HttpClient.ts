@@ -5,11 +5,12 @@ export interface Answer {
   body: Record<string, unknown>;
   headers: Headers;
   text: string;
+  bytes: Uint8Array;
 }
 
 export interface Ask {
   /** sent as it is, in place of JSON */
-  raw?: string;
+  raw?: string | FormData;
   headers?: Record<string, string>;
 }
 
@@ -29,6 +30,13 @@ export class HttpClient {
     return this.send('POST', path, body, ask);
   }
 
+  /** Sends `bytes` as the one file of a form, under a name of the caller's. */
+  upload(path: string, bytes: Uint8Array, name = 'photo.jpg', field = 'file'): Promise<Answer> {
+    const form = new FormData();
+    form.append(field, new Blob([Uint8Array.from(bytes)]), name);
+    return this.send('POST', path, undefined, { raw: form, headers: {} });
+  }
+
   delete(path: string, ask: Ask = {}): Promise<Answer> {
     return this.send('DELETE', path, undefined, ask);
   }
@@ -39,7 +47,7 @@ export class HttpClient {
     const response = await fetch(`${this.url}${path}`, {
       method,
       redirect: 'manual',
-      headers: { ...(sent === undefined ? {} : { 'content-type': 'application/json' }), ...(cookie === '' ? {} : { cookie }), ...headers },
+      headers: { ...(typeof sent !== 'string' ? {} : { 'content-type': 'application/json' }), ...(cookie === '' ? {} : { cookie }), ...headers },
       ...(sent === undefined ? {} : { body: sent }),
     });
     for (const line of response.headers.getSetCookie()) {
@@ -49,9 +57,10 @@ export class HttpClient {
       if (gone) this.cookies.delete(name);
       else this.cookies.set(name, pair.slice(pair.indexOf('=') + 1));
     }
-    const text = await response.text();
+    const bytes = new Uint8Array(await response.arrayBuffer());
+    const text = new TextDecoder().decode(bytes);
     let parsed: unknown = {};
     if (/json/.test(response.headers.get('content-type') ?? '')) parsed = JSON.parse(text);
-    return { status: response.status, body: parsed as Record<string, unknown>, headers: response.headers, text };
+    return { status: response.status, body: parsed as Record<string, unknown>, headers: response.headers, text, bytes };
   }
 }

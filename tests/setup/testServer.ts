@@ -7,6 +7,7 @@ import { Client } from 'pg';
 import { inject } from 'vitest';
 
 import { createDb } from '@/db/createDb';
+import { createObjectStore } from '@/server/adapters/objectStore';
 import { readConfig } from '@/server/config';
 import type { Config } from '@/server/config';
 import { createApp } from '@/server/createApp';
@@ -42,7 +43,7 @@ export async function openServer(change: Partial<Config> = {}): Promise<TestServ
   const time = { now: START };
   const config: Config = { ...readConfig({ NODE_ENV: 'test', DATABASE_URL: database.serverUrl, BCRYPT_COST: '4', SIGN_IN_TRIES: '1000', LOG_LEVEL: 'silent' }), ...change };
   const db = createDb(database.serverUrl);
-  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache() };
+  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache(), objects: createObjectStore(config) };
   const server = createServer(createApp(parts));
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
   const url = `http://127.0.0.1:${String((server.address() as AddressInfo).port)}`;
@@ -67,6 +68,7 @@ export async function openServer(change: Partial<Config> = {}): Promise<TestServ
       server.closeAllConnections();
       await new Promise((resolve) => server.close(resolve));
       await admin.end();
+      parts.objects.close();
       await db.destroy();
       await database.drop();
     },

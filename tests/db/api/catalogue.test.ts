@@ -47,7 +47,7 @@ describe('the catalogue of the database', () => {
        where grantee = 'lampstep_server' and table_schema = 'public' group by table_name order by table_name`,
     );
     expect(Object.fromEntries(granted.map(({ table_name, rights }) => [table_name, rights]))).toEqual({
-      credentials: 'select', entries: 'insert select', instruments: 'select', machine_tags: 'delete insert select', machines: 'select', members: 'select', people: 'select',
+      credentials: 'select', entries: 'insert select', file_uses: 'insert select', files: 'insert select', instruments: 'select', machine_tags: 'delete insert select', machines: 'select', members: 'select', people: 'select',
       profile_revisions: 'select', release_voids: 'insert select', releases: 'insert select', run_heads: 'insert select update', runs: 'insert select',
       sessions: 'insert select update', settings: 'select', snapshots: 'delete insert select update', tree_versions: 'select', trees: 'select', workshops: 'select',
     });

@@ -17,6 +17,7 @@ const FROZEN: Record<string, string> = {
   '20260301T090000-first-run': 'a932c21ede8d544d80da54d6f55cde481f8c9165be487507335805e38ff233b5',
   '20260301T093000-job-queue': '47e662b96a5f664dbd28a26ef86de88ac188d0a722f828e8eb957149427ed55c',
   '20260302T090000-hand-over': '97083a44d52f8beeed4cbca9696b7e1a2ef6ceaf565b7f7eb55b5fb5b21cbac7',
+  '20261201T100000-files': '66fdea06ecb1cdd33101bc01dc2f5a497c44a7933e102fba472d6e932a2fc2f0',
 };
 
 describe('migrations', () => {

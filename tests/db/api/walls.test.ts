@@ -41,7 +41,7 @@ describe('raw SQL', () => {
     }
   };
 
-  const walled = ['workshops', 'people', 'members', 'credentials', 'sessions', 'settings', 'machines', 'profile_revisions', 'trees', 'tree_versions', 'instruments', 'runs', 'run_heads', 'entries', 'snapshots', 'releases', 'release_voids', 'machine_tags'];
+  const walled = ['workshops', 'people', 'members', 'credentials', 'sessions', 'settings', 'machines', 'profile_revisions', 'trees', 'tree_versions', 'instruments', 'runs', 'run_heads', 'entries', 'snapshots', 'releases', 'release_voids', 'machine_tags', 'files', 'file_uses'];
 
   it.each(walled)('as the server shows no row of %s without a workshop', async (table) => {
     expect((await raw.query(`select * from ${table}`)).rows).toEqual([]);

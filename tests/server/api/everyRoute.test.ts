@@ -10,12 +10,15 @@ import type { RouteName } from '@/shared/contract/routes';
 import { BenchDevice } from '@/tests/setup/BenchDevice';
 import { makeWorkshop, password } from '@/tests/setup/factory';
 import type { TestWorkshop } from '@/tests/setup/factory';
+import { openObjectStore } from '@/tests/setup/objectStore';
 import type { Answer, HttpClient } from '@/tests/setup/HttpClient';
 import { openServer } from '@/tests/setup/testServer';
 import type { TestServer } from '@/tests/setup/testServer';
 
 const withSession = ROUTE_NAMES.filter((name) => (routes[name] as RouteDef).who !== 'anyone');
 const withBody = ROUTE_NAMES.filter((name) => (routes[name] as RouteDef).body !== undefined);
+/** They take a form in place of a JSON body. */
+const withUpload = ROUTE_NAMES.filter((name) => (routes[name] as RouteDef).upload === true);
 const withParams = ROUTE_NAMES.filter((name) => (routes[name] as RouteDef).params !== undefined);
 /** Routes with parameters that a member of another workshop could try. */
 const ofWorkshop = withParams;
@@ -24,12 +27,15 @@ describe('every route', () => {
   let server: TestServer;
   let here: TestWorkshop;
   let there: TestWorkshop;
+  let store: Awaited<ReturnType<typeof openObjectStore>>;
   let run: string;
+  let paper: string;
   let closed: string;
   const clients = new Map<string, HttpClient>();
 
   beforeAll(async () => {
-    server = await openServer();
+    store = await openObjectStore();
+    server = await openServer({ objectStore: store.config });
     [here, there] = [await makeWorkshop(server.database.ownerUrl), await makeWorkshop(server.database.ownerUrl)];
     for (const role of ROLES) {
       clients.set(role, await server.as(here[role]));
@@ -40,13 +46,17 @@ describe('every route', () => {
     await first.pass().do({ type: 'STOP' }).dead().do({ type: 'CLOSE' }).do({ type: 'CLOSE' }).send();
     closed = first.run;
     run = (await BenchDevice.start(restorer, server, { machine: here.machine }, here.instruments.tester)).run;
+    paper = String((await client('keeper').upload('/api/files?as=paper', Buffer.from('%PDF-1.4\n%%EOF\n'))).body['hash']);
     // The other workshop's trees have names of their own, so that a name alone can tell them apart.
     await server.query('alter table tree_versions disable trigger all');
     await server.query(`insert into trees (workshop, id) values ($1, 'only-here')`, [here.id]);
     await server.query(`insert into tree_versions select workshop, 'only-here', version, document, hash, state, author, checker, issued_at, withdrawn_at from tree_versions where workshop = $1 and tree = 'lamp'`, [here.id]);
     await server.query('alter table tree_versions enable trigger all');
   });
-  afterAll(() => server.stop());
+  afterAll(async () => {
+    await server.stop();
+    await store.stop();
+  });
 
   const client = (who: string): HttpClient => {
     const found = clients.get(who);
@@ -54,7 +64,7 @@ describe('every route', () => {
     return found;
   };
   const pathOf = (name: RouteName, change: Record<string, string> = {}) => {
-    const values: Record<string, string> = { run: name === 'submit' ? closed : run, record: closed, machine: here.machine, tree: 'only-here', version: '1', ...change };
+    const values: Record<string, string> = { run: name === 'submit' ? closed : run, record: closed, machine: here.machine, tree: 'only-here', version: '1', hash: paper, ...change };
     return routes[name].path.replace(/:(\w+)/g, (_, key: string) => encodeURIComponent(values[key] ?? ''));
   };
   const bodies: Partial<Record<RouteName, () => object>> = {
@@ -103,6 +113,8 @@ describe('every route', () => {
       const answer = await send(client(role), name, pathOf(name), withBody.includes(name) ? { nothing: 'fits' } : undefined);
       if (!allowed) refused(answer, 403, 'role-missing');
       else if (withBody.includes(name)) refused(answer, 422, 'bad-input');
+      // who may add what is asked before the form is read: no role but these two adds to the workshop itself
+      else if (withUpload.includes(name)) refused(answer, ['senior', 'keeper'].includes(role) ? 422 : 403, ['senior', 'keeper'].includes(role) ? 'bad-input' : 'role-missing');
       else expect(answer.status).toBe(200);
     });
   });
@@ -127,7 +139,7 @@ describe('every route', () => {
     const role = who === 'member' || who === 'anyone' ? 'keeper' : (who[0] ?? 'keeper');
     await nothingWritten(async () => {
       for (const bad of ['x', '1', '%00', "' or 1=1 --", '../../etc', '😀', '9'.repeat(400), crypto.randomUUID(), uuidv7()]) {
-        refused(await send(client(role), name, pathOf(name, { run: bad, record: bad, machine: bad, tree: bad, version: bad })), 404, 'not-found');
+        refused(await send(client(role), name, pathOf(name, { run: bad, record: bad, machine: bad, tree: bad, version: bad, hash: bad })), 404, 'not-found');
       }
       const undecodable = routes[name].path.replace(/:\w+/g, '%E0%A4%A');
       const answer = await send(client(role), name, undecodable);

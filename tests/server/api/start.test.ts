@@ -45,6 +45,7 @@ describe('npm start with NODE_ENV=production', { timeout: 90_000 }, () => {
       // Nothing is sent in this test, and nobody listens there.
       SMTP_URL: 'smtp://127.0.0.1:9',
       MAIL_FROM: 'lampstep@example.org',
+      S3_BUCKET: 'lampstep',
       WEB_ROOT: inProject('public'),
       LOG_LEVEL: 'silent',
     };
@@ -57,7 +58,7 @@ describe('npm start with NODE_ENV=production', { timeout: 90_000 }, () => {
     const [code] = (await once(child, 'close')) as [number];
     expect(code).toBe(1);
     expect(lines).toEqual([
-      'With NODE_ENV=production nothing is made up: set DATABASE_URL, DATABASE_OWNER_URL, PUBLIC_URL, SESSION_SECRET, SIGNING_KEY, SMTP_URL, MAIL_FROM (see .env.example).',
+      'With NODE_ENV=production nothing is made up: set DATABASE_URL, DATABASE_OWNER_URL, PUBLIC_URL, SESSION_SECRET, SIGNING_KEY, SMTP_URL, MAIL_FROM, S3_BUCKET (see .env.example).',
     ]);
   });
 

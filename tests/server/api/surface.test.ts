@@ -128,7 +128,7 @@ describe('the server as a process', () => {
   it('refuses to start in production without its secrets, and names each', async () => {
     const { ended, output } = run({ NODE_ENV: 'production', DATABASE_URL: 'postgres://nobody@127.0.0.1:9/x' });
     expect(await ended).toBe(1);
-    expect(output()).toBe('The server cannot start: PUBLIC_URL is missing; SESSION_SECRET is missing; SIGNING_KEY is missing; SMTP_URL is missing; MAIL_FROM is missing.\n');
+    expect(output()).toBe('The server cannot start: PUBLIC_URL is missing; SESSION_SECRET is missing; SIGNING_KEY is missing; SMTP_URL is missing; MAIL_FROM is missing; S3_BUCKET is missing.\n');
   });
 
   it('listens, and stops cleanly on SIGTERM', async () => {

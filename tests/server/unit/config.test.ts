@@ -11,6 +11,7 @@ const production = {
   SIGNING_KEY: JSON.stringify(makeSigningKey()),
   SMTP_URL: 'smtp://mail.example.org',
   MAIL_FROM: 'Lampstep <bench@example.org>',
+  S3_BUCKET: 'lampstep',
 };
 
 describe('readConfig', () => {
@@ -25,7 +26,7 @@ describe('readConfig', () => {
 
   it('makes the secrets of development anew each time, and refuses to in production', () => {
     expect(readConfig(database).sessionSecret).not.toBe(readConfig(database).sessionSecret);
-    for (const name of ['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM']) {
+    for (const name of ['PUBLIC_URL', 'SESSION_SECRET', 'SIGNING_KEY', 'SMTP_URL', 'MAIL_FROM', 'S3_BUCKET']) {
       expect(() => readConfig({ ...production, [name]: '' }), name).toThrow(`The server cannot start: ${name} is missing.`);
     }
   });

@@ -11,20 +11,21 @@ const production = {
   SIGNING_KEY: '{}',
   SMTP_URL: 'smtp://mail.example.org',
   MAIL_FROM: 'lampstep@example.org',
+  S3_BUCKET: 'lampstep',
 };
 
 describe('planStart', () => {
   it('makes up everything in development', () => {
-    expect(planStart({})).toEqual({ database: 'private', demo: true, mailFake: true, mayMovePort: true });
+    expect(planStart({})).toEqual({ database: 'private', demo: true, mailFake: true, storeFake: true, mayMovePort: true });
   });
 
   it('takes real services where they are given', () => {
-    const given = { DATABASE_URL: production.DATABASE_URL, DATABASE_OWNER_URL: production.DATABASE_OWNER_URL, SMTP_URL: 'smtp://mail.example.org' };
-    expect(planStart(given)).toEqual({ database: 'given', demo: true, mailFake: false, mayMovePort: true });
+    const given = { DATABASE_URL: production.DATABASE_URL, DATABASE_OWNER_URL: production.DATABASE_OWNER_URL, SMTP_URL: 'smtp://mail.example.org', S3_BUCKET: 'lampstep' };
+    expect(planStart(given)).toEqual({ database: 'given', demo: true, mailFake: false, storeFake: false, mayMovePort: true });
   });
 
   it('has no demo, no fake, no private database and no other port in production', () => {
-    expect(planStart(production)).toEqual({ database: 'given', demo: false, mailFake: false, mayMovePort: false });
+    expect(planStart(production)).toEqual({ database: 'given', demo: false, mailFake: false, storeFake: false, mayMovePort: false });
   });
 
   it.each(Object.keys(production).filter((name) => name !== 'NODE_ENV'))('refuses production without %s and names it', (name) => {
@@ -34,7 +35,7 @@ describe('planStart', () => {
   });
 
   it('names all that is missing at once', () => {
-    expect(() => planStart({ NODE_ENV: 'production' })).toThrow('DATABASE_URL, DATABASE_OWNER_URL, PUBLIC_URL, SESSION_SECRET, SIGNING_KEY, SMTP_URL, MAIL_FROM');
+    expect(() => planStart({ NODE_ENV: 'production' })).toThrow('DATABASE_URL, DATABASE_OWNER_URL, PUBLIC_URL, SESSION_SECRET, SIGNING_KEY, SMTP_URL, MAIL_FROM, S3_BUCKET');
   });
 
   it('wants the owner’s address beside a given database', () => {
