@@ -9,7 +9,7 @@ import { ROUTE_NAMES, routes } from '@/shared/contract/routes';
 
 import { ACCESS_COOKIE } from '../session/cookies';
 
-const FILE_FORM: { type: 'object'; required: string[]; properties: Record<string, object> } = { type: 'object', required: ['file'], properties: { file: { type: 'string', format: 'binary' } } };
+const FILE_FORM = { type: 'object' as const, required: ['file'], properties: { file: { type: 'string' as const, format: 'binary' } } };
 const bytes = (media: readonly string[]) => Object.fromEntries(media.map((type) => [type, { schema: { type: 'string', format: 'binary' } as const }]));
 const json = (schema: RouteDef['answer']) => ({ 'application/json': { schema } });
 
