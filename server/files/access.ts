@@ -5,10 +5,11 @@ import { ProblemError } from '../problems';
 import { maySeeRecord } from '../records/access';
 import { wantRestorer } from '../runs/access';
 import type { SignedIn } from '../session/access';
+import type { FileUse } from './queries';
 
 /** A file of a run is seen by those who see its record, any other by the whole workshop. */
-export function maySeeFile(who: Pick<SignedIn, 'person' | 'roles'>, uses: readonly { restorer: string | null }[]): boolean {
-  return uses.some(({ restorer }) => restorer === null || maySeeRecord(who, { restorer }));
+export function maySeeFile(who: Pick<SignedIn, 'person' | 'roles'>, uses: readonly FileUse[]): boolean {
+  return uses.some(({ restorer, former }) => restorer === null || maySeeRecord(who, { restorer, former: former ?? [] }));
 }
 
 /** Photos of a run come from its restorer while it is open; those of machines and instruments from a senior or a keeper. */

@@ -7,12 +7,18 @@ export function findFile(tx: Tx, hash: string): Promise<FileRow | undefined> {
   return tx.selectFrom('files').selectAll().where('hash', '=', hash).executeTakeFirst();
 }
 
-/** Restorers of the runs for which the file was sent; null stands for a use by the whole workshop. */
-export async function findFileUses(tx: Tx, hash: string): Promise<{ restorer: string | null }[]> {
+/** Who leads and who led the run for which a file was sent; a restorer of null stands for a use by the whole workshop. */
+export interface FileUse {
+  readonly restorer: string | null;
+  readonly former: string[] | null;
+}
+
+/** For what the file of that hash was sent. */
+export function findFileUses(tx: Tx, hash: string): Promise<FileUse[]> {
   return tx
     .selectFrom('file_uses')
     .leftJoin('runs', (join) => join.onRef('runs.workshop', '=', 'file_uses.workshop').onRef('runs.id', '=', 'file_uses.run'))
-    .select('runs.restorer')
+    .select(['runs.restorer', 'runs.former'])
     .where('file_uses.hash', '=', hash)
     .execute();
 }
