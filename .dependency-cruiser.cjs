@@ -5,7 +5,7 @@
 const rooms = {
   '^app/': { may: ['^shared/ui/(screens|theme|api)/'], as: 'routes show screens; the outermost layout also sets up theme and client' },
   '^shared/ui/theme/': { may: ['^shared/ui/theme/', '^fonts/'], as: 'the theme knows only itself and the fonts' },
-  '^shared/ui/components/': { may: ['^shared/ui/(components|theme)/', '^shared/quantity/'], as: 'parts know the theme and how a quantity is printed' },
+  '^shared/ui/components/': { may: ['^shared/ui/(components|theme)/', '^shared/quantity/', '^shared/workings/plot\\.ts$'], as: 'parts know the theme, how a quantity is printed and what a sheet draws' },
   '^shared/ui/api/': { may: ['^shared/ui/api/', '^shared/(contract|record|quantity)/', '^flows/'], as: 'the client knows the contract, the record and the engine' },
   '^shared/ui/hooks/': {
     may: ['^shared/ui/(hooks|api|components|theme)/', '^shared/(contract|record|quantity|workings)/', '^flows/'],

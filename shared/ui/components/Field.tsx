@@ -14,6 +14,8 @@ import { webProps } from '@/shared/ui/theme/webStyle';
 
 interface Props {
   label: string;
+  /** what it belongs to where several have the same label; a reader says it before the label */
+  within?: string | undefined;
   value: string;
   onChangeText: (text: string) => void;
   onBlur?: (() => void) | undefined;
@@ -32,6 +34,7 @@ interface Props {
 /** The name stays above the field, the fault below it; both belong to it for a screen reader. */
 export function Field({
   label,
+  within,
   value,
   onChangeText,
   onBlur,
@@ -66,7 +69,7 @@ export function Field({
           {...(inputMode ? { inputMode } : {})}
           {...(autoComplete ? { autoComplete } : {})}
           autoCapitalize={secret || inputMode === 'email' ? 'none' : 'sentences'}
-          accessibilityLabel={label}
+          accessibilityLabel={within === undefined ? label : `${within}, ${label}`}
           outlineColor={colors.ink}
           activeOutlineColor={colors.action}
           textColor={colors.ink}

@@ -86,7 +86,7 @@ function LineSample({ stroke }: { stroke: Stroke }) {
         y2={12}
         stroke={stroke.color}
         strokeWidth={stroke.width}
-        {...(stroke.dash === undefined ? {} : { strokeDasharray: stroke.dash })}
+        strokeDasharray={stroke.dash}
       />
     </Svg>
   );

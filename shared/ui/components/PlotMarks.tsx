@@ -51,7 +51,7 @@ export function PlotMarks({ plot, model }: Props) {
             fill="none"
             stroke={stroke.color}
             strokeWidth={stroke.width}
-            {...(stroke.dash === undefined ? {} : { strokeDasharray: stroke.dash })}
+            strokeDasharray={stroke.dash}
           />
         ))}
       </G>

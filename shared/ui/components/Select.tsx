@@ -2,6 +2,7 @@
 import { useId } from 'react';
 import { View } from 'react-native';
 
+import { BodyText } from '@/shared/ui/components/BodyText';
 import { FieldError } from '@/shared/ui/components/FieldError';
 import { Icon } from '@/shared/ui/components/icons/Icon';
 import { Label } from '@/shared/ui/components/Label';
@@ -16,16 +17,19 @@ export interface Option {
 
 interface Props {
   label: string;
+  /** what it belongs to where several have the same label; a reader says it before the label */
+  within?: string | undefined;
   options: readonly Option[];
   /** null while nothing is chosen */
   value: string | null;
   onChange: (value: string) => void;
   error?: string | undefined;
+  hint?: string | undefined;
   disabled?: boolean | undefined;
 }
 
 /** The browser's own list, which phones, keyboards and screen readers all know; for up to five use `Choice`. */
-export function Select({ label, options, value, onChange, error, disabled = false }: Props) {
+export function Select({ label, within, options, value, onChange, error, hint, disabled = false }: Props) {
   const { colors } = useTheme();
   const id = useId();
   return (
@@ -33,9 +37,9 @@ export function Select({ label, options, value, onChange, error, disabled = fals
       <Label>{label}</Label>
       <View>
         <select
-          aria-label={label}
+          aria-label={within === undefined ? label : `${within}, ${label}`}
           aria-invalid={error !== undefined}
-          {...(error ? { 'aria-describedby': `${id}e` } : {})}
+          {...(error || hint ? { 'aria-describedby': [error ? `${id}e` : null, hint ? `${id}h` : null].filter(Boolean).join(' ') } : {})}
           disabled={disabled}
           value={value ?? ''}
           onChange={(e) => onChange(e.target.value)}
@@ -65,6 +69,11 @@ export function Select({ label, options, value, onChange, error, disabled = fals
         </View>
       </View>
       {error ? <FieldError id={`${id}e`} text={error} /> : null}
+      {hint ? (
+        <BodyText id={`${id}h`} size="small" tone="soft">
+          {hint}
+        </BodyText>
+      ) : null}
     </View>
   );
 }

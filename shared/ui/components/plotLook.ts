@@ -5,17 +5,17 @@ import type { Plot, PlotCurve } from '@/shared/workings/plot';
 export interface Stroke {
   color: string;
   width: number;
-  /** SVG dash pattern; undefined is a whole line */
-  dash: string | undefined;
+  /** SVG dash pattern; `none` is a whole line */
+  dash: string;
 }
 
 const OTHER_DASHES = ['12 5', '4 4', '14 4 3 4'] as const;
 
 /** Line of a curve; `index` counts the curves of its role from 0. */
 export function curveStroke(role: PlotCurve['role'], index: number, colors: Palette): Stroke {
-  if (role === 'main') return { color: colors.ink, width: index === 0 ? 3 : 2, dash: index === 0 ? undefined : '18 5' };
+  if (role === 'main') return { color: colors.ink, width: index === 0 ? 3 : 2, dash: index === 0 ? 'none' : '18 5' };
   if (role === 'bound') return { color: colors.inkSoft, width: 2, dash: '2 4' };
-  return { color: colors.action, width: 2.5, dash: OTHER_DASHES[index % OTHER_DASHES.length] };
+  return { color: colors.action, width: 2.5, dash: OTHER_DASHES[index % OTHER_DASHES.length] ?? '4 4' };
 }
 
 /** Line of a limit. */

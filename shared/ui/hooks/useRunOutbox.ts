@@ -10,6 +10,7 @@ import { createOutbox } from '@/shared/ui/api/outbox';
 import type { Outbox } from '@/shared/ui/api/outbox';
 import { openOutboxStore } from '@/shared/ui/api/outboxStore';
 import { BOOT, stamp } from '@/shared/ui/hooks/benchClock';
+import { pause } from '@/shared/ui/hooks/pause';
 import { play } from '@/shared/ui/hooks/play';
 
 export interface RunOutbox {
@@ -90,14 +91,4 @@ function engineOf(program: Program, { start }: RunBundle) {
 async function comeBack(box: Outbox, program: Program, { start }: RunBundle): Promise<void> {
   const { context } = play(program, start, eventsOf(box.ledger())).state;
   if (context.last.boot !== '' && context.last.boot !== BOOT && context.phase !== 'closed') await box.add(stamp({ type: 'RESTART' }));
-}
-
-function pause(ms: number, kicked: Promise<void>): Promise<void> {
-  return new Promise((resolve) => {
-    const timer = setTimeout(resolve, ms);
-    void kicked.then(() => {
-      clearTimeout(timer);
-      resolve();
-    });
-  });
 }

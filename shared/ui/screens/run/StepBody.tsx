@@ -22,7 +22,7 @@ export function StepBody({ run, row, now = null }: { run: Run; row: Row | null; 
       <StepHead run={run} />
       {step !== null && (!begun || shown) ? (
         <>
-          <StepLines step={step} aside={<StepAside run={run} now={now} />} />
+          <StepLines step={step} aside={<StepAside run={run} />} />
           <StepNotes run={run} now={now} />
         </>
       ) : null}

@@ -34,7 +34,9 @@ export function StepHead({ run, title }: { run: Run; title?: string }) {
           </>
         ) : null}
       </View>
-      {signedOut ? <LinkText label="Sign in, and come back here" href={`/sign-in?from=${encodeURIComponent(`/bench/${bundle.run.id}`)}&expired=1`} /> : null}
+      {signedOut ? (
+        <LinkText label="Sign in, and come back here" href={`/sign-in?from=${encodeURIComponent(`/bench/${bundle.run.id}`)}&expired=1`} />
+      ) : null}
     </View>
   );
 }

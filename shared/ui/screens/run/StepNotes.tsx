@@ -4,42 +4,40 @@ import type { ReadingNow } from '@/flows/machine/stepWorkings';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Notice } from '@/shared/ui/components/Notice';
 import type { Run } from '@/shared/ui/screens/run/Run';
+import { StepSheet } from '@/shared/ui/screens/run/StepSheet';
 
 /** Beside a rule, out of the way of the instruction. `now` is the reading that is being taken. */
 export function StepNotes({ run, now = null }: { run: Run; now?: ReadingNow | null }) {
-  const { step } = run.view;
+  const { step, notes, key } = run.view;
   const { profile, settings } = run.program.layout;
   if (step === null) return null;
   const workings = workingsOf(step, profile, settings, now);
-  const headline = workings?.answer.ok ? workings.answer.headline : null;
-  const { notes } = run.view;
-  if (step.expect === undefined && headline === null && notes.length === 0) return null;
+  const withInstrument = now !== null && workings?.sheet.id === 'reading-limit';
   return (
-    <Notice>
-      {step.expect !== undefined ? (
-        <BodyText>
-          <BodyText inline bold>
-            You will see:
-          </BodyText>{' '}
-          {step.expect}
-        </BodyText>
-      ) : null}
-      {notes.map((note) => (
-        <BodyText key={note.name}>
-          <BodyText inline bold>
-            {note.name}:
-          </BodyText>{' '}
-          {note.say}
-        </BodyText>
-      ))}
-      {headline !== null ? (
-        <BodyText>
-          <BodyText inline bold>
-            {now === null || workings?.sheet.id !== 'reading-limit' ? 'For this machine:' : 'With this instrument:'}
-          </BodyText>{' '}
-          {headline}
-        </BodyText>
-      ) : null}
-    </Notice>
+    <>
+      {step.expect === undefined && notes.length === 0 ? null : (
+        <Notice>
+          {step.expect === undefined ? null : (
+            <BodyText>
+              <BodyText inline bold>
+                You will see:
+              </BodyText>{' '}
+              {step.expect}
+            </BodyText>
+          )}
+          {notes.map((note) => (
+            <BodyText key={note.name}>
+              <BodyText inline bold>
+                {note.name}:
+              </BodyText>{' '}
+              {note.say}
+            </BodyText>
+          ))}
+        </Notice>
+      )}
+      {workings === null ? null : (
+        <StepSheet key={key} run={run} workings={workings} lead={withInstrument ? 'With this instrument:' : 'For this machine:'} />
+      )}
+    </>
   );
 }

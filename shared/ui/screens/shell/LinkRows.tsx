@@ -17,7 +17,7 @@ export interface LinkRow {
 }
 
 /** The whole row is the link. */
-export function LinkRows({ caption, rows }: { caption: string; rows: readonly LinkRow[] }) {
+export function LinkRows({ caption, rows, level = 2 }: { caption: string; rows: readonly LinkRow[]; level?: 2 | 3 }) {
   const { colors } = useTheme();
   return (
     <View role="list" aria-label={caption} style={{ alignSelf: 'stretch' }}>
@@ -32,7 +32,7 @@ export function LinkRows({ caption, rows }: { caption: string; rows: readonly Li
             ]}
           >
             <View style={{ flex: 1, minWidth: 0 }}>
-              <Heading level={2} size="sub">
+              <Heading level={level} size="sub">
                 {title}
               </Heading>
               <BodyText>{about}</BodyText>

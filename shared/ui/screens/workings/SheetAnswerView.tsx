@@ -3,12 +3,15 @@ import type { ReactNode } from 'react';
 import { View } from 'react-native';
 
 import { BodyText } from '@/shared/ui/components/BodyText';
+import { CircuitFigure } from '@/shared/ui/components/CircuitFigure';
 import { Heading } from '@/shared/ui/components/Heading';
 import { Label } from '@/shared/ui/components/Label';
 import { Mono } from '@/shared/ui/components/Mono';
 import { Notice } from '@/shared/ui/components/Notice';
+import { PlotFigure } from '@/shared/ui/components/PlotFigure';
 import { line, space } from '@/shared/ui/theme/space';
 import { useTheme } from '@/shared/ui/theme/useTheme';
+import { webStyle } from '@/shared/ui/theme/webStyle';
 import type { AnySheet } from '@/shared/workings/list';
 import type { SheetAnswer } from '@/shared/workings/sheet';
 
@@ -18,30 +21,61 @@ interface Props {
   answer: SheetAnswer<unknown> | null;
 }
 
-/** The question, one big line, and the caution. */
-export function SheetHeadline({ sheet, answer }: Props) {
+interface HeadlineProps extends Props {
+  /** why there is no answer */
+  fault?: string | null | undefined;
+  /** stays in sight while the form below it is filled in */
+  sticks?: boolean | undefined;
+}
+
+/** From this many characters on a line set large would fill a phone. */
+const LONG = 90;
+const TOO_LONG_TO_STICK = 170;
+
+/** The question and one big line. */
+export function SheetHeadline({ sheet, answer, fault = null, sticks = false }: HeadlineProps) {
   const { colors } = useTheme();
-  const caution = answer?.caution ?? sheet.caution;
+  const words = answer?.headline ?? `No answer yet. ${fault ?? 'Mend the marked field below.'}`;
+  const held = sticks && words.length < TOO_LONG_TO_STICK;
   return (
-    <View style={{ gap: space.l }}>
+    <>
       <BodyText tone="soft">{sheet.question}</BodyText>
       <View
         role="status"
         aria-label="Answer"
-        style={{
-          borderTopWidth: line.heavy,
-          borderTopColor: colors.ink,
-          borderBottomWidth: line.rule,
-          borderBottomColor: colors.ink,
-          paddingVertical: space.l,
-        }}
+        style={[
+          {
+            backgroundColor: colors.paper,
+            borderTopWidth: line.heavy,
+            borderTopColor: colors.ink,
+            borderBottomWidth: line.rule,
+            borderBottomColor: colors.ink,
+            paddingVertical: space.m,
+          },
+          held ? webStyle({ position: 'sticky', top: 0, zIndex: 2 }) : null,
+        ]}
       >
-        <Heading level={2} size="section">
-          {answer ? answer.headline : 'No answer yet: mend the marked field below.'}
+        <Heading level={2} size={words.length < LONG ? 'section' : 'sub'}>
+          {words}
         </Heading>
       </View>
-      {caution !== '' ? <Notice title="Caution">{caution}</Notice> : null}
-    </View>
+    </>
+  );
+}
+
+/** What to take care of, where it can hurt. */
+export function SheetCaution({ sheet, answer }: Props) {
+  const caution = answer?.caution ?? sheet.caution;
+  return caution === '' ? null : <Notice title="Caution">{caution}</Notice>;
+}
+
+/** The plot and the circuit, where the sheet draws them. */
+export function SheetDrawings({ answer }: { answer: SheetAnswer<unknown> }) {
+  return (
+    <>
+      {answer.drawing === undefined ? null : <CircuitFigure circuit={answer.drawing} />}
+      {answer.plot === undefined ? null : <PlotFigure plot={answer.plot} />}
+    </>
   );
 }
 
@@ -50,8 +84,8 @@ export function SheetGrounds({ sheet, answer }: Props) {
   return (
     <View style={{ gap: space.l }}>
       <Part title={answer ? 'Formula, with these numbers' : 'Formula'}>
-        {(answer ? answer.formula : sheet.law).map((words) => (
-          <Mono key={words}>{words}</Mono>
+        {(answer ? answer.formula : sheet.law).map((words, i) => (
+          <Mono key={`${i}${words}`}>{words}</Mono>
         ))}
       </Part>
       {answer ? (

@@ -1,21 +1,20 @@
 /** One bench calculation. */
-import { useRouter } from 'expo-router';
-import { useEffect, useMemo, useState } from 'react';
-
 import { EmptyState } from '@/shared/ui/components/EmptyState';
 import { LinkText } from '@/shared/ui/components/LinkText';
 import { Page } from '@/shared/ui/components/Page';
-import { SheetGrounds, SheetHeadline } from '@/shared/ui/screens/workings/SheetAnswerView';
+import { SheetCaution, SheetDrawings, SheetGrounds, SheetHeadline } from '@/shared/ui/screens/workings/SheetAnswerView';
+import type { Given } from '@/shared/ui/screens/workings/sheetAddress';
+import { faultWords } from '@/shared/ui/screens/workings/faultWords';
 import { SheetForm } from '@/shared/ui/screens/workings/SheetForm';
-import { readSheet, sheetFields, startTexts } from '@/shared/ui/screens/workings/sheetForm';
+import { SheetTools } from '@/shared/ui/screens/workings/SheetTools';
+import { useSheetForm } from '@/shared/ui/screens/workings/useSheetForm';
 import { sheetById } from '@/shared/workings/list';
 import type { AnySheet } from '@/shared/workings/list';
-import { runSheet } from '@/shared/workings/sheet';
 
 interface Props {
   sheetId: string;
   /** what stands in the address besides */
-  given: Readonly<Record<string, string | string[] | undefined>>;
+  given: Given;
 }
 
 /** Answer first; what is typed stands in the address, so that it can be kept and sent. */
@@ -36,43 +35,26 @@ export function SheetScreen({ sheetId, given }: Props) {
   return <KnownSheet key={sheet.id} sheet={sheet} given={given} />;
 }
 
-function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Props['given'] }) {
-  const router = useRouter();
-  const fields = useMemo(() => sheetFields(sheet), [sheet]);
-  const [texts, setTexts] = useState<Record<string, string>>(() => ({
-    ...startTexts(sheet),
-    ...ofAddress(
-      fields.map((f) => f.name),
-      given,
-    ),
-  }));
-  const [touched, setTouched] = useState(false);
-  useEffect(() => {
-    if (touched) router.setParams(texts);
-  }, [texts, touched, router]);
-  const read = readSheet(fields, texts);
-  const unread = Object.keys(read.errors).length > 0;
-  const answer = unread ? null : runSheet(sheet, read.inputs);
-  const errors = answer !== null && !answer.ok ? { ...read.errors, [answer.field]: answer.say } : read.errors;
+function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Given }) {
+  const form = useSheetForm(sheet, given);
+  const { answer } = form;
   return (
     <Page title={sheet.title} eyebrow="Workings" maxWidth={860}>
-      <SheetHeadline sheet={sheet} answer={answer?.ok ? answer : null} />
+      <SheetHeadline sheet={sheet} answer={answer} fault={faultWords(form)} sticks />
+      <SheetCaution sheet={sheet} answer={answer} />
+      <SheetTools sheet={sheet} form={form} />
       <SheetForm
-        fields={fields}
-        texts={texts}
-        errors={errors}
-        echoes={read.echoes}
-        onChange={(name, text) => {
-          setTouched(true);
-          setTexts((now) => ({ ...now, [name]: text }));
-        }}
+        parts={form.parts}
+        texts={form.texts}
+        errors={form.errors}
+        echoes={form.echoes}
+        taken={form.taken}
+        onChange={form.type}
+        onReplace={form.replace}
       />
-      <SheetGrounds sheet={sheet} answer={answer?.ok ? answer : null} />
+      {answer === null ? null : <SheetDrawings answer={answer} />}
+      <SheetGrounds sheet={sheet} answer={answer} />
       <LinkText label="All workings" href="/workings" />
     </Page>
   );
-}
-
-function ofAddress(names: readonly string[], given: Props['given']): Record<string, string> {
-  return Object.fromEntries(names.flatMap((name): [string, string][] => (typeof given[name] === 'string' ? [[name, given[name]]] : [])));
 }

@@ -1,29 +1,15 @@
 /** The form of a bench calculation, read off its own schema, and what its fields say when they are read. */
-import type { z } from 'zod';
-
 import { formatNumber } from '@/shared/quantity/formatQuantity';
 import { parseReading } from '@/shared/quantity/parseReading';
 import { QUANTITIES } from '@/shared/quantity/quantities';
 import type { Quantity } from '@/shared/quantity/quantities';
 import type { Unit } from '@/shared/quantity/units';
 import { PREFIXES, UNITS } from '@/shared/quantity/units';
+import type { SheetField, SheetPart, SheetTexts } from '@/shared/ui/screens/workings/sheetPart';
+import { cellName, rowCount } from '@/shared/ui/screens/workings/sheetRows';
+import type { FieldInfo, Sheet } from '@/shared/workings/sheet';
 import { fieldsOf } from '@/shared/workings/sheet';
-import type { Sheet } from '@/shared/workings/sheet';
-
-export interface SheetField {
-  name: string;
-  title: string;
-  description: string;
-  unit: Unit | null;
-  /** may stay empty */
-  optional: boolean;
-  /** the named choices, or null for a number */
-  choices: readonly string[] | null;
-  signed: boolean;
-}
-
-/** What is typed, field by field; the address carries the same. */
-export type SheetTexts = Readonly<Record<string, string>>;
+import type { z } from 'zod';
 
 /** The input of the sheet, and a sentence for each field that could not be read. */
 export interface ReadSheet {
@@ -34,30 +20,73 @@ export interface ReadSheet {
 }
 
 /** The fields of a sheet in the order of its form. */
-export function sheetFields(sheet: Pick<Sheet, 'inputs'>): SheetField[] {
-  return fieldsOf(sheet.inputs).map(([name, { title, description, unit }]) => {
-    const { core, optional } = unwrap(sheet.inputs.shape[name] as z.ZodType);
-    const choices = core.type === 'enum' ? (core as unknown as z.ZodEnum).options.map(String) : null;
-    const least = core.type === 'number' ? (core as z.ZodNumber).minValue : null;
-    return { name, title, description, unit, optional, choices, signed: least === null || least < 0 };
+export function sheetFields(sheet: Pick<Sheet, 'inputs'>): SheetPart[] {
+  return fieldsOf(sheet.inputs).map(([name, info]): SheetPart => {
+    const { title, description, rows } = info;
+    if (rows === null) return fieldOf(name, info, sheet.inputs);
+    const element = elementOf(sheet.inputs.shape[name] as z.ZodType);
+    const { rowName, fewest, most, columns } = rows;
+    return {
+      kind: 'rows',
+      name,
+      title,
+      description,
+      rowName,
+      fewest,
+      most,
+      columns: columns.map(([column, of]) => fieldOf(column, of, element)),
+    };
   });
 }
 
+function fieldOf(name: string, { kind, title, description, unit, mayBeEmpty, choices }: FieldInfo, inside: z.ZodObject | null): SheetField {
+  const core = inside === null ? null : unwrap(inside.shape[name] as z.ZodType);
+  const least = core?.type === 'number' ? (core as z.ZodNumber).minValue : null;
+  return {
+    kind: kind === 'rows' ? 'text' : kind,
+    name,
+    title,
+    description,
+    unit,
+    optional: mayBeEmpty,
+    choices,
+    signed: least === null || least < 0,
+  };
+}
+
 /** Looks through defaults and "may be null" to the schema of the value itself. */
-function unwrap(schema: z.ZodType): { core: z.ZodType; optional: boolean } {
+function unwrap(schema: z.ZodType): z.ZodType {
   let core = schema;
-  let optional = false;
-  while (core.type === 'default' || core.type === 'nullable' || core.type === 'optional') {
-    if (core.type !== 'default') optional = true;
+  while (core.type === 'default' || core.type === 'nullable' || core.type === 'optional')
     core = (core as unknown as z.ZodDefault | z.ZodNullable | z.ZodOptional).unwrap() as z.ZodType;
-  }
-  return { core, optional };
+  return core;
+}
+
+function elementOf(schema: z.ZodType): z.ZodObject | null {
+  const core = unwrap(schema);
+  return core.type === 'array' ? ((core as unknown as z.ZodArray).element as z.ZodObject) : null;
 }
 
 /** What stands in the fields at first: the sheet's example with its defaults, written so that it reads back as itself. */
 export function startTexts(sheet: Pick<Sheet, 'inputs' | 'example'>): Record<string, string> {
-  const parsed = sheet.inputs.parse(sheet.example) as Record<string, unknown>;
-  return Object.fromEntries(sheetFields(sheet).map((field) => [field.name, textOf(parsed[field.name], field.unit)]));
+  return textsOf(sheet, sheet.inputs.parse(sheet.example) as Record<string, unknown>);
+}
+
+/** Inputs in SI as they would be typed. Only what is there; a list comes whole. */
+export function textsOf(sheet: Pick<Sheet, 'inputs'>, values: Readonly<Record<string, unknown>>): Record<string, string> {
+  const texts: Record<string, string> = {};
+  for (const part of sheetFields(sheet)) {
+    const value = values[part.name];
+    if (value === undefined) continue;
+    if (part.kind !== 'rows') texts[part.name] = textOf(value, part.unit);
+    else if (Array.isArray(value)) {
+      texts[part.name] = String(value.length);
+      (value as Record<string, unknown>[]).forEach((row, at) => {
+        for (const column of part.columns) texts[cellName(part, at, column)] = textOf(row[column.name], column.unit);
+      });
+    }
+  }
+  return texts;
 }
 
 function textOf(value: unknown, unit: Unit | null): string {
@@ -68,36 +97,50 @@ function textOf(value: unknown, unit: Unit | null): string {
   const prefix =
     [...UNITS[unit].prefixes].reverse().find((p) => value !== 0 && Math.abs(value) >= Number(`1e${PREFIXES[p].exponent}`)) ?? '';
   const shifted = Number((value / Number(`1e${PREFIXES[prefix].exponent}`)).toPrecision(12));
-  return `${String(shifted)}${prefix === 'μ' ? 'u' : prefix}`;
+  // 10m of time is milliseconds or minutes: written out
+  const suffix = unit === 's' && prefix === 'm' ? ' ms' : prefix === 'μ' ? 'u' : prefix;
+  return `${String(shifted)}${suffix}`;
 }
 
 /** Reads the fields. What is asked back (`1,234`) is an error of its field; the sheet itself judges ranges. */
-export function readSheet(fields: readonly SheetField[], texts: SheetTexts): ReadSheet {
+export function readSheet(parts: readonly SheetPart[], texts: SheetTexts): ReadSheet {
   const read: ReadSheet = { inputs: {}, errors: {}, echoes: {} };
-  for (const field of fields) {
-    const text = (texts[field.name] ?? '').trim();
-    if (field.choices !== null) {
-      read.inputs[field.name] = text;
+  for (const part of parts) {
+    if (part.kind !== 'rows') {
+      readField(part, part.name, texts, read, read.inputs);
       continue;
     }
-    if (text === '') {
-      if (field.optional) read.inputs[field.name] = null;
-      else read.errors[field.name] = `${field.title} is missing.`;
-      continue;
-    }
-    const parsed = readNumber(field, text, texts);
-    if ('say' in parsed) read.errors[field.name] = parsed.say;
-    else {
-      read.inputs[field.name] = parsed.value;
-      read.echoes[field.name] = parsed.echo;
-    }
+    read.inputs[part.name] = Array.from({ length: rowCount(part, texts) }, (_, at) => {
+      const row: Record<string, unknown> = {};
+      for (const column of part.columns) readField(column, cellName(part, at, column), texts, read, row);
+      return row;
+    });
   }
   return read;
 }
 
+function readField(field: SheetField, key: string, texts: SheetTexts, read: ReadSheet, into: Record<string, unknown>): void {
+  const text = (texts[key] ?? '').trim();
+  if (text === '') {
+    if (field.optional) into[field.name] = null;
+    else read.errors[key] = `${field.title} is missing.`;
+    return;
+  }
+  if (field.kind !== 'number') {
+    into[field.name] = text;
+    return;
+  }
+  const parsed = readNumber(field, text, texts);
+  if ('say' in parsed) read.errors[key] = parsed.say;
+  else {
+    into[field.name] = parsed.value;
+    read.echoes[key] = parsed.echo;
+  }
+}
+
 /** The unit of a field without one of its own: that of the quantity chosen in the same form, where the field is read in it. */
 export function unitOf(field: SheetField, texts: SheetTexts): Unit | null {
-  if (field.unit !== null) return field.unit;
+  if (field.unit !== null || field.kind !== 'number') return field.unit;
   const quantity = texts['quantity'];
   return quantity !== undefined && quantity in QUANTITIES && field.name !== 'counts' ? QUANTITIES[quantity as Quantity].unit : null;
 }

@@ -49,6 +49,6 @@ describe('PlotFigure', () => {
   it('draws each curve once, the main one whole and the bound one dotted', () => {
     const { container } = renderSheet(<PlotFigure plot={plot} />);
     const curves = [...container.querySelectorAll('svg path[fill="none"]')];
-    expect(curves.map((curve) => curve.getAttribute('stroke-dasharray'))).toEqual(['2 4', null]);
+    expect(curves.map((curve) => curve.getAttribute('stroke-dasharray'))).toEqual(['2 4', 'none']);
   });
 });
