@@ -71,6 +71,9 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
       if (!known.suspects.has(e.suspect)) add(['exits', j, 'evidence', k, 'suspect'], `no suspect "${e.suspect}"`);
     });
   });
+  const boardsIn = step.workings?.boardsIn;
+  if (boardsIn !== undefined && known.steps.get(boardsIn.step)?.exits.find((e: Exit) => e.id === boardsIn.exit)?.atMost === undefined)
+    add(['workings', 'boardsIn'], `"${boardsIn.exit}" of "${boardsIn.step}" is no counted exit`);
   for (const message of partitionFaults(step)) add(['exits'], message);
   step.exits.forEach((exit: Exit, j) => {
     for (const message of shownFaults(step, exit)) add(['exits', j, 'shows'], message);

@@ -33,16 +33,26 @@ export interface ReadingNow {
   value: number | null;
 }
 
+/** Where the run stands: the step's own key and the counted exits so far. */
+export type WorkingsPlace = { key: string; counters: readonly { key: string; n: number }[] };
+
 /** The workings of a step for this machine, or null where it shows none or what is known cannot fill it. A reading is set against its limit only with the instrument that takes it. */
-export function workingsOf(step: Step, profile: Profile, settings: Settings, now: ReadingNow | null = null): StepWorkings | null {
+export function workingsOf(step: Step, profile: Profile, settings: Settings, now: ReadingNow | null = null, place: WorkingsPlace | null = null): StepWorkings | null {
   if (step.workings === undefined) return null;
   if (step.workings.sheet === 'reading-limit') return now === null ? null : work('reading-limit', { quantity: now.quantity, reading: now.value, low: now.low, high: now.high, ...now.accuracy });
   const lamp = step.kind === 'energise' || step.kind === 'raise' ? step.lampWatts : undefined;
   // a soak reads each row again and again: `p5-2` is the second reading of p5
   const row = now === null ? {} : ofRow(isOfProfile(profile, now.row) ? now.row : now.row.replace(/-\d+$/, ''));
   const reference = { ...(lamp === undefined ? {} : { lampWatts: lamp }), ...row, ...step.workings };
-  const inputs = inputsOf(reference, profile, settings);
+  const inputs = inputsOf(reference, profile, settings, boardsIn(step.workings, place));
   return inputs === null ? null : work(reference.sheet, { ...inputs, ...(now === null ? {} : taken(reference.sheet, step.kind, now, inputs)) });
+}
+
+/** How many boards are in, by the counted exit that the author names; null where nothing says it. A step of a called tree counts in its own call. */
+function boardsIn({ boardsIn: exit }: Reference, place: WorkingsPlace | null): number | null {
+  if (exit === undefined || place === null) return null;
+  const call = place.key.slice(0, place.key.lastIndexOf('/') + 1);
+  return place.counters.find((c) => c.key === `${call}${exit.step}>${exit.exit}`)?.n ?? 0;
 }
 
 const ofRow = (id: string) => ({ rail: id, conductor: id, store: id });
@@ -82,7 +92,7 @@ function work(id: string, inputs: Record<string, unknown>): StepWorkings | null 
   return sheet !== undefined && parsed?.success === true ? { sheet, inputs, answer: sheet.compute(parsed.data) } : null;
 }
 
-function inputsOf(reference: Reference, profile: Profile, settings: Settings): Record<string, unknown> | null {
+function inputsOf(reference: Reference, profile: Profile, settings: Settings, boards: number | null = null): Record<string, unknown> | null {
   const { mains } = profile;
   switch (reference.sheet) {
     case 'series-lamp':
@@ -108,7 +118,7 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings): R
     case 'over-voltage-trip':
       return tripInputs(railOf(reference, profile.rails.filter((r) => r.trip !== null)));
     case 'refit-trip':
-      return refitInputs(reference, profile);
+      return refitInputs(reference, profile, boards);
   }
 }
 
@@ -156,9 +166,12 @@ function tripInputs(rail: Rail | undefined): Record<string, unknown> | null {
   };
 }
 
-/** The board that the author names, else the first, on the rail that it draws most from; the boards before it in the profile are in. */
-function refitInputs(reference: Reference, { boards: { fitted }, rails }: Profile): Record<string, unknown> | null {
-  const at = reference.board === undefined ? 0 : fitted.findIndex((b) => b.id === reference.board);
+/**
+ * The board that the author names, else the next after those that are in, on the rail that it draws most from; those before it in the profile are in.
+ * Null where neither is known: the first board's limit shown at each of them would be wrong at all others.
+ */
+function refitInputs(reference: Reference, { boards: { fitted }, rails }: Profile, boards: number | null): Record<string, unknown> | null {
+  const at = reference.board === undefined ? (boards ?? -1) : fitted.findIndex((b) => b.id === reference.board);
   const drawn = [...(fitted[at]?.draws ?? [])].sort((a, b) => b.amps - a.amps).find((d) => d.amps > 0 && (reference.rail === undefined || d.rail === reference.rail));
   const rail = rails.find((r) => r.id === drawn?.rail);
   if (drawn === undefined || rail === undefined) return null;

@@ -35,6 +35,12 @@ describe('parseTree', () => {
     });
     expect(shaped).toEqual(['look|exits.0.to|leads to "nowhere", which is no step', 'lamp|abort|the abort target is an isolate step, or the call of a tree that begins with one']);
   });
+  it('wants a counted exit where workings count the boards that are in', () => {
+    const found = changed((t) => {
+      t.steps[0]!['workings'] = { sheet: 'refit-trip', boardsIn: { step: 'look', exit: 'none' } };
+    });
+    expect(found).toEqual(['look|workings.boardsIn|"none" of "look" is no counted exit']);
+  });
   it.each([
     ['an unknown key', (t: Json) => (t['colour'] = 'red'), /Unrecognized key/],
     ['a format of another day', (t: Json) => (t['format'] = 9), /of format 9, and this program reads formats up to/],

@@ -84,7 +84,16 @@ describe('workingsOf', () => {
   it('sets the limit for the next board from the boards before it', () => {
     const board = (id: string, amps: number) => ({ id, name: id, slot: id, draws: [{ rail: 'p5', amps }], biasFirst: null });
     const profile = { ...benchProfile, boards: { removable: true, fitted: [board('cpu', 2), board('store', 1.5), board('panel', 0.4)] } };
-    expect(headline({ sheet: 'refit-trip' }, profile)).toMatch(/^Set the limit to 2\.5 A: 0 A so far, 2 A for this board\./);
+    const next = (key: string, counters: { key: string; n: number }[]) => {
+      const worked = workingsOf(step({ sheet: 'refit-trip', boardsIn: { step: 'more', exit: 'left' } }), profile, defaultSettings, null, { key, counters });
+      return worked?.answer.ok === true ? worked.answer.headline : null;
+    };
+    expect(next('board', [])).toMatch(/^Set the limit to 2\.5 A: 0 A so far, 2 A for this board\./);
+    expect(next('board', [{ key: 'more>left', n: 1 }])).toMatch(/^Set the limit to 3\.88 A: 2 A so far, 1\.5 A for this board\./);
+    expect(next('refit-1/board', [{ key: 'more>left', n: 9 }, { key: 'refit-1/more>left', n: 2 }])).toMatch(/^Set the limit to 4 A: 3\.5 A so far/);
+    // a board more than the profile has
+    expect(next('board', [{ key: 'more>left', n: 3 }])).toBeNull();
+    expect(headline({ sheet: 'refit-trip' }, profile)).toBeNull();
     expect(headline({ sheet: 'refit-trip', board: 'panel' }, profile)).toMatch(/^Set the limit to 4 A: 3\.5 A so far, 400 mA for this board\./);
     expect(headline({ sheet: 'refit-trip', board: 'none' }, profile)).toBeNull();
     expect(headline({ sheet: 'refit-trip' })).toBeNull();

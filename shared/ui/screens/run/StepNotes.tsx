@@ -11,7 +11,7 @@ export function StepNotes({ run, now = null }: { run: Run; now?: ReadingNow | nu
   const { step, notes, key } = run.view;
   const { profile, settings } = run.program.layout;
   if (step === null) return null;
-  const workings = workingsOf(step, profile, settings, now);
+  const workings = workingsOf(step, profile, settings, now, { key, counters: run.state.context.counters });
   const withInstrument = now !== null && workings?.sheet.id === 'reading-limit';
   return (
     <>
