@@ -1,5 +1,5 @@
 /** Turns the rows of the lost-return sheet into a network, or says which row cannot be. */
-import { formatQuantity } from '@/shared/quantity/formatQuantity';
+import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { LostReturnInputs } from '@/shared/workings/lostReturnInputs';
 import { diodeCard, wireOhms, ZERO_NODE } from '@/shared/workings/lostReturnInputs';
 import { Joined } from '@/shared/workings/network/joined';
@@ -206,8 +206,8 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
   return { nodeNames, network, rails: given.rails, returns, feeds, loads, diodes: given.diodes, overloads };
 }
 
-/** Printed volts and amps of this sheet: two figures say enough about a fault. */
-export const shortVolts = (value: number): string => formatQuantity(value, 'V', { digits: 2 });
+/** Printed volts, two figures and no milli: `−0.74 V` reads at a bench, `−740 mV` does not. */
+export const shortVolts = (value: number): string => `${formatNumber(Math.abs(value) < 0.005 ? 0 : value, 2)} V`;
 /** Printed amps. */
 export const shortAmps = (value: number): string => formatQuantity(value, 'A', { digits: 2 });
 /** Printed ohms. */

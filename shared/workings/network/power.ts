@@ -9,6 +9,9 @@ export interface PowerBalance {
   readonly imbalance: number;
 }
 
+/** Below a microwatt there is no power to balance: everything is off. */
+const LEAST_WATTS = 1e-6;
+
 /** Sums the power of every branch, each from its own volts and amps. */
 export function powerBalance(network: Network, { open, added }: Omit<Variation, 'off'>, solution: Solution): PowerBalance {
   const { volts } = solution;
@@ -27,6 +30,6 @@ export function powerBalance(network: Network, { open, added }: Omit<Variation, 
     heat += across ** 2 / OUTPUT_BLEED_OHMS;
   });
   for (const value of volts) heat += value * value * STRAY_SIEMENS;
-  const larger = Math.max(Math.abs(given), Math.abs(heat));
-  return { givenWatts: given, heatWatts: heat, imbalance: larger === 0 ? 0 : Math.abs(given - heat) / larger };
+  const larger = Math.max(Math.abs(given), Math.abs(heat), LEAST_WATTS);
+  return { givenWatts: given, heatWatts: heat, imbalance: Math.abs(given - heat) / larger };
 }
