@@ -59,6 +59,12 @@ export async function ensureChromium(say: Say): Promise<string> {
   return installed;
 }
 
+/** Makes sure of ngspice, which the workings are held against; installs Debian's package when it is missing and this user may. */
+export async function ensureNgspice(say: Say): Promise<void> {
+  const found = (process.env['PATH'] ?? '').split(delimiter).some((folder) => folder !== '' && existsSync(join(folder, 'ngspice')));
+  if (!found) await installPackages(['ngspice'], 'the checks of the workings', say);
+}
+
 async function installPackages(names: readonly string[], purpose: string, say: Say, prepare?: () => void): Promise<void> {
   const list = names.join(' ');
   const byHand = `apt-get install --no-install-recommends ${list}`;

@@ -4,7 +4,7 @@ import { availableParallelism } from 'node:os';
 import { join } from 'node:path';
 
 import { buildWeb } from './buildWeb';
-import { ensureChromium, ensurePostgres } from './packages';
+import { ensureChromium, ensureNgspice, ensurePostgres } from './packages';
 import { seconds, step } from './progress';
 import { inProject, projectRoot, stateFolder } from './projectFiles';
 import { runTool, tryTool } from './runTool';
@@ -98,6 +98,7 @@ async function test(): Promise<Tally> {
   mkdirSync(reports, { recursive: true });
   await ensurePostgres(say);
   await ensureChromium(say);
+  await ensureNgspice(say);
   // Makes the types of the routes, so that a link to a screen that is not there fails the type check.
   await runTool(process.execPath, [tool('expo/bin/cli'), 'customize', 'tsconfig.json'], {
     cwd: projectRoot,

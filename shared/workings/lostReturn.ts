@@ -1,119 +1,19 @@
 /** Lost return: what happens to rails, boards and diodes when a ground wire comes off, and which wire readings accuse. */
-import type { RailState } from '@/shared/workings/lostReturnCases';
 import { statesOf } from '@/shared/workings/lostReturnCases';
 import { lostReturnExample } from '@/shared/workings/lostReturnExample';
-import type { ReturnFault } from '@/shared/workings/lostReturnFault';
 import { findFault } from '@/shared/workings/lostReturnFault';
 import { lostReturnInputs } from '@/shared/workings/lostReturnInputs';
 import type { LostReturnModel } from '@/shared/workings/lostReturnModel';
 import { LIMIT_VOLTS_SHARE, lostReturnModel, shortAmps, shortOhms, shortVolts } from '@/shared/workings/lostReturnModel';
-import type { JudgedOpening, JudgedOpenings, Occurrence, OpeningVerdict } from '@/shared/workings/lostReturnOpenings';
+import type { JudgedOpenings } from '@/shared/workings/lostReturnOpenings';
 import { judgeOpenings } from '@/shared/workings/lostReturnOpenings';
-import { andList, openingInWords } from '@/shared/workings/lostReturnWords';
+import { lostReturnDrawing } from '@/shared/workings/lostReturnDrawing';
+import { openingResult } from '@/shared/workings/lostReturnReport';
+import type { LostReturnResult, OpeningResult, OpeningVerdict, ReturnFault } from '@/shared/workings/lostReturnResult';
+import { lostReturnResult } from '@/shared/workings/lostReturnResult';
+import { andList } from '@/shared/workings/lostReturnWords';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { defineSheet } from '@/shared/workings/sheet';
-
-/** A board that an opening exposes. */
-export interface ExposedBoard {
-  readonly name: string;
-  /** Worst volts on it, where `nominalVolts` belong. */
-  readonly volts: number;
-  readonly nominalVolts: number;
-  readonly how: 'reversed' | 'over' | 'hangs on a reversed rail';
-}
-
-/** A diode in the openings. */
-export interface DiodeStress {
-  readonly name: string;
-  readonly mostAmps: number;
-  readonly ratedAmps: number | null;
-  /** Null where its rating is not given. */
-  readonly overRated: boolean | null;
-}
-
-/** What one opening comes to; all in SI, nothing rounded. */
-export interface OpeningResult {
-  readonly opens: readonly string[];
-  readonly verdict: OpeningVerdict;
-  /** The sentence that a step shows. */
-  readonly sentence: string;
-  readonly reversedRails: readonly { readonly name: string; readonly volts: number }[];
-  readonly diodes: readonly DiodeStress[];
-  /** Rails that limit in the worst case. */
-  readonly limiting: readonly string[];
-  /** Those on the reversed or the negative rail first. */
-  readonly exposedBoards: readonly ExposedBoard[];
-  readonly worstCase: {
-    readonly rails: readonly { readonly name: string; readonly state: RailState; readonly volts: number; readonly amps: number }[];
-    readonly nodes: readonly { readonly name: string; readonly volts: number }[];
-  };
-}
-
-/** Result of the sheet. */
-export interface LostReturnResult {
-  readonly verdict: OpeningVerdict;
-  /** With every return in place, all rails on; its verdict is over all states of the rails. */
-  readonly closed: OpeningResult;
-  /** Each return, then each pair. */
-  readonly openings: readonly OpeningResult[];
-  /** The opening of the worst verdict, singles before pairs; null when all are harmless. */
-  readonly worst: OpeningResult | null;
-  readonly solvedCases: number;
-  /** Largest share by which the power given and the heat differ in a case. */
-  readonly powerImbalance: number;
-  readonly fault: ReturnFault | null;
-}
-
-function exposedBoards(model: LostReturnModel, { occurrences }: JudgedOpening): readonly ExposedBoard[] {
-  const reversed = new Set(occurrences.flatMap(({ kind, at }) => (kind === 'rail-reversed' ? [at] : [])));
-  const negative = new Set(model.rails.flatMap(({ volts }, rail) => (volts < 0 ? [rail] : [])));
-  const found = new Map<string, { rank: number; size: number; board: ExposedBoard }>();
-  const put = (load: number, how: ExposedBoard['how'], volts: number, size: number): void => {
-    const { name, nominalVolts, rails } = model.loads[load] ?? { name: '', nominalVolts: null, rails: [] };
-    const own = model.loads.flatMap((other) => (other.name === name ? other.rails : []));
-    const rank = how === 'reversed' || rails.some((rail) => reversed.has(rail)) ? 0 : own.some((rail) => negative.has(rail)) ? 1 : 2;
-    const known = found.get(name);
-    if (known !== undefined && (known.rank < rank || (known.rank === rank && known.size >= size))) return;
-    found.set(name, { rank, size, board: { name, volts, nominalVolts: nominalVolts ?? 0, how } });
-  };
-  for (const { kind, at, worst } of occurrences) {
-    if (kind === 'load-reversed') put(at, 'reversed', worst.value, 2 + worst.size);
-    if (kind === 'load-over') put(at, 'over', worst.value, worst.size);
-    if (kind === 'rail-reversed')
-      model.loads.forEach(({ rails }, load) => {
-        if (rails.includes(at)) put(load, 'hangs on a reversed rail', worst.value, 1);
-      });
-  }
-  return [...found.values()].sort((a, b) => a.rank - b.rank || b.size - a.size).map(({ board }) => board);
-}
-
-function resultOf(model: LostReturnModel, opening: JudgedOpening): OpeningResult {
-  const { shown, occurrences, verdict } = opening;
-  const { volts, outputAmps } = shown.solution;
-  const reversedOf = ({ kind, at, worst }: Occurrence) => (kind === 'rail-reversed' ? [{ name: model.rails[at]?.name ?? '', volts: worst.value }] : []);
-  const closed = opening.opens.length === 0;
-  return {
-    opens: opening.opens.map((k) => model.returns[k]?.name ?? ''),
-    verdict,
-    sentence: closed ? 'With every return in place.' : `${openingInWords(model, opening)}: ${verdict}.`,
-    reversedRails: occurrences.flatMap(reversedOf),
-    diodes: model.diodes.map(({ name, ratedAmps }, k) => {
-      const mostAmps = opening.diodeAmps[k] ?? 0;
-      return { name, mostAmps, ratedAmps, overRated: ratedAmps === null ? null : mostAmps > ratedAmps };
-    }),
-    limiting: opening.limiting.map((rail) => model.rails[rail]?.name ?? ''),
-    exposedBoards: exposedBoards(model, opening),
-    worstCase: {
-      rails: model.network.outputs.map(({ terminal, zero }, rail) => ({
-        name: model.rails[rail]?.name ?? '',
-        state: shown.states[rail] ?? 'on',
-        volts: (volts[terminal] ?? 0) - (volts[zero] ?? 0),
-        amps: outputAmps[rail] ?? 0,
-      })),
-      nodes: model.nodeNames.map((name, node) => ({ name, volts: volts[node] ?? 0 })),
-    },
-  };
-}
 
 const VERDICTS: readonly OpeningVerdict[] = ['harmless', 'out of tolerance', 'destructive'];
 
@@ -153,7 +53,9 @@ function formulaOf(model: LostReturnModel, judged: JudgedOpenings, result: LostR
   ];
   if (judged.closed.verdict !== 'harmless') {
     const { occurrences } = judged.closed;
-    const boards = occurrences.flatMap(({ kind, at, worst }) => (kind === 'load-out' ? [`${model.loads[at]?.name ?? ''} ${shortVolts(worst.value)}`] : []));
+    const boards = occurrences.flatMap(({ kind, at, worst }) =>
+      kind === 'load-out' ? [`${model.loads[at]?.name ?? ''} ${shortVolts(worst.value)}`] : [],
+    );
     if (boards.length > 0) lines.push(`before anything opens, out of tolerance: ${andList(boards)}`);
   }
   for (const { sentence, verdict, exposedBoards: boards } of result.openings) {
@@ -177,6 +79,7 @@ export const sheet = defineSheet({
   title: 'Lost return',
   question: 'What happens when this ground wire comes off, and which wire do the readings accuse?',
   inputs: lostReturnInputs,
+  output: lostReturnResult,
   law: [
     'each node: the currents into it add up to nothing',
     'diode: I = IS × (e^((V − I × R) ÷ (N × 25.9 mV)) − 1)',
@@ -202,7 +105,8 @@ export const sheet = defineSheet({
     const judged = judgeOpenings(model);
     const [stuck] = judged.unsettled;
     if (stuck !== undefined) {
-      const opened = stuck.opens.length === 0 ? 'every return in place' : `${andList(stuck.opens.map((k) => model.returns[k]?.name ?? ''))} open`;
+      const opened =
+        stuck.opens.length === 0 ? 'every return in place' : `${andList(stuck.opens.map((k) => model.returns[k]?.name ?? ''))} open`;
       return {
         ok: false,
         field: 'rails',
@@ -211,20 +115,31 @@ export const sheet = defineSheet({
     }
     const fault = given.readings.length === 0 ? null : findFault(model, given.readings);
     if (fault !== null && 'ok' in fault) return fault;
-    const openings = judged.openings.map((opening) => resultOf(model, opening));
+    const openings = judged.openings.map((opening) => openingResult(model, opening));
     const singles = openings.filter(({ opens }) => opens.length === 1);
     const worst = [worstOf(singles), worstOf(openings)].reduce((a, b) =>
       a !== null && b !== null && VERDICTS.indexOf(a.verdict) >= VERDICTS.indexOf(b.verdict) ? a : b,
     );
     const result: LostReturnResult = {
       verdict: worst?.verdict ?? 'harmless',
-      closed: resultOf(model, judged.closed),
+      closed: openingResult(model, judged.closed),
       openings,
       worst,
       solvedCases: judged.solved,
       powerImbalance: judged.imbalance,
       fault,
     };
-    return { ok: true, result, headline: headlineOf(result), formula: formulaOf(model, judged, result), caution, validity, source };
+    const shown = worst === null ? judged.closed : (judged.openings[openings.indexOf(worst)] ?? judged.closed);
+    const drawing = lostReturnDrawing(model, shown, fault);
+    return {
+      ok: true,
+      result,
+      headline: headlineOf(result),
+      formula: formulaOf(model, judged, result),
+      drawing,
+      caution,
+      validity,
+      source,
+    };
   },
 });

@@ -20,7 +20,10 @@ export function statesOf(model: Pick<LostReturnModel, 'rails' | 'overloads'>): r
   const count = model.rails.length;
   const choices = model.overloads.map((overload): readonly RailState[] => (overload === null ? ['on', 'off'] : ['on', 'off', 'limit']));
   if (count <= MIXED_RAILS) {
-    return choices.reduce<readonly (readonly RailState[])[]>((cases, own) => cases.flatMap((states) => own.map((state) => [...states, state])), [[]]);
+    return choices.reduce<readonly (readonly RailState[])[]>(
+      (cases, own) => cases.flatMap((states) => own.map((state) => [...states, state])),
+      [[]],
+    );
   }
   const allOn = choices.map((): RailState => 'on');
   const others = (rail: number): readonly RailState[] => (choices[rail] ?? []).filter((state) => state !== 'on');

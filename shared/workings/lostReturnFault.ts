@@ -1,30 +1,10 @@
 /** The other way round: from readings of a machine that runs, the wire at fault and its ohms. */
 import type { LostReturnInputs } from '@/shared/workings/lostReturnInputs';
 import type { LostReturnModel, ModelWire } from '@/shared/workings/lostReturnModel';
+import type { ReturnFault, WireSuspect } from '@/shared/workings/lostReturnResult';
 import type { Network } from '@/shared/workings/network/network';
 import { lay, prepare, solveLaid } from '@/shared/workings/network/network';
 import type { SheetRefusal } from '@/shared/workings/sheet';
-
-/** A wire that would explain the readings. */
-export interface WireSuspect {
-  readonly name: string;
-  readonly kind: 'return' | 'feed';
-  /** Ohms that fit the readings best. */
-  readonly ohms: number;
-  /** Ohms that the sheet takes it to have when good. */
-  readonly goodOhms: number;
-  /** How far readings and network are apart with those ohms, r.m.s. */
-  readonly leftVolts: number;
-}
-
-/** What the readings say. */
-export interface ReturnFault {
-  /** How far they are apart with every wire good, r.m.s. */
-  readonly asItStandsVolts: number;
-  /** Those that explain the readings equally well, best first; empty where nothing is amiss or no single wire explains them. */
-  readonly suspects: readonly WireSuspect[];
-  readonly says: 'nothing amiss' | 'one wire' | 'one of several' | 'no single wire';
-}
 
 /** Doubt of a pair of readings: 5 mV and 0.3 %, two hand meters' worth. Common practice, no source. */
 const doubtVolts = (volts: number): number => 0.005 + 0.003 * Math.abs(volts);
@@ -46,7 +26,8 @@ function pairsOf(model: LostReturnModel, readings: LostReturnInputs['readings'])
     if (!model.loads.some(({ name }) => name === load))
       return { ok: false, field: `readings.${String(k)}.load`, say: `There is no board “${load}” among the loads above.` };
     const own = model.loads.find(({ name, rails }) => name === load && rails.length === 1 && rails[0] === place);
-    if (own === undefined) return { ok: false, field: `readings.${String(k)}.load`, say: `“${load}” has no load between ${rail} and a return.` };
+    if (own === undefined)
+      return { ok: false, field: `readings.${String(k)}.load`, say: `“${load}” has no load between ${rail} and a return.` };
     // A load may be written either way round; the reading is always rail against 0 V.
     const turned = Math.sign(own.nominalVolts ?? 0) !== Math.sign(model.rails[place]?.volts ?? 0);
     pairs.push({ from: turned ? own.to : own.from, to: turned ? own.from : own.to, volts: loadVolts });
@@ -100,7 +81,10 @@ function fit(network: Network, wire: ModelWire, kind: WireSuspect['kind'], pairs
 
 /** Distance of readings from a solution, each weighed by its doubt, as an r.m.s. in units of the doubt. */
 function apart(volts: Float64Array, pairs: readonly Pair[]): number {
-  const sum = pairs.reduce((all, pair) => all + (((volts[pair.from] ?? 0) - (volts[pair.to] ?? 0) - pair.volts) / doubtVolts(pair.volts)) ** 2, 0);
+  const sum = pairs.reduce(
+    (all, pair) => all + (((volts[pair.from] ?? 0) - (volts[pair.to] ?? 0) - pair.volts) / doubtVolts(pair.volts)) ** 2,
+    0,
+  );
   return Math.sqrt(sum / pairs.length);
 }
 

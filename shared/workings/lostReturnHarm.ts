@@ -29,7 +29,8 @@ export const reversedAbove = (nominalVolts: number): number => Math.min(0.1, Mat
 function signed(kinds: { reversed: HarmKind; over: HarmKind }, at: number, nominalVolts: number, value: number): Harm | null {
   const volts = Math.sign(nominalVolts) * value;
   if (volts < -reversedAbove(nominalVolts)) return { kind: kinds.reversed, at, value, size: -volts, destroys: volts <= -REVERSE_VOLTS };
-  if (volts > OVER_SHARE * Math.abs(nominalVolts)) return { kind: kinds.over, at, value, size: volts / Math.abs(nominalVolts), destroys: true };
+  if (volts > OVER_SHARE * Math.abs(nominalVolts))
+    return { kind: kinds.over, at, value, size: volts / Math.abs(nominalVolts), destroys: true };
   return null;
 }
 

@@ -1,13 +1,11 @@
 /** What the lost-return sheet asks for: rails, wires, loads, diodes, and readings where there are any. */
 import { z } from 'zod';
 
+import { copperOhmsPerMetre } from '@/shared/workings/copper';
 import { choiceField, numberField, rowsField, textField } from '@/shared/workings/sheet';
 
 /** The node that every rail gives from and every return ends at: the supply's own 0 V. */
 export const ZERO_NODE = '0 V';
-
-/** Resistivity of annealed copper at 20 °C, in ohm metres (IEC 60028). */
-export const COPPER_OHM_METRES = 1.7241e-8;
 
 const optional = <T extends z.ZodType>(field: T) => field.nullable().default(null);
 
@@ -32,9 +30,7 @@ const wire = (goesTo: string) =>
     name: textField('Name', 'As in the harness list'),
     from: textField('From', goesTo),
     to: textField('To', 'Node at the far end'),
-    squareMillimetres: optional(
-      numberField({ title: 'Cross-section', description: 'Copper, in mm²', unit: null, min: 0.01, max: 1000 }),
-    ),
+    squareMillimetres: optional(numberField({ title: 'Cross-section', description: 'Copper, in mm²', unit: null, min: 0.01, max: 1000 })),
     metres: optional(numberField({ title: 'Length', description: 'One way, in metres', unit: null, min: 0.001, max: 1000 })),
     contactOhms: numberField({ title: 'Contacts', description: 'Of both ends together', unit: 'Ω', min: 0, max: 1e6 }).default(0.002),
     ohms: optional(
@@ -149,7 +145,7 @@ export type DiodeRow = LostReturnInputs['diodes'][number];
 export function wireOhms({ ohms, squareMillimetres, metres, contactOhms }: WireRow): number | null {
   if (ohms !== null) return ohms;
   if (squareMillimetres === null || metres === null) return null;
-  return (COPPER_OHM_METRES * metres) / (squareMillimetres * 1e-6) + contactOhms;
+  return copperOhmsPerMetre(squareMillimetres) * metres + contactOhms;
 }
 
 /** IS and N of a diode row, with what stands in where they are empty. Typical of power diodes; common practice, no source. */

@@ -76,7 +76,8 @@ function nodesOf(given: LostReturnInputs): Map<string, string> {
 /** A row that joins a node to itself, a wire without ohms, a load without amps and ohms. */
 function badRow(given: LostReturnInputs): SheetRefusal | null {
   for (const [k, rail] of given.rails.entries()) {
-    if (rail.volts === 0) return refuse(`rails.${String(k)}.volts`, `${rail.name} must be more or less than 0 V: a rail at 0 V is a return.`);
+    if (rail.volts === 0)
+      return refuse(`rails.${String(k)}.volts`, `${rail.name} must be more or less than 0 V: a rail at 0 V is a return.`);
     if (terminalOf(rail) === ZERO_NODE)
       return refuse(`rails.${String(k)}.terminal`, `${rail.name} cannot have ${ZERO_NODE} for its terminal: it would be shorted.`);
   }
@@ -89,7 +90,8 @@ function badRow(given: LostReturnInputs): SheetRefusal | null {
     for (const [k, row] of given[list].entries()) {
       const ohms = wireOhms(row);
       if (ohms === null) return refuse(`${list}.${String(k)}.ohms`, `${row.name}: give its ohms, or its cross-section and length.`);
-      if (ohms < 1e-5) return refuse(`${list}.${String(k)}.metres`, `${row.name} comes to less than 10 μΩ: check its cross-section and length.`);
+      if (ohms < 1e-5)
+        return refuse(`${list}.${String(k)}.metres`, `${row.name} comes to less than 10 μΩ: check its cross-section and length.`);
     }
   }
   for (const [k, row] of given.diodes.entries()) {
@@ -128,7 +130,10 @@ function floating(given: LostReturnInputs, named: ReadonlyMap<string, string>): 
   for (const rail of given.rails) joined.join(terminalOf(rail), ZERO_NODE);
   for (const [node, field] of named) {
     if (!joined.same(node, ZERO_NODE))
-      return refuse(field, `“${node}” floats: no rail, return, feed or load leads from it to ${ZERO_NODE}. Is it spelled the same in every row?`);
+      return refuse(
+        field,
+        `“${node}” floats: no rail, return, feed or load leads from it to ${ZERO_NODE}. Is it spelled the same in every row?`,
+      );
   }
   return null;
 }
@@ -157,8 +162,7 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
   const fed = new Joined();
   for (const { from, to } of [...given.feeds, ...given.returns]) fed.join(from, to);
   const railOf = (node: string): number => given.rails.findIndex((rail) => fed.same(terminalOf(rail), node));
-  const nominalOf = (node: string): number | null =>
-    fed.same(node, ZERO_NODE) ? 0 : (given.rails[railOf(node)]?.volts ?? null);
+  const nominalOf = (node: string): number | null => (fed.same(node, ZERO_NODE) ? 0 : (given.rails[railOf(node)]?.volts ?? null));
 
   const resistors: Resistor[] = [];
   const wires = (rows: LostReturnInputs['returns']): readonly ModelWire[] =>
@@ -176,7 +180,10 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
     const nominalVolts = a === null || b === null ? null : a - b;
     if (amps === null && ohms === null) return refuse(`loads.${String(k)}.amps`, `${name}: give its amps or its ohms.`);
     if (ohms === null && (nominalVolts === null || nominalVolts === 0))
-      return refuse(`loads.${String(k)}.ohms`, `${name}: give its ohms; between “${from}” and “${to}” there are no nominal volts to take amps at.`);
+      return refuse(
+        `loads.${String(k)}.ohms`,
+        `${name}: give its ohms; between “${from}” and “${to}” there are no nominal volts to take amps at.`,
+      );
     const value = ohms ?? Math.abs(nominalVolts ?? 0) / (amps ?? 1);
     const rails = [railOf(from), railOf(to)].filter((rail) => rail >= 0);
     const tolerance = Math.max(0, ...rails.map((rail) => (given.rails[rail]?.tolerancePercent ?? 0) / 100));

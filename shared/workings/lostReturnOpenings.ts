@@ -4,10 +4,9 @@ import { solveCases } from '@/shared/workings/lostReturnCases';
 import type { Harm, HarmKind } from '@/shared/workings/lostReturnHarm';
 import { HARM_KINDS, harmsOf } from '@/shared/workings/lostReturnHarm';
 import type { LostReturnModel } from '@/shared/workings/lostReturnModel';
+import type { OpeningVerdict } from '@/shared/workings/lostReturnResult';
 import { sourceState } from '@/shared/workings/network/source';
 import { powerBalance } from '@/shared/workings/network/power';
-
-export type OpeningVerdict = 'harmless' | 'out of tolerance' | 'destructive';
 
 /** One kind of harm to one thing, over all cases of an opening in which it comes up. */
 export interface Occurrence {
@@ -48,7 +47,10 @@ export interface JudgedOpenings {
 
 interface Gathering {
   readonly opens: readonly number[];
-  readonly found: Map<string, { kind: HarmKind; at: number; worst: Harm; worstCase: SolvedCase; states: Set<RailState>[]; diodeAmps: number[]; destroys: boolean }>;
+  readonly found: Map<
+    string,
+    { kind: HarmKind; at: number; worst: Harm; worstCase: SolvedCase; states: Set<RailState>[]; diodeAmps: number[]; destroys: boolean }
+  >;
   allOn: SolvedCase;
   readonly diodeAmps: number[];
 }
@@ -65,7 +67,15 @@ function gather(into: Gathering, one: SolvedCase, harms: readonly Harm[]): void 
   raise(into.diodeAmps, one.solution.diodeAmps);
   for (const harm of harms) {
     const known = into.found.get(keyOf(harm));
-    const entry = known ?? { kind: harm.kind, at: harm.at, worst: harm, worstCase: one, states: one.states.map(() => new Set<RailState>()), diodeAmps: [], destroys: false };
+    const entry = known ?? {
+      kind: harm.kind,
+      at: harm.at,
+      worst: harm,
+      worstCase: one,
+      states: one.states.map(() => new Set<RailState>()),
+      diodeAmps: [],
+      destroys: false,
+    };
     one.states.forEach((state, rail) => entry.states[rail]?.add(state));
     raise(entry.diodeAmps, one.solution.diodeAmps);
     entry.destroys ||= harm.destroys;

@@ -32,7 +32,10 @@ export function conditionsOf(model: Pick<LostReturnModel, 'rails'>, { states }: 
 }
 
 /** The diode that holds a reversed rail, with the most that flows through it. */
-function holdingDiode(model: LostReturnModel, { at, diodeAmps }: Occurrence): { name: string; part: string; amps: number; rated: number | null } | null {
+function holdingDiode(
+  model: LostReturnModel,
+  { at, diodeAmps }: Occurrence,
+): { name: string; part: string; amps: number; rated: number | null } | null {
   const terminal = model.network.outputs[at]?.terminal;
   const held = model.network.diodes
     .flatMap(({ anode, cathode }, k) => (anode === terminal || cathode === terminal ? [{ k, amps: diodeAmps[k] ?? 0 }] : []))

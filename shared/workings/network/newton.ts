@@ -21,7 +21,9 @@ export interface Settled {
 }
 
 const MOST_STEPS = 200;
-const MOST_HALVINGS = 60;
+const MOST_CUTS = 60;
+/** A step ends near enough to the least along its line when the slope there has fallen to this share. */
+const NEAR_LEAST = 0.05;
 /** The currents of a node balance when they sum to no more than this share of their sizes (and of a nanoamp). */
 const BALANCED = 1e-12;
 /** Nor can they balance better than the last figure of the volts allows; a few of those are let pass. */
@@ -141,16 +143,17 @@ export function settle(mesh: Mesh, nodes: readonly number[], branches: readonly 
     const solved = new LuDecomposition(search.slopes).solve(Matrix.columnVector(search.residual));
     for (let k = 0; k < count; k += 1) step[k] = -solved.get(k, 0);
     const start = search.along(step);
-    let [low, high, share] = [0, 1, 1];
-    for (let halving = 0; halving < MOST_HALVINGS; halving += 1) {
+    // Up to the least along the line and not past it, or steps could go round in a circle between kinks.
+    let [low, lowSlope, high, highSlope, share] = [0, start, 1, 0, 1];
+    for (let cut = 0; cut < MOST_CUTS; cut += 1) {
       move(share);
       search.look(trial, false);
       const slope = search.along(step);
-      if (share === 1 && slope <= 0.5 * Math.abs(start)) break;
-      if (Math.abs(slope) <= 0.5 * Math.abs(start)) break;
-      if (slope > 0) high = share;
-      else low = share;
-      share = (low + high) / 2;
+      if ((share === 1 && slope <= 0) || Math.abs(slope) <= NEAR_LEAST * Math.abs(start)) break;
+      if (slope > 0) [high, highSlope] = [share, slope];
+      else [low, lowSlope] = [share, slope];
+      const straight = lowSlope / (lowSlope - highSlope);
+      share = low + (high - low) * Math.min(0.9, Math.max(0.1, straight));
     }
     move(share);
     volts.set(trial);

@@ -34,5 +34,7 @@ export function sourceCurrent({ volts: held, limitAmps, takes, outputOhms }: Lim
 export function sourceState(source: LimitedSource, volts: number): SourceState {
   const given = Math.sign(source.volts) * sourceCurrent(source, volts).amps;
   if (given >= source.limitAmps) return 'limits';
-  return given <= (source.takes ? -source.limitAmps : 0) && Math.sign(source.volts) * volts > Math.abs(source.volts) ? 'pushed-off' : 'holds';
+  return given <= (source.takes ? -source.limitAmps : 0) && Math.sign(source.volts) * volts > Math.abs(source.volts)
+    ? 'pushed-off'
+    : 'holds';
 }

@@ -34,7 +34,9 @@ export function networkDeck(network: Network, { off, open, added }: Variation): 
     lines.push(`.nodeset V(${name(terminal)})=${String(volts)}`);
     lines.push(`Vset${String(k)} s${String(k)} ${name(own)} ${String(volts)}`);
     const across = `V(s${String(k)},${name(terminal)})`;
-    lines.push(`Bout${String(k)} s${String(k)} ${name(terminal)} I=min(max(${across}/${String(outputOhms)},${String(least)}),${String(most)})`);
+    lines.push(
+      `Bout${String(k)} s${String(k)} ${name(terminal)} I=min(max(${across}/${String(outputOhms)},${String(least)}),${String(most)})`,
+    );
   });
   return [...lines, TIGHT, '.end', ''].join('\n');
 }
@@ -54,7 +56,12 @@ export function operatingPoints(decks: readonly string[], timeoutMs = 120_000): 
     });
     const main = join(folder, 'main.cir');
     writeFileSync(main, [...control, 'quit', '.endc', '.end', ''].join('\n'));
-    const output = execFileSync('ngspice', ['-b', main], { encoding: 'utf8', timeout: timeoutMs, maxBuffer: 1 << 28, stdio: ['ignore', 'pipe', 'ignore'] });
+    const output = execFileSync('ngspice', ['-b', main], {
+      encoding: 'utf8',
+      timeout: timeoutMs,
+      maxBuffer: 1 << 28,
+      stdio: ['ignore', 'pipe', 'ignore'],
+    });
     return readPoints(output);
   } finally {
     rmSync(folder, { recursive: true, force: true });
