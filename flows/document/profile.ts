@@ -83,6 +83,13 @@ const device = z.strictObject({
   rail: idSchema.nullable(),
   ratedAmps: positive.nullable(),
   ratedVolts: positive.nullable(),
+  /** what a diode at a rail is there for; freewheel where it is not said, rectifier for a rectifier */
+  part: z.enum(['freewheel', 'rectifier', 'clamp']).optional(),
+  /** saturation current in amps and emission coefficient of its card; typical ones where they are not said */
+  saturationAmps: z.number().min(1e-18).max(1e-2).optional(),
+  emission: z.number().min(0.5).max(10).optional(),
+  /** of chip and leads, and of the choke where one lies in its path */
+  seriesOhms: z.number().min(1e-4).max(100).optional(),
 });
 
 const board = z.strictObject({
@@ -92,6 +99,8 @@ const board = z.strictObject({
   draws: z.array(z.strictObject({ rail: idSchema, amps: notNegative })).max(32),
   /** the rail that must stand before the others do */
   biasFirst: idSchema.nullable(),
+  /** the far end of the return at which it hangs, by its name among the conductors; the one that serves most of its rails where it is not said */
+  zero: name.optional(),
 });
 
 const heatsink = z.strictObject({ id: idSchema, name, live: z.boolean() });
@@ -120,6 +129,8 @@ export const profileShape = z.strictObject({
   sources: z.array(otherSource).max(8),
   rails: z.array(rail).min(1).max(16),
   conductors: z.array(conductor).max(64),
+  /** ends of conductors that are one piece of metal, such as the two bars of a backplane */
+  joined: z.array(z.array(name).min(2).max(16)).max(32).optional(),
   stores: z.array(store).max(64),
   devices: z.array(device).max(128),
   boards: z.strictObject({
@@ -170,7 +181,13 @@ export const profileSchema = profileShape.superRefine((p, ctx) => {
   p.boards.fitted.forEach((b, i) => {
     b.draws.forEach((d, j) => wantRail(d.rail, ['boards', 'fitted', i, 'draws', j, 'rail']));
     wantRail(b.biasFirst, ['boards', 'fitted', i, 'biasFirst']);
+    if (b.zero !== undefined && !p.conductors.some((c) => c.kind === 'return' && c.to === b.zero)) ctx.addIssue({ code: 'custom', path: ['boards', 'fitted', i, 'zero'], message: `no return goes to "${b.zero}"` });
   });
+  p.joined?.forEach((ends, i) =>
+    ends.forEach((end, j) => {
+      if (!p.conductors.some((c) => c.from === end || c.to === end)) ctx.addIssue({ code: 'custom', path: ['joined', i, j], message: `no conductor ends at "${end}"` });
+    }),
+  );
   if (!points.has(p.zeroPoint)) ctx.addIssue({ code: 'custom', path: ['zeroPoint'], message: `no point "${p.zeroPoint}"` });
   if (p.raw && !points.has(p.raw.point)) ctx.addIssue({ code: 'custom', path: ['raw', 'point'], message: `no point "${p.raw.point}"` });
   p.stores.forEach((s, i) => {

@@ -10,6 +10,7 @@ import type { Profile, Rail } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { Limit, Step } from '../document/steps';
 import { partsToDischarge } from '../facts/stores';
+import { lostReturnOf } from './lostReturnOf';
 
 type Reference = NonNullable<Step['workings']>;
 
@@ -81,7 +82,19 @@ export function workingsLimits(limit: Extract<Limit, { is: 'workings' }>, row: s
   return low !== null && high !== null && low > high ? { low: high, high: low } : { low, high };
 }
 
+/** Hundreds of networks are solved for a lost return, and the machine alone says which: once for each profile is enough. */
+const lostReturns = new WeakMap<Profile, StepWorkings | null>();
+
 function fill(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
+  if (reference.sheet !== 'lost-return') return fillNow(reference, profile, settings);
+  const known = lostReturns.get(profile);
+  if (known !== undefined) return known;
+  const filled = fillNow(reference, profile, settings);
+  lostReturns.set(profile, filled);
+  return filled;
+}
+
+function fillNow(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
   const inputs = inputsOf(reference, profile, settings);
   return inputs === null ? null : work(reference.sheet, inputs);
 }
@@ -115,6 +128,8 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings, bo
       return wireInputs(reference, profile);
     case 'fuse-inrush':
       return fuseInputs(profile);
+    case 'lost-return':
+      return lostReturnOf(profile);
     case 'over-voltage-trip':
       return tripInputs(railOf(reference, profile.rails.filter((r) => r.trip !== null)));
     case 'refit-trip':

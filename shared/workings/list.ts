@@ -2,6 +2,7 @@
 import { sheet as bleedDown } from '@/shared/workings/bleedDown';
 import { sheet as fuseInrush } from '@/shared/workings/fuseInrush';
 import { sheet as junctionTest } from '@/shared/workings/junctionTest';
+import { sheet as lostReturn } from '@/shared/workings/lostReturn';
 import { sheet as overVoltageTrip } from '@/shared/workings/overVoltageTrip';
 import { sheet as passElement } from '@/shared/workings/passElement';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
@@ -23,6 +24,7 @@ export const SHEETS: readonly AnySheet[] = [
   passElement,
   switchingRegulator,
   smoothingRipple,
+  lostReturn,
   railLimits,
   readingLimit,
   wireDrop,

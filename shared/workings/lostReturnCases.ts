@@ -65,8 +65,12 @@ export function solveCases(model: LostReturnModel, take: (one: SolvedCase) => vo
   for (const opens of openingsOf(model.returns.length)) {
     const open = opens.flatMap((k) => model.returns[k]?.resistor ?? []);
     for (const group of groups.values()) {
+      const outputs = model.network.outputs.map((output, rail) =>
+        group[0]?.[rail] === 'limit' ? { ...output, limitAmps: model.shortedAmps[rail] ?? output.limitAmps } : output,
+      );
+      const held = { ...prepared, network: { ...model.network, outputs } };
       const added = (group[0] ?? []).flatMap((state, rail) => (state === 'limit' ? (model.overloads[rail] ?? []) : []));
-      const laid: Laid = lay(prepared, { open, added });
+      const laid: Laid = lay(held, { open, added });
       let start: Float64Array | undefined;
       for (const states of group) {
         const off = states.flatMap((state, rail) => (state === 'off' ? [rail] : []));

@@ -6,7 +6,7 @@ import type { lostReturnInputs } from '@/shared/workings/lostReturnInputs';
 /** One cage, two returns: R1 carries the backplane, R2 the line cage. */
 export const lostReturnExample: z.input<typeof lostReturnInputs> = {
   rails: [
-    { name: '+5 V', volts: 5, limitAmps: 18 },
+    { name: '+5 V', volts: 5, limitAmps: 24, shortedAmps: 5 },
     { name: '+12 V', volts: 12, limitAmps: 3 },
     { name: '−12 V', volts: -12, limitAmps: 9 },
   ],
@@ -22,7 +22,7 @@ export const lostReturnExample: z.input<typeof lostReturnInputs> = {
   ],
   loads: [
     { name: 'Processor', from: '+5 V backplane', to: 'backplane', amps: 8 },
-    { name: 'Line board', from: '+5 V line cage', to: 'line cage', amps: 4 },
+    { name: 'Line board', from: '+5 V line cage', to: 'line cage', amps: 6 },
     { name: 'Line board', from: '+12 V line cage', to: 'line cage', amps: 0.4 },
     { name: 'Line board', from: '−12 V line cage', to: 'line cage', amps: 0.8 },
   ],

@@ -21,6 +21,15 @@ const rail = z.strictObject({
     min: 1e-3,
     max: 1000,
   }),
+  shortedAmps: optional(
+    numberField({
+      title: 'Amps when shorted',
+      description: 'Less than the limit where it folds back; empty for the limit',
+      unit: 'A',
+      min: 1e-3,
+      max: 1000,
+    }),
+  ),
   takes: choiceField('Takes current', 'Whether it also takes current; most outputs only give', ['no', 'yes']).default('no'),
   outputOhms: numberField({ title: 'Output ohms', description: 'Slope before the limit', unit: 'Ω', min: 1e-4, max: 10 }).default(0.005),
 });

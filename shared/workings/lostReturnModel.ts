@@ -33,6 +33,8 @@ export interface LostReturnModel {
   readonly feeds: readonly ModelWire[];
   readonly loads: readonly ModelLoad[];
   readonly diodes: LostReturnInputs['diodes'];
+  /** For each rail what it gives once it is in limit, which is less where it folds back. */
+  readonly shortedAmps: readonly number[];
   /** For each rail what makes it limit: its heaviest load all but shorted; null for a rail without load. */
   readonly overloads: readonly (Resistor | null)[];
 }
@@ -78,6 +80,8 @@ function badRow(given: LostReturnInputs): SheetRefusal | null {
   for (const [k, rail] of given.rails.entries()) {
     if (rail.volts === 0)
       return refuse(`rails.${String(k)}.volts`, `${rail.name} must be more or less than 0 V: a rail at 0 V is a return.`);
+    if (rail.shortedAmps !== null && rail.shortedAmps > rail.limitAmps)
+      return refuse(`rails.${String(k)}.shortedAmps`, `${rail.name}: amps when shorted must be the limit or less.`);
     if (terminalOf(rail) === ZERO_NODE)
       return refuse(`rails.${String(k)}.terminal`, `${rail.name} cannot have ${ZERO_NODE} for its terminal: it would be shorted.`);
   }
@@ -128,6 +132,15 @@ function floating(given: LostReturnInputs, named: ReadonlyMap<string, string>): 
   const joined = new Joined();
   for (const list of ['returns', 'feeds', 'loads'] as const) for (const { from, to } of given[list]) joined.join(from, to);
   for (const rail of given.rails) joined.join(terminalOf(rail), ZERO_NODE);
+  const ends = [...given.returns, ...given.feeds, ...given.loads].flatMap(({ from, to }) => [from, to]);
+  for (const [k, row] of given.loads.entries()) {
+    for (const end of ['from', 'to'] as const) {
+      const node = row[end];
+      if (node === ZERO_NODE || given.rails.some((rail) => terminalOf(rail) === node) || ends.filter((other) => other === node).length > 1)
+        continue;
+      return refuse(`loads.${String(k)}.${end}`, `“${node}” floats: nothing else leads to it. Is it spelled the same in every row?`);
+    }
+  }
   for (const [node, field] of named) {
     if (!joined.same(node, ZERO_NODE))
       return refuse(
@@ -191,11 +204,12 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
     loads.push({ name, from: place(from), to: place(to), nominalVolts, rails, tolerance });
     loadOhms.push(value);
   }
-  const overloads = given.rails.map(({ volts, limitAmps }, rail): Resistor | null => {
+  const shortedAmps = given.rails.map(({ limitAmps, shortedAmps: shorted }) => shorted ?? limitAmps);
+  const overloads = given.rails.map(({ volts }, rail): Resistor | null => {
     const own = loads.map((load, k) => ({ load, ohms: loadOhms[k] ?? Infinity })).filter(({ load }) => load.rails.includes(rail));
     const heaviest = own.sort((x, y) => x.ohms - y.ohms)[0];
     if (heaviest === undefined) return null;
-    return { from: heaviest.load.from, to: heaviest.load.to, ohms: (LIMIT_VOLTS_SHARE * Math.abs(volts)) / limitAmps };
+    return { from: heaviest.load.from, to: heaviest.load.to, ohms: (LIMIT_VOLTS_SHARE * Math.abs(volts)) / (shortedAmps[rail] ?? 1) };
   });
   const network: Network = {
     nodes: nodeNames.length,
@@ -210,7 +224,7 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
       outputOhms: rail.outputOhms,
     })),
   };
-  return { nodeNames, network, rails: given.rails, returns, feeds, loads, diodes: given.diodes, overloads };
+  return { nodeNames, network, rails: given.rails, returns, feeds, loads, diodes: given.diodes, shortedAmps, overloads };
 }
 
 /** Printed volts, two figures and no milli: `−0.74 V` reads at a bench, `−740 mV` does not. */

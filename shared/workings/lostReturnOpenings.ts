@@ -5,7 +5,6 @@ import type { Harm, HarmKind } from '@/shared/workings/lostReturnHarm';
 import { HARM_KINDS, harmsOf } from '@/shared/workings/lostReturnHarm';
 import type { LostReturnModel } from '@/shared/workings/lostReturnModel';
 import type { OpeningVerdict } from '@/shared/workings/lostReturnResult';
-import { sourceState } from '@/shared/workings/network/source';
 import { powerBalance } from '@/shared/workings/network/power';
 
 /** One kind of harm to one thing, over all cases of an opening in which it comes up. */
@@ -107,10 +106,10 @@ function judge(model: LostReturnModel, { opens, found, allOn, diodeAmps }: Gathe
   const [first] = occurrences;
   const verdict = first === undefined ? 'harmless' : first.destroys ? 'destructive' : 'out of tolerance';
   const shown = first?.worstCase ?? allOn;
-  const across = (terminal: number, zero: number): number => (shown.solution.volts[terminal] ?? 0) - (shown.solution.volts[zero] ?? 0);
-  const limiting = model.network.outputs.flatMap((output, rail) =>
-    shown.states[rail] !== 'off' && sourceState(output, across(output.terminal, output.zero)) === 'limits' ? [rail] : [],
-  );
+  const limiting = model.network.outputs.flatMap(({ limitAmps }, rail) => {
+    const most = shown.states[rail] === 'limit' ? (model.shortedAmps[rail] ?? limitAmps) : limitAmps;
+    return Math.abs(shown.solution.outputAmps[rail] ?? 0) >= most ? [rail] : [];
+  });
   return { opens, verdict, occurrences, shown, diodeAmps, limiting };
 }
 

@@ -7,6 +7,9 @@ import type { JudgedOpening, Occurrence } from '@/shared/workings/lostReturnOpen
 /** Amps from which a diode is said to conduct. */
 const SPEAKS_FROM_AMPS = 0.01;
 
+/** Reverse volts below which any junction would hold it, conducting or not. */
+const UNHELD_VOLTS = 0.3;
+
 /** Names in a row: “a”, “a and b”, “a, b and c”. */
 export function andList(names: readonly string[]): string {
   const last = names[names.length - 1] ?? '';
@@ -20,14 +23,16 @@ function statesInWords(states: ReadonlySet<RailState>): string | null {
 }
 
 /** What must be so for it to come up; rails whose state makes no difference are left out. */
-export function conditionsOf(model: Pick<LostReturnModel, 'rails'>, { states }: Pick<Occurrence, 'states'>): string {
+export function conditionsOf(model: Pick<LostReturnModel, 'rails'>, { kind, states }: Pick<Occurrence, 'kind' | 'states'>): string {
   const said = model.rails.flatMap(({ name }, rail) => {
     const words = statesInWords(states[rail] ?? new Set());
     return words === null ? [] : [{ words, name }];
   });
   const on = said.filter(({ words }) => words === 'on').map(({ name }) => `${name} on`);
   const rest = said.filter(({ words }) => words !== 'on').map(({ words, name }) => `${name} ${words}`);
-  const parts = [...on, ...rest];
+  // Something has to drive a rail backwards, also where no one rail alone is needed for it.
+  const driven = kind === 'rail-reversed' || kind === 'load-reversed';
+  const parts = [...on, ...rest, ...(driven && on.length === 0 ? ['another rail on'] : [])];
   return parts.length === 0 ? 'Whatever the rails do' : `With ${andList(parts)}`;
 }
 
@@ -56,9 +61,10 @@ function whatHappens(model: LostReturnModel, occurrence: Occurrence): string {
     case 'rail-reversed': {
       const name = model.rails[at]?.name ?? '';
       const diode = holdingDiode(model, occurrence);
-      if (diode === null) return `pulls ${name} to ${value}, with no diode to hold it`;
+      if (diode === null) return `pulls ${name} to ${value}${Math.abs(worst.value) < UNHELD_VOLTS ? '' : ', with no diode to hold it'}`;
       const over = diode.rated !== null && diode.amps > diode.rated ? `, above its rated ${shortAmps(diode.rated)}` : '';
-      return `pulls ${name} to ${value} through its ${PARTS[diode.part] ?? 'diode'} ${diode.name} at up to ${shortAmps(diode.amps)}${over}`;
+      const part = diode.name.toLowerCase().includes(diode.part) ? diode.name : `${PARTS[diode.part] ?? 'diode'} ${diode.name}`;
+      return `pulls ${name} to ${value} through its ${part} at up to ${shortAmps(diode.amps)}${over}`;
     }
     case 'diode-over': {
       const row = model.diodes[at];
