@@ -63,6 +63,9 @@ export interface Outbox {
 
 const MOST_AT_ONCE = 50;
 
+/** Refusals after which there is no way to safety to be sent: the run is not led from here any more. */
+const OVER: readonly string[] = ['wrong-state', 'handed-over', 'other-engine'];
+
 /** Makes the outbox of a run. */
 export function createOutbox(parts: Parts): Outbox {
   const { run, person, store, client, replays, toSafety, pause } = parts;
@@ -155,7 +158,7 @@ export function createOutbox(parts: Parts): Outbox {
     if (at === -1) return;
     const before = ledger;
     const aside = setAside(before, at, { say: problem.say, rule: problem.rule });
-    await move(problem.code === 'wrong-state' ? aside : withSafety(aside, before), { is: 'other' });
+    await move(OVER.includes(problem.code) ? aside : withSafety(aside, before), { is: 'other' });
   };
 
   /** Sends one batch. True when the next may follow at once. */

@@ -50,9 +50,14 @@ export function useMe(): Fetched<'me'> {
 
 const BENCH_EVERY_MS = 15_000;
 
-/** My open runs. */
+/** My open runs, and those that are offered to me. */
 export function useBench(): Fetched<'runs'> {
   return useRoute('runs', { query: { mine: '1', open: '1' } }, { everyMs: BENCH_EVERY_MS });
+}
+
+/** Open runs of the whole workshop. */
+export function useOpenRuns(enabled = true): Fetched<'runs'> {
+  return useRoute('runs', { query: { open: '1' } }, { enabled, everyMs: BENCH_EVERY_MS });
 }
 
 /** Everything that this device needs to go on with a run, as it was when its screen was opened; what comes later comes through the outbox. */

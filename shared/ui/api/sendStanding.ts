@@ -14,6 +14,8 @@ export function standingOf(code: ClientProblemCode): Standing {
     case 'bad-input':
     case 'id-taken':
     case 'wrong-state':
+    case 'handed-over':
+    case 'other-engine':
     case 'too-large':
     case 'not-found':
     case 'bad-json':

@@ -120,7 +120,7 @@ export function useRunMachine(program: Program, start: RunStart, { outbox, again
   useEffect(() => outbox.onRecord(take), [outbox, take]);
 
   useLapse(state, program.layout.settings.deadLapseMinutes, program, send);
-  usePolling(state.context.phase === 'hold-wait' || !saved.onDevice ? OFTEN_MS : SELDOM_MS, outbox);
+  usePolling(state.context.phase === 'hold-wait' || state.context.handing !== null || !saved.onDevice ? OFTEN_MS : SELDOM_MS, outbox);
 
   return { state, view, account, saved, refusal, busy, send, markSeen: () => void outbox.markSeen() };
 }

@@ -11,7 +11,7 @@ import { PowerMark } from '@/shared/ui/screens/bench/PowerMark';
 import { Tag } from '@/shared/ui/components/Tag';
 import { dateTimeWords } from '@/shared/ui/screens/shell/dateWords';
 
-const columns: Column<RunSummary>[] = [
+export const runColumns: Column<RunSummary>[] = [
   {
     key: 'machine',
     title: 'Machine',
@@ -34,7 +34,9 @@ const columns: Column<RunSummary>[] = [
         <BodyText>
           {r.step === null ? 'the end: close the record' : r.step.stud === '' ? r.step.title : `${r.step.stud} ${r.step.title}`}
         </BodyText>
-        {r.awaitsHold ? <Tag word="waits for a countersign" kind="look" /> : null}
+        {r.awaitsHold && !r.stranded ? <Tag word="waits for a countersign" kind="look" /> : null}
+        {r.offeredTo === null ? null : <Tag word="offered to the next restorer" kind="look" />}
+        {r.stranded ? <Tag word="cannot go on: a senior closes it" kind="look" /> : null}
       </View>
     ),
   },
@@ -47,7 +49,7 @@ export function OpenRuns({ runs, mayStart }: { runs: readonly RunSummary[]; mayS
   return (
     <DataTable
       caption="My open runs"
-      columns={columns}
+      columns={runColumns}
       rows={runs}
       rowKey={(r) => r.id}
       rowTarget={(r) => ({ name: `Go on with ${r.machine.name}, serial ${r.machine.serial}`, href: `/bench/${r.id}` })}

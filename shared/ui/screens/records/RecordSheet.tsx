@@ -2,6 +2,7 @@
 import { useMemo, useState } from 'react';
 
 import { FIRST_CAUTION } from '@/flows/document/hazards';
+import { ENGINE } from '@/flows/machine/compile';
 import type { RecordView } from '@/shared/contract/records';
 import type { Me } from '@/shared/contract/session';
 import { BodyText } from '@/shared/ui/components/BodyText';
@@ -44,6 +45,12 @@ export function RecordSheet({ record, replay, me }: Props) {
         side={
           <>
             <Outcome record={record} end={replay.end?.end ?? null} />
+            {record.pins.engine === ENGINE ? null : (
+              <Notice title="Made under older rules">
+                This run was led by an earlier version of the rules. It is played again here by those of today; the entries are as they were
+                written.
+              </Notice>
+            )}
             {replay.broken ? (
               <Notice
                 title={`Entry ${replay.broken.seq} cannot be played again`}

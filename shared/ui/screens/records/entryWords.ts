@@ -56,7 +56,7 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'lapsed':
       return says(event?.type === 'RESTART' ? 'The page was loaded anew' : 'Time passed: what had lapsed was taken back');
     case 'closed':
-      return says('Run closed');
+      return body['by'] === 'senior' ? says('Closed as stopped by a senior, signed', `${String(body['reason'])}\n${String(body['meaning'])}`) : says('Run closed');
     case 'submitted':
       return says('Submitted for review', body['remark']);
     case 'returned':

@@ -75,6 +75,8 @@ function words(entries: readonly ReplayedEntry[], { deadLapseMinutes }: Pick<Set
     switch (entry.kind) {
       case 'stopped':
         return [{ ...at, kind: 'stopped', title: event?.type === 'ABORT' ? 'Broken off' : 'Stop pressed', detail: `at “${place}”` }];
+      case 'closed':
+        return entry.body['by'] === 'senior' ? [{ ...at, kind: 'stopped', title: 'Closed by a senior: it could not go on', detail: `“${String(entry.body['reason'])}”` }] : [];
       case 'hold-refused':
         return [
           { ...at, kind: 'hold-refused', title: 'Hold refused', detail: event?.type === 'HOLD_REFUSED' ? `“${event.reason}”` : place },

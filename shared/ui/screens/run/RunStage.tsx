@@ -11,6 +11,7 @@ import { headSeq } from '@/shared/ui/api/ledger';
 import { useRunMachine } from '@/shared/ui/hooks/useRunMachine';
 import { useRunOutbox } from '@/shared/ui/hooks/useRunOutbox';
 import type { RunOutbox } from '@/shared/ui/hooks/useRunOutbox';
+import { HandedOver } from '@/shared/ui/screens/run/HandedOver';
 import { OverdueNotice } from '@/shared/ui/screens/run/OverdueNotice';
 import { RunStep } from '@/shared/ui/screens/run/RunStep';
 
@@ -43,12 +44,13 @@ function WithOutbox({ bundle, person, program }: { bundle: RunBundle; person: st
       </Page>
     );
   }
-  return <AtTheBench key={run.epoch} bundle={bundle} program={program} outbox={run} />;
+  return <AtTheBench key={run.epoch} bundle={bundle} program={program} person={person} outbox={run} />;
 }
 
-function AtTheBench({ bundle, program, outbox }: { bundle: RunBundle; program: Program; outbox: RunOutbox }) {
+function AtTheBench({ bundle, program, person, outbox }: { bundle: RunBundle; program: Program; person: string; outbox: RunOutbox }) {
   const machine = useRunMachine(program, bundle.start, outbox);
   const run = { ...machine, program, bundle, poll: outbox.outbox.poll, headSeq: () => headSeq(outbox.outbox.ledger()) };
+  if (machine.view.restorer !== person) return <HandedOver run={run} />;
   return (
     <>
       <RunStep run={run} />

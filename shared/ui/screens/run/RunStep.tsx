@@ -7,6 +7,7 @@ import { ChooseStep } from '@/shared/ui/screens/run/ChooseStep';
 import { EndStep } from '@/shared/ui/screens/run/EndStep';
 import { GuardStep } from '@/shared/ui/screens/run/GuardStep';
 import { HoldStep } from '@/shared/ui/screens/run/HoldStep';
+import { OfferedStep } from '@/shared/ui/screens/run/OfferedStep';
 import { PausedStep } from '@/shared/ui/screens/run/PausedStep';
 import { PhotoStep } from '@/shared/ui/screens/run/PhotoStep';
 import { ReadingRowStep } from '@/shared/ui/screens/run/ReadingRowStep';
@@ -27,7 +28,7 @@ export function RunStep({ run }: { run: Run }) {
     case 'guard':
       return <GuardStep key={view.key} run={run} />;
     case 'paused':
-      return <PausedStep run={run} />;
+      return view.handing === null ? <PausedStep run={run} /> : <OfferedStep run={run} to={view.handing.to} />;
     case 'ended':
     case 'closed':
       return <EndStep run={run} />;

@@ -21,9 +21,9 @@ export function holdAsks(view: RunView, { layout }: Program): string {
   return 'A senior has to countersign before this run goes on.';
 }
 
-/** The seniors of the workshop but the restorer, by name. */
+/** The seniors of the workshop who never led this run, by name. */
 export function seniorsFor({ people, run }: Pick<RunBundle, 'people' | 'run'>): string {
-  const names = people.filter((p) => p.roles.includes('senior') && p.id !== run.restorer).map((p) => p.name);
+  const names = people.filter((p) => p.roles.includes('senior') && p.id !== run.restorer && !run.former.includes(p.id)).map((p) => p.name);
   if (names.length === 0) return 'This workshop has no other senior: nobody can countersign. Stop, and ask the keeper.';
   return `${names.length === 1 ? names[0] : `${names.slice(0, -1).join(', ')} or ${names.at(-1) ?? ''}`}, on their own device and by letter.`;
 }

@@ -110,6 +110,22 @@ describe('createOutbox', () => {
     expect([...disk.kept.values()].map((q) => wordOf(q.event))).toEqual(['here']);
   });
 
+  it('sends no way to safety into a run that somebody else leads by now; what was done here is kept and shown', async () => {
+    const [shop, disk] = [new Shop(), new Disk()];
+    const box = outboxOf(shop, disk);
+    await box.open([]);
+    shop.away = true;
+    await box.add(say('mine'));
+    await box.add(event({ type: 'STOP' }));
+    await troubled(box, 'no-network');
+    shop.away = false;
+    shop.handedOver = true;
+    box.kick();
+    await vi.waitFor(() => expect(box.saved().notTaken.map((q) => [wordOf(q.event), q.notTaken?.say])).toEqual([['mine', 'problem handed-over'], ['STOP', 'problem handed-over']]));
+    expect(box.saved().waiting).toBe(0);
+    expect(shop.entries).toEqual([]);
+  });
+
   it('keeps what the server refuses with its reason, with all that was built upon it', async () => {
     const [shop, disk] = [new Shop(), new Disk()];
     shop.refuses = ['bad'];

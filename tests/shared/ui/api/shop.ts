@@ -34,6 +34,8 @@ export class Shop {
   signedOut = false;
   /** loses the next answer after having done what was asked */
   loseNext = false;
+  /** this run is somebody else's by now */
+  handedOver = false;
   /** answers that it refuses */
   refuses: string[] = [];
   /** does not name the entry that it refuses */
@@ -95,6 +97,7 @@ export class Shop {
 
   private post(sent: { id: string; seq: number; event: MachineEvent }[]): Answer<unknown> {
     this.posts += 1;
+    if (this.handedOver) return problem('handed-over');
     const fresh = sent.filter((s) => !this.entries.some((e) => e.id === s.id));
     const first = fresh[0];
     if (first !== undefined && first.seq !== this.entries.length + 1) {
