@@ -20,10 +20,14 @@ export type CallAnswer<N extends RouteName> = AnswerOf<(typeof routes)[N]>;
 export interface Client {
   /** Calls a route. Refusals and a missing network come back as a problem. */
   call<N extends RouteName>(name: N, input: CallInput<N>): Promise<Answer<CallAnswer<N>>>;
+  /** Sends one file to a route that takes a form. */
+  upload<N extends RouteName>(name: N, input: CallInput<N>, file: Blob): Promise<Answer<CallAnswer<N>>>;
 }
 
 /** A request that hangs this long counts as no network. */
 const PATIENCE_MS = 20_000;
+/** A photo over a weak network takes longer. */
+const UPLOAD_PATIENCE_MS = 120_000;
 
 const NO_NETWORK = 'The server cannot be reached. Check the network; nothing that you have entered is lost.';
 const BAD_ANSWER = 'The server answered in a way that this page does not understand. Load the page again.';
@@ -45,18 +49,21 @@ const problem = (code: ClientProblemCode, say: string, retryable: boolean, detai
 export function createClient(send: typeof fetch): Client {
   let refreshing: Promise<boolean> | null = null;
 
-  const once = async (route: RouteDef, input: { params?: unknown; query?: unknown; body?: unknown }): Promise<Answer<unknown>> => {
+  const once = async (route: RouteDef, input: { params?: unknown; query?: unknown; body?: unknown }, file?: Blob): Promise<Answer<unknown>> => {
     const path = pathOf(route, (input.params ?? {}) as Record<string, string>);
     const query = new URLSearchParams((input.query ?? {}) as Record<string, string>).toString();
     let response: Response;
     let text: string;
+    const form = file === undefined ? undefined : new FormData();
+    if (form !== undefined && file !== undefined) form.append('file', file, 'photo.jpg');
     try {
       response = await send(query === '' ? path : `${path}?${query}`, {
         method: route.method.toUpperCase(),
         credentials: 'same-origin',
         headers: { accept: 'application/json', ...(input.body === undefined ? {} : { 'content-type': 'application/json' }) },
         ...(input.body === undefined ? {} : { body: JSON.stringify(input.body) }),
-        signal: AbortSignal.timeout(PATIENCE_MS),
+        ...(form === undefined ? {} : { body: form }),
+        signal: AbortSignal.timeout(form === undefined ? PATIENCE_MS : UPLOAD_PATIENCE_MS),
       });
       text = await response.text();
     } catch {
@@ -75,15 +82,17 @@ export function createClient(send: typeof fetch): Client {
     return refreshing;
   };
 
+  const twice = async (name: RouteName, input: { params?: unknown; query?: unknown; body?: unknown }, file?: Blob): Promise<Answer<unknown>> => {
+    const route: RouteDef = routes[name];
+    const first = await once(route, input, file);
+    const ended = first.kind === 'problem' && (first.code === 'session-expired' || first.code === 'signed-out') && route.who !== 'anyone';
+    return ended && (await refresh()) ? once(route, input, file) : first;
+  };
+
+  // the type of an answer is that of its route, which `readAnswer` has checked
   return {
-    async call(name, input) {
-      const route: RouteDef = routes[name];
-      const asked = input as { params?: unknown; query?: unknown; body?: unknown };
-      const first = await once(route, asked);
-      const ended = first.kind === 'problem' && (first.code === 'session-expired' || first.code === 'signed-out') && route.who !== 'anyone';
-      // the type of the answer is that of the route, which `readAnswer` has checked
-      return (ended && (await refresh()) ? await once(route, asked) : first) as Answer<CallAnswer<typeof name>>;
-    },
+    call: async (name, input) => (await twice(name, input as object)) as Answer<CallAnswer<typeof name>>,
+    upload: async (name, input, file) => (await twice(name, input as object, file)) as Answer<CallAnswer<typeof name>>,
   };
 }
 

@@ -1,4 +1,4 @@
-/** The database of this browser: answers that wait to be sent. */
+/** The database of this browser: answers and photos that wait to be sent. */
 import { openDB } from 'idb';
 import type { DBSchema, IDBPDatabase } from 'idb';
 
@@ -6,6 +6,7 @@ import type { Queued } from '@/shared/ui/api/queued';
 
 export interface Device extends DBSchema {
   answers: { key: string; value: Queued; indexes: { run: string } };
+  photos: { key: string; value: { hash: string; run: string; photo: Blob } };
 }
 
 let opening: Promise<IDBPDatabase<Device> | null> | null = null;
@@ -18,9 +19,10 @@ export function openDevice(): Promise<IDBPDatabase<Device> | null> {
 
 async function open(): Promise<IDBPDatabase<Device> | null> {
   try {
-    return await openDB<Device>('lampstep', 1, {
-      upgrade(db) {
-        db.createObjectStore('answers', { keyPath: 'id' }).createIndex('run', 'run');
+    return await openDB<Device>('lampstep', 2, {
+      upgrade(db, before) {
+        if (before < 1) db.createObjectStore('answers', { keyPath: 'id' }).createIndex('run', 'run');
+        if (before < 2) db.createObjectStore('photos', { keyPath: 'hash' });
       },
     });
   } catch {

@@ -35,6 +35,8 @@ interface Parts {
   /** null where this browser keeps nothing */
   readonly store: OutboxStore | null;
   readonly client: Pick<Client, 'call'>;
+  /** sends the photo of that hash, if this device has it, before the entry that names it */
+  readonly sendPhoto: (hash: string) => Promise<ClientProblem | null>;
   readonly replays: Replays;
   /** events that lead an unclear bench to safety, stamped now, or none in a run that is closed: what was done is never undone by a refusal */
   readonly toSafety: (ledger: Ledger) => MachineEvent[];
@@ -68,7 +70,7 @@ const OVER: readonly string[] = ['wrong-state', 'handed-over', 'other-engine'];
 
 /** Makes the outbox of a run. */
 export function createOutbox(parts: Parts): Outbox {
-  const { run, person, store, client, replays, toSafety, pause } = parts;
+  const { run, person, store, client, sendPhoto, replays, toSafety, pause } = parts;
   let ledger: Ledger = { held: [], waiting: [], notTaken: [] };
   let trouble: ClientProblem | null = null;
   let saved: Saved = { waiting: 0, notTaken: [], trouble: null, onDevice: store !== null };
@@ -161,9 +163,28 @@ export function createOutbox(parts: Parts): Outbox {
     await move(OVER.includes(problem.code) ? aside : withSafety(aside, before), { is: 'other' });
   };
 
+  /** What stands in the way of the photos that a batch names. */
+  const photoTrouble = async (batch: readonly Queued[]): Promise<ClientProblem | null> => {
+    for (const { id, event } of batch) {
+      const bad = event.type === 'PHOTO' ? await sendPhoto(event.photo) : null;
+      if (bad !== null) return { ...bad, details: { ...bad.details, entry: id } };
+    }
+    return null;
+  };
+
   /** Sends one batch. True when the next may follow at once. */
   const sendOnce = async (): Promise<boolean> => {
     const batch = ledger.waiting.slice(0, oneAtATime ? 1 : MOST_AT_ONCE);
+    const bad = await photoTrouble(batch);
+    if (bad !== null) {
+      if (standingOf(bad.code) === 'refused') {
+        await refused(bad, batch);
+        return true;
+      }
+      trouble = bad;
+      tell();
+      return false;
+    }
     const answer = await client.call('postEntries', {
       params: { run },
       body: { entries: batch.map(({ id, seq, event }) => ({ id, seq, event })) },

@@ -17,6 +17,9 @@ export function standingOf(code: ClientProblemCode): Standing {
     case 'handed-over':
     case 'other-engine':
     case 'too-large':
+    case 'bad-file':
+    // photos are sent before their entries: one that is missing is on no device any more
+    case 'photo-missing':
     case 'not-found':
     case 'bad-json':
       return 'refused';

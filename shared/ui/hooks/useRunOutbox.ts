@@ -9,6 +9,8 @@ import type { Ledger } from '@/shared/ui/api/ledger';
 import { createOutbox } from '@/shared/ui/api/outbox';
 import type { Outbox } from '@/shared/ui/api/outbox';
 import { openOutboxStore } from '@/shared/ui/api/outboxStore';
+import { photoKeep } from '@/shared/ui/api/photoKeep';
+import { makeSendPhoto } from '@/shared/ui/api/sendPhoto';
 import { BOOT, stamp } from '@/shared/ui/hooks/benchClock';
 import { pause } from '@/shared/ui/hooks/pause';
 import { play } from '@/shared/ui/hooks/play';
@@ -41,6 +43,7 @@ export function useRunOutbox(bundle: RunBundle, program: Program, person: string
         person: first.current.person,
         store,
         client,
+        sendPhoto: makeSendPhoto(client, photoKeep, first.current.bundle.run.id),
         ...engineOf(first.current.program, first.current.bundle),
         pause,
       });

@@ -3,9 +3,12 @@ import { Text, useWindowDimensions, View } from 'react-native';
 
 import type { Person } from '@/shared/contract/people';
 import type { Finding } from '@/shared/contract/records';
+import { fileAddress } from '@/shared/ui/api/fileAddress';
 import { BodyText } from '@/shared/ui/components/BodyText';
+import { FileLink } from '@/shared/ui/components/FileLink';
 import { Icon } from '@/shared/ui/components/icons/Icon';
 import { Mono } from '@/shared/ui/components/Mono';
+import { Photo } from '@/shared/ui/components/Photo';
 import { PowerPattern } from '@/shared/ui/components/PowerPattern';
 import { Press } from '@/shared/ui/components/Press';
 import { entryWords } from '@/shared/ui/screens/records/entryWords';
@@ -62,6 +65,7 @@ export function TimelineEntry({ replayed, people, known, findings, onRemark }: P
             {detail}
           </BodyText>
         ) : null}
+        {event?.type === 'PHOTO' ? <EntryPhoto hash={event.photo} seq={entry.seq} /> : null}
         {findings.map((f) => (
           <BodyText key={f.id} size="small" tone="brass">{`${f.grade}: ${f.text}`}</BodyText>
         ))}
@@ -83,6 +87,16 @@ export function TimelineEntry({ replayed, people, known, findings, onRemark }: P
           </Press>
         </View>
       ) : null}
+    </View>
+  );
+}
+
+/** Small in the list; the link opens it whole. */
+function EntryPhoto({ hash, seq }: { hash: string; seq: number }) {
+  return (
+    <View style={{ maxWidth: 240, gap: 2 }}>
+      <Photo source={fileAddress(hash, 'small')} says={`Photo of entry ${seq}`} />
+      <FileLink href={fileAddress(hash)} label="Open it whole" name={`Open the photo of entry ${seq} whole`} />
     </View>
   );
 }

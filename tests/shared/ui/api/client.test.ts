@@ -35,6 +35,19 @@ describe('createClient', () => {
     expect(asked[0]?.line).toBe('GET /api/machines');
   });
 
+  it('sends a file as a form, and again after the session was renewed', async () => {
+    const forms: FormData[] = [];
+    const replies = [expired, { status: 200, body: me }, { status: 201, body: { hash: 'a'.repeat(64), media: 'image/jpeg', bytes: 3, width: 1, height: 1 } }];
+    const client = createClient(async (_url, init) => {
+      if (init?.body instanceof FormData) forms.push(init.body);
+      const reply = replies.shift();
+      return Promise.resolve(new Response(JSON.stringify(reply?.body), { status: reply?.status ?? 500 }));
+    });
+    const answer = await client.upload('addFile', { query: { as: 'photo' } }, new Blob(['abc']));
+    expect(answer).toMatchObject({ kind: 'ok', data: { bytes: 3 } });
+    expect(forms.map((form) => (form.get('file') as File).size)).toEqual([3, 3]);
+  });
+
   it('fills parameters and query into the address', async () => {
     const { client, asked } = serverOf([{ status: 200, body: { entries: [], head: { seq: 3, hash: 'a' } } }]);
     await client.call('entries', { params: { run: '0198c0de-0000-7000-8000-000000000001' }, query: { after: 3 } });

@@ -2,6 +2,7 @@ import { describe, expect, it, vi } from 'vitest';
 
 import { createOutbox } from '@/shared/ui/api/outbox';
 import type { Outbox, RecordChange } from '@/shared/ui/api/outbox';
+import type { ClientProblem } from '@/shared/ui/api/answer';
 import type { Replays } from '@/shared/ui/api/ledger';
 import type { OutboxStore } from '@/shared/ui/api/outboxStore';
 
@@ -14,9 +15,9 @@ const replays: Replays = (held, waiting) => {
   return at === -1 ? null : { at, why: { say: 'The run has gone on.', rule: null } };
 };
 
-function outboxOf(shop: Shop, store: OutboxStore | null): Outbox {
+function outboxOf(shop: Shop, store: OutboxStore | null, sendPhoto: (hash: string) => Promise<ClientProblem | null> = () => Promise.resolve(null)): Outbox {
   const toSafety = () => [event({ type: 'RESTART' }), event({ type: 'STOP' })];
-  return createOutbox({ run: RUN, person: ANN, store, client: shop.client, replays, toSafety, pause: (_ms, kicked) => kicked });
+  return createOutbox({ run: RUN, person: ANN, store, client: shop.client, sendPhoto, replays, toSafety, pause: (_ms, kicked) => kicked });
 }
 
 const sent = (shop: Shop, words: string[]) => vi.waitFor(() => expect(shop.words()).toEqual(words));
@@ -30,8 +31,8 @@ describe('createOutbox', () => {
     await box.open([]);
     expect(await box.add(say('one'))).toEqual({ ok: true });
     expect(disk.words()).toEqual(['one']);
-    shop.away = false;
     await troubled(box, 'no-network');
+    shop.away = false;
     box.kick();
     await sent(shop, ['one']);
     await vi.waitFor(() => expect(disk.words()).toEqual([]));
@@ -222,5 +223,40 @@ describe('createOutbox', () => {
     shop.away = false;
     await box.poll();
     await sent(shop, ['one', 'STOP']);
+  });
+
+  describe('with a photo', () => {
+    const photo = (hash: string) => ({ ...event({ type: 'STOP' }), type: 'PHOTO' as const, step: 'look', photo: hash });
+    const problem = (code: 'no-network' | 'bad-file'): ClientProblem => ({ kind: 'problem', code, say: `problem ${code}`, retryable: false, rule: null, faults: [], details: {} });
+
+    it('sends the photo before the entry that names it, and waits with both while the network is away', async () => {
+      const shop = new Shop();
+      const asked: string[] = [];
+      let away = true;
+      const box = outboxOf(shop, new Disk(), (hash) => {
+        asked.push(`${hash} before ${shop.entries.length + 1}`);
+        return Promise.resolve(away ? problem('no-network') : null);
+      });
+      await box.open([]);
+      await box.add(say('one'));
+      await sent(shop, ['one']);
+      await box.add(photo('aa'));
+      await troubled(box, 'no-network');
+      expect(shop.words()).toEqual(['one']);
+      away = false;
+      box.kick();
+      await sent(shop, ['one', 'PHOTO']);
+      expect(new Set(asked)).toEqual(new Set(['aa before 2']));
+    });
+
+    it('sets an entry aside, with the reason, when the server cannot keep its photo', async () => {
+      const shop = new Shop();
+      const box = outboxOf(shop, new Disk(), (hash) => Promise.resolve(hash === 'bad' ? problem('bad-file') : null));
+      await box.open([]);
+      await box.add(photo('good'));
+      await box.add(photo('bad'));
+      await vi.waitFor(() => expect(box.saved().notTaken.map((q) => q.notTaken?.say)).toEqual(['problem bad-file']));
+      await vi.waitFor(() => expect(shop.words().slice(0, 1)).toEqual(['PHOTO']));
+    });
   });
 });

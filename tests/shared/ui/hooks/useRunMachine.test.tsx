@@ -18,6 +18,7 @@ async function open(shop: Shop, disk: OutboxStore = new Disk(), held: Entry[] = 
     person: ANN,
     store: disk,
     client: shop.client,
+    sendPhoto: () => Promise.resolve(null),
     replays: () => null,
     toSafety: () => [],
     pause: (_ms, kicked) => kicked,

@@ -103,6 +103,7 @@ export async function atBench({ tree = lampTree, shop = new Shop() }: { tree?: T
     person: ANN,
     store: disk,
     client: shop.client,
+    sendPhoto: () => Promise.resolve(null),
     replays: () => null,
     toSafety: () => [],
     pause: (_ms, kicked) => kicked,
