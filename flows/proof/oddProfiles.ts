@@ -17,11 +17,18 @@ interface Oddity {
   outOfMachine?: boolean;
   removable?: boolean;
   battery?: boolean;
+  /** false where no bench supply can reach the raw side */
+  raw?: boolean;
+  isolated?: boolean;
+  heatsink?: boolean;
+  /** rails that need a least load; the first one where it is not said and the supply is switch-mode */
+  least?: number;
 }
 
 const big = { farads: 0.047, volts: 40, rebounds: true };
 const small = { farads: 100e-6, volts: 16, rebounds: false };
 const bulk = { farads: 220e-6, volts: 325, rebounds: true };
+const housekeeping = { farads: 47e-6, volts: 22, rebounds: false };
 
 const ODDITIES: readonly Oddity[] = [
   { title: 'one rail, no return named, nothing stored', rails: [rail('p5', 5, true)], returns: 0, stores: [] },
@@ -34,6 +41,9 @@ const ODDITIES: readonly Oddity[] = [
   { title: 'three rails from a raw rail, a battery besides', rails: THREE, returns: 4, stores: [big], supplyKind: 'switched-from-raw', battery: true },
   { title: 'six rails, two trips', rails: SIX, returns: 6, stores: [big, bulk] },
   { title: 'switch-mode with a bulk capacitor and a minimum load', rails: THREE, returns: 2, stores: [bulk], supplyKind: 'switch-mode' },
+  { title: 'switch-mode, several stores, Class II, a battery, an isolating transformer, boards in', rails: THREE, returns: 3, stores: [bulk, bulk, housekeeping, small], supplyKind: 'switch-mode', protectiveClass: 'II', battery: true, isolated: true, outOfMachine: false, least: 2 },
+  { title: 'switched from raw volts, one negative rail without a trip, Class II, a battery, boards in', rails: [rail('m15', -15)], returns: 1, stores: [big, small, small], supplyKind: 'switched-from-raw', protectiveClass: 'II', battery: true, outOfMachine: false },
+  { title: 'linear, raw side out of reach, no heatsink', rails: THREE, returns: 0, stores: [small], raw: false, heatsink: false },
   { title: 'switch-mode, one rail, Class II', rails: [rail('p5', 5)], returns: 1, stores: [bulk], supplyKind: 'switch-mode', protectiveClass: 'II' },
 ];
 
@@ -47,18 +57,18 @@ function profileOf(o: Oddity): Profile {
     title: o.title,
     machineClass: 'odd',
     supplyKind: o.supplyKind ?? 'linear',
-    mains: { volts: 230, hertz: 50, voltAmps: 150, protectiveClass: o.protectiveClass ?? 'I', inlet: 'lead', fuse: { amps: 1, kind: 'slow' }, protection: 'rcd', earthLeadOhms: 0.05, insulationTestVolts: 250 },
-    raw: switcher ? null : { name: 'raw', volts: 28, ratedAmps: 10, point: 'raw' },
+    mains: { volts: 230, hertz: 50, voltAmps: 150, protectiveClass: o.protectiveClass ?? 'I', inlet: 'lead', fuse: { amps: 1, kind: 'slow' }, protection: o.isolated === true ? 'isolating-transformer' : 'rcd', earthLeadOhms: 0.05, insulationTestVolts: 250 },
+    raw: switcher || o.raw === false ? null : { name: 'raw', volts: 28, ratedAmps: 10, point: 'raw' },
     sources: o.battery === true ? [{ id: 'cell', name: 'memory battery', kind: 'battery', volts: 3.6 }] : [],
     rails: o.rails,
     conductors: Array.from({ length: o.returns }, (_, i) => ({ id: `r${i + 1}`, name: `return ${i + 1}`, kind: 'return' as const, from: '0 V', to: 'cage', squareMillimetres: 2.5, metres: 0.5, connector: 'J1', pin: String(i + 1), maxOhms: 0.01, rails: o.rails.map((r) => r.id) })),
     stores: o.stores.map((s, i) => ({ id: `c${i + 1}`, name: `C${i + 1}`, farads: s.farads, voltsWorked: s.volts, voltsRated: s.volts * 1.25, bleederOhms: null, rebounds: s.rebounds, reboundWaitSeconds: s.rebounds ? 300 : 0, point: `c${i + 1}` })),
     devices: [{ id: 'd1', name: 'D1', kind: 'diode', rail: o.rails[0]?.id ?? null, ratedAmps: 10, ratedVolts: 60 }],
     boards: { removable: o.removable ?? true, fitted: [{ id: 'b1', name: 'board 1', slot: '1', draws: o.rails.map((r) => ({ rail: r.id, amps: 0.5 })), biasFirst: null }] },
-    heatsinks: [{ id: 'h1', name: 'heatsink', live: true }],
+    heatsinks: o.heatsink === false ? [] : [{ id: 'h1', name: 'heatsink', live: true }],
     points: [point('zero'), point('raw'), ...o.rails.map((r) => point(`t-${r.id}`, r.id)), ...o.stores.map((_, i) => point(`c${i + 1}`))],
     zeroPoint: 'zero',
-    minimumLoad: switcher ? [{ rail: o.rails[0]?.id ?? 'p5', amps: 1 }] : [],
+    minimumLoad: switcher ? o.rails.slice(0, o.least ?? 1).map((r) => ({ rail: r.id, amps: 1 })) : [],
     hazards: [],
     ownerLimits: [],
     outOfMachine: o.outOfMachine ?? true,
