@@ -9,35 +9,51 @@ import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
 import type { SwitchingVerdict } from '@/shared/workings/switchingVerdict';
 import { judgeSwitching, SWITCHING_WORDS } from '@/shared/workings/switchingVerdict';
-import type { ThermalState } from '@/shared/workings/thermal';
 import { mostSinkToAir, settledTemperatures } from '@/shared/workings/thermal';
 
-/** What one way of regulating costs. */
-export interface PassLoss {
-  readonly inputAmps: number;
-  readonly inputWatts: number;
+const loss = z.strictObject({
+  inputAmps: z.number(),
+  inputWatts: z.number(),
   /** In the pass device or devices, all together. */
-  readonly deviceWatts: number;
+  deviceWatts: z.number(),
   /** In the freewheel diode; 0 for a linear one. */
-  readonly diodeWatts: number;
+  diodeWatts: z.number(),
   /** Share of the input that reaches the load, 0 to 1. */
-  readonly efficiency: number;
-}
+  efficiency: z.number(),
+});
+
+/** What one way of regulating costs. */
+export type PassLoss = z.output<typeof loss>;
+
+const output = z.strictObject({
+  outputWatts: z.number(),
+  linear: loss,
+  /** Null where the input less the drop when on does not reach the output. */
+  switching: loss.extend({ duty: z.number() }).nullable(),
+  /** Of one device, in the style that the sheet was asked about. */
+  watts: z.number(),
+  temperatures: z.strictObject({ junction: z.number(), case: z.number(), sink: z.number() }),
+  tooHot: z.boolean(),
+  /** Most K/W of the heatsink; below zero when no heatsink does it, null when there is no heat. */
+  mostSinkToAir: z.number().nullable(),
+  verdict: z
+    .strictObject({
+      is: z.enum(['switching', 'not-switching', 'between', 'cannot-tell', 'takes-more', 'impossible']),
+      /** Amps in for each amp out. */
+      ratio: z.number(),
+      /** What a loss-free switching regulator would show. */
+      ideal: z.number(),
+      /** Efficiency that the ratio stands for, where it can be a switching one. */
+      efficiency: z.number(),
+      /** Ohms behind which the rail sags between the two loads; null without a light load or its volts. */
+      sagOhms: z.number().nullable(),
+      formula: z.string(),
+    })
+    .nullable(),
+});
 
 /** Result of the sheet; SI and °C, nothing rounded. */
-export interface PassElementResult {
-  readonly outputWatts: number;
-  readonly linear: PassLoss;
-  /** Null where the input less the drop when on does not reach the output. */
-  readonly switching: (PassLoss & { readonly duty: number }) | null;
-  /** Of one device, in the style that the sheet was asked about. */
-  readonly watts: number;
-  readonly temperatures: ThermalState;
-  readonly tooHot: boolean;
-  /** Most K/W of the heatsink; below zero when no heatsink does it, null when there is no heat. */
-  readonly mostSinkToAir: number | null;
-  readonly verdict: SwitchingVerdict | null;
-}
+export type PassElementResult = z.output<typeof output>;
 
 const inputs = z.strictObject({
   inputVolts: numberField({
@@ -299,6 +315,7 @@ export const sheet = defineSheet({
   title: 'Pass-element heat',
   question: 'How hot does the pass device get, and is this regulator switching at all?',
   inputs,
+  output,
   law,
   validity,
   source,

@@ -10,25 +10,36 @@ import { accusedByFrequency, accusedBySize, rippleFrom } from '@/shared/workings
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
 
+const simple = z.strictObject({ highVolts: z.number(), rippleVolts: z.number(), lowVolts: z.number(), meanVolts: z.number() });
+
 /** The formula of the books. */
-export interface SimpleRipple {
-  readonly highVolts: number;
-  readonly rippleVolts: number;
-  readonly lowVolts: number;
-  readonly meanVolts: number;
-}
+export type SimpleRipple = z.output<typeof simple>;
+
+const output = z.strictObject({
+  rippleHertz: z.number(),
+  simple,
+  exact: z.strictObject({
+    lowVolts: z.number(),
+    highVolts: z.number(),
+    rippleVolts: z.number(),
+    meanVolts: z.number(),
+    meanAmps: z.number(),
+    peakDiodeAmps: z.number(),
+    /** Charging current as r.m.s., over the whole period. */
+    diodeRmsAmps: z.number(),
+    capacitorRmsAmps: z.number(),
+    /** Share of a pulse's period in which the diodes conduct. */
+    conductionShare: z.number(),
+  }),
+  /** Peak to peak with one half of a full-wave rectifier gone; null for a half-wave one. */
+  oneHalfRippleVolts: z.number().nullable(),
+  /** Lowest volts less what the regulator needs; null without a need. */
+  headroomVolts: z.number().nullable(),
+  from: z.enum(['both-halves', 'one-half', 'three-phase', 'slower', 'faster', 'between']).nullable(),
+});
 
 /** Result of the sheet; SI, nothing rounded. */
-export interface SmoothingRippleResult {
-  readonly rippleHertz: number;
-  readonly simple: SimpleRipple;
-  readonly exact: Omit<ReservoirState, 'instants'>;
-  /** Peak to peak with one half of a full-wave rectifier gone; null for a half-wave one. */
-  readonly oneHalfRippleVolts: number | null;
-  /** Lowest volts less what the regulator needs; null without a need. */
-  readonly headroomVolts: number | null;
-  readonly from: RippleFrom | null;
-}
+export type SmoothingRippleResult = z.output<typeof output>;
 
 const inputs = z.strictObject({
   secondaryVolts: numberField({
@@ -171,6 +182,7 @@ export const sheet = defineSheet({
   title: 'Smoothing ripple',
   question: 'How much ripple stands on this reservoir, and what does the ripple that I see accuse?',
   inputs,
+  output,
   law,
   validity,
   source,

@@ -2,43 +2,59 @@
 import { z } from 'zod';
 
 import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
-import type { BuckCurrents } from '@/shared/workings/buck';
 import { buckCurrents, dutyOf, hystereticHertz, triangleRippleVolts } from '@/shared/workings/buck';
 import type { Plot, PlotPair } from '@/shared/workings/plot';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
 
-/** What the freewheel diode has to stand when the switch stops with the choke full. */
-export interface RunDown {
+const runDownForm = z.strictObject({
   /** Energy in the choke at its peak, ½LI². */
-  readonly chokeJoules: number;
+  chokeJoules: z.number(),
   /** Time in which the diode carries the current down to nothing. */
-  readonly seconds: number;
-  readonly diodeJoules: number;
+  seconds: z.number(),
+  diodeJoules: z.number(),
   /** What goes into the load and its capacitor. */
-  readonly loadJoules: number;
+  loadJoules: z.number(),
   /** Of the falling triangle, ⅓ I² t. */
-  readonly ampsSquaredSeconds: number;
-}
+  ampsSquaredSeconds: z.number(),
+});
+
+/** What the freewheel diode has to stand when the switch stops with the choke full. */
+export type RunDown = z.output<typeof runDownForm>;
+
+const output = z.strictObject({
+  /** False where the choke runs empty in each period. */
+  continuous: z.boolean(),
+  duty: z.number(),
+  /** Share of the period in which the diode conducts. */
+  diodeDuty: z.number(),
+  /** Peak to peak, in the choke. */
+  rippleAmps: z.number(),
+  peakAmps: z.number(),
+  valleyAmps: z.number(),
+  switchAverageAmps: z.number(),
+  diodeAverageAmps: z.number(),
+  /** Load below which the choke runs empty. */
+  emptyBelowAmps: z.number(),
+  hertz: z.number(),
+  onSeconds: z.number(),
+  offSeconds: z.number(),
+  diodeWatts: z.number(),
+  /** Energy that rushes through switch and diode in each overlap, and its watts. */
+  overlapJoules: z.number(),
+  overlapWatts: z.number(),
+  runDown: runDownForm,
+  /** Steady; the hysteretic one has at least its window times the divider. Null where the choke runs empty: the law does not hold. */
+  rippleVolts: z.number().nullable(),
+  diodeReverseVolts: z.number(),
+  /** Average amps divided by the rating; null without one. */
+  diodeShare: z.number().nullable(),
+  /** With the diode open: energy and watts that the switch must break down with. */
+  withoutDiodeWatts: z.number(),
+});
 
 /** Result of the sheet; SI, nothing rounded. */
-export interface SwitchingRegulatorResult extends BuckCurrents {
-  readonly hertz: number;
-  readonly onSeconds: number;
-  readonly offSeconds: number;
-  readonly diodeWatts: number;
-  /** Energy that rushes through switch and diode in each overlap, and its watts. */
-  readonly overlapJoules: number;
-  readonly overlapWatts: number;
-  readonly runDown: RunDown;
-  /** Steady; the hysteretic one has at least its window times the divider. Null where the choke runs empty: the law does not hold. */
-  readonly rippleVolts: number | null;
-  readonly diodeReverseVolts: number;
-  /** Average amps divided by the rating; null without one. */
-  readonly diodeShare: number | null;
-  /** With the diode open: energy and watts that the switch must break down with. */
-  readonly withoutDiodeWatts: number;
-}
+export type SwitchingRegulatorResult = z.output<typeof output>;
 
 const volts = (title: string, description: string, min: number, max: number) => numberField({ title, description, unit: 'V', min, max });
 
@@ -222,6 +238,7 @@ export const sheet = defineSheet({
   title: 'Switching regulator',
   question: 'What should this step-down switching regulator show when it is healthy?',
   inputs,
+  output,
   law,
   validity,
   source,
