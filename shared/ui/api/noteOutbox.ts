@@ -34,6 +34,8 @@ export async function openNoteOutbox({ store, ...parts }: Parts): Promise<NoteOu
     store: store === null ? null : notesOnly(store),
     // the server's engine judges; a note that is refused leaves the bench as it is
     replays: () => null,
+    // a note names no photo
+    sendPhoto: () => Promise.resolve(null),
     toSafety: () => [],
   });
   await box.open([]);

@@ -42,7 +42,7 @@ describe('the notes of a run that is not on the screen', () => {
     expect(box.saved().waiting).toBe(1);
     box.close();
     shop.away = false;
-    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, replays: () => null, toSafety: () => [], pause });
+    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
     await own.open([]);
     await vi.waitFor(() => expect(types(shop)).toEqual(['NOTE']));
   });
