@@ -44,7 +44,7 @@ export function openingResult(model: LostReturnModel, opening: JudgedOpening): O
       return { name, mostAmps, ratedAmps, overRated: ratedAmps === null ? null : mostAmps > ratedAmps };
     }),
     limiting: opening.limiting.map((rail) => model.rails[rail]?.name ?? ''),
-    exposedBoards: exposedBoards(model, opening),
+    exposedBoards: [...exposedBoards(model, opening)],
     worstCase: {
       rails: model.network.outputs.map(({ terminal, zero }, rail) => ({
         name: model.rails[rail]?.name ?? '',
