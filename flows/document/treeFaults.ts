@@ -57,6 +57,7 @@ function headFaults(tree: Tree): TreeFault[] {
       if (!suspects.has(k) || k === s.id) faults.push({ path: ['suspects', i, 'killedBy', j], message: k === s.id ? 'a suspect does not kill itself' : `no suspect "${k}"` });
     }),
   );
+  if (tree.steps[0]?.kind === 'end') faults.push({ path: ['steps', 0, 'kind'], message: 'a tree does not begin with an end' });
   if (tree.appliesTo.fewestRails > tree.appliesTo.mostRails) faults.push({ path: ['appliesTo', 'fewestRails'], message: 'more than mostRails' });
   return faults;
 }

@@ -2,6 +2,7 @@
 import type { Exit } from '../document/steps';
 import type { Facts } from '../facts/facts';
 import { unmetNeeds } from '../machine/arrive';
+import { follow } from '../machine/program';
 import type { Layout, ProgramStep } from '../machine/program';
 import { expectedBits } from './entropy';
 import { posterior } from './posterior';
@@ -49,8 +50,8 @@ export function tellsMost(layout: Layout, facts: Facts, findings: readonly Findi
 /** Whether no house rule forbids the step on these facts. */
 export function allowedNow(layout: Layout, placed: ProgramStep, facts: Facts): boolean {
   if (placed.step.kind !== 'call') return unmetNeeds(placed, facts).length === 0;
-  const first = layout.steps.get(layout.calleeFirst.get(placed.key) ?? '');
-  return first !== undefined && unmetNeeds(first, facts).length === 0;
+  const first = layout.steps.get(follow(layout, placed.key, () => false).key);
+  return first !== undefined && first.step.kind !== 'call' && unmetNeeds(first, facts).length === 0;
 }
 
 function carriesEvidence({ step }: ProgramStep): boolean {

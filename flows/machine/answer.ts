@@ -6,7 +6,7 @@ import { allOut } from '../facts/facts';
 import { applyOps } from '../facts/ops';
 import type { Op } from '../facts/ops';
 import { fitVoids } from '../facts/voids';
-import { accept, arriveAt, closeOut, refuse, toTakeOut } from './arrive';
+import { accept, activate, arriveAt, closeOut, refuse, toTakeOut } from './arrive';
 import type { Judged } from './arrive';
 import { classifyReading, worstOf } from './classify';
 import type { RowAnswer, RunContext } from './context';
@@ -156,7 +156,7 @@ function leave(layout: Layout, context: RunContext, placed: ProgramStep, outcome
     next = count(next, passed.call, passed.exit);
     if (call !== undefined) next = { ...next, facts: applyOps(next.facts, evidenceOps(passed.exit, call)) };
   }
-  next = resetCounters(layout, next, landing.key, key);
+  next = activate(next, landing.entered);
   if (allOut(next.facts)) next = { ...next, live: null };
   return arriveAt(layout, next, landing.key);
 }
@@ -175,13 +175,6 @@ function count(context: RunContext, key: string, exit: Exit): RunContext {
   const name = `${key}>${exit.id}`;
   const n = timesTaken(context, key, exit) + 1;
   return { ...context, counters: [...context.counters.filter((c) => c.key !== name), { key: name, n }] };
-}
-
-/** A15: counters of a called tree start at 0 with each activation of it. */
-function resetCounters(layout: Layout, context: RunContext, landed: string, from: string): RunContext {
-  const caller = layout.steps.get(landed)?.caller ?? null;
-  if (caller === null || landed !== layout.calleeFirst.get(caller) || layout.steps.get(from)?.caller === caller) return context;
-  return { ...context, counters: context.counters.filter((c) => !c.key.startsWith(`${caller}/`)) };
 }
 
 /** The machine's own steps lead on by themselves. */
@@ -253,7 +246,7 @@ function afterTakeOut(layout: Layout, context: RunContext): Judged {
 function arriveAtFirst(layout: Layout, context: RunContext): Judged {
   if (context.facts.fitted.length > 0) return accept({ ...context, goto: SAFE.isolate, purpose: { is: 'begin' } });
   const landing = follow(layout, layout.first, () => false);
-  return arriveAt(layout, context, landing.key);
+  return arriveAt(layout, activate(context, landing.entered), landing.key);
 }
 
 function thingRow(f: { id: string; name: string }, done: string): WordRow {

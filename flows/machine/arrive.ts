@@ -9,7 +9,7 @@ import type { Need, RuleId } from '../facts/needs';
 import { applyOps } from '../facts/ops';
 import { fitVoids } from '../facts/voids';
 import type { RunContext } from './context';
-import { SAFE } from './program';
+import { follow, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 
 /** An event that the machine will not take: the house rule (null where none is at stake), a code, and a sentence for the person at the bench. */
@@ -43,12 +43,21 @@ export function unmetNeeds(placed: ProgramStep, facts: Facts): Need[] {
 export function arriveAt(layout: Layout, context: RunContext, key: string): Judged {
   const placed = layout.steps.get(key);
   if (placed === undefined) return refuse('not-now', 'This tree leads to a step that it does not have.');
-  if (placed.step.kind === 'call') return arriveAt(layout, context, layout.calleeFirst.get(key) ?? '');
+  if (placed.step.kind === 'call') {
+    const landing = follow(layout, key, () => false);
+    return landing.key === key ? refuse('not-now', 'This tree calls one that it does not have.') : arriveAt(layout, activate(context, landing.entered), landing.key);
+  }
   if (placed.step.kind === 'end') return arriveAtEnd(layout, context, key, placed.step);
   const unmet = unmetNeeds(placed, context.facts);
   if (unmet.length === 0) return accept({ ...context, goto: key, purpose: { is: 'none' } });
   if (unmet.every((need) => holdsButForLapse(context.facts, need.atom))) return accept({ ...context, goto: SAFE.isolate, purpose: { is: 'mend', to: key } });
   return barred(placed, unmet);
+}
+
+/** A15: counters of a called tree start at 0 with each activation of it, and so do those of the trees below it. */
+export function activate(context: RunContext, entered: readonly string[]): RunContext {
+  if (entered.length === 0) return context;
+  return { ...context, counters: context.counters.filter((c) => !entered.some((call) => c.key.startsWith(`${call}/`))) };
 }
 
 /** Every end but `in service` goes through close-out first; what it claims must hold once that is done. */

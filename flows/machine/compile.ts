@@ -11,11 +11,11 @@ import type { Judged } from './arrive';
 import type { Phase, RunContext } from './context';
 import type { EventType, MachineEvent } from './events';
 import { judge, needsHold } from './judge';
-import { follow, layOut, SAFE } from './program';
+import { landingsOf, layOut, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 
 /** Changes whenever the same entries could lead to another state; snapshots of another engine are dropped. */
-export const ENGINE = 'lampstep-engine-3';
+export const ENGINE = 'lampstep-engine-4';
 
 interface Args {
   context: RunContext;
@@ -103,15 +103,12 @@ function machineOf(layout: Layout): RunMachine {
   };
 
   const placed = [...layout.steps.values()];
-  const tree: Record<string, Node> = {};
-  for (const p of placed) {
-    if (p.builtIn || p.caller !== null || p.step.kind === 'end') continue;
-    if (p.step.kind !== 'call') tree[p.key] = stepNode(p);
-    else {
-      const inner = placed.filter((c) => c.caller === p.key && c.step.kind !== 'end');
-      tree[p.key] = { initial: inner[0]?.step.id ?? '', states: Object.fromEntries(inner.map((c) => [c.step.id, stepNode(c)])) };
-    }
-  }
+  const below = new Map<string | null, ProgramStep[]>();
+  for (const p of placed) if (!p.builtIn && p.step.kind !== 'end') below.set(p.caller, [...(below.get(p.caller) ?? []), p]);
+  // a call is a state with the states of the called tree in it, and so on down
+  const statesOf = (call: string | null): Record<string, Node> =>
+    Object.fromEntries((below.get(call) ?? []).map((p): [string, Node] => [p.step.id, p.step.kind === 'call' ? { initial: below.get(p.key)?.[0]?.step.id ?? '', states: statesOf(p.key) } : stepNode(p)]));
+  const tree = statesOf(null);
   const safe = Object.fromEntries(placed.filter((p) => p.builtIn).map((p) => [p.key, stepNode(p)]));
   const reachable = placed.filter((p) => p.step.kind !== 'call' && p.step.kind !== 'end').map((p) => p.key);
   const opening: Move[] = [{ guard: goes(null), actions: apply }, ...away];
@@ -162,7 +159,7 @@ function arrive(key: string) {
 function leadsOf(layout: Layout, placed: ProgramStep): string[] {
   if (placed.builtIn) return [SAFE.isolate, SAFE.discharge, SAFE.prove, SAFE.takeOut, SAFE.putBack, SAFE.readBack, SAFE.choose, SAFE.ended];
   const targets = placed.step.exits.flatMap((e: Exit) => [e.to, ...(e.then === undefined ? [] : [e.then])]).map((to) => placed.scope.check(to));
-  const landed = targets.flatMap((to) => [false, true].map((over) => follow(layout, to, () => over).key)).filter((key) => {
+  const landed = targets.flatMap((to) => landingsOf(layout, to).map((landing) => landing.key)).filter((key) => {
     const kind = layout.steps.get(key)?.step.kind;
     return kind !== undefined && kind !== 'end' && kind !== 'call';
   });

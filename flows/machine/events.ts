@@ -1,8 +1,8 @@
 /** Every event that can move a run. Machine, proof, server and client read this one table; time enters only here. */
 import { z } from 'zod';
 
-/** Keys of steps: an id, an id below a call (`call/step`), or one of the machine's own (`~isolate`). */
-const key = z.string().min(1).max(90).regex(/^(~[a-z-]+|[a-z][a-z0-9-]*(\/[a-z][a-z0-9-]*)?)$/);
+/** Keys of steps: an id, an id below calls (`call/step`, `call/call/step`), or one of the machine's own (`~isolate`). */
+const key = z.string().min(1).max(400).regex(/^(~[a-z-]+|[a-z][a-z0-9-]*(\/[a-z][a-z0-9-]*)*)$/);
 const person = z.string().min(1).max(60);
 const note = z.string().trim().min(1).max(500);
 

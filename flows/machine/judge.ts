@@ -53,7 +53,10 @@ function take(layout: Layout, context: RunContext, event: MachineEvent): Judged 
     case 'RESUME':
       return context.phase === 'paused' ? comeBack(layout, { ...context, handing: null }, false) : refuse('not-now', 'The run is not paused.');
     case 'ABORT':
-      return context.live === null ? refuse('not-now', 'Nothing is on.') : arriveAt(layout, { ...context, grant: null }, context.live.abort);
+      if (context.live === null) return refuse('not-now', 'Nothing is on.');
+      // make-safe is not left half way, and what has ended does not go on
+      if (placed === undefined || placed.builtIn) return refuse('not-now', 'The run is past that: it is being made safe, or it has ended.');
+      return arriveAt(layout, { ...context, grant: null }, context.live.abort);
     case 'CLOSE':
       return close(layout, context);
     case 'REENTER':
@@ -72,7 +75,7 @@ function take(layout: Layout, context: RunContext, event: MachineEvent): Judged 
     case 'HOLD_REFUSED':
       return answerHold(layout, context, placed, event);
     case 'GUARD_HELD':
-      return confirmGuard(layout, context, placed, event.heldMs, event.at);
+      return overdue(context, placed, event.at) ?? confirmGuard(layout, context, placed, event.heldMs, event.at);
     case 'ROW':
     case 'READING':
       return overdue(context, placed, event.at) ?? answerRow(layout, context, placed, event);

@@ -64,15 +64,18 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
     const own = effectsOf(node);
     const acting = through(state, own.entered);
     for (const edge of own.edges) arrive(edge.to, through(acting, edge.effect));
-    for (const to of graph.aborts.get(key) ?? []) arrive(to, acting);
+    for (const { to } of graph.aborts.get(key) ?? []) arrive(to, acting);
   }
+  const asked = (claims: readonly Need[], to: string, state: MayState) => unmet(encoding, claims, state).map((need): Broken => ({ rule: need.rule, key: to, need }));
   const claimed = [...graph.nodes.values()].flatMap((node): Broken[] => {
     const state = at.get(node.key);
-    if (state === undefined || node.edges.every((e) => e.claims.length === 0)) return [];
+    const aborts = (graph.aborts.get(node.key) ?? []).filter((a) => a.claims.length > 0);
+    if (state === undefined || (aborts.length === 0 && node.edges.every((e) => e.claims.length === 0))) return [];
     const own = effectsOf(node);
     const acting = through(state, own.entered);
-    return own.edges.flatMap((e) => unmet(encoding, e.claims, through(acting, e.effect)).map((need): Broken => ({ rule: need.rule, key: e.to, need })));
+    return [...own.edges.flatMap((e) => asked(e.claims, e.to, through(acting, e.effect))), ...aborts.flatMap((a) => asked(a.claims, a.to, acting))];
   });
+  claimed.push(...graph.starts.flatMap((s) => asked(s.claims, s.key, s.reentry ? reentryState(graph, encoding, s.key) : encoding.state(start))));
   return { encoding, at, broken: [...[...graph.nodes.values()].flatMap((node) => brokenAt(encoding, node, at.get(node.key))), ...claimed] };
 }
 
@@ -80,7 +83,7 @@ export function fixpointOf(graph: Graph, start: Facts): Fixpoint {
 function reentryState(graph: Graph, encoding: Encoding, key: string): MayState {
   const state = encoding.free();
   const { layout } = graph;
-  const declared: Claim[] = layout.tree.reentries.filter((r) => r.step === key || layout.calleeFirst.get(r.step) === key).flatMap((r) => r.needs);
+  const declared: Claim[] = layout.tree.reentries.filter((r) => graph.land(r.step) === key).flatMap((r) => r.needs);
   const needs: Need[] = [...declared.flatMap((c) => claimAtoms(c, layout.profile)).map((atom): Need => ({ rule: 'H21', atom, say: '' })), ...(graph.nodes.get(key)?.needs ?? []), { rule: 'H21', atom: { fact: 'none-fitted' }, say: '' }, { rule: 'H21', atom: { fact: 'no-killer' }, say: '' }];
   for (const need of needs) {
     const form = encoding.need(need);

@@ -6,7 +6,7 @@ import { needs } from '../facts/needs';
 import type { Need } from '../facts/needs';
 import type { Op } from '../facts/ops';
 import { claimAtoms } from '../facts/claims';
-import { follow } from '../machine/program';
+import { endsCalledTree, follow, landingsOf } from '../machine/program';
 import type { Layout, Landing, ProgramStep } from '../machine/program';
 
 export interface Edge {
@@ -19,7 +19,8 @@ export interface Edge {
   ops: readonly Op[];
   to: string;
   through: Landing['through'];
-  /** what a call says that it leaves, asked where it comes back (H19) */
+  entered: Landing['entered'];
+  /** what a call says that it leaves, asked where it comes back, and what a called tree needs, asked where it is entered (H19) */
   claims: readonly Need[];
 }
 
@@ -35,6 +36,14 @@ export interface PlaceNode {
 export interface Start {
   key: string;
   reentry: boolean;
+  claims: readonly Need[];
+}
+
+/** Where the power is broken off to. */
+export interface Abort {
+  to: string;
+  entered: readonly string[];
+  claims: readonly Need[];
 }
 
 export interface Graph {
@@ -44,7 +53,7 @@ export interface Graph {
   /** the place that a target comes to, calls entered */
   land(key: string): string;
   /** where abort leads from each place that an energise can be in force at */
-  aborts: ReadonlyMap<string, readonly string[]>;
+  aborts: ReadonlyMap<string, readonly Abort[]>;
 }
 
 /**
@@ -56,28 +65,26 @@ export function graphOf(layout: Layout): Graph {
   const nodes = new Map<string, PlaceNode>();
   for (const placed of layout.steps.values()) {
     if (placed.builtIn || placed.step.kind === 'call' || endsCalledTree(placed)) continue;
-    nodes.set(placed.key, {
-      key: placed.key,
-      placed,
-      needs: [...needs(placed.step, placed.scope), ...calledNeeds(layout, placed)],
-      entered: entered(placed.step, placed.scope),
-      edges: edgesOf(layout, placed),
-    });
+    nodes.set(placed.key, { key: placed.key, placed, needs: needs(placed.step, placed.scope), entered: entered(placed.step, placed.scope), edges: edgesOf(layout, placed) });
   }
-  const land = (key: string) => follow(layout, key, () => false).key;
-  return { layout, nodes, land, aborts: abortTargets(nodes, land), starts: [{ key: land(layout.first), reentry: false }, ...layout.tree.reentries.map((r) => ({ key: land(r.step), reentry: true }))] };
-}
-
-/** An end of a called tree is left by the exit of its call, except those that end the run. */
-function endsCalledTree({ step, caller }: ProgramStep): boolean {
-  return step.kind === 'end' && caller !== null && step.says !== 'stopped' && step.says !== 'in-service';
+  const arriving = (key: string): Abort => {
+    const landing = follow(layout, key, () => false);
+    return { to: landing.key, entered: landing.entered, claims: calledNeeds(layout, landing) };
+  };
+  const start = (key: string, reentry: boolean): Start => ({ key: arriving(key).to, reentry, claims: arriving(key).claims });
+  return { layout, nodes, land: (key) => arriving(key).to, aborts: abortTargets(nodes, arriving), starts: [start(layout.first, false), ...layout.tree.reentries.map((r) => start(r.step, true))] };
 }
 
 function edgesOf(layout: Layout, placed: ProgramStep): Edge[] {
   return placed.step.exits.flatMap((exit: Exit) =>
     outcomesOf(placed.step, exit).flatMap(({ outcome, word }) => {
       const own = after(placed.step, exit, word, placed.scope);
-      return waysOf(exit).flatMap(({ to, spent }) => landings(layout, placed.scope.check(to)).map((landing): Edge => ({ from: placed.key, exit, outcome, spent, ops: [...own, ...throughOps(layout, landing)], to: landing.key, through: landing.through, claims: resultClaims(layout, landing) })));
+      return waysOf(exit).flatMap(({ to, spent }) =>
+        landingsOf(layout, placed.scope.check(to)).map((landing): Edge => {
+          const { through, entered } = landing;
+          return { from: placed.key, exit, outcome, spent, ops: [...own, ...throughOps(layout, landing)], to: landing.key, through, entered, claims: [...resultClaims(layout, landing), ...calledNeeds(layout, landing)] };
+        }),
+      );
     }),
   );
 }
@@ -91,14 +98,6 @@ function outcomesOf(step: Step, exit: Exit): { outcome: string; word: string }[]
 
 function waysOf(exit: Exit): { to: string; spent: boolean }[] {
   return exit.then === undefined ? [{ to: exit.to, spent: false }] : [{ to: exit.to, spent: false }, { to: exit.then, spent: true }];
-}
-
-/** A call that is left by a counted exit has two ways on. */
-function landings(layout: Layout, target: string): Landing[] {
-  const open = follow(layout, target, () => false);
-  if (!open.through.some((t) => t.exit.atMost !== undefined)) return [open];
-  const spent = follow(layout, target, () => true);
-  return spent.key === open.key ? [open] : [open, spent];
 }
 
 function throughOps(layout: Layout, landing: Landing): Op[] {
@@ -117,30 +116,30 @@ function resultClaims(layout: Layout, landing: Landing): Need[] {
   });
 }
 
-/** H19: what a called tree needs at its start, and what its call says it needs, is asked at its first step. */
-function calledNeeds(layout: Layout, placed: ProgramStep): Need[] {
-  if (placed.caller === null || layout.calleeFirst.get(placed.caller) !== placed.key) return [];
-  const call = layout.steps.get(placed.caller)?.step;
-  if (call?.kind !== 'call') return [];
-  return [...(call.needs ?? []), ...(layout.calleeNeeds.get(placed.caller) ?? [])].flatMap((claim) =>
-    claimAtoms(claim, layout.profile).map((atom): Need => ({ rule: 'H19', atom, say: `the called tree needs “${claim}” at its start` })),
-  );
+/** H19: what a called tree needs at its start, and what its call says it needs, is asked where it is entered. */
+function calledNeeds(layout: Layout, { entered: calls }: Landing): Need[] {
+  return calls.flatMap((key) => {
+    const call = layout.steps.get(key)?.step;
+    const own = call?.kind === 'call' ? (call.needs ?? []) : [];
+    return [...own, ...(layout.calleeNeeds.get(key) ?? [])].flatMap((claim) => claimAtoms(claim, layout.profile).map((atom): Need => ({ rule: 'H19', atom, say: `the called tree needs “${claim}” at its start` })));
+  });
 }
 
 /** From every place that an energise can be in force at, abort leads to that energise's target, with what the step has made worse. */
-function abortTargets(nodes: ReadonlyMap<string, PlaceNode>, land: (key: string) => string): ReadonlyMap<string, readonly string[]> {
-  const targets = new Map<string, Set<string>>();
+function abortTargets(nodes: ReadonlyMap<string, PlaceNode>, arriving: (key: string) => Abort): ReadonlyMap<string, readonly Abort[]> {
+  const targets = new Map<string, Map<string, Abort>>();
   for (const node of nodes.values()) {
     const { step, scope } = node.placed;
     if (step.kind !== 'energise') continue;
-    const to = land(scope.check(step.abort));
+    const abort = arriving(scope.check(step.abort));
     for (const key of liveRegion(nodes, node.key)) {
-      const known = targets.get(key);
-      if (known === undefined) targets.set(key, new Set([to]));
-      else known.add(to);
+      // an end is made safe by the machine itself, or has put the supply into service
+      if (nodes.get(key)?.placed.step.kind === 'end') continue;
+      const known = targets.get(key) ?? new Map<string, Abort>();
+      targets.set(key, known.set(abort.entered[0] ?? abort.to, abort));
     }
   }
-  return new Map([...targets].map(([key, set]) => [key, [...set]]));
+  return new Map([...targets].map(([key, set]) => [key, [...set.values()]]));
 }
 
 /** Places that an energise can still be in force at: all that it leads to without a source having been taken out. */

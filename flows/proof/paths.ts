@@ -112,18 +112,18 @@ export function listFindings(layout: Layout): PathFinding[] {
 /** H19: a source that is out at a call is out at the return; a call pins its version at issue. */
 export function callFindings(graph: Graph): PathFinding[] {
   const found: PathFinding[] = [];
-  for (const [call, first] of graph.layout.calleeFirst) {
+  for (const call of graph.layout.calleeFirst.keys()) {
     const callStep = graph.layout.steps.get(call)?.step;
     if (callStep?.kind === 'call' && callStep.version === null) found.push({ rule: 'H19', key: call, say: 'the called tree has no pinned version' });
     // follow "out" alone through the called tree: it may be lost inside, but not at a way back
     const lost = new Set<string>();
-    const stack: { key: string; out: boolean }[] = [{ key: first, out: true }];
+    const stack: { key: string; out: boolean }[] = [{ key: graph.land(call), out: true }];
     const seen = new Set<string>();
     for (let here = stack.pop(); here !== undefined; here = stack.pop()) {
       const node = graph.nodes.get(here.key);
       if (node === undefined || seen.has(`${here.key}|${here.out}`)) continue;
       seen.add(`${here.key}|${here.out}`);
-      const own = node.placed.caller === call;
+      const own = here.key.startsWith(`${call}/`);
       if (!own) {
         if (!here.out) lost.add(here.key);
         continue;

@@ -51,6 +51,7 @@ export interface ProofInput {
 
 /** Most states that stories are looked for in; beyond it the verdict stands and the story is the place alone. */
 const STORY_STATES = 60_000;
+const STORY_TEXT = 40_000_000;
 
 /** Proves one tree on one profile. Never passes on a limit: what could not be decided is a finding. */
 export function prove(input: ProofInput): Proof {
@@ -113,10 +114,10 @@ function behind(found: SearchResult | null, id: RuleId): string {
 }
 
 function storiesOf(graph: Graph, start: Facts, wanted: ReadonlySet<RuleId>): SearchResult {
-  const plain = search(graph, start, { limit: STORY_STATES, counters: false, wanted });
+  const plain = search(graph, start, { limit: STORY_STATES, text: STORY_TEXT, counters: false, wanted });
   const infeasible = [...plain.stories.values()].filter((s: Story) => !isFeasible(s.legs)).map((s) => s.rule);
   if (infeasible.length === 0) return plain;
-  const exact = search(graph, start, { limit: STORY_STATES, counters: true, wanted: new Set(infeasible) });
+  const exact = search(graph, start, { limit: STORY_STATES, text: STORY_TEXT, counters: true, wanted: new Set(infeasible) });
   const stories = new Map(plain.stories);
   for (const rule of infeasible) {
     const again = exact.stories.get(rule);

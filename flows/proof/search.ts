@@ -17,6 +17,8 @@ import type { Edge, Graph, Start } from './graph';
 export interface Leg {
   key: string;
   edge: Edge | null;
+  /** calls that are entered by it */
+  entered: readonly string[];
 }
 
 export interface Story {
@@ -42,12 +44,17 @@ interface Standing {
   counters: Readonly<Record<string, number>> | null;
   from: Standing | null;
   edge: Edge | null;
+  entered: readonly string[];
+  /** what the way here asks besides the needs of the place */
+  claims: readonly Need[];
   start: Start;
 }
 
 export interface SearchOptions {
   /** most states to look at */
   limit: number;
+  /** most characters that all of them may come to as text: facts with much owed are large */
+  text?: number;
   /** keep counters of counted exits in the state, so that only ways a run can take are walked */
   counters: boolean;
   /** stop once these rules each have a story; null looks at everything */
@@ -60,13 +67,14 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
   const seen = new Set<string>();
   const queue: Standing[] = [];
   let limited = false;
+  let text = 0;
 
   const arrive = (next: Standing) => {
     const node = graph.nodes.get(next.key);
     if (node === undefined) return;
     const { step } = node.placed;
     const asked = step.kind === 'end' && step.says !== 'in-service' ? closedOut(next.facts) : next.facts;
-    const unmet = [...node.needs.filter((need) => !holds(asked, need.atom)), ...(next.edge?.claims ?? []).filter((need) => !holds(next.facts, need.atom))];
+    const unmet = [...node.needs.filter((need) => !holds(asked, need.atom)), ...next.claims.filter((need) => !holds(next.facts, need.atom))];
     if (unmet.length > 0) {
       for (const rule of new Set(unmet.map((n) => n.rule))) {
         if (!stories.has(rule)) stories.set(rule, { rule, start: next.start, legs: legsTo(next), at: next.key, needs: unmet.filter((n) => n.rule === rule) });
@@ -75,7 +83,8 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
     }
     const name = `${next.key}|${JSON.stringify(next.facts)}|${next.counters === null ? '' : JSON.stringify(next.counters)}`;
     if (seen.has(name)) return;
-    if (seen.size >= options.limit) {
+    text += name.length;
+    if (seen.size >= options.limit || text > (options.text ?? Infinity)) {
       limited = true;
       return;
     }
@@ -83,7 +92,7 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
     queue.push(next);
   };
 
-  for (const s of graph.starts) for (const facts of s.reentry ? reentryFacts(graph, s, start) : [start]) arrive({ key: s.key, facts, counters: options.counters ? {} : null, from: null, edge: null, start: s });
+  for (const s of graph.starts) for (const facts of s.reentry ? reentryFacts(graph, s, start) : [start]) arrive({ key: s.key, facts, counters: options.counters ? {} : null, from: null, edge: null, entered: [], claims: s.claims, start: s });
   for (let head = 0; head < queue.length && !limited; head += 1) {
     if (options.wanted !== null && [...options.wanted].every((rule) => stories.has(rule))) break;
     const here = queue[head];
@@ -93,9 +102,11 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
     for (const edge of node.edges) {
       const counters = here.counters === null ? null : counted(here.counters, edge);
       if (here.counters !== null && counters === null) continue;
-      arrive({ key: edge.to, facts: applyOps(acting, edge.ops), counters, from: here, edge, start: here.start });
+      arrive({ key: edge.to, facts: applyOps(acting, edge.ops), counters, from: here, edge, entered: edge.entered, claims: edge.claims, start: here.start });
     }
-    for (const to of graph.aborts.get(here.key) ?? []) arrive({ key: to, facts: acting, counters: here.counters, from: here, edge: null, start: here.start });
+    for (const { to, entered, claims } of graph.aborts.get(here.key) ?? []) {
+      arrive({ key: to, facts: acting, counters: here.counters === null ? null : activated(here.counters, entered), from: here, edge: null, entered, claims, start: here.start });
+    }
   }
   return { stories, states: seen.size, limited };
 }
@@ -104,8 +115,7 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
 export function isFeasible(legs: readonly Leg[]): boolean {
   let counters: Readonly<Record<string, number>> | null = {};
   for (const leg of legs) {
-    if (leg.edge === null) continue;
-    counters = counted(counters, leg.edge);
+    counters = leg.edge === null ? activated(counters, leg.entered) : counted(counters, leg.edge);
     if (counters === null) return false;
   }
   return true;
@@ -121,17 +131,24 @@ function counted(counters: Readonly<Record<string, number>>, edge: Edge): Readon
     if (n > exit.atMost !== edge.spent) return null;
     next = { ...next, [name]: Math.min(n, exit.atMost + 1) };
   }
-  for (const { call, exit: passed } of edge.through) {
+  for (const { call, exit: passed, spent } of edge.through) {
     if (passed.atMost === undefined) continue;
     const name = `${call}>${passed.id}`;
-    next = { ...next, [name]: Math.min((next[name] ?? 0) + 1, passed.atMost + 1) };
+    const n = (next[name] ?? 0) + 1;
+    if (n > passed.atMost !== spent) return null;
+    next = { ...next, [name]: Math.min(n, passed.atMost + 1) };
   }
-  return next;
+  return activated(next, edge.entered);
+}
+
+/** Counters of a called tree start at 0 with each activation of it. */
+function activated(counters: Readonly<Record<string, number>>, entered: readonly string[]): Readonly<Record<string, number>> {
+  return entered.length === 0 ? counters : Object.fromEntries(Object.entries(counters).filter(([name]) => !entered.some((call) => name.startsWith(`${call}/`))));
 }
 
 function legsTo(standing: Standing): Leg[] {
   const legs: Leg[] = [];
-  for (let s: Standing | null = standing; s?.from != null; s = s.from) legs.unshift({ key: s.from.key, edge: s.edge });
+  for (let s: Standing | null = standing; s?.from != null; s = s.from) legs.unshift({ key: s.from.key, edge: s.edge, entered: s.entered });
   return legs;
 }
 

@@ -8,12 +8,15 @@ import type { Leg } from './search';
 
 const WORDS: Record<string, string> = { in: 'in', close: 'too close to say', low: 'low', high: 'high', reversed: 'reversed', falling: 'falling', 'not-sure': 'not sure', cannot: 'cannot', out: 'out', 'not-out': 'not out', done: 'done', on: 'on', given: 'given', refused: 'refused' };
 
-/** The title of a step by its key, as its author wrote it. */
+/** The title of a step by its key, as its author wrote it, with the calls that it stands under. */
 export function titleOf(layout: Layout, key: string): string {
   const placed = layout.steps.get(key);
-  const own = placed?.step.title ?? key;
-  const call = placed?.caller == null ? null : (layout.steps.get(placed.caller)?.step.title ?? null);
-  return call === null || call === own ? own : `${own}” in “${call}`;
+  const titles = [placed?.step.title ?? key];
+  for (let caller = placed?.caller ?? null; caller !== null; caller = layout.steps.get(caller)?.caller ?? null) {
+    const title = layout.steps.get(caller)?.step.title;
+    if (title !== undefined && title !== titles.at(-1)) titles.push(title);
+  }
+  return titles.join('” in “');
 }
 
 /** The answer of an edge, as the restorer would say it. */

@@ -33,15 +33,21 @@ export function answersOf(program: Program, suspect: string | null): (placed: Pr
   };
 }
 
-/** Inside a called tree: the exits on a shortest way to the end that the caller's exit for this suspect names. None where the good way will do. */
+/**
+ * Inside a called tree: the exits on a shortest way to the end that the caller's exit for this suspect names, and below a further call those on the
+ * way to the exit that the calling tree is steered to. None where the good way will do.
+ */
 function steer(layout: Layout, caller: string, suspect: string | null, steered: Map<string, Map<string, Exit>>): Map<string, Exit> {
   const known = steered.get(caller);
   if (known !== undefined) return known;
   const towards = new Map<string, Exit>();
   steered.set(caller, towards);
-  const call = layout.steps.get(caller)?.step;
-  const wanted = call === undefined || suspect === null ? null : causedExit(call, suspect, () => true);
-  if (call === undefined || wanted === null || suspect === null || ratioOn(wanted, suspect) <= 1) return towards;
+  const call = layout.steps.get(caller);
+  if (call === undefined || suspect === null) return towards;
+  const own = call.caller === null ? causedExit(call.step, suspect, () => true) : (steer(layout, call.caller, suspect, steered).get(call.step.id) ?? null);
+  // evidence of a call speaks of the suspects of the tree that calls: only those of the run's own tree are the ones rehearsed
+  const wanted = own === null || (call.caller === null && ratioOn(own, suspect) <= 1) ? null : own;
+  if (wanted === null) return towards;
   const inside = [...layout.steps.values()].filter((p) => p.caller === caller).map((p) => p.step);
   const reached = new Set(wanted.on as string[]);
   for (let grown = true; grown; ) {

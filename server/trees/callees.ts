@@ -5,15 +5,21 @@ import type { Tree } from '@/flows/document/tree';
 
 import { findNewestIssued, findTreeVersion } from './queries';
 
-/** Each called tree once, in the version that the call pins, or the newest issued one where it pins none. Calls go one level deep. */
+/** Each tree that this one calls, and that those call in turn: once, in the version that the first call pins, or the newest issued one where it pins none. */
 export async function findCallees(tx: Tx, tree: Tree): Promise<{ found: TreeVersionRow[]; missing: string[] }> {
   const found = new Map<string, TreeVersionRow>();
-  const missing: string[] = [];
-  for (const step of tree.steps) {
-    if (step.kind !== 'call' || found.has(step.tree)) continue;
-    const row = step.version === null ? await findNewestIssued(tx, step.tree) : await findTreeVersion(tx, step.tree, step.version);
-    if (row === undefined || (row.state !== 'issued' && row.state !== 'withdrawn')) missing.push(step.tree);
-    else found.set(step.tree, row);
+  const missing = new Set<string>();
+  const toRead = [tree];
+  for (let own = toRead.shift(); own !== undefined; own = toRead.shift()) {
+    for (const step of own.steps) {
+      if (step.kind !== 'call' || found.has(step.tree) || missing.has(step.tree)) continue;
+      const row = step.version === null ? await findNewestIssued(tx, step.tree) : await findTreeVersion(tx, step.tree, step.version);
+      if (row === undefined || (row.state !== 'issued' && row.state !== 'withdrawn')) missing.add(step.tree);
+      else {
+        found.set(step.tree, row);
+        toRead.push(row.document);
+      }
+    }
   }
-  return { found: [...found.values()], missing };
+  return { found: [...found.values()], missing: [...missing] };
 }

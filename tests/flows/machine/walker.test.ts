@@ -13,7 +13,7 @@ import { compile } from '@/flows/machine/compile';
 import { canGive, nextEvent } from '@/flows/rehearsal/drive';
 
 import { benchProfile, makeDeadTree, must } from '../support/bench';
-import { randomTree } from '../support/randomTree';
+import { randomForest, randomTree } from '../support/randomTree';
 import { Walker } from '../support/walker';
 
 const runs = Number(process.env['PROOF_CASES'] ?? 150);
@@ -72,7 +72,7 @@ function compare(tree: Tree, callees: Tree[], profile: Profile, choices: readonl
 }
 
 describe('the machine and the naive walker', () => {
-  it('agree on random trees', { timeout: 120_000 }, () => {
+  it('agree on random trees', { timeout: 120_000 + runs * 400 }, () => {
     let compared = 0;
     fc.assert(
       fc.property(randomTree(), fc.array(fc.nat(60), { minLength: 10, maxLength: 50 }), (tree, choices) => {
@@ -82,7 +82,17 @@ describe('the machine and the naive walker', () => {
     );
     expect(compared).toBeGreaterThan(runs);
   });
-  it('agree on the starter tree, mostly on its good way', { timeout: 120_000 }, () => {
+  it('agree on random trees that call trees, three deep', { timeout: 120_000 + runs * 400 }, () => {
+    let compared = 0;
+    fc.assert(
+      fc.property(randomForest(), fc.array(fc.oneof({ weight: 3, arbitrary: fc.constant(0) }, { weight: 2, arbitrary: fc.nat(60) }), { minLength: 10, maxLength: 60 }), ({ tree, callees }, choices) => {
+        compared += compare(tree, callees, benchProfile, choices);
+      }),
+      { numRuns: runs },
+    );
+    expect(compared).toBeGreaterThan(runs);
+  });
+  it('agree on the starter tree, mostly on its good way', { timeout: 120_000 + runs * 400 }, () => {
     const tree = must(parseTree(JSON.parse(readFileSync('flows/library/first-power.json', 'utf8'))));
     const dead = must(parseTree(JSON.parse(readFileSync('flows/library/make-dead.json', 'utf8'))));
     const corvane = must(parseProfile(JSON.parse(readFileSync('db/seeds/demo/profiles/corvane-12.json', 'utf8'))));

@@ -22,7 +22,7 @@ export const insulation = (to: string, other = 'refer') => step('prove-insulatio
 export const returns = (to: string, other = 'refer') => step('prove-returns', 'returns', to, { contact: 'hands' }, other);
 export const connect = (id: string, load: string, to: string) => step('connect-load', id, to, { contact: 'hands', load });
 export const work = (id: string, area: string, to: string, extra: Extra = {}) => step('work', id, to, { contact: 'hands', area, ...extra });
-export const hands = (id: string, to: string) => step('do', id, to, { contact: 'hands' });
+export const hands = (id: string, to: string, extra: Extra = {}) => step('do', id, to, { contact: 'hands', ...extra });
 export const fit = (id: string, thing: Extra, to: string) => step('do', id, to, { contact: 'hands', fits: [thing] });
 export const remove = (id: string, thing: string, to: string) => step('do', id, to, { contact: 'hands', removes: [thing] });
 const power = { mostVolts: 230, mostAmps: 0.5, longestMinutes: 10, load: 'none', abort: 'abort' };
