@@ -42,6 +42,8 @@ export interface Start {
 /** Where the power is broken off to. */
 export interface Abort {
   to: string;
+  /** the energises whose abort this is: only while one of them is in force can it be taken */
+  by: readonly string[];
   entered: readonly string[];
   claims: readonly Need[];
 }
@@ -69,7 +71,7 @@ export function graphOf(layout: Layout): Graph {
   }
   const arriving = (key: string): Abort => {
     const landing = follow(layout, key, () => false);
-    return { to: landing.key, entered: landing.entered, claims: calledNeeds(layout, landing) };
+    return { to: landing.key, by: [], entered: landing.entered, claims: calledNeeds(layout, landing) };
   };
   const start = (key: string, reentry: boolean): Start => ({ key: arriving(key).to, reentry, claims: arriving(key).claims });
   return { layout, nodes, land: (key) => arriving(key).to, aborts: abortTargets(nodes, arriving), starts: [start(layout.first, false), ...layout.tree.reentries.map((r) => start(r.step, true))] };
@@ -136,19 +138,24 @@ function abortTargets(nodes: ReadonlyMap<string, PlaceNode>, arriving: (key: str
       // an end is made safe by the machine itself, or has put the supply into service
       if (nodes.get(key)?.placed.step.kind === 'end') continue;
       const known = targets.get(key) ?? new Map<string, Abort>();
-      targets.set(key, known.set(abort.entered[0] ?? abort.to, abort));
+      const target = abort.entered[0] ?? abort.to;
+      targets.set(key, known.set(target, { ...abort, by: [...(known.get(target)?.by ?? []), node.key] }));
     }
   }
   return new Map([...targets].map(([key, set]) => [key, [...set.values()]]));
 }
 
-/** Places that an energise can still be in force at: all that it leads to without a source having been taken out. */
+/**
+ * Places that an energise can still be in force at: all that it leads to without a source having been taken out. A place that needs every source
+ * out is not entered with power on; that it could be led to is a finding of its own.
+ */
 function liveRegion(nodes: ReadonlyMap<string, PlaceNode>, energise: string): Set<string> {
   const region = new Set<string>([energise]);
   const stack = [energise];
   for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
     for (const edge of nodes.get(key)?.edges ?? []) {
       if (region.has(edge.to) || edge.ops.some((op) => op.op === 'sources' && op.to === 'out')) continue;
+      if (nodes.get(edge.to)?.needs.some((need) => need.atom.fact === 'all-out') === true) continue;
       region.add(edge.to);
       stack.push(edge.to);
     }

@@ -115,7 +115,7 @@ function behind(found: SearchResult | null, id: RuleId): string {
 
 function storiesOf(graph: Graph, start: Facts, wanted: ReadonlySet<RuleId>): SearchResult {
   const plain = search(graph, start, { limit: STORY_STATES, text: STORY_TEXT, counters: false, wanted });
-  const infeasible = [...plain.stories.values()].filter((s: Story) => !isFeasible(s.legs)).map((s) => s.rule);
+  const infeasible = [...plain.stories.values()].filter((s: Story) => !isFeasible(graph, s.legs)).map((s) => s.rule);
   if (infeasible.length === 0) return plain;
   const exact = search(graph, start, { limit: STORY_STATES, text: STORY_TEXT, counters: true, wanted: new Set(infeasible) });
   const stories = new Map(plain.stories);

@@ -11,7 +11,7 @@ import { applyOps } from '../facts/ops';
 import type { Op } from '../facts/ops';
 import { fitVoids } from '../facts/voids';
 import { toTakeOut } from '../machine/arrive';
-import type { Edge, Graph, Start } from './graph';
+import type { Edge, Graph, PlaceNode, Start } from './graph';
 
 /** One answer on the way; `edge` is null where the time was up or the power was broken off. */
 export interface Leg {
@@ -19,6 +19,8 @@ export interface Leg {
   edge: Edge | null;
   /** calls that are entered by it */
   entered: readonly string[];
+  /** the energises of which one must be in force for the power to be broken off; empty for an answer */
+  by: readonly string[];
 }
 
 export interface Story {
@@ -45,6 +47,9 @@ interface Standing {
   from: Standing | null;
   edge: Edge | null;
   entered: readonly string[];
+  by: readonly string[];
+  /** the energise in force, kept beside the counters */
+  live: string | null;
   /** what the way here asks besides the needs of the place */
   claims: readonly Need[];
   start: Start;
@@ -55,7 +60,7 @@ export interface SearchOptions {
   limit: number;
   /** most characters that all of them may come to as text: facts with much owed are large */
   text?: number;
-  /** keep counters of counted exits in the state, so that only ways a run can take are walked */
+  /** keep counters of counted exits and the energise in force in the state, so that only ways a run can take are walked */
   counters: boolean;
   /** stop once these rules each have a story; null looks at everything */
   wanted: ReadonlySet<RuleId> | null;
@@ -81,7 +86,7 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
       }
       return;
     }
-    const name = `${next.key}|${JSON.stringify(next.facts)}|${next.counters === null ? '' : JSON.stringify(next.counters)}`;
+    const name = `${next.key}|${JSON.stringify(next.facts)}|${next.counters === null ? '' : JSON.stringify([next.counters, next.live])}`;
     if (seen.has(name)) return;
     text += name.length;
     if (seen.size >= options.limit || text > (options.text ?? Infinity)) {
@@ -92,33 +97,52 @@ export function search(graph: Graph, start: Facts, options: SearchOptions): Sear
     queue.push(next);
   };
 
-  for (const s of graph.starts) for (const facts of s.reentry ? reentryFacts(graph, s, start) : [start]) arrive({ key: s.key, facts, counters: options.counters ? {} : null, from: null, edge: null, entered: [], claims: s.claims, start: s });
+  for (const s of graph.starts) for (const facts of s.reentry ? reentryFacts(graph, s, start) : [start]) arrive({ key: s.key, facts, counters: options.counters ? {} : null, from: null, edge: null, entered: [], by: [], live: null, claims: s.claims, start: s });
   for (let head = 0; head < queue.length && !limited; head += 1) {
     if (options.wanted !== null && [...options.wanted].every((rule) => stories.has(rule))) break;
     const here = queue[head];
     const node = here === undefined ? undefined : graph.nodes.get(here.key);
     if (here === undefined || node === undefined) continue;
     const acting = applyOps(here.facts, node.entered);
+    const live = liveAt(node, here.live);
     for (const edge of node.edges) {
       const counters = here.counters === null ? null : counted(here.counters, edge);
       if (here.counters !== null && counters === null) continue;
-      arrive({ key: edge.to, facts: applyOps(acting, edge.ops), counters, from: here, edge, entered: edge.entered, claims: edge.claims, start: here.start });
+      arrive({ key: edge.to, facts: applyOps(acting, edge.ops), counters, from: here, edge, entered: edge.entered, by: [], live: liveAfter(edge, live), claims: edge.claims, start: here.start });
     }
-    for (const { to, entered, claims } of graph.aborts.get(here.key) ?? []) {
-      arrive({ key: to, facts: acting, counters: here.counters === null ? null : activated(here.counters, entered), from: here, edge: null, entered, claims, start: here.start });
+    for (const { to, by, entered, claims } of graph.aborts.get(here.key) ?? []) {
+      if (here.counters !== null && (live === null || !by.includes(live))) continue;
+      arrive({ key: to, facts: acting, counters: here.counters === null ? null : activated(here.counters, entered), from: here, edge: null, entered, by, live, claims, start: here.start });
     }
   }
   return { stories, states: seen.size, limited };
 }
 
-/** Whether the counted exits of a way can be taken as often as it takes them. */
-export function isFeasible(legs: readonly Leg[]): boolean {
+/** Whether the counted exits of a way can be taken as often as it takes them, and its power broken off where it is on. */
+export function isFeasible(graph: Graph, legs: readonly Leg[]): boolean {
   let counters: Readonly<Record<string, number>> | null = {};
+  let live: string | null = null;
   for (const leg of legs) {
-    counters = leg.edge === null ? activated(counters, leg.entered) : counted(counters, leg.edge);
+    live = liveAt(graph.nodes.get(leg.key), live);
+    if (leg.edge === null) {
+      if (live === null || !leg.by.includes(live)) return false;
+      counters = activated(counters, leg.entered);
+    } else {
+      live = liveAfter(leg.edge, live);
+      counters = counted(counters, leg.edge);
+    }
     if (counters === null) return false;
   }
   return true;
+}
+
+/** The energise in force while a place is acted at. */
+function liveAt(node: PlaceNode | undefined, live: string | null): string | null {
+  return node?.placed.step.kind === 'energise' ? node.key : live;
+}
+
+function liveAfter(edge: Edge, live: string | null): string | null {
+  return edge.ops.some((op) => op.op === 'sources' && op.to === 'out') ? null : live;
 }
 
 /** The counters after an edge, or null when it cannot be taken: `to` while its count lasts, `then` once it has run out. */
@@ -148,7 +172,7 @@ function activated(counters: Readonly<Record<string, number>>, entered: readonly
 
 function legsTo(standing: Standing): Leg[] {
   const legs: Leg[] = [];
-  for (let s: Standing | null = standing; s?.from != null; s = s.from) legs.unshift({ key: s.from.key, edge: s.edge, entered: s.entered });
+  for (let s: Standing | null = standing; s?.from != null; s = s.from) legs.unshift({ key: s.from.key, edge: s.edge, entered: s.entered, by: s.by });
   return legs;
 }
 
