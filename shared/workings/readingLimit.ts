@@ -274,9 +274,21 @@ function bandsOf(
   if (acceptLow === null || acceptHigh === null || acceptLow <= acceptHigh)
     bands.push({ label: 'in', axis: 'x', from: acceptLow, to: acceptHigh, role: 'good' });
   if (low !== null)
-    bands.push({ label: 'close', axis: 'x', from: low - width.low, to: Math.min(acceptLow ?? low, high ?? Infinity), role: 'close' });
+    bands.push({
+      label: 'close to low',
+      axis: 'x',
+      from: low - width.low,
+      to: Math.min(acceptLow ?? low, high ?? Infinity),
+      role: 'close',
+    });
   if (high !== null)
-    bands.push({ label: 'close', axis: 'x', from: Math.max(acceptHigh ?? high, low ?? -Infinity), to: high + width.high, role: 'close' });
+    bands.push({
+      label: 'close to high',
+      axis: 'x',
+      from: Math.max(acceptHigh ?? high, low ?? -Infinity),
+      to: high + width.high,
+      role: 'close',
+    });
   return bands;
 }
 

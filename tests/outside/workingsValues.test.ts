@@ -46,6 +46,11 @@ describe('the published values', () => {
     expect(rows.length).toBeGreaterThanOrEqual(80);
   });
 
+  it('hold every sheet at five places or more', () => {
+    const counts = SHEETS.map((sheet) => [sheet.id, rows.filter((row) => row.sheet === sheet.id).length] as const);
+    expect(counts.filter(([, count]) => count < 5)).toEqual([]);
+  });
+
   it('are no figures of which anything would do', () => {
     for (const row of rows) {
       if (typeof row.expected === 'string') continue;
