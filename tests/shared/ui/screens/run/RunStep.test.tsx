@@ -114,6 +114,25 @@ describe('RunStep', () => {
     expect(sent).toMatchObject({ type: 'READING', typed: '80m', value: 0.08, instrument: { twoPole: false } });
   });
 
+  it('sets the reading against its limit with the instrument in hand, while it is typed', async () => {
+    const withSheet = must(
+      parseTree({
+        ...lampTreeJson,
+        steps: lampTreeJson.steps.map((s) => (s.id === 'earth' ? { ...s, workings: { sheet: 'reading-limit' } } : s)),
+      }),
+    );
+    await atBench({
+      tree: withSheet,
+      shop: ledTo((bench) => bench.pass().answer('sound').dead().do({ type: 'WARNING_READ', step: 'earth' }), withSheet),
+    });
+    const words = () => screen.getByText('With this instrument:').parentElement?.textContent;
+    expect(words()).toMatch(/^With this instrument: Clearly in up to 14\d\S* mΩ with this instrument\.$/);
+    type('149m');
+    expect(words()).toMatch(/^With this instrument: In, but close: this instrument cannot be sure\. 149 mΩ ± /);
+    type('300m');
+    expect(words()).toMatch(/^With this instrument: Out, high: 300 mΩ ± /);
+  });
+
   it('names the instruments that cannot be used, with the reason', async () => {
     await atBench({ shop: ledTo((bench) => bench.pass().answer('sound').dead().do({ type: 'WARNING_READ', step: 'earth' })) });
     fireEvent.click(screen.getByRole('button', { name: /^Meter: M1/ }));
