@@ -6,12 +6,13 @@ import { openingInWords } from '@/shared/workings/lostReturnWords';
 
 function exposedBoards(model: LostReturnModel, { occurrences }: JudgedOpening): readonly ExposedBoard[] {
   const reversed = new Set(occurrences.flatMap(({ kind, at }) => (kind === 'rail-reversed' ? [at] : [])));
-  const negative = new Set(model.rails.flatMap(({ volts }, rail) => (volts < 0 ? [rail] : [])));
+  const onNegative = new Set(
+    model.loads.flatMap(({ name, rails }) => (rails.some((rail) => (model.rails[rail]?.volts ?? 0) < 0) ? [name] : [])),
+  );
   const found = new Map<string, { rank: number; size: number; board: ExposedBoard }>();
   const put = (load: number, how: ExposedBoard['how'], volts: number, size: number): void => {
     const { name, nominalVolts, rails } = model.loads[load] ?? { name: '', nominalVolts: null, rails: [] };
-    const own = model.loads.flatMap((other) => (other.name === name ? other.rails : []));
-    const rank = how === 'reversed' || rails.some((rail) => reversed.has(rail)) ? 0 : own.some((rail) => negative.has(rail)) ? 1 : 2;
+    const rank = how === 'reversed' || rails.some((rail) => reversed.has(rail)) ? 0 : onNegative.has(name) ? 1 : 2;
     const known = found.get(name);
     if (known !== undefined && (known.rank < rank || (known.rank === rank && known.size >= size))) return;
     found.set(name, { rank, size, board: { name, volts, nominalVolts: nominalVolts ?? 0, how } });

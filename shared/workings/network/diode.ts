@@ -15,6 +15,10 @@ export const THERMAL_VOLTS = (1.38064852e-23 * 300.15) / 1.6021766208e-19;
 /** Leakage across every junction, in siemens, as circuit simulators have it. */
 export const JUNCTION_SIEMENS = 1e-12;
 
+const MOST_STEPS = 200;
+/** Share of N Vt below which a last change of the junction's volts is as good as none. */
+const NEAR = 1e-7;
+
 /** A current with its slope, amps and siemens. */
 export interface BranchCurrent {
   readonly amps: number;
@@ -29,16 +33,14 @@ export function diodeCurrent({ saturationAmps, emission, seriesOhms }: DiodeCard
   const scale = emission * THERMAL_VOLTS;
   // The volts across the junction alone; f is rising and convex and the start lies above its root, so Newton only descends.
   let junction = volts <= 0 ? volts : Math.min(volts, scale * Math.log1p(volts / (seriesOhms * saturationAmps)));
-  let siemens = 0;
-  for (let step = 0; step < 100; step += 1) {
-    siemens = (saturationAmps / scale) * Math.exp(junction / scale) + JUNCTION_SIEMENS;
-    const amps = saturationAmps * Math.expm1(junction / scale) + JUNCTION_SIEMENS * junction;
-    const next = junction - (junction + seriesOhms * amps - volts) / (1 + seriesOhms * siemens);
-    const moved = Math.abs(next - junction);
-    junction = next;
-    if (moved <= 1e-15 * (1 + Math.abs(junction))) break;
+  for (let step = 0; step < MOST_STEPS; step += 1) {
+    const grown = Math.expm1(junction / scale);
+    const siemens = (saturationAmps / scale) * (grown + 1) + JUNCTION_SIEMENS;
+    const amps = saturationAmps * grown + JUNCTION_SIEMENS * junction;
+    const change = (volts - junction - seriesOhms * amps) / (1 + seriesOhms * siemens);
+    // What is left of the change is put on by the slope, which is exact to the last figure when it is this small.
+    if (Math.abs(change) <= NEAR * scale) return { amps: amps + siemens * change, siemens: siemens / (1 + seriesOhms * siemens) };
+    junction += change;
   }
-  siemens = (saturationAmps / scale) * Math.exp(junction / scale) + JUNCTION_SIEMENS;
-  const amps = saturationAmps * Math.expm1(junction / scale) + JUNCTION_SIEMENS * junction;
-  return { amps, siemens: siemens / (1 + seriesOhms * siemens) };
+  throw new Error('a descent that cannot miss has missed');
 }

@@ -10,10 +10,11 @@ export interface Mesh {
   readonly siemens: Float64Array;
 }
 
-/** How volts of nodes taken out follow from those that stayed: one row for each, in the order of their going. */
-export interface TakenOut {
-  readonly nodes: readonly number[];
-  readonly shares: readonly Float64Array[];
+/** A node that was taken out, and its volts as shares of those of its neighbours at that moment. */
+export interface TakenNode {
+  readonly node: number;
+  readonly near: readonly number[];
+  readonly shares: readonly number[];
 }
 
 /** A mesh without couplings. */
@@ -30,53 +31,54 @@ export function couple({ size, siemens }: Mesh, a: number, b: number, conductanc
 
 /**
  * Takes nodes out one by one, each star turned into the mesh that does the same (Kron reduction).
- * @param mesh is left as it was
+ * @param mesh is changed: the nodes lose their couplings, the others gain
  * @param nodes none of them 0 V, each with some coupling
- * @returns a mesh of the same numbering in which those nodes have no part, and how their volts follow
+ * @returns how their volts follow, in the order of their going
  */
-export function takeOut(mesh: Mesh, nodes: readonly number[]): { mesh: Mesh; taken: TakenOut } {
-  const { size } = mesh;
-  const siemens = mesh.siemens.slice();
-  const shares: Float64Array[] = [];
-  const near: number[] = [];
-  for (const node of nodes) {
-    const share = new Float64Array(size);
+export function takeOut({ size, siemens }: Mesh, nodes: readonly number[]): readonly TakenNode[] {
+  return nodes.map((node) => {
     const row = node * size;
+    const near: number[] = [];
     let sum = 0;
-    near.length = 0;
     for (let j = 0; j < size; j += 1) {
       const g = siemens[row + j] ?? 0;
       if (j === node || g === 0) continue;
       near.push(j);
       sum += g;
     }
-    for (const j of near) share[j] = (siemens[row + j] ?? 0) / sum;
+    const shares = near.map((j) => (siemens[row + j] ?? 0) / sum);
     for (const i of near) {
       const g = siemens[row + i] ?? 0;
-      for (const j of near) {
-        if (j !== i) siemens[i * size + j] = (siemens[i * size + j] ?? 0) + g * (share[j] ?? 0);
-      }
+      near.forEach((j, k) => {
+        if (j !== i) siemens[i * size + j] = (siemens[i * size + j] ?? 0) + g * (shares[k] ?? 0);
+      });
     }
-    shares.push(share);
     for (const j of near) {
       siemens[row + j] = 0;
       siemens[j * size + node] = 0;
     }
-  }
-  return { mesh: { size, siemens }, taken: { nodes, shares } };
+    return { node, near, shares };
+  });
 }
 
 /** Fills in the volts of the nodes taken out, last one first. */
-export function putBack({ nodes, shares }: TakenOut, volts: Float64Array): void {
-  for (let k = nodes.length - 1; k >= 0; k -= 1) {
-    const share = shares[k];
-    const node = nodes[k];
-    if (share === undefined || node === undefined) continue;
+export function putBack(taken: readonly TakenNode[], volts: Float64Array): void {
+  for (let k = taken.length - 1; k >= 0; k -= 1) {
+    const out = taken[k];
+    if (out === undefined) continue;
+    const { node, near, shares } = out;
     let sum = 0;
-    for (let j = 0; j < share.length; j += 1) {
-      const part = share[j] ?? 0;
-      if (part !== 0) sum += part * (volts[j] ?? 0);
-    }
+    for (let m = 0; m < near.length; m += 1) sum += (shares[m] ?? 0) * (volts[near[m] ?? 0] ?? 0);
     volts[node] = sum;
   }
+}
+
+/**
+ * The same couplings between fewer nodes.
+ * @param kept nodes by their old numbers in the order of the new ones; those left out have no couplings any more
+ */
+export function compact({ size, siemens }: Mesh, kept: readonly number[]): Mesh {
+  const mesh = emptyMesh(kept.length);
+  kept.forEach((old, k) => kept.forEach((other, m) => (mesh.siemens[k * kept.length + m] = siemens[old * size + other] ?? 0)));
+  return mesh;
 }

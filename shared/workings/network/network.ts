@@ -1,8 +1,8 @@
 /** A direct-current network of wires, loads, supply outputs and diodes, and its volts and amps. */
 import type { DiodeCard } from '@/shared/workings/network/diode';
 import { diodeCurrent } from '@/shared/workings/network/diode';
-import type { Mesh, TakenOut } from '@/shared/workings/network/mesh';
-import { couple, emptyMesh, putBack, takeOut } from '@/shared/workings/network/mesh';
+import type { Mesh, TakenNode } from '@/shared/workings/network/mesh';
+import { compact, couple, emptyMesh, putBack, takeOut } from '@/shared/workings/network/mesh';
 import type { Branch } from '@/shared/workings/network/newton';
 import { settle } from '@/shared/workings/network/newton';
 import type { LimitedSource } from '@/shared/workings/network/source';
@@ -61,11 +61,16 @@ export const STRAY_SIEMENS = 1e-12;
 /** A network made ready for many cases that open some of the same few resistors and add others between the same few nodes. */
 export interface Prepared {
   readonly network: Network;
+  /** Couplings between what is left: first the active nodes, then the touched ones, then 0 V. */
   readonly mesh: Mesh;
-  readonly taken: TakenOut;
-  /** Nodes of outputs and diodes: those that the search is over. */
+  /** The nodes left, by their numbers in the network. */
+  readonly kept: readonly number[];
+  /** Where each node of the network stands among those left; −1 for one taken out. */
+  readonly places: Int32Array;
+  readonly taken: readonly TakenNode[];
+  /** Nodes of outputs and diodes, as counted among those left: those that the search is over. */
   readonly active: readonly number[];
-  /** Nodes that openings and additions touch and no output or diode does. */
+  /** Nodes that openings and additions touch and no output or diode does, counted likewise. */
   readonly touched: readonly number[];
   readonly mayOpen: readonly number[];
 }
@@ -96,28 +101,56 @@ export function prepare(network: Network, mayOpen: readonly number[], mayAdd: re
   touched.delete(zero);
   for (const node of active) touched.delete(node);
   const rest = Array.from({ length: zero }, (_, node) => node).filter((node) => !active.has(node) && !touched.has(node));
-  const { mesh: reduced, taken } = takeOut(mesh, rest);
-  return { network, mesh: reduced, taken, active: [...active], touched: [...touched], mayOpen };
+  const taken = takeOut(mesh, rest);
+  const kept = [...active, ...touched, zero];
+  const places = new Int32Array(network.nodes).fill(-1);
+  kept.forEach((node, place) => (places[node] = place));
+  const countFrom = (first: number, count: number): readonly number[] => Array.from({ length: count }, (_, k) => first + k);
+  return {
+    network,
+    mesh: compact(mesh, kept),
+    kept,
+    places,
+    taken,
+    active: countFrom(0, active.size),
+    touched: countFrom(active.size, touched.size),
+    mayOpen,
+  };
 }
 
 /** The resistors of one opening laid in and all but the active nodes taken out; it serves every set of outputs that are off. */
 export interface Laid {
   readonly prepared: Prepared;
   readonly mesh: Mesh;
-  readonly taken: TakenOut;
+  readonly taken: readonly TakenNode[];
+  readonly diodes: readonly Branch[];
+  readonly outputs: readonly Branch[];
 }
 
 /** Lays one set of openings and additions into a prepared network. */
 export function lay(prepared: Prepared, { open, added }: Omit<Variation, 'off'>): Laid {
+  const { network, places } = prepared;
+  const place = (node: number): number => places[node] ?? 0;
   const mesh = { size: prepared.mesh.size, siemens: prepared.mesh.siemens.slice() };
-  const opened = new Set(open);
   for (const k of prepared.mayOpen) {
-    const resistor = prepared.network.resistors[k];
-    if (resistor !== undefined && !opened.has(k)) couple(mesh, resistor.from, resistor.to, 1 / resistor.ohms);
+    const resistor = network.resistors[k];
+    if (resistor !== undefined && !open.includes(k)) couple(mesh, place(resistor.from), place(resistor.to), 1 / resistor.ohms);
   }
-  for (const { from, to, ohms } of added) couple(mesh, from, to, 1 / ohms);
-  const reduced = takeOut(mesh, prepared.touched);
-  return { prepared, ...reduced };
+  for (const { from, to, ohms } of added) couple(mesh, place(from), place(to), 1 / ohms);
+  const diodes = network.diodes.map((diode): Branch => ({
+    from: place(diode.anode),
+    to: place(diode.cathode),
+    current: (across) => diodeCurrent(diode, across),
+  }));
+  const outputs = network.outputs.map((output): Branch => ({
+    from: place(output.terminal),
+    to: place(output.zero),
+    current: (across) => {
+      const { amps, siemens } = sourceCurrent(output, across);
+      return { amps: -amps, siemens };
+    },
+  }));
+  return { prepared, mesh, taken: takeOut(mesh, prepared.touched), diodes, outputs };
 }
 
 /**
@@ -126,32 +159,22 @@ export function lay(prepared: Prepared, { open, added }: Omit<Variation, 'off'>)
  * @param start volts of an earlier solution to begin from
  */
 export function solveLaid(laid: Laid, off: readonly number[], start?: Float64Array): Solution {
-  const { network, active, taken } = laid.prepared;
-  const isOff = new Set(off);
-  const volts = start === undefined ? new Float64Array(network.nodes) : start.slice();
-  const branches: Branch[] = network.diodes.map((diode) => ({
-    from: diode.anode,
-    to: diode.cathode,
-    current: (across) => diodeCurrent(diode, across),
-  }));
-  network.outputs.forEach((output, k) => {
-    if (isOff.has(k)) return;
-    const current = (across: number) => {
-      const { amps, siemens } = sourceCurrent(output, across);
-      return { amps: -amps, siemens };
-    };
-    branches.push({ from: output.terminal, to: output.zero, current });
-  });
-  const { converged, steps } = settle(laid.mesh, active, branches, volts);
-  putBack(laid.taken, volts);
-  putBack(taken, volts);
-  const between = (from: number, to: number): number => (volts[from] ?? 0) - (volts[to] ?? 0);
+  const { network, active, kept } = laid.prepared;
+  const left = new Float64Array(kept.length);
+  if (start !== undefined) for (const place of active) left[place] = start[kept[place] ?? 0] ?? 0;
+  const on = laid.outputs.filter((_, k) => !off.includes(k));
+  const { converged, steps } = settle(laid.mesh, active, [...laid.diodes, ...on], left);
+  putBack(laid.taken, left);
+  const volts = new Float64Array(network.nodes);
+  kept.forEach((node, place) => (volts[node] = left[place] ?? 0));
+  putBack(laid.prepared.taken, volts);
+  const amps = ({ from, to, current }: Branch): number => current((left[from] ?? 0) - (left[to] ?? 0)).amps;
   return {
     converged,
     steps,
     volts,
-    outputAmps: network.outputs.map((output, k) => (isOff.has(k) ? 0 : sourceCurrent(output, between(output.terminal, output.zero)).amps)),
-    diodeAmps: network.diodes.map((diode) => diodeCurrent(diode, between(diode.anode, diode.cathode)).amps),
+    outputAmps: laid.outputs.map((branch, k) => (off.includes(k) ? 0 : -amps(branch))),
+    diodeAmps: laid.diodes.map(amps),
   };
 }
 

@@ -54,8 +54,8 @@ class Search {
     nodes.forEach((node, k) => (this.place[node] = k));
   }
 
-  /** Sums of currents at `volts`, and with `withSlopes` how they change. */
-  look(volts: Float64Array, withSlopes: boolean): void {
+  /** Sums of currents at `volts`, and how they change. */
+  look(volts: Float64Array): void {
     const { mesh, nodes, residual, sizes, rounding, slopes } = this;
     const zero = mesh.size - 1;
     for (let k = 0; k < this.count; k += 1) {
@@ -74,28 +74,27 @@ class Search {
         size += Math.abs(amps);
         slope += g;
         weighed += g * (Math.abs(here) + Math.abs(there));
-        if (withSlopes) slopes.set(k, m, -g);
+        slopes.set(k, m, -g);
       }
       residual[k] = sum;
       sizes[k] = size;
       rounding[k] = weighed;
-      if (withSlopes) slopes.set(k, k, slope);
+      slopes.set(k, k, slope);
     }
     for (const { from, to, current } of this.branches) {
       const [before, behind] = [volts[from] ?? 0, volts[to] ?? 0];
       const { amps, siemens } = current(before - behind);
       const weighed = siemens * (Math.abs(before) + Math.abs(behind));
       const [a, b] = [this.place[from] ?? -1, this.place[to] ?? -1];
-      if (a >= 0) this.add(a, b, amps, siemens, weighed, withSlopes);
-      if (b >= 0) this.add(b, a, -amps, siemens, weighed, withSlopes);
+      if (a >= 0) this.add(a, b, amps, siemens, weighed);
+      if (b >= 0) this.add(b, a, -amps, siemens, weighed);
     }
   }
 
-  private add(at: number, other: number, amps: number, siemens: number, weighed: number, withSlopes: boolean): void {
+  private add(at: number, other: number, amps: number, siemens: number, weighed: number): void {
     this.residual[at] = (this.residual[at] ?? 0) + amps;
     this.sizes[at] = (this.sizes[at] ?? 0) + Math.abs(amps);
     this.rounding[at] = (this.rounding[at] ?? 0) + weighed;
-    if (!withSlopes) return;
     this.slopes.set(at, at, this.slopes.get(at, at) + siemens);
     if (other >= 0) this.slopes.set(at, other, this.slopes.get(at, other) - siemens);
   }
@@ -137,7 +136,7 @@ export function settle(mesh: Mesh, nodes: readonly number[], branches: readonly 
       trial[node] = (volts[node] ?? 0) + share * (step[k] ?? 0);
     }
   };
-  search.look(volts, true);
+  search.look(volts);
   for (let steps = 0; steps < MOST_STEPS; steps += 1) {
     if (search.balanced()) return { converged: true, steps, leftAmps: search.left() };
     const solved = new LuDecomposition(search.slopes).solve(Matrix.columnVector(search.residual));
@@ -145,9 +144,11 @@ export function settle(mesh: Mesh, nodes: readonly number[], branches: readonly 
     const start = search.along(step);
     // Up to the least along the line and not past it, or steps could go round in a circle between kinks.
     let [low, lowSlope, high, highSlope, share] = [0, start, 1, 0, 1];
+    let looked = -1;
     for (let cut = 0; cut < MOST_CUTS; cut += 1) {
       move(share);
-      search.look(trial, false);
+      search.look(trial);
+      looked = share;
       const slope = search.along(step);
       if ((share === 1 && slope <= 0) || Math.abs(slope) <= NEAR_LEAST * Math.abs(start)) break;
       if (slope > 0) [high, highSlope] = [share, slope];
@@ -155,9 +156,11 @@ export function settle(mesh: Mesh, nodes: readonly number[], branches: readonly 
       const straight = lowSlope / (lowSlope - highSlope);
       share = low + (high - low) * Math.min(0.9, Math.max(0.1, straight));
     }
-    move(share);
+    if (looked !== share) {
+      move(share);
+      search.look(trial);
+    }
     volts.set(trial);
-    search.look(volts, true);
   }
   return { converged: search.balanced(), steps: MOST_STEPS, leftAmps: search.left() };
 }
