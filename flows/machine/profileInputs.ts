@@ -3,6 +3,7 @@ import { formatNumber } from '@/shared/quantity/formatQuantity';
 
 import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
+import { lostReturnOf } from './lostReturnOf';
 
 /** One of several alike things of a machine for which a sheet can be worked out. */
 export interface ProfilePick {
@@ -70,6 +71,7 @@ const FILLS: Readonly<Record<string, Fill>> = {
       return wire === undefined ? null : { awg: null, squareMillimetres: wire.squareMillimetres, metres: wire.metres, path: 'one-way' };
     },
   },
+  'lost-return': { of: 'machine', inputs: ({ profile }) => lostReturnOf(profile) },
 };
 
 /** True where the sheet has inputs that a machine's profile knows. */

@@ -41,6 +41,7 @@ export type WorkingsPlace = { key: string; counters: readonly { key: string; n: 
 export function workingsOf(step: Step, profile: Profile, settings: Settings, now: ReadingNow | null = null, place: WorkingsPlace | null = null): StepWorkings | null {
   if (step.workings === undefined) return null;
   if (step.workings.sheet === 'reading-limit') return now === null ? null : work('reading-limit', { quantity: now.quantity, reading: now.value, low: now.low, high: now.high, ...now.accuracy });
+  if (step.workings.sheet === 'lost-return') return lostReturn(profile);
   const lamp = step.kind === 'energise' || step.kind === 'raise' ? step.lampWatts : undefined;
   // a soak reads each row again and again: `p5-2` is the second reading of p5
   const row = now === null ? {} : ofRow(isOfProfile(profile, now.row) ? now.row : now.row.replace(/-\d+$/, ''));
@@ -83,18 +84,19 @@ export function workingsLimits(limit: Extract<Limit, { is: 'workings' }>, row: s
 }
 
 /** Hundreds of networks are solved for a lost return, and the machine alone says which: once for each profile is enough. */
-const lostReturns = new WeakMap<Profile, StepWorkings | null>();
+const lostReturns = new WeakMap<Profile, { workings: StepWorkings | null }>();
 
-function fill(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
-  if (reference.sheet !== 'lost-return') return fillNow(reference, profile, settings);
+function lostReturn(profile: Profile): StepWorkings | null {
   const known = lostReturns.get(profile);
-  if (known !== undefined) return known;
-  const filled = fillNow(reference, profile, settings);
-  lostReturns.set(profile, filled);
-  return filled;
+  if (known !== undefined) return known.workings;
+  const inputs = lostReturnOf(profile);
+  const workings = inputs === null ? null : work('lost-return', { ...inputs });
+  lostReturns.set(profile, { workings });
+  return workings;
 }
 
-function fillNow(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
+function fill(reference: Reference, profile: Profile, settings: Settings): StepWorkings | null {
+  if (reference.sheet === 'lost-return') return lostReturn(profile);
   const inputs = inputsOf(reference, profile, settings);
   return inputs === null ? null : work(reference.sheet, inputs);
 }
