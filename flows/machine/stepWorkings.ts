@@ -1,5 +1,6 @@
 /** The sheet of workings that a step shows, filled in from the machine's profile. */
 import { copperOhmsPerMetre, mostOhmsPerMetre } from '@/shared/workings/copper';
+import { FUSE_MOST_VOLTS } from '@/shared/workings/fuse';
 import { sheetById } from '@/shared/workings/list';
 import type { AnySheet } from '@/shared/workings/list';
 import { uncertaintyOf } from '@/shared/workings/readingLimit';
@@ -162,7 +163,7 @@ function wireInputs(reference: Reference, profile: Profile): Record<string, unkn
 
 /** Below 200 V the fuse of the plate is taken for one to UL 248-14, else to IEC 60127: common practice, no source. */
 function fuseInputs({ mains }: Profile): Record<string, unknown> {
-  return { standard: mains.volts < 200 ? 'ul-248-14' : 'iec-60127', speed: mains.fuse.kind, ratedAmps: mains.fuse.amps, loadAmps: mains.voltAmps / mains.volts };
+  return { standard: mains.volts < 200 ? 'ul-248-14' : 'iec-60127', speed: mains.fuse.kind, ratedAmps: mains.fuse.amps, ...(mains.volts <= FUSE_MOST_VOLTS && { volts: mains.volts }), loadAmps: mains.voltAmps / mains.volts };
 }
 
 /** Most volts of 54 and 74 series logic, taken for what stands on a rail of 5 V (data sheets, absolute maximum). */

@@ -70,12 +70,17 @@ export const PULSE_LIFE: readonly (readonly [pulses: number, share: number])[] =
   [100, 0.48],
 ];
 
+/** Volts up to which the usual fuses of both standards are rated. */
+export const FUSE_MOST_VOLTS = 250;
+
 /**
- * The most amps that a fuse breaks safely at 250 V a.c.
- * @returns glass fuse to IEC 60127-2: 35 A or ten times rated, whichever is more; UL 248-14: by its rating, at least
+ * The most amps that a fuse breaks safely.
+ * @param volts a.c. of the circuit, up to 250
+ * @returns glass fuse to IEC 60127-2: 35 A or ten times rated, whichever is more; UL 248-14: 10 kA up to 125 V, else by its rating, at least
  */
-export function breakingAmps(standard: FuseStandard, ratedAmps: number): number {
+export function breakingAmps(standard: FuseStandard, ratedAmps: number, volts: number): number {
   if (standard === 'iec-60127') return Math.max(35, 10 * ratedAmps);
+  if (volts <= 125) return 10_000;
   if (ratedAmps <= 1) return 35;
   if (ratedAmps <= 3.5) return 100;
   if (ratedAmps <= 10) return 200;

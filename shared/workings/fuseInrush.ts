@@ -3,7 +3,16 @@ import { z } from 'zod';
 
 import { formatDuration, formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { FuseGate } from '@/shared/workings/fuse';
-import { breakingAmps, carryShare, fuseGates, leastRating, PULSE_LIFE, PULSE_SHAPES, PULSE_SHARE } from '@/shared/workings/fuse';
+import {
+  breakingAmps,
+  carryShare,
+  FUSE_MOST_VOLTS,
+  fuseGates,
+  leastRating,
+  PULSE_LIFE,
+  PULSE_SHAPES,
+  PULSE_SHARE,
+} from '@/shared/workings/fuse';
 import type { Plot, PlotCurve } from '@/shared/workings/plot';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
@@ -47,6 +56,13 @@ const inputs = z.strictObject({
   ]).default('iec-60127'),
   speed: choiceField('Speed', 'F is fast, T is slow', ['fast', 'slow']).default('slow'),
   ratedAmps: numberField({ title: 'Rated current', description: 'As marked on the cap', unit: 'A', min: 0.01, max: 30 }),
+  volts: numberField({
+    title: 'Circuit volts',
+    description: 'Mains volts, rms; it counts for the short that the fuse can break',
+    unit: 'V',
+    min: 1,
+    max: FUSE_MOST_VOLTS,
+  }).default(FUSE_MOST_VOLTS),
   loadAmps: numberField({
     title: 'Steady current',
     description: 'Rms amps once it runs; plate volt-amps divided by mains volts is the most',
@@ -113,7 +129,7 @@ const law = [
   'stands 100 000 starts at 22 % of its melting value, 10 000 at 29 %, 1000 at 38 %, 100 at 48 %',
 ];
 const validity =
-  'Fuse-links at room temperature; a hot place or a tired holder carries less. Test points of IEC 60127 are those of 5 × 20 mm glass fuses of 125 mA to 6.3 A (sheets 2 and 3); ceramic ones (sheets 1 and 5) blow a little otherwise and break 1500 A. The chart of starts is one maker’s. Below its must-blow amps a fuse protects nothing: a rail that draws twice too much may smoulder behind it for good.';
+  'Fuse-links at room temperature; a hot place or a tired holder carries less. Test points of IEC 60127 are those of 5 × 20 mm glass fuses of 125 mA to 6.3 A (sheets 2 and 3); ceramic ones (sheets 1 and 5) blow a little otherwise and break 1500 A. Alternating current: a fuse breaks far less d.c. The chart of starts is one maker’s. Below its must-blow amps a fuse protects nothing: a rail that draws twice too much may smoulder behind it for good.';
 const source =
   'UL/CSA 248-14 test points, breaking ratings, pulse shapes and starts: Littelfuse fuse guide. Three quarters: L. Lundy, EDN, 26 September 1996. IEC 60127-2, sheets 2 and 3, as printed in makers’ data sheets; 150 % and 210 %: standard, as quoted.';
 const caution =
@@ -181,12 +197,12 @@ function formulaOf(given: Inputs, result: FuseInrushResult): readonly string[] {
   ];
   if (pulse !== null) {
     lines.push(
-      `pulse: ${formatNumber(PULSE_SHARE[given.shape], 3)} × ${a(given.peakAmps ?? 0)}² × ${t(given.pulseSeconds ?? 0)} = ${i2t(pulse.ampSquaredSeconds)}`,
+      `pulse: ${formatNumber(PULSE_SHARE[given.shape], 3)} × (${a(given.peakAmps ?? 0)})² × ${t(given.pulseSeconds ?? 0)} = ${i2t(pulse.ampSquaredSeconds)}`,
       `${formatNumber(given.starts, 6)} starts want ${i2t(pulse.ampSquaredSeconds)} ÷ ${formatNumber(shareFor(given.starts) * 100)} % = ${i2t(pulse.leastMelting ?? 0)} of melting value${given.melting === null ? '' : `; it has ${i2t(given.melting)}`}`,
     );
   }
   lines.push(
-    `breaks at least ${a(result.breakingAmps)} at 250 V${given.faultAmps === null ? '' : `; a short draws ${a(given.faultAmps)}`}`,
+    `breaks at least ${a(result.breakingAmps)} at ${formatQuantity(given.volts, 'V', { digits: 3 })}${given.faultAmps === null ? '' : `; a short draws ${a(given.faultAmps)}`}`,
   );
   return lines;
 }
@@ -248,7 +264,7 @@ export const sheet = defineSheet({
     const gates = fuseGates(given.standard, given.speed);
     const blow = mustBlow(gates);
     const carryAmps = carryShare(given.standard) * given.ratedAmps;
-    const breaking = breakingAmps(given.standard, given.ratedAmps);
+    const breaking = breakingAmps(given.standard, given.ratedAmps, given.volts);
     const result: FuseInrushResult = {
       carryAmps,
       carries: given.loadAmps <= carryAmps * (1 + 1e-12),

@@ -257,7 +257,7 @@ function formulaOf(given: Inputs, result: OverVoltageTripResult): readonly strin
   const { fault } = result;
   if (fault !== null)
     lines.push(
-      `E = ½ × ${formatQuantity(given.farads ?? 0, 'F')} × ${v(result.tripHighVolts)}² = ${formatQuantity(fault.joules, 'J', { digits: 3 })}`,
+      `E = ½ × ${formatQuantity(given.farads ?? 0, 'F')} × (${v(result.tripHighVolts)})² = ${formatQuantity(fault.joules, 'J', { digits: 3 })}`,
       `I peak = ${v(result.tripHighVolts)} ÷ ${formatQuantity(given.seriesOhms, 'Ω')} = ${a(fault.peakAmps)}${given.surgeAmps === null ? '' : ` against ${a(given.surgeAmps)}`}`,
       `I²t = ${i2t(fault.ampSquaredSeconds)}${given.thyristorI2t === null ? '' : ` against ${i2t(given.thyristorI2t)}`}`,
     );

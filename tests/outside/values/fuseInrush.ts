@@ -84,6 +84,13 @@ export const values: readonly OutsideValue[] = [
   breaks(8, 200),
   breaks(12, 750),
   breaks(20, 1500),
+  row(
+    'UL 1 A, breaking rating at 125 V',
+    `${guide}: 10,000 A a.c. at 125 V`,
+    { standard: 'ul-248-14', volts: 125 },
+    'breakingAmps',
+    10_000,
+  ),
   gate('slow', 0, 1.5, 'leastSeconds', 3600),
   gate('slow', 1, 2.1, 'mostSeconds', 120),
   gate('slow', 2, 2.75, 'leastSeconds', 0.6),

@@ -79,6 +79,7 @@ describe('fuse and inrush', () => {
     [{ ...base, peakAmps: 0.1, pulseSeconds: 0.01 }, 'peakAmps', 'The peak at switch-on must not be below the steady current.'],
     [{ ...base, ratedAmps: 0 }, 'ratedAmps', 'Rated current must be 10 mA or more.'],
     [{ ...base, loadAmps: -1 }, 'loadAmps', 'Steady current must be 0 A or more.'],
+    [{ ...base, volts: 400 }, 'volts', 'Circuit volts must be 250 V or less.'],
     [{ ratedAmps: 1 }, 'loadAmps', 'Steady current is missing.'],
     [{ ...base, speed: 'medium' }, 'speed', 'Speed must be one of: fast, slow.'],
   ])('refuses %j at its field', (given, field, sentence) => {
