@@ -1,5 +1,5 @@
 /** The discharge resistor of a step: its author's, or the one that the workings choose for this machine (H3). */
-import { chooseResistor, energyJoules, judgeResistor, secondsToFall } from '@/shared/workings/bleedDown';
+import { chooseResistor, energyJoules, judgeResistor, secondsToFall } from '@/shared/workings/discharge';
 
 import type { Profile, Store } from '../document/profile';
 import type { Settings } from '../document/settings';

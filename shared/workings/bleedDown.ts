@@ -2,27 +2,43 @@
 import { z } from 'zod';
 
 import { formatDuration, formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
-import { nextE24, RESISTOR_WATTS } from '@/shared/workings/preferred';
+import {
+  chooseResistor,
+  energyJoules,
+  JOULES_PER_WATT,
+  judgeResistor,
+  needsDischarge,
+  PEAK_OVERLOAD,
+  resistorChoice,
+  resistorVerdict,
+  secondsToFall,
+} from '@/shared/workings/discharge';
+import type { Plot } from '@/shared/workings/plot';
+import { sampleCurve } from '@/shared/workings/plot';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
-import { defineSheet, numberField } from '@/shared/workings/sheet';
-import { DEAD_VOLTS, HARMLESS_COULOMBS, HARMLESS_JOULES, TOUCH_LIMITS } from '@/shared/workings/touchLimits';
+import { choiceField, defineSheet, numberField, rowsField, textField } from '@/shared/workings/sheet';
+import {
+  CHARGE_LIMITS,
+  DEAD_VOLTS,
+  HARMLESS_COULOMBS,
+  REBOUND_KINDS,
+  REBOUND_SHARES,
+  TOUCH_LIMITS,
+  voltsAtLimit,
+} from '@/shared/workings/touchLimits';
 
-/** Most times its rated watts that a wire-wound resistor takes at the first moment. Common practice, no source. */
-export const PEAK_OVERLOAD = 10;
-/** Most joules per rated watt in one pulse: five times rated for five seconds, the careful end of common practice, no source. */
-export const JOULES_PER_WATT = 25;
-/** Share of the first volts that an old electrolytic may come back to (dielectric absorption 10 to 15 %; from memory). */
-export const REBOUND_SHARE = 0.15;
+const furtherCapacitor = z.strictObject({
+  name: z.string(),
+  joules: z.number(),
+  worstSeconds: z.number(),
+  /** What the tool swallows, worst case. */
+  toolJoules: z.number(),
+  toolVerdict: resistorVerdict,
+  needsDischarge: z.boolean(),
+});
 
-const verdict = z.enum(['continuous', 'pulse', 'too-small', 'none']);
-
-/** How a resistor stands the discharge. */
-export type ResistorVerdict = z.output<typeof verdict>;
-
-const choice = z.strictObject({ ohms: z.number(), watts: z.number(), secondsToSafe: z.number() });
-
-/** A discharge resistor that does it. */
-export type ResistorChoice = z.output<typeof choice>;
+/** A further capacitor, discharged after the first with the same tool. */
+export type FurtherCapacitor = z.output<typeof furtherCapacitor>;
 
 const output = z.strictObject({
   joules: z.number(),
@@ -37,8 +53,10 @@ const output = z.strictObject({
   toolPeakWatts: z.number().nullable(),
   toolPeakAmps: z.number().nullable(),
   toolJoules: z.number().nullable(),
-  toolVerdict: verdict,
-  suggestion: choice.nullable(),
+  /** Over the time to safe, worst case; null without a tool or without a wait. */
+  toolAverageWatts: z.number().nullable(),
+  toolVerdict: resistorVerdict,
+  suggestion: resistorChoice.nullable(),
   reboundVolts: z.number(),
   thresholds: z.array(
     z.strictObject({
@@ -46,54 +64,38 @@ const output = z.strictObject({
       worstSeconds: z.number(),
     }),
   ),
+  chargeThresholds: z.array(
+    z.strictObject({
+      limit: z.strictObject({ name: z.string(), coulombs: z.number().nullable(), joules: z.number().nullable() }),
+      volts: z.number(),
+      worstSeconds: z.number(),
+    }),
+  ),
+  others: z.array(furtherCapacitor),
+  /** All capacitors together, one after the other. */
+  allJoules: z.number(),
+  allSeconds: z.number(),
   /** Whether it must be discharged through a resistor before it is proved dead. */
   needsDischarge: z.boolean(),
 });
 
-/** Result of the sheet; SI, nothing rounded, worst case means the capacitor at its upper tolerance. */
+/** Result of the sheet; SI, nothing rounded, worst case means capacitor and resistors at their upper tolerance. */
 export type BleedDownResult = z.output<typeof output>;
 
-/** Energy of a capacitor, ½CV², in joules. */
-export const energyJoules = (farads: number, volts: number): number => (farads * volts * volts) / 2;
-
-/**
- * Time to fall from one voltage to another through a resistance: t = RC ln(V/V safe).
- * @returns seconds; 0 when it is there already
- */
-export function secondsToFall(farads: number, ohms: number, fromVolts: number, toVolts: number): number {
-  return fromVolts <= toVolts ? 0 : ohms * farads * Math.log(fromVolts / toVolts);
-}
-
-/** Whether a part must be discharged first: more than 350 mJ at more than 60 V d.c., or more than 10 J at any voltage. */
-export function needsDischarge(farads: number, volts: number): boolean {
-  const joules = energyJoules(farads, volts);
-  return (volts > 60 && joules > HARMLESS_JOULES) || joules > 10;
-}
-
-/**
- * Judges a wire-wound resistor across a charged capacitor.
- * @param peakWatts V²/R
- * @param joules what it has to swallow
- */
-export function judgeResistor(peakWatts: number, joules: number, ratedWatts: number): ResistorVerdict {
-  // A resistor chosen to sit on the limit must not fall off it by the last bit of a double.
-  const rated = ratedWatts * (1 + 1e-9);
-  if (peakWatts <= rated) return 'continuous';
-  return peakWatts <= PEAK_OVERLOAD * rated && joules <= JOULES_PER_WATT * rated ? 'pulse' : 'too-small';
-}
-
-/**
- * The fastest E24 resistor that stands the whole discharge alone: of the rating given if that will do, else of the next.
- * @returns null when no single usual resistor does it
- */
-export function chooseResistor(farads: number, volts: number, safeVolts: number, ratedWatts: number): ResistorChoice | null {
-  const joules = energyJoules(farads, volts);
-  const usual = [ratedWatts, ...RESISTOR_WATTS.filter((rating) => rating > ratedWatts)];
-  const watts = usual.find((rating) => joules <= JOULES_PER_WATT * rating);
-  if (watts === undefined) return null;
-  const ohms = nextE24((volts * volts) / (PEAK_OVERLOAD * watts));
-  return { ohms, watts, secondsToSafe: secondsToFall(farads, ohms, volts, safeVolts) };
-}
+const further = z.strictObject({
+  name: textField('Name', 'As on the drawing', 40),
+  farads: numberField({ title: 'Capacitance', description: 'As marked', unit: 'F', min: 1e-12, max: 10 }),
+  volts: numberField({ title: 'Volts', description: 'D.c. volts on it at the start', unit: 'V', min: 0.1, max: 30_000 }),
+  bleederOhms: numberField({
+    title: 'Bleeder',
+    description: 'Across it, measured today; empty for none',
+    unit: 'Ω',
+    min: 0.1,
+    max: 1e9,
+  })
+    .nullable()
+    .default(null),
+});
 
 const inputs = z.strictObject({
   farads: numberField({
@@ -149,19 +151,37 @@ const inputs = z.strictObject({
     min: 0,
     max: 200,
   }).default(50),
+  resistorTolerancePercent: numberField({
+    title: 'Resistor tolerance',
+    description: 'How far bleeder and tool may be above their value; old ones drift up, so measure them',
+    unit: '%',
+    min: 0,
+    max: 100,
+  }).default(5),
+  kind: choiceField('Kind', 'What the capacitor is made of, for how far it comes back', REBOUND_KINDS).default('electrolytic'),
+  others: rowsField({
+    title: 'Further capacitors',
+    description: 'Others of the machine, discharged one after the other with the same tool; those in parallel are one',
+    rowName: 'capacitor',
+    row: further,
+    fewest: 0,
+    most: 24,
+  }).default([]),
 });
 
 const law = [
   'E = ½ × C × V²,  Q = C × V',
   'R = bleeder in parallel with tool,  τ = R × C',
-  't = τ × ln(V ÷ V safe); worst case with C × (1 + tolerance)',
+  't = τ × ln(V ÷ V safe); worst case with C and R at their upper tolerance',
+  'harmless charge: V = Q ÷ C or √(2 × E ÷ C), and the time to there',
+  'rebound: up to 15 % of V for an electrolytic, 5 % paper, 2.5 % ceramic, 2 % film',
   'P peak = V² ÷ R tool; the tool takes E × R ÷ R tool of the energy',
   'a wire-wound resistor stands P peak up to its watts for ever, or up to 10 × its watts if it swallows no more than 25 J a watt in one pulse',
 ];
 const validity =
   'A capacitor that still is one, discharged through resistors alone. An open bleeder discharges nothing: measure it. The pulse rule is for wire-wound resistors, cold at the start, once and then left to cool; carbon, film and wire-wound parts in cases differ, and the maker’s figure comes first. Mind the resistor’s rated volts too.';
 const source =
-  'E = ½CV² and V = V₀·e^(−t/RC): any textbook. Touch limits as named in the answer. Pulse rule: common practice, no source. Rebound of up to 15 % for electrolytics: from memory.';
+  'E = ½CV² and V = V₀·e^(−t/RC): any textbook. Touch limits as named in the answer. Pulse rule: common practice, no source. Rebound (dielectric absorption): electrolytic up to 15 %, films 1 to 2 % at most, public encyclopaedia; ceramic up to 2.5 %, WIMA, technical information; paper 5 %, from memory.';
 const caution =
   'A charged capacitor can kill and burns. All sources out first; insulated probes, one hand, eye protection; through a resistor and never with a bare tool. Measure afterwards, wait, measure again, and leave the link on: charge comes back by itself. Local codes, the maker’s data and licensed practice come first.';
 
@@ -180,6 +200,55 @@ function verdictLine(result: BleedDownResult, toolWatts: number): string | null 
 }
 
 type Inputs = z.output<typeof inputs>;
+interface Discharged {
+  readonly farads: number;
+  readonly volts: number;
+  readonly bleederOhms: number | null;
+}
+
+const parallel = (one: number | null, two: number | null): number => 1 / ((one === null ? 0 : 1 / one) + (two === null ? 0 : 1 / two));
+
+function furtherOf(given: Inputs, { name, ...one }: Discharged & { readonly name: string }): FurtherCapacitor {
+  const { toolOhms } = given;
+  const ohms = parallel(one.bleederOhms, toolOhms);
+  const worstFarads = one.farads * (1 + given.tolerancePercent / 100);
+  const worstJoules = energyJoules(worstFarads, one.volts);
+  return {
+    name,
+    joules: energyJoules(one.farads, one.volts),
+    worstSeconds: secondsToFall(worstFarads, ohms * (1 + given.resistorTolerancePercent / 100), one.volts, given.safeVolts),
+    toolJoules: toolOhms === null ? 0 : (worstJoules * ohms) / toolOhms,
+    toolVerdict:
+      toolOhms === null ? 'none' : judgeResistor((one.volts * one.volts) / toolOhms, (worstJoules * ohms) / toolOhms, given.toolWatts),
+    needsDischarge: needsDischarge(worstFarads, one.volts),
+  };
+}
+
+function plotOf(given: Inputs, result: BleedDownResult): Plot | undefined {
+  const { volts, safeVolts } = given;
+  const end = result.worstSecondsToSafe;
+  if (!(end > 0)) return undefined;
+  const falling = (tau: number) => (seconds: number) => volts * Math.exp(-seconds / tau);
+  const worst = end / Math.log(volts / safeVolts);
+  return {
+    title: 'Volts while it discharges',
+    x: { title: 'Time', unit: 's', scale: 'linear', from: 0, to: end },
+    y: { title: 'Volts', unit: 'V', scale: 'log', to: volts },
+    curves: [
+      { label: 'worst case', role: 'bound', points: sampleCurve(falling(worst), 0, end, 'linear', 2) },
+      { label: 'as marked', role: 'main', points: sampleCurve(falling(result.timeConstantSeconds), 0, result.secondsToSafe, 'linear', 2) },
+    ],
+    points: [{ label: formatDuration(end), x: end, y: safeVolts, role: 'answer' }],
+    bands: [],
+    limits: [
+      ...[...new Set(TOUCH_LIMITS.map((limit) => limit.volts))]
+        .filter((limit) => limit < volts && limit > safeVolts)
+        .map((limit) => ({ label: v(limit), axis: 'y' as const, at: limit })),
+      { label: `safe, ${v(safeVolts)}`, axis: 'y', at: safeVolts },
+    ],
+    words: `On a logarithmic scale the volts fall in a straight line from ${v(volts)} to ${v(safeVolts)}, as marked within ${formatDuration(result.secondsToSafe)}, at worst within ${formatDuration(end)}.`,
+  };
+}
 
 function headlineOf(given: Inputs, result: BleedDownResult): string {
   const time =
@@ -192,7 +261,14 @@ function headlineOf(given: Inputs, result: BleedDownResult): string {
       ? 'Discharge it in stages with a proper discharge set.'
       : `Take ${r(suggestion.ohms)}, ${w(suggestion.watts)}, wire-wound.`;
   const tool = result.toolVerdict === 'too-small' ? ` The tool resistor is too small. ${better}` : '';
-  return `${j(result.joules)}: ${time}.${tool}`;
+  const small = result.others.filter(({ toolVerdict }) => toolVerdict === 'too-small').map(({ name }) => name);
+  const heat = result.others.reduce((sum, one) => sum + one.toolJoules, result.toolJoules ?? 0);
+  const cool = result.others.length > 0 && heat > JOULES_PER_WATT * given.toolWatts ? ' Let the tool cool between them.' : '';
+  const others =
+    result.others.length === 0
+      ? ''
+      : ` All ${formatNumber(result.others.length + 1)}: ${j(result.allJoules)}, ${formatDuration(result.allSeconds)} one after the other.${small.length === 0 ? '' : ` Too small for ${small.join(', ')}.`}${cool}`;
+  return `${j(result.joules)}: ${time}.${tool}${others}`;
 }
 
 function formulaOf(given: Inputs, result: BleedDownResult): readonly string[] {
@@ -201,18 +277,21 @@ function formulaOf(given: Inputs, result: BleedDownResult): readonly string[] {
     `E = ½ × ${f(farads)} × ${v(volts)}² = ${j(result.joules)}; at +${formatNumber(tolerancePercent)} % ${j(result.worstJoules)}`,
     `Q = ${f(farads)} × ${v(volts)} = ${formatQuantity(result.coulombs, 'C', { digits: 3 })}${result.coulombs <= HARMLESS_COULOMBS ? ' (45 μC or less)' : ''}`,
     `τ = ${r(result.ohms)} × ${f(farads)} = ${formatDuration(result.timeConstantSeconds)}`,
-    `t = ${formatDuration(result.timeConstantSeconds)} × ln(${v(volts)} ÷ ${v(safeVolts)}) = ${formatDuration(result.secondsToSafe)}; at +${formatNumber(tolerancePercent)} % ${formatDuration(result.worstSecondsToSafe)}`,
+    `t = ${formatDuration(result.timeConstantSeconds)} × ln(${v(volts)} ÷ ${v(safeVolts)}) = ${formatDuration(result.secondsToSafe)}; at +${formatNumber(tolerancePercent)} % and R +${formatNumber(given.resistorTolerancePercent)} % ${formatDuration(result.worstSecondsToSafe)}`,
   ];
   if (result.bleederSeconds !== null && given.toolOhms !== null)
     lines.push(`through the bleeder alone: ${formatDuration(result.bleederSeconds)}`);
   const tool = verdictLine(result, given.toolWatts);
   if (tool !== null) lines.push(tool);
+  if (result.toolAverageWatts !== null && result.toolPeakWatts !== null)
+    lines.push(`tool: ${w(result.toolPeakWatts)} at the first moment, ${w(result.toolAverageWatts)} on average`);
   const { suggestion } = result;
   if (suggestion !== null)
     lines.push(
       `E24: ${r(suggestion.ohms)}, ${w(suggestion.watts)} wire-wound does it alone in ${formatDuration(suggestion.secondsToSafe)}, worst case`,
     );
-  lines.push(`rebound: may come back to ${v(result.reboundVolts)}; wait, read again, leave the link on`);
+  const back = result.reboundVolts > safeVolts ? `, above ${v(safeVolts)}: wait, read, discharge again` : ': wait, read again';
+  lines.push(`rebound: may come back to ${v(result.reboundVolts)}${back}, leave the link on`);
   for (const { limit, worstSeconds } of result.thresholds) {
     const time = worstSeconds === 0 ? 'below it from the start' : `after ${formatDuration(worstSeconds)}`;
     const { withinSeconds } = limit;
@@ -222,6 +301,16 @@ function formulaOf(given: Inputs, result: BleedDownResult): readonly string[] {
         : `; that standard wants ${formatDuration(withinSeconds)}: ${worstSeconds <= withinSeconds ? 'met' : 'not met'}`;
     lines.push(`${v(limit.volts)} (${limit.name}): ${time}${met}`);
   }
+  for (const { limit, volts: at, worstSeconds } of result.chargeThresholds) {
+    const held = limit.coulombs === null ? j(limit.joules ?? 0) : formatQuantity(limit.coulombs, 'C', { digits: 3 });
+    lines.push(
+      `${held} (${limit.name}): ${worstSeconds === 0 ? 'below it from the start' : `at ${v(at)}, after ${formatDuration(worstSeconds)}`}`,
+    );
+  }
+  for (const one of result.others)
+    lines.push(
+      `${one.name}: ${j(one.joules)}, ${formatDuration(one.worstSeconds)} worst case${one.toolVerdict === 'too-small' ? '; the tool is too small for it' : ''}${one.needsDischarge ? '' : '; need not be discharged first'}`,
+    );
   return lines;
 }
 
@@ -240,6 +329,7 @@ export const sheet = defineSheet({
     'Discharge of 195 μF from 1500 V to 320 V through 50 Ω: TT electronics/Welwyn, Design Tool 4 (S. J. Oxley, 2005)',
     'E24: IEC 60063',
     'Thresholds: IEC 61010-1, IEC 60204-1, IEC 60335-1, NEC 460.6',
+    'Discharge of generated circuits in ngspice, within 1 %',
   ],
   example: { farads: 4700e-6, volts: 40, bleederOhms: 1000, toolOhms: 100, toolWatts: 10 },
   compute(given): SheetAnswer<BleedDownResult> | SheetRefusal {
@@ -251,11 +341,23 @@ export const sheet = defineSheet({
         say: 'Without a bleeder and without a tool resistor the charge has no way out: give one of them.',
       };
     }
-    const ohms = 1 / ((bleederOhms === null ? 0 : 1 / bleederOhms) + (toolOhms === null ? 0 : 1 / toolOhms));
+    const stuck = given.others.findIndex((one) => one.bleederOhms === null && toolOhms === null);
+    if (stuck >= 0) {
+      return {
+        ok: false,
+        field: 'toolOhms',
+        say: `Tool resistor is missing: without it and without a bleeder ${given.others[stuck]?.name ?? ''} has no way out.`,
+      };
+    }
+    const ohms = parallel(bleederOhms, toolOhms);
+    const worstOf = (resistance: number): number => resistance * (1 + given.resistorTolerancePercent / 100);
     const worstFarads = farads * (1 + given.tolerancePercent / 100);
     const worstJoules = energyJoules(worstFarads, volts);
     const toolPeakWatts = toolOhms === null ? null : (volts * volts) / toolOhms;
     const toolJoules = toolOhms === null ? null : (worstJoules * ohms) / toolOhms;
+    const worstSecondsToSafe = secondsToFall(worstFarads, worstOf(ohms), volts, safeVolts);
+    const fallTo = (low: number): number => secondsToFall(worstFarads, worstOf(ohms), volts, low);
+    const others = given.others.map((one) => furtherOf(given, one));
     const result: BleedDownResult = {
       joules: energyJoules(farads, volts),
       worstJoules,
@@ -263,17 +365,35 @@ export const sheet = defineSheet({
       ohms,
       timeConstantSeconds: ohms * farads,
       secondsToSafe: secondsToFall(farads, ohms, volts, safeVolts),
-      worstSecondsToSafe: secondsToFall(worstFarads, ohms, volts, safeVolts),
-      bleederSeconds: bleederOhms === null ? null : secondsToFall(worstFarads, bleederOhms, volts, safeVolts),
+      worstSecondsToSafe,
+      bleederSeconds: bleederOhms === null ? null : secondsToFall(worstFarads, worstOf(bleederOhms), volts, safeVolts),
       toolPeakWatts,
       toolPeakAmps: toolOhms === null ? null : volts / toolOhms,
       toolJoules,
+      toolAverageWatts: toolJoules === null || worstSecondsToSafe === 0 ? null : toolJoules / worstSecondsToSafe,
       toolVerdict: toolPeakWatts === null || toolJoules === null ? 'none' : judgeResistor(toolPeakWatts, toolJoules, toolWatts),
       suggestion: chooseResistor(worstFarads, volts, safeVolts, toolWatts),
-      reboundVolts: REBOUND_SHARE * volts,
-      thresholds: TOUCH_LIMITS.map((limit) => ({ limit, worstSeconds: secondsToFall(worstFarads, ohms, volts, limit.volts) })),
+      reboundVolts: REBOUND_SHARES[given.kind] * volts,
+      thresholds: TOUCH_LIMITS.map((limit) => ({ limit, worstSeconds: fallTo(limit.volts) })),
+      chargeThresholds: CHARGE_LIMITS.map((limit) => {
+        const at = voltsAtLimit(limit, worstFarads);
+        return { limit, volts: at, worstSeconds: fallTo(at) };
+      }),
+      others,
+      allJoules: others.reduce((sum, one) => sum + one.joules, energyJoules(farads, volts)),
+      allSeconds: others.reduce((sum, one) => sum + one.worstSeconds, worstSecondsToSafe),
       needsDischarge: needsDischarge(worstFarads, volts),
     };
-    return { ok: true, result, headline: headlineOf(given, result), formula: formulaOf(given, result), caution, validity, source };
+    const plot = plotOf(given, result);
+    return {
+      ok: true,
+      result,
+      headline: headlineOf(given, result),
+      formula: formulaOf(given, result),
+      caution,
+      validity,
+      source,
+      ...(plot !== undefined && { plot }),
+    };
   },
 });

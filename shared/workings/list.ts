@@ -6,7 +6,9 @@ import { sheet as lostReturn } from '@/shared/workings/lostReturn';
 import { sheet as overVoltageTrip } from '@/shared/workings/overVoltageTrip';
 import { sheet as passElement } from '@/shared/workings/passElement';
 import { sheet as railLimits } from '@/shared/workings/railLimits';
+import { sheet as railLoadPlan } from '@/shared/workings/railLoadPlan';
 import { sheet as readingLimit } from '@/shared/workings/readingLimit';
+import { sheet as reforming } from '@/shared/workings/reforming';
 import { sheet as refitTrip } from '@/shared/workings/refitTrip';
 import { sheet as seriesLamp } from '@/shared/workings/seriesLamp';
 import type { Sheet } from '@/shared/workings/sheet';
@@ -21,6 +23,8 @@ export type AnySheet = Sheet;
 export const SHEETS: readonly AnySheet[] = [
   seriesLamp,
   bleedDown,
+  reforming,
+  railLoadPlan,
   passElement,
   switchingRegulator,
   smoothingRipple,

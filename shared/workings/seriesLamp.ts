@@ -2,38 +2,20 @@
 import { z } from 'zod';
 
 import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
-import { bisect } from '@/shared/workings/bisect';
 import type { Lamp, LampChoice } from '@/shared/workings/lamp';
-import { brightnessInWords, coldOhms, CURRENT_EXPONENT, floorVolts, hotOhms, lampAmps, lampFor } from '@/shared/workings/lamp';
+import { coldOhms, hotOhms, lampAmps, lampFor } from '@/shared/workings/lamp';
+import { lampPlot } from '@/shared/workings/lampPlot';
+import type { LampLoad } from '@/shared/workings/lampPoints';
+import { operatingPoint, operatingPoints, peakVolts, pointAt, reservoirOhms } from '@/shared/workings/lampPoints';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
 
-const point = z.strictObject({
-  lampVolts: z.number(),
-  loadVolts: z.number(),
-  amps: z.number(),
-  lampWatts: z.number(),
-  loadWatts: z.number(),
-  /** False where the least disturbance carries it away, as on the upper branch of a constant-power load. */
-  stable: z.boolean(),
-  brightness: z.string(),
-});
-
-/** One state in which lamp and load agree. */
-export type OperatingPoint = z.output<typeof point>;
-
-/** What the lamp is in series with. */
-export type LampLoad =
-  | { readonly kind: 'short' }
-  | { readonly kind: 'resistance'; readonly ohms: number }
-  | { readonly kind: 'constant-power'; readonly watts: number };
-
 const output = z.strictObject({
-  points: z.array(point),
+  points: z.array(operatingPoint),
   /** The stable point, or null where there is none or the supply gives up there. */
-  settled: point.nullable(),
+  settled: operatingPoint.nullable(),
   /** What a dead short behind the lamp does: the lamp takes the whole supply. */
-  deadShort: point,
+  deadShort: operatingPoint,
   /** Switch-mode only: it starts, starves and stops over and over. */
   willTick: z.boolean(),
   /** Most watts that any load can draw through this lamp. */
@@ -58,49 +40,6 @@ export type SeriesLampResult = z.output<typeof output>;
 
 /** Share of the mains volts below which a switch-mode supply is taken to give up. Common practice, no source. */
 export const GIVES_UP_SHARE = 0.7;
-
-function pointAt(lamp: Lamp, lampVolts: number, loadVolts: number, stable: boolean): OperatingPoint {
-  const amps = lampAmps(lamp, lampVolts);
-  return {
-    lampVolts,
-    loadVolts,
-    amps,
-    lampWatts: lampVolts * amps,
-    loadWatts: loadVolts * amps,
-    stable,
-    brightness: brightnessInWords(lamp, lampVolts),
-  };
-}
-
-/** Lamp volts at which the load gets the most watts; below them the load sees a stiff source, above them a starving one. */
-function peakVolts(lamp: Lamp, supplyVolts: number): number {
-  // On the law (V − v)·v^0.55 peaks at 0.55/1.55 of V; on the cold filament (V − v)·v at V/2; between the two at the joint.
-  const onLaw = (supplyVolts * CURRENT_EXPONENT) / (1 + CURRENT_EXPONENT);
-  return Math.min(Math.max(onLaw, floorVolts(lamp)), supplyVolts / 2);
-}
-
-/**
- * Every state in which lamp and load agree, the stable one first.
- * @param supplyVolts rms
- * @returns one point for a resistance or a short; two, one or none for constant power
- */
-export function operatingPoints(lamp: Lamp, supplyVolts: number, load: LampLoad): OperatingPoint[] {
-  if (load.kind === 'short') return [pointAt(lamp, supplyVolts, 0, true)];
-  if (load.kind === 'resistance') {
-    const { ohms } = load;
-    const lampVolts = bisect((volts) => volts + lampAmps(lamp, volts) * ohms - supplyVolts, 0, supplyVolts);
-    return [pointAt(lamp, lampVolts, lampAmps(lamp, lampVolts) * ohms, true)];
-  }
-  const { watts } = load;
-  const offered = (volts: number): number => (supplyVolts - volts) * lampAmps(lamp, volts);
-  const peak = peakVolts(lamp, supplyVolts);
-  if (offered(peak) < watts) return [];
-  const lower = bisect((volts) => offered(volts) - watts, 0, peak);
-  const upper = bisect((volts) => watts - offered(volts), peak, supplyVolts);
-  // A load that holds its watts has a falling resistance −V/I; it settles only where the lamp's own rise is the smaller one.
-  const stable = pointAt(lamp, lower, watts / lampAmps(lamp, lower), lower < peak);
-  return lower < upper ? [stable, pointAt(lamp, upper, watts / lampAmps(lamp, upper), false)] : [stable];
-}
 
 const inputs = z.strictObject({
   supplyVolts: numberField({ title: 'Mains volts', description: 'Mains volts, rms', unit: 'V', min: 6, max: 480 }),
@@ -142,14 +81,14 @@ type Inputs = z.output<typeof inputs>;
 const law = [
   'I₀ = W₀ ÷ V₀,  I = I₀ × (V ÷ V₀)^0.55,  never more than V ÷ R cold,  R cold = V₀² ÷ W₀ ÷ ratio',
   'resistance: V lamp + I × R = V mains',
-  'transformer, rectifier and reservoir: taken as the resistance V mains² ÷ plate watts',
+  'transformer, rectifier and reservoir: R load = (√2 × V mains)² ÷ plate watts;  tan θ − θ = π × R lamp ÷ (2 × R load);  reservoir cos θ of its volts',
   'switch-mode: (V mains − V lamp) × I = watts; two points or none; the one with the lower lamp volts is stable',
   'lamp to take: 1 to 2 × plate watts for a transformer supply, 3 × or more for a switch-mode one',
 ];
 const validity =
-  'Settled rms values on a sine. The law is published for volts near the rated ones and is stretched here down to the cold filament; lamp amps spread by ±10 %. A rectifier draws its current in peaks, so its plate watts as a resistance are a first estimate. A halogen or LED lamp does not follow this law.';
+  'Settled rms values on a sine. The law is published for volts near the rated ones and is stretched here down to the cold filament; lamp amps spread by ±10 %. A rectifier’s current comes in pulses: its reservoir is taken as large, its load as one that falls with the volts, its transformer as ideal; a regulator that holds its amps pulls the reservoir lower. A halogen or LED lamp does not follow this law.';
 const source =
-  'Lamp law and exponent 0.55: Fink & Beaty, Standard Handbook for Electrical Engineers, 11th ed. (1978), p. 22-8. Hot-to-cold ratio 15: 144 Ω hot and about 9.5 Ω cold of a 100 W, 120 V lamp. Choice of lamp: common practice, no source.';
+  'Lamp law and exponent 0.55: Fink & Beaty, Standard Handbook for Electrical Engineers, 11th ed. (1978), p. 22-8. Hot-to-cold ratio 15: 144 Ω hot and about 9.5 Ω cold of a 100 W, 120 V lamp. Rectifier behind a resistance: Schade (1943), any textbook. Choice of lamp: common practice, no source.';
 const caution =
   'The lamp limits current and does nothing else: everything on the mains side stays live at full mains volts, and the lamp is no switch. Through an RCD, behind a guard, nobody touching; local codes, the maker’s data and licensed practice come first.';
 
@@ -160,7 +99,7 @@ function loadOf(given: Inputs): LampLoad | SheetRefusal {
     return { kind: 'resistance', ohms: given.loadOhms };
   }
   if (given.loadWatts === null) return { ok: false, field: 'loadWatts', say: 'Load watts are missing.' };
-  if (given.load === 'rectifier') return { kind: 'resistance', ohms: (given.supplyVolts * given.supplyVolts) / given.loadWatts };
+  if (given.load === 'rectifier') return { kind: 'reservoir', watts: given.loadWatts };
   return { kind: 'constant-power', watts: given.loadWatts };
 }
 
@@ -178,6 +117,9 @@ function headlineOf(given: Inputs, result: SeriesLampResult): string {
     return `Will tick: ${watts(given.lampWatts)} of lamp cannot carry a switch-mode supply of ${watts(given.loadWatts ?? 0)}.${better}`;
   }
   const point = settled ?? deadShort;
+  if (point.reservoirShare !== null) {
+    return `Lamp ${volts(point.lampVolts)}, ${point.brightness}; the reservoir comes to ${formatNumber(point.reservoirShare * 100, 2)} % of its volts, ${amps(point.amps)}, ${watts(point.loadWatts)}.`;
+  }
   return `Lamp ${volts(point.lampVolts)}, ${point.brightness}; load ${volts(point.loadVolts)}, ${amps(point.amps)}, ${watts(point.loadWatts)}.`;
 }
 
@@ -187,14 +129,21 @@ function formulaOf(given: Inputs, load: LampLoad, result: SeriesLampResult): rea
     `I₀ = ${watts(given.lampWatts)} ÷ ${volts(given.lampVolts)} = ${amps(given.lampWatts / given.lampVolts)}`,
     `R hot = ${volts(given.lampVolts)}² ÷ ${watts(given.lampWatts)} = ${ohms(result.hotOhms)}; R cold = ${ohms(result.hotOhms)} ÷ ${formatNumber(given.coldRatio)} = ${ohms(result.coldOhms)}`,
   ];
-  if (given.load === 'rectifier' && load.kind === 'resistance') {
-    lines.push(`R load = ${volts(given.supplyVolts)}² ÷ ${watts(given.loadWatts ?? 0)} = ${ohms(load.ohms)}`);
-  }
-  for (const point of result.points) {
+  if (load.kind === 'reservoir') {
+    const [point] = result.points;
     lines.push(
-      `${volts(point.lampVolts)} + ${volts(point.loadVolts)} = ${volts(given.supplyVolts)} at ${amps(point.amps)}; lamp ${watts(point.lampWatts)}, load ${watts(point.loadWatts)}${point.stable ? '' : ' (not stable)'}`,
+      `R load = (√2 × ${volts(given.supplyVolts)})² ÷ ${watts(load.watts)} = ${ohms(reservoirOhms(given.supplyVolts, load.watts))}`,
     );
-  }
+    if (point !== undefined)
+      lines.push(
+        `lamp ${volts(point.lampVolts)}, inlet ${volts(point.loadVolts)} r.m.s. at ${amps(point.amps)}; reservoir ${formatNumber((point.reservoirShare ?? 0) * 100, 3)} % of its volts at full mains; lamp ${watts(point.lampWatts)}, load ${watts(point.loadWatts)}`,
+      );
+  } else
+    for (const point of result.points) {
+      lines.push(
+        `${volts(point.lampVolts)} + ${volts(point.loadVolts)} = ${volts(given.supplyVolts)} at ${amps(point.amps)}; lamp ${watts(point.lampWatts)}, load ${watts(point.loadWatts)}${point.stable ? '' : ' (not stable)'}`,
+      );
+    }
   if (load.kind === 'constant-power') {
     lines.push(`most that this lamp lets through: ${watts(result.mostLoadWatts)}; wanted: ${watts(load.watts)}`);
     const [first] = result.points;
@@ -225,6 +174,8 @@ export const sheet = defineSheet({
   checks: [
     'Re-rating exponents: Standard Handbook for Electrical Engineers, as quoted',
     'Worked example of a tungsten lamp at 105 % current: SPIE Field Guide to Illumination, p. 21',
+    'Rectifier and reservoir behind a resistance: closed form, and transients in ngspice within 1 %',
+    'Resistance and constant power: operating points of generated networks in ngspice, within 0.1 %',
     'Measured cold and hot resistance of a 3 V lamp: New Physics: Sae Mulli 74 (3), 311',
   ],
   example: { supplyVolts: 120, lampVolts: 120, lampWatts: 100, load: 'rectifier', loadWatts: 75 },
@@ -239,6 +190,9 @@ export const sheet = defineSheet({
     }
     const load = loadOf(given);
     if ('ok' in load) return load;
+    // A short has no plate watts; a resistance has those of the mains across it.
+    const plate =
+      load.kind === 'short' ? given.loadWatts : load.kind === 'resistance' ? (supplyVolts * supplyVolts) / load.ohms : load.watts;
     const lamp: Lamp = { ratedVolts: lampVolts, ratedWatts: lampWatts, coldRatio };
     const points = operatingPoints(lamp, supplyVolts, load);
     const settled = points.find((point) => point.stable) ?? null;
@@ -253,8 +207,17 @@ export const sheet = defineSheet({
       hotOhms: hotOhms(lamp),
       coldOhms: coldOhms(lamp),
       coldPeakAmps: (supplyVolts * Math.SQRT2) / coldOhms(lamp),
-      recommended: given.loadWatts === null ? null : lampFor(given.loadWatts, given.load === 'switch-mode' ? 'switch-mode' : 'linear'),
+      recommended: plate === null ? null : lampFor(plate, given.load === 'switch-mode' ? 'switch-mode' : 'linear'),
     };
-    return { ok: true, result, headline: headlineOf(given, result), formula: formulaOf(given, load, result), caution, validity, source };
+    return {
+      ok: true,
+      result,
+      headline: headlineOf(given, result),
+      formula: formulaOf(given, load, result),
+      caution,
+      validity,
+      source,
+      plot: lampPlot(lamp, supplyVolts, load, points),
+    };
   },
 });

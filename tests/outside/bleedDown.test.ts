@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 
-import { needsDischarge } from '@/shared/workings/bleedDown';
+import { needsDischarge } from '@/shared/workings/discharge';
 import { HARMLESS_COULOMBS, HARMLESS_JOULES, TOUCH_LIMITS } from '@/shared/workings/touchLimits';
 
 // Times, energies and charges stand as rows in values/bleedDown.ts.

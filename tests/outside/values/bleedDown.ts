@@ -1,5 +1,6 @@
 /** Published values of discharge. */
-import { energyJoules, secondsToFall } from '@/shared/workings/bleedDown';
+import { energyJoules, secondsToFall } from '@/shared/workings/discharge';
+import { CHARGE_LIMITS, REBOUND_SHARES, voltsAtLimit } from '@/shared/workings/touchLimits';
 import type { OutsideValue, SheetValue } from '@/tests/outside/outsideValue';
 
 const tool = 'TT electronics/Welwyn, “Design Tool 4”, S. J. Oxley, March 2005: 195 μF, 1500 V to 320 V, 50 Ω';
@@ -93,5 +94,29 @@ export const values: readonly OutsideValue[] = [
     expected: 0.35,
     within: 0.0005,
     gives: () => energyJoules(3.111e-9, 15_000),
+  },
+  {
+    sheet,
+    what: 'the exempt 60 μC are what 1 μF holds at 60 V',
+    source: 'IEC 60204-1, 6.2.4 (clause text): down to 60 V, parts of 60 μC exempt',
+    expected: 60,
+    within: 0.001,
+    gives: () => (CHARGE_LIMITS[0] === undefined ? 0 : voltsAtLimit(CHARGE_LIMITS[0], 1e-6)),
+  },
+  {
+    sheet,
+    what: 'an electrolytic may come back to, percent',
+    source: 'Public encyclopaedia, dielectric absorption: as much as 15 % for electrolytic capacitors',
+    expected: 15,
+    within: 0,
+    gives: () => REBOUND_SHARES.electrolytic * 100,
+  },
+  {
+    sheet,
+    what: 'a ceramic one, percent',
+    source: 'WIMA, technical information, dielectric absorption: Z5U 2.00 to 2.50 %',
+    expected: 2.5,
+    within: 0,
+    gives: () => REBOUND_SHARES.ceramic * 100,
   },
 ];

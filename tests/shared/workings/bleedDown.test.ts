@@ -1,7 +1,9 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
-import { chooseResistor, judgeResistor, needsDischarge, PEAK_OVERLOAD, secondsToFall, sheet } from '@/shared/workings/bleedDown';
+import { sheet } from '@/shared/workings/bleedDown';
+import { chooseResistor, judgeResistor, needsDischarge, PEAK_OVERLOAD, secondsToFall } from '@/shared/workings/discharge';
+import { plotFaults } from '@/shared/workings/plot';
 import { E24, nextE24 } from '@/shared/workings/preferred';
 import { runSheet } from '@/shared/workings/sheet';
 
@@ -89,7 +91,7 @@ describe('chooseResistor', () => {
 describe('sheet', () => {
   it('answers the example in one line', () => {
     const answer = runSheet(sheet, sheet.example);
-    expect(answer.ok && answer.headline).toBe('3.76 J: 1.33 s to 5 V, worst case.');
+    expect(answer.ok && answer.headline).toBe('3.76 J: 1.4 s to 5 V, worst case.');
     expect(answer).toMatchObject({ ok: true, result: { toolVerdict: 'pulse', needsDischarge: false } });
   });
 
@@ -97,13 +99,64 @@ describe('sheet', () => {
     const answer = runSheet(sheet, { farads: 1000e-6, volts: 450, toolOhms: 100, toolWatts: 5 });
     expect(answer).toMatchObject({ ok: true, result: { toolVerdict: 'too-small', needsDischarge: true } });
     expect(answer.ok && answer.headline).toBe(
-      '101 J: 675 ms to 5 V, worst case. The tool resistor is too small. Take 3 kΩ, 7 W, wire-wound.',
+      '101 J: 709 ms to 5 V, worst case. The tool resistor is too small. Take 3 kΩ, 7 W, wire-wound.',
     );
   });
 
   it('gives up on a single resistor where none is large enough', () => {
     const answer = runSheet(sheet, { farads: 1, volts: 400, toolOhms: 1000, toolWatts: 10 });
     expect(answer.ok && answer.headline).toMatch(/in stages with a proper discharge set/);
+  });
+
+  it('takes several capacitors one after the other with the same tool, and names those for which it is too small', () => {
+    const answer = runSheet(sheet, {
+      ...sheet.example,
+      others: [
+        { name: 'C2', farads: 1e-3, volts: 450 },
+        { name: 'C3', farads: 1e-6, volts: 40, bleederOhms: 1e4 },
+      ],
+    });
+    if (!answer.ok) throw new Error(answer.say);
+    expect(answer.headline).toBe('3.76 J: 1.4 s to 5 V, worst case. All 3: 105 J, 2.11 s one after the other. Too small for C2.');
+    const { allJoules, allSeconds, joules, worstSecondsToSafe, others } = answer.result;
+    expect(
+      close(
+        allJoules,
+        others.reduce((sum, one) => sum + one.joules, joules),
+      ),
+    ).toBe(true);
+    expect(
+      close(
+        allSeconds,
+        others.reduce((sum, one) => sum + one.worstSeconds, worstSecondsToSafe),
+      ),
+    ).toBe(true);
+    expect(others.map(({ needsDischarge: needs }) => needs)).toEqual([true, false]);
+  });
+
+  it('lets the tool cool where each alone is well but all together are not', () => {
+    const others = Array.from({ length: 3 }, (_, n) => ({ name: `C${String(n)}`, farads: 0.08, volts: 40 }));
+    expect(runSheet(sheet, { farads: 0.08, volts: 40, toolOhms: 100, toolWatts: 10, others })).toMatchObject({
+      headline: expect.stringMatching(/Let the tool cool between them\.$/) as string,
+    });
+  });
+
+  it('says how far it comes back by its kind, and to discharge again where that is too much', () => {
+    const said = (kind: string) => {
+      const answer = runSheet(sheet, { ...sheet.example, kind });
+      return answer.ok ? answer.formula.join(' ') : '';
+    };
+    expect(said('electrolytic')).toContain('may come back to 6 V, above 5 V: wait, read, discharge again, leave the link on');
+    expect(said('film')).toContain('may come back to 800 mV: wait, read again, leave the link on');
+  });
+
+  it('draws its fall, straight on a logarithmic scale, to the safe volts', () => {
+    const answer = runSheet(sheet, sheet.example);
+    const plot = answer.ok ? answer.plot : undefined;
+    expect(plot === undefined ? ['none'] : plotFaults(plot)).toEqual([]);
+    for (const curve of plot?.curves ?? []) expect(curve.points.at(-1)?.[1]).toBeCloseTo(5, 9);
+    const below = runSheet(sheet, { ...sheet.example, volts: 3 });
+    expect(below.ok && below.plot).toBeUndefined();
   });
 
   it('shares the energy between bleeder and tool without a remainder', () => {
@@ -171,6 +224,16 @@ describe('sheet', () => {
     [{ farads: 1e-6, volts: -40, toolOhms: 100 }, 'volts', 'Volts must be 100 mV or more.'],
     [{ farads: 1e-6, volts: 40 }, 'toolOhms', 'Without a bleeder and without a tool resistor the charge has no way out: give one of them.'],
     [{ volts: 40, toolOhms: 100 }, 'farads', 'Capacitance is missing.'],
+    [
+      { farads: 1e-6, volts: 40, bleederOhms: 1000, others: [{ name: 'C2', farads: 1e-6, volts: 9 }] },
+      'toolOhms',
+      'Tool resistor is missing: without it and without a bleeder C2 has no way out.',
+    ],
+    [
+      { farads: 1e-6, volts: 40, toolOhms: 100, others: [{ name: 'C2', farads: -1, volts: 9 }] },
+      'others.0.farads',
+      'Capacitor 1: Capacitance must be 1 pF or more.',
+    ],
     [{ farads: 1e-6, volts: 40, toolOhms: 100, safeVolts: 80 }, 'safeVolts', 'Safe volts must be 60 V or less.'],
   ])('refuses %j at %s', (input, field, say) => {
     expect(runSheet(sheet, input)).toEqual({ ok: false, field, say });

@@ -3,8 +3,10 @@ import { describe, expect, it } from 'vitest';
 
 import type { Lamp } from '@/shared/workings/lamp';
 import { brightnessInWords, lampAmps, lampFor } from '@/shared/workings/lamp';
-import type { LampLoad } from '@/shared/workings/seriesLamp';
-import { operatingPoints, sheet } from '@/shared/workings/seriesLamp';
+import type { LampLoad } from '@/shared/workings/lampPoints';
+import { operatingPoints } from '@/shared/workings/lampPoints';
+import { reservoirBehind } from '@/shared/workings/reservoirLoad';
+import { sheet } from '@/shared/workings/seriesLamp';
 import { runSheet } from '@/shared/workings/sheet';
 
 const bench = { supplyVolts: 120, lampVolts: 120, lampWatts: 100 };
@@ -96,10 +98,39 @@ describe('operatingPoints', () => {
   });
 });
 
+describe('a rectifier with its reservoir', () => {
+  it('balances: what the source gives, pulse by pulse, is heat in the lamp and watts in the load', () => {
+    fc.assert(
+      fc.property(supply, wide(0.05, 1e5), wide(1, 1e4), (volts, seriesOhms, loadOhms) => {
+        const { halfAngle, seriesWatts, loadWatts } = reservoirBehind(volts, seriesOhms, loadOhms);
+        fc.pre(halfAngle > 0.05);
+        const given = ((2 * volts * volts) / (Math.PI * seriesOhms)) * (halfAngle - Math.sin(halfAngle) * Math.cos(halfAngle));
+        expect(close(given, seriesWatts + loadWatts)).toBe(true);
+      }),
+      { numRuns: 500 },
+    );
+  });
+
+  it('settles on the lamp’s own law, lower with more plate watts and higher with a larger lamp', () => {
+    fc.assert(
+      fc.property(lamps, supply, wide(0.1, 1e4), fc.double({ min: 1.1, max: 10, noNaN: true }), (lamp, supplyVolts, watts, times) => {
+        const at = (one: Lamp, plate: number) => operatingPoints(one, supplyVolts, { kind: 'reservoir', watts: plate })[0];
+        const point = at(lamp, watts);
+        expect(point !== undefined && close(point.amps, lampAmps(lamp, point.lampVolts))).toBe(true);
+        const share = point?.reservoirShare ?? 0;
+        expect(at(lamp, watts * times)?.reservoirShare ?? 1).toBeLessThanOrEqual(share + 1e-12);
+        expect(at({ ...lamp, ratedWatts: lamp.ratedWatts * times }, watts)?.reservoirShare ?? 0).toBeGreaterThanOrEqual(share - 1e-12);
+      }),
+    );
+  });
+});
+
 describe('sheet', () => {
   it('answers the example in one line', () => {
     const answer = runSheet(sheet, sheet.example);
-    expect(answer.ok && answer.headline).toBe('Lamp 36.7 V, yellow, clearly lit; load 83.3 V, 434 mA, 36.2 W.');
+    expect(answer.ok && answer.headline).toBe(
+      'Lamp 33.5 V, yellow, clearly lit; the reservoir comes to 64 % of its volts, 413 mA, 30.4 W.',
+    );
   });
 
   it('gives the lamp everything in a dead short', () => {
@@ -118,6 +149,13 @@ describe('sheet', () => {
     expect(runSheet(sheet, { ...bench, lampWatts: 200, load: 'switch-mode', loadWatts: 60 })).toMatchObject({
       result: { willTick: false },
     });
+  });
+
+  it('names a lamp for a plain resistance too, by the watts that it has on the mains', () => {
+    expect(runSheet(sheet, { ...bench, load: 'resistance', loadOhms: 240 })).toMatchObject({
+      result: { recommended: { leastWatts: 60, totalWatts: 60 } },
+    });
+    expect(runSheet(sheet, { ...bench, load: 'short' })).toMatchObject({ result: { recommended: null } });
   });
 
   it('says what a plate rating of a small or a huge supply needs', () => {
@@ -157,7 +195,7 @@ describe('sheet', () => {
         const answer = runSheet(sheet, given);
         // JSON writes NaN and the infinities as null.
         if (answer.ok)
-          for (const point of [...answer.result.points, answer.result.deadShort]) expect(JSON.stringify(point)).not.toContain('null');
+          for (const point of [...answer.result.points, answer.result.deadShort]) expect(JSON.stringify({ ...point, reservoirShare: 0 })).not.toContain('null');
         expect(JSON.stringify(answer)).not.toMatch(/NaN|Infinity|no value|over range/);
       }),
       { numRuns: 500 },
