@@ -42,8 +42,8 @@ describe('simple formula, ripple = I ÷ (f × C)', () => {
     expect(answer.result.simple.highVolts).toBeCloseTo(15.37, 2);
     expect(answer.result.simple.highVolts / 100).toBeCloseTo(0.154, 3);
     expect(answer.result.simple.rippleVolts).toBeCloseTo(1, 2);
-    // The formula overstates: exactly it is some 7 % less.
-    expect(answer.result.exact.rippleVolts).toBeGreaterThan(0.9);
+    // The formula overstates: exactly it is some 13 % less, for the capacitor feeds the load for nine tenths of the time only.
+    expect(answer.result.exact.rippleVolts).toBeGreaterThan(0.85);
     expect(answer.result.exact.rippleVolts).toBeLessThan(1);
   });
 });
