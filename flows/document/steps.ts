@@ -47,9 +47,9 @@ export const limitSchema = z.discriminatedUnion('is', [
 ]);
 export type Limit = z.infer<typeof limitSchema>;
 
-export const WORKINGS_SHEETS = ['series-lamp', 'bleed-down', 'rail-limits', 'reading-limit', 'wire-drop', 'fuse-inrush', 'over-voltage-trip', 'refit-trip', 'lost-return'] as const;
+export const WORKINGS_SHEETS = ['series-lamp', 'bleed-down', 'rail-limits', 'reading-limit', 'wire-drop', 'fuse-inrush', 'over-voltage-trip', 'refit-trip', 'lost-return', 'reforming', 'rail-load-plan', 'pass-element'] as const;
 /** A sheet shown in the step for this machine, with what the author fixes; the rest comes from the profile. */
-const workingsRef = z.strictObject({ sheet: z.enum(WORKINGS_SHEETS), lampWatts: z.number().positive().optional(), /** share of the plate watts that the load of this step draws */ loadShare: z.number().positive().max(1).optional(), store: idSchema.optional(), toolOhms: z.number().positive().optional(), rail: idSchema.optional(), conductor: idSchema.optional(), /** the board that goes in next */ board: idSchema.optional(), /** the counted exit that is taken once for each board that is in */ boardsIn: z.strictObject({ step: idSchema, exit: idSchema }).optional() });
+const workingsRef = z.strictObject({ sheet: z.enum(WORKINGS_SHEETS), lampWatts: z.number().positive().optional(), /** share of the plate watts that the load of this step draws */ loadShare: z.number().positive().max(1).optional(), store: idSchema.optional(), toolOhms: z.number().positive().optional(), toolWatts: z.number().positive().optional(), /** years without volts that a plan for reforming reckons with */ storageYears: z.number().nonnegative().max(150).optional(), rail: idSchema.optional(), conductor: idSchema.optional(), /** the board that goes in next */ board: idSchema.optional(), /** the counted exit that is taken once for each board that is in */ boardsIn: z.strictObject({ step: idSchema, exit: idSchema }).optional() });
 
 const figureSchema = z.union([
   z.strictObject({ points: z.array(idSchema).min(1).max(12), caption: text(120).optional() }),

@@ -7,11 +7,13 @@ import { uncertaintyOf } from '@/shared/workings/readingLimit';
 import type { AccuracySpec } from '@/shared/workings/readingLimit';
 
 import type { Quantity } from '../document/ids';
-import type { Profile, Rail } from '../document/profile';
+import type { Profile, Rail, Store } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { Limit, Step } from '../document/steps';
 import { partsToDischarge } from '../facts/stores';
+import { dischargeTool } from './dischargeTool';
 import { lostReturnOf } from './lostReturnOf';
+import { loadPlanInputs, passInputs, reformInputs } from './supplyInputs';
 
 type Reference = NonNullable<Step['workings']>;
 
@@ -46,9 +48,16 @@ export function workingsOf(step: Step, profile: Profile, settings: Settings, now
   const lamp = step.kind === 'energise' || step.kind === 'raise' ? step.lampWatts : undefined;
   // a soak reads each row again and again: `p5-2` is the second reading of p5
   const row = now === null ? {} : ofRow(isOfProfile(profile, now.row) ? now.row : now.row.replace(/-\d+$/, ''));
-  const reference = { ...(lamp === undefined ? {} : { lampWatts: lamp }), ...row, ...step.workings };
+  const reference = { ...(lamp === undefined ? {} : { lampWatts: lamp }), ...row, ...toolOf(step, profile, settings), ...step.workings };
   const inputs = inputsOf(reference, profile, settings, boardsIn(step.workings, place));
   return inputs === null ? null : work(reference.sheet, { ...inputs, ...(now === null ? {} : taken(reference.sheet, step.kind, now, inputs)) });
+}
+
+/** A discharge step has its own tool, or the one that the machine chooses for it. */
+function toolOf(step: Step, profile: Profile, settings: Settings): Pick<Reference, 'toolOhms' | 'toolWatts'> {
+  if (step.kind !== 'discharge') return {};
+  const { ohms, watts } = dischargeTool(step, profile, settings);
+  return { toolOhms: ohms, toolWatts: watts };
 }
 
 /** How many boards are in, by the counted exit that the author names; null where nothing says it. A step of a called tree counts in its own call. */
@@ -115,11 +124,14 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings, bo
       return reference.lampWatts === undefined
         ? null
         : { supplyVolts: mains.volts, lampVolts: mains.volts, lampWatts: reference.lampWatts, load: profile.supplyKind === 'switch-mode' ? 'switch-mode' : 'rectifier', loadWatts: mains.voltAmps * (reference.loadShare ?? 1) };
-    case 'bleed-down': {
-      const stores = partsToDischarge(profile, settings).length > 0 ? partsToDischarge(profile, settings) : profile.stores;
-      const store = profile.stores.find((s) => s.id === reference.store) ?? [...stores].sort((a, b) => b.farads * b.voltsWorked ** 2 - a.farads * a.voltsWorked ** 2)[0];
-      return store === undefined ? null : { farads: store.farads, volts: store.voltsWorked, safeVolts: settings.deadVolts, bleederOhms: null, toolOhms: reference.toolOhms ?? null };
-    }
+    case 'bleed-down':
+      return bleedInputs(reference, profile, settings);
+    case 'reforming':
+      return reformInputs(storesOf(reference, profile, settings)[0], reference.storageYears);
+    case 'rail-load-plan':
+      return loadPlanInputs(profile, reference.rail);
+    case 'pass-element':
+      return passInputs(profile, heaviestRail(reference, profile.rails), reference.loadShare);
     case 'rail-limits': {
       const rail = railOf(reference, profile.rails);
       return rail === undefined ? null : { nominalVolts: rail.nominal, tolerancePercent: percent(rail.tolerance) };
@@ -138,6 +150,34 @@ function inputsOf(reference: Reference, profile: Profile, settings: Settings, bo
     case 'refit-trip':
       return refitInputs(reference, profile, boards);
   }
+}
+
+/** The part that is named, else all that must be discharged, the one with most energy first. */
+function storesOf(reference: Reference, profile: Profile, settings: Settings): readonly Store[] {
+  const named = profile.stores.filter((s) => s.id === reference.store);
+  if (named.length > 0) return named;
+  const must = partsToDischarge(profile, settings);
+  return [...(must.length > 0 ? must : profile.stores)].sort((a, b) => b.farads * b.voltsWorked ** 2 - a.farads * a.voltsWorked ** 2);
+}
+
+/** Bleeders are not trusted: the tool alone must do it, on one part after the other. */
+function bleedInputs(reference: Reference, profile: Profile, settings: Settings): Record<string, unknown> | null {
+  const [store, ...others] = storesOf(reference, profile, settings);
+  if (store === undefined) return null;
+  return {
+    farads: store.farads,
+    volts: store.voltsWorked,
+    safeVolts: settings.deadVolts,
+    toolOhms: reference.toolOhms ?? null,
+    ...(reference.toolWatts !== undefined && { toolWatts: reference.toolWatts }),
+    others: others.slice(0, 24).map(({ name, farads, voltsWorked }) => ({ name: name.slice(0, 40), farads, volts: voltsWorked })),
+  };
+}
+
+/** The rail that the author or the row names, else the one of most watts. */
+function heaviestRail(reference: Reference, rails: readonly Rail[]): Rail | undefined {
+  const watts = ({ nominal, maxAmps }: Rail): number => Math.abs(nominal) * maxAmps;
+  return rails.find((r) => r.id === reference.rail) ?? [...rails].sort((a, b) => watts(b) - watts(a))[0];
 }
 
 /** The rail that the author or the row names, else the first. */

@@ -98,4 +98,37 @@ describe('workingsOf', () => {
     expect(headline({ sheet: 'refit-trip', board: 'none' }, profile)).toBeNull();
     expect(headline({ sheet: 'refit-trip' })).toBeNull();
   });
+
+  it('forms a part to the volts that it works at, as long as it has slept', () => {
+    expect(headline({ sheet: 'reforming' })).toMatch(/^5 stages to 20 V through /);
+    expect(headline({ sheet: 'reforming', storageYears: 2.5 })).toMatch(/^4 stages to 20 V through .*: 2 h at least/);
+    expect(headline({ sheet: 'reforming', storageYears: 0 })).toMatch(/^No reforming needed/);
+    expect(headline({ sheet: 'reforming' }, { ...benchProfile, stores: [] })).toBeNull();
+  });
+
+  it('plans the load of every rail, or of the one that is named, with its minimum', () => {
+    const [rail] = benchProfile.rails;
+    if (rail === undefined) throw new Error('no rail');
+    const two = { ...benchProfile, rails: [rail, { ...rail, id: 'm12', name: '−12 V', nominal: -12, maxAmps: 1 }], minimumLoad: [{ rail: 'p5', amps: 2 }] };
+    expect(headline({ sheet: 'rail-load-plan' }, two)).toBe('+5 V, then −12 V; 72 W at full load, 1 h 40 min in all.');
+    expect(headline({ sheet: 'rail-load-plan', rail: 'm12' }, two)).toBe('−12 V; 12 W at full load, 50 min in all.');
+    const plan = workingsOf(step({ sheet: 'rail-load-plan' }), two, defaultSettings);
+    expect(plan?.answer).toMatchObject({ ok: true, result: { rails: [{ minimumAmps: 2 }, { minimumAmps: 0 }] } });
+  });
+
+  it('burns in the pass device what stands between raw node and rail, and is silent without a raw node', () => {
+    expect(headline({ sheet: 'pass-element' })).toMatch(/^66 W as linear/);
+    expect(headline({ sheet: 'pass-element', loadShare: 0.1 })).toMatch(/^6\.6 W as linear/);
+    expect(headline({ sheet: 'pass-element' }, { ...benchProfile, raw: null })).toBeNull();
+  });
+
+  it('gives a discharge its own tool, and the parts of the machine one after the other', () => {
+    const [store] = benchProfile.stores;
+    if (store === undefined) throw new Error('no store');
+    const two = { ...benchProfile, stores: [store, { ...store, id: 'c2', name: 'C2', farads: 0.2 }] };
+    const discharge = { ...step({ sheet: 'bleed-down' }), kind: 'discharge', toolOhms: 100, toolWatts: 50 } as unknown as Step;
+    const worked = workingsOf(discharge, two, defaultSettings);
+    expect(worked?.answer.ok === true ? worked.answer.headline : '').toBe('40 J: 44 s to 5 V, worst case. All 2: 53.6 J, 59 s one after the other.');
+    expect(worked?.inputs).toMatchObject({ toolOhms: 100, toolWatts: 50, others: [{ name: 'C1 reservoir' }] });
+  });
 });
