@@ -64,8 +64,15 @@ module.exports = {
       name: 'pure-rooms-packages',
       severity: 'error',
       comment: 'packages that pure rooms may use',
-      from: { path: '^(flows|shared/(contract|quantity|workings))/' },
+      from: { path: '^(flows|shared/(contract|quantity))/' },
       to: { path: 'node_modules/', pathNot: 'node_modules/(zod|xstate|@noble/hashes|canonicalize|uuid)/' },
+    },
+    {
+      name: 'workings-packages',
+      severity: 'error',
+      comment: 'sheets read their inputs with zod and solve networks with ml-matrix',
+      from: { path: '^shared/workings/' },
+      to: { path: 'node_modules/', pathNot: 'node_modules/(zod|ml-matrix)/' },
     },
     {
       name: 'record-packages',
