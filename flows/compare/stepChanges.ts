@@ -46,6 +46,9 @@ const FIELDS: Record<string, Field> = {
   suspect: { what: 'suspect', risk: 'order', name: 'suspect that it names' },
   suspects: { what: 'suspect', risk: 'order', name: 'suspects worked on' },
   replaces: { what: 'suspect', risk: 'order', name: 'parts replaced' },
+  confirms: { what: 'power', risk: 'energy', name: 'test conditions that are confirmed' },
+  asInService: { what: 'power', risk: 'energy', name: 'test conditions' },
+  opens: { what: 'other', risk: 'energy', name: 'part that is opened' },
   cannotBeUndone: { what: 'other', risk: 'order', name: 'mark “cannot be undone”' },
 };
 

@@ -5,6 +5,8 @@ import { HAZARD_KINDS } from './hazards';
 import { AREAS, idSchema, QUANTITY_NAMES } from './ids';
 import { EVIDENCE_WORDS, OUTCOMES, SHOWN_KINDS, VERDICTS } from './outcomes';
 
+import { TEST_CONDITION_IDS } from './testConditions';
+
 const text = (max: number) => z.string().trim().min(1).max(max);
 
 export const claimSchema = z.enum([
@@ -85,6 +87,8 @@ const common = {
   exits: z.array(exitSchema).min(1).max(12),
 };
 const each = z.enum(['rails', 'returns', 'stores', 'points']).optional();
+/** a look can go from connector to connector of the conductors, too */
+const eachSeen = z.enum(['rails', 'returns', 'stores', 'points', 'connectors']).optional();
 const power = z.enum(['live', 'dead']).optional();
 const reading = {
   quantity: z.enum(QUANTITY_NAMES),
@@ -98,6 +102,10 @@ const reading = {
   each,
   power,
 };
+/** test conditions that have been confirmed before this step and still stand */
+const asInService = z.array(z.enum(TEST_CONDITION_IDS)).min(1).max(2).optional();
+/** a failed part that is opened: whose it is, the photo step before it, and the step in its place where a part may hold beryllium oxide */
+const opens = z.strictObject({ suspect: idSchema, photo: idSchema, instead: idSchema.optional() }).optional();
 const proveCommon = { ...common, contact: z.literal('hands') };
 
 export const NODES = ['inlet', 'raw', 'rail', 'part'] as const;
@@ -122,10 +130,10 @@ const powerFields = {
 };
 
 export const stepSchema = z.discriminatedUnion('kind', [
-  z.strictObject({ ...common, kind: z.literal('do'), fits: z.array(fittedSchema).max(8).optional(), removes: z.array(idSchema).max(8).optional(), trims: z.enum(AREAS).optional() }),
-  z.strictObject({ ...common, kind: z.literal('observe'), asks: text(160), each, power, lookOver: z.boolean().optional() }),
+  z.strictObject({ ...common, kind: z.literal('do'), fits: z.array(fittedSchema).max(8).optional(), removes: z.array(idSchema).max(8).optional(), trims: z.enum(AREAS).optional(), confirms: z.array(z.enum(TEST_CONDITION_IDS)).min(1).max(2).optional() }),
+  z.strictObject({ ...common, kind: z.literal('observe'), asks: text(160), each: eachSeen, power, lookOver: z.boolean().optional(), opens }),
   z.strictObject({ ...common, kind: z.literal('measure'), ...reading }),
-  z.strictObject({ ...common, kind: z.literal('soak'), ...reading, holdMinutes: z.number().positive().max(1_440), everyMinutes: z.number().positive().max(240) }),
+  z.strictObject({ ...common, kind: z.literal('soak'), ...reading, holdMinutes: z.number().positive().max(1_440), everyMinutes: z.number().positive().max(240), asInService }),
   z.strictObject({ ...common, kind: z.literal('photo'), of: text(120), power }),
   z.strictObject({ ...common, kind: z.literal('isolate') }),
   /** without a tool of its own the step takes the resistor that the workings choose for the machine */
@@ -136,8 +144,8 @@ export const stepSchema = z.discriminatedUnion('kind', [
   z.strictObject({ ...proveCommon, kind: z.literal('prove-returns') }),
   z.strictObject({ ...common, kind: z.literal('prove-trip'), rail: idSchema, series: idSchema, probe: z.enum(['clipped', 'hand']), ceilingVolts: z.number().positive().max(1_000) }),
   z.strictObject({ ...common, kind: z.literal('connect-load'), contact: z.literal('hands'), load: z.enum(LOADS) }),
-  z.strictObject({ ...common, kind: z.literal('energise'), contact: z.literal('none'), ...powerFields }),
-  z.strictObject({ ...common, kind: z.literal('raise'), contact: z.enum(['none', 'probe']), ...powerFields }),
+  z.strictObject({ ...common, kind: z.literal('energise'), contact: z.literal('none'), ...powerFields, asInService }),
+  z.strictObject({ ...common, kind: z.literal('raise'), contact: z.enum(['none', 'probe']), ...powerFields, asInService }),
   z.strictObject({ ...common, kind: z.literal('prove-rails'), level: z.enum(['regulator', 'limited', 'full']), probe: z.enum(['clipped', 'hand']) }),
   z.strictObject({ ...common, kind: z.literal('work'), contact: z.literal('hands'), area: z.enum(AREAS), replaces: z.array(idSchema).max(8).optional(), for: z.array(idSchema).max(8).optional(), suspects: z.array(idSchema).max(8).optional(), cannotBeUndone: z.boolean().optional() }),
   z.strictObject({ ...common, kind: z.literal('hold'), contact: z.literal('none'), asks: text(200), names: z.array(idSchema).max(8).optional(), for: z.enum(['bench', 'limited', 'full', 'boards']).optional() }),

@@ -79,6 +79,7 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
   step.exits.forEach((exit: Exit, j) => {
     for (const message of shownFaults(step, exit)) add(['exits', j, 'shows'], message);
   });
+  for (const fault of conditionFaults(step)) add(...fault);
   step.tools.forEach((t, j) => {
     if (!known.tools.has(t)) add(['tools', j], `"${t}" is not on the opening list`);
   });
@@ -105,6 +106,9 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
       if (step.limit.is === 'twin') for (const fault of twinFaults(step)) add(...fault);
       else if (step.points?.twin !== undefined) add(['points', 'twin'], 'only a reading that is held against its twin has one');
       if (step.kind === 'soak' && step.everyMinutes > step.holdMinutes) add(['everyMinutes'], 'longer than the soak itself');
+      break;
+    case 'observe':
+      for (const fault of openingFaults(known, step)) add(...fault);
       break;
     case 'discharge':
       if ((step.toolOhms === undefined) !== (step.toolWatts === undefined)) add(['toolWatts'], 'a tool has ohms and watts, or neither');
@@ -153,9 +157,30 @@ function twinFaults(step: Extract<Step, { kind: 'measure' | 'soak' }>): [(string
 function shownFaults(step: Step, exit: Exit): string[] {
   if (exit.shows === undefined) return [];
   if (step.kind !== 'observe' || !exit.on.includes('answer')) return ['only an answer of an observation shows something of a part'];
+  if (exit.shows === 'large-over-current' && step.opens === undefined) return ['only a part that is opened shows this: the step says what it `opens`'];
   const words = (exit.evidence ?? []).map((e) => e.says);
   if (exit.shows === 'not-original' && words.includes('all-but-proves')) return ['a part that is not original is a reason to suspect it and no proof: `points-to`'];
   return words.includes('points-to') || words.includes('all-but-proves') ? [] : ['it shows something of a part and raises no suspect'];
+}
+
+/** A part is opened by hand, after a photo step of this tree, and something else stands in its place where none is opened. */
+function openingFaults(known: Names, step: Extract<Step, { kind: 'observe' }>): [string[], string][] {
+  const { opens } = step;
+  if (opens === undefined) return [];
+  const faults: [string[], string][] = [];
+  const instead = opens.instead === undefined ? undefined : known.steps.get(opens.instead);
+  if (step.contact !== 'hands') faults.push([['contact'], 'a part is opened with the hands']);
+  if (!known.suspects.has(opens.suspect)) faults.push([['opens', 'suspect'], `no suspect "${opens.suspect}"`]);
+  if (known.steps.get(opens.photo)?.kind !== 'photo') faults.push([['opens', 'photo'], `"${opens.photo}" is no photo step`]);
+  if (opens.instead !== undefined && instead === undefined) faults.push([['opens', 'instead'], `no step "${opens.instead}"`]);
+  if (instead?.kind === 'observe' && instead.opens !== undefined) faults.push([['opens', 'instead'], 'this one opens a part too']);
+  return faults;
+}
+
+/** A probe in the hand inside the machine is a cover that is off. */
+function conditionFaults(step: Step): [string[], string][] {
+  const stated = 'asInService' in step ? (step.asInService ?? []) : [];
+  return step.contact !== 'none' && stated.includes('cover-on') ? [[['asInService'], 'with the cover on there is no contact: clip on before, or read without']] : [];
 }
 
 function powerFaults(known: Names, step: Extract<Step, { kind: 'energise' | 'raise' }>, add: (key: (string | number)[], message: string) => void): void {

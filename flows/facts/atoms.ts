@@ -1,6 +1,7 @@
 /** Single statements about the bench facts: what a step can need, and how each is read off the facts. */
 import type { Area } from '../document/ids';
 import type { Load } from '../document/steps';
+import type { TestCondition } from '../document/testConditions';
 import { allOut, isLive } from './facts';
 import type { Facts, SourceState } from './facts';
 
@@ -27,6 +28,8 @@ export type Atom =
   | { fact: 'no-killer' }
   | { fact: 'release' }
   | { fact: 'opened' }
+  | { fact: 'condition'; id: TestCondition }
+  | { fact: 'photo'; step: string }
   /** settled by the document and the profile alone, whatever the bench */
   | { fact: 'settled'; holds: boolean };
 
@@ -84,6 +87,10 @@ export function holds(facts: Facts, atom: Atom): boolean {
       return facts.release === 'valid';
     case 'opened':
       return facts.opened;
+    case 'condition':
+      return facts.conditions.includes(atom.id);
+    case 'photo':
+      return facts.photos.includes(atom.step);
     case 'settled':
       return atom.holds;
   }

@@ -24,6 +24,18 @@ export interface StepScope {
 
 /** Changes for the worse, at the moment at which the action is shown. They stand also when Stop breaks the step off. */
 export function entered(step: Step, scope: StepScope): Op[] {
+  return [...conditionsLost(step), ...enteredByKind(step, scope)];
+}
+
+/** A hand, a tool or a probe inside is a cover that is off; hands disturb the air too, and with the supply isolated no fan turns. */
+function conditionsLost(step: Step): Op[] {
+  const confirmed = step.kind === 'do' ? (step.confirms ?? []) : [];
+  const cover = step.contact !== 'none' || confirmed.includes('cover-on');
+  const air = step.contact === 'hands' || step.contact === 'cover' || step.kind === 'isolate' || confirmed.includes('forced-air');
+  return [...(cover ? [{ op: 'condition', id: 'cover-on', stands: false } satisfies Op] : []), ...(air ? [{ op: 'condition', id: 'forced-air', stands: false } satisfies Op] : [])];
+}
+
+function enteredByKind(step: Step, scope: StepScope): Op[] {
   switch (step.kind) {
     case 'do':
       return [
@@ -67,6 +79,8 @@ export function entered(step: Step, scope: StepScope): Op[] {
       const touched = [...(step.suspects ?? []), ...(step.replaces ?? [])];
       return [
         ...workVoids(step.area),
+        // what was photographed before is perhaps another part now
+        { op: 'photo', step: 'all', taken: false },
         ...touched.map((suspect): Op => ({ op: 'unclear', suspect: scope.check(suspect) })),
         ...(step.replaces ?? []).flatMap((part) => killersOf(part, scope)),
       ];
@@ -95,7 +109,11 @@ function kindOps(step: Step, outcome: Outcome | string, scope: StepScope): Op[] 
   const passed = outcome === 'in';
   switch (step.kind) {
     case 'do':
-      return outcome === 'done' ? (step.removes ?? []).map((id): Op => ({ op: 'unfit', id })) : [];
+      return outcome === 'done'
+        ? [...(step.removes ?? []).map((id): Op => ({ op: 'unfit', id })), ...(step.confirms ?? []).map((id): Op => ({ op: 'condition', id, stands: true }))]
+        : [];
+    case 'photo':
+      return [{ op: 'photo', step: scope.check(step.id), taken: outcome === 'done' }];
     case 'isolate':
       return [{ op: 'sources', to: outcome === 'out' ? 'out' : 'unknown' }];
     case 'discharge':

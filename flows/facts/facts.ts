@@ -2,6 +2,7 @@
 import type { Profile } from '../document/profile';
 import { sourceIds, tripRails } from '../document/profile';
 import type { FittedThing, Load } from '../document/steps';
+import type { TestCondition } from '../document/testConditions';
 
 /** `lapsed` counts as unknown in every need; the machine mends it. `limited` is the lamp on the mains, the amps limit on the bench supply. */
 export type SourceState = 'unknown' | 'lapsed' | 'full' | 'limited' | 'out';
@@ -42,6 +43,10 @@ export interface Facts {
   cleared: string[];
   release: 'none' | 'valid';
   opened: boolean;
+  /** test conditions that were confirmed and have not been changed since */
+  conditions: TestCondition[];
+  /** photo steps whose photo was taken */
+  photos: string[];
   /** kinds of power that this run has had since the last work on the supply */
   powered: PowerKind[];
 }
@@ -70,6 +75,8 @@ export function worstFacts(profile: Profile, carried: Carried = { release: false
     cleared: [],
     release: carried.release ? 'valid' : 'none',
     opened: false,
+    conditions: [],
+    photos: [],
     powered: [],
   };
 }

@@ -2,8 +2,11 @@
 import { DEAD_QUANTITIES } from '../document/ids';
 import { resolvePoint, tripRails } from '../document/profile';
 import type { Step, StepOf } from '../document/steps';
+import { TEST_CONDITIONS } from '../document/testConditions';
+import type { TestCondition } from '../document/testConditions';
 import type { Atom } from './atoms';
 import type { StepScope } from './effects';
+import { staysShut } from './opening';
 import { powerClass, powerNode } from './power';
 import type { PowerStep } from './power';
 import { partsToDischarge } from './stores';
@@ -46,11 +49,13 @@ function kindNeeds(step: Step, scope: StepScope): Need[] {
     case 'do':
       return (step.fits?.length ?? 0) + (step.removes?.length ?? 0) > 0 ? dead() : [];
     case 'observe':
+      return [...powerNeeds(step.power), ...openingNeeds(step, scope)];
     case 'photo':
       return powerNeeds(step.power);
     case 'measure':
-    case 'soak':
       return [...powerNeeds(step.power), ...readingNeeds(step, scope)];
+    case 'soak':
+      return [...powerNeeds(step.power), ...readingNeeds(step, scope), ...conditionNeeds(step.asInService)];
     case 'isolate':
     case 'call':
       return [];
@@ -79,12 +84,13 @@ function kindNeeds(step: Step, scope: StepScope): Need[] {
     case 'connect-load':
       return [...dead(), ...(step.load === 'boards' ? [...boardNeeds(scope), ...owedNeeds('full')] : [])];
     case 'energise':
-      return [out('H5'), ...feedNeeds(step, scope)];
+      return [out('H5'), ...feedNeeds(step, scope), ...conditionNeeds(step.asInService)];
     case 'raise':
       return [
         { rule: 'H5', atom: { fact: 'feeds', id: step.source, node: powerNode(step) }, say: 'that source is not in at this place' },
         ...settled('H9', step.load !== 'boards', 'boards are never raised, only energised'),
         ...feedNeeds(step, scope),
+        ...conditionNeeds(step.asInService),
       ];
     case 'prove-rails':
       return proveRailsNeeds(step, scope);
@@ -93,6 +99,20 @@ function kindNeeds(step: Step, scope: StepScope): Need[] {
     case 'end':
       return endNeeds(step, scope);
   }
+}
+
+/** C2: what a step declares is what must be so; a test condition stands only while it was confirmed and nothing has changed it. */
+function conditionNeeds(stated: readonly TestCondition[] = []): Need[] {
+  return stated.map((id) => ({ rule: 'H5', atom: { fact: 'condition', id }, say: TEST_CONDITIONS[id].missing }));
+}
+
+/** A part is destroyed by opening it: its photo stands before that, and none is opened that may hold beryllium oxide. Dead is asked by contact. */
+function openingNeeds(step: StepOf<'observe'>, scope: StepScope): Need[] {
+  if (step.opens === undefined) return [];
+  return [
+    { rule: 'H17', atom: { fact: 'photo', step: scope.check(step.opens.photo) }, say: 'the part has not been photographed before it is opened' },
+    ...settled('H17', !staysShut(scope.profile), 'a part of this machine may hold beryllium oxide, so none is opened'),
+  ];
 }
 
 function powerNeeds(power: 'live' | 'dead' | undefined): Need[] {

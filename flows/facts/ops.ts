@@ -3,6 +3,7 @@
  * fact can be read off without knowing the others (that is what lets a proof treat each fact by itself).
  */
 import type { FittedThing, Load } from '../document/steps';
+import type { TestCondition } from '../document/testConditions';
 import type { Facts, PowerKind, Proved, Proving, SourceState, Stored } from './facts';
 
 export type Op =
@@ -30,6 +31,8 @@ export type Op =
   | { op: 'release-void' }
   | { op: 'opened' }
   | { op: 'opened-lapses' }
+  | { op: 'condition'; id: TestCondition; stands: boolean }
+  | { op: 'photo'; step: string | 'all'; taken: boolean }
   | { op: 'powered'; kind: PowerKind }
   | { op: 'powered-void' };
 
@@ -94,6 +97,14 @@ function applyOp(facts: Facts, op: Op): Facts {
       return { ...facts, opened: true };
     case 'opened-lapses':
       return { ...facts, opened: false };
+    case 'condition': {
+      const others = facts.conditions.filter((c) => c !== op.id);
+      return others.length === facts.conditions.length && !op.stands ? facts : { ...facts, conditions: op.stands ? [...others, op.id].sort() : others };
+    }
+    case 'photo': {
+      const others = op.step === 'all' ? [] : facts.photos.filter((p) => p !== op.step);
+      return { ...facts, photos: op.taken ? [...others, op.step].sort() : others };
+    }
     case 'powered':
       return facts.powered.includes(op.kind) ? facts : { ...facts, powered: [...facts.powered, op.kind] };
     case 'powered-void':

@@ -109,6 +109,8 @@ export function openAnew(layout: Layout, context: RunContext): Judged {
 export function comeBack(layout: Layout, context: RunContext, wasLive: boolean): Judged {
   if (context.key === SAFE.opening) return accept({ ...context, goto: SAFE.opening });
   if (context.key === SAFE.ended) return accept({ ...context, goto: SAFE.ended });
+  // who knows what has been done to cover and fan meanwhile: what follows stood on them
+  if (context.facts.conditions.length > 0) return comeBack(layout, { ...context, facts: { ...context.facts, conditions: [] } }, true);
   if (context.readBack && !wasLive) return openAnew(layout, context);
   if (wasLive || layout.steps.get(context.key)?.builtIn === true) return accept(context.purpose.is === 'none' || wasLive ? makeSafe(context) : { ...context, goto: SAFE.isolate });
   const arrived = arriveAt(layout, context, context.key);

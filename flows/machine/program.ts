@@ -8,6 +8,7 @@ import type { Claim, Exit, FittedThing, Step, StepOf } from '../document/steps';
 import type { Tree } from '../document/tree';
 import { hazardsOf } from '../facts/derivedHazards';
 import type { StepScope } from '../facts/effects';
+import { insteadOf } from '../facts/opening';
 import { builtInSteps } from './builtIn';
 import { dischargeTool, tooSmallFor } from './dischargeTool';
 import { forClass } from './noEarth';
@@ -165,6 +166,8 @@ function land(layout: Layout, target: string, ways: (call: string, exit: Exit) =
     const first = layout.calleeFirst.get(target);
     return first === undefined ? here : land(layout, first, ways, { ...so, entered: [...so.entered, target] });
   }
+  const instead = insteadOf(placed.step, layout.profile);
+  if (instead !== null) return land(layout, placed.scope.check(instead), ways, so);
   const call = endsCalledTree(placed) ? layout.steps.get(placed.caller ?? '') : undefined;
   const exit = call?.step.exits.find((e: Exit) => e.on.includes(placed.step.id));
   if (call === undefined || exit === undefined) return here;

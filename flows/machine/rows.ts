@@ -3,6 +3,7 @@ import { formatQuantity } from '@/shared/quantity/formatQuantity';
 
 import type { Quantity } from '../document/ids';
 import type { RowResult } from '../document/outcomes';
+import { connectorsOf } from '../document/connectors';
 import { resolvePoint } from '../document/profile';
 import type { Point, Profile, Rail } from '../document/profile';
 import type { Limit, Step, StepOf } from '../document/steps';
@@ -21,6 +22,8 @@ interface RowBase {
   id: string;
   label: string;
   wait: RowWait | null;
+  /** what hangs on this row, for whoever answers it and for the record */
+  note?: string;
 }
 
 export interface WordRow extends RowBase {
@@ -93,6 +96,7 @@ export function rowsOf(step: Step, scope: StepScope): Row[] {
         : eachOf(step.each, scope.profile).map((item): WordRow => ({
             id: item.id,
             label: item.name,
+            ...(item.note === undefined ? {} : { note: item.note }),
             ask: 'word',
             wait: null,
             words: step.exits.flatMap((e) => (e.on.includes('answer') ? [{ word: e.id, label: e.label ?? e.id, result: e.id }] : [])).concat([NOT_SURE, { word: 'cannot', label: 'Cannot see', result: 'cannot' }]),
@@ -223,7 +227,7 @@ function proveDeadRows(scope: StepScope): Row[] {
   ];
 }
 
-function eachOf(each: 'rails' | 'returns' | 'stores' | 'points', profile: Profile): { id: string; name: string }[] {
+function eachOf(each: 'rails' | 'returns' | 'stores' | 'points' | 'connectors', profile: Profile): { id: string; name: string; note?: string }[] {
   switch (each) {
     case 'rails':
       return profile.rails;
@@ -233,6 +237,8 @@ function eachOf(each: 'rails' | 'returns' | 'stores' | 'points', profile: Profil
       return profile.stores;
     case 'points':
       return profile.points;
+    case 'connectors':
+      return connectorsOf(profile);
   }
 }
 

@@ -16,6 +16,11 @@ export class BitNames {
     return this.numbers.size - 1;
   }
 
+  /** The number of a name that has been asked for before, or undefined. */
+  known(name: string): number | undefined {
+    return this.numbers.get(name);
+  }
+
   /** Numbers of all names that begin so. */
   startingWith(prefix: string): readonly number[] {
     const known = this.prefixes.get(prefix);

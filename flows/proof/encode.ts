@@ -108,13 +108,20 @@ export function encodingOf(graph: Graph, start: Facts): Encoding {
         return { as: 'owed', what: 'open' };
       case 'no-fail-waiting-for-limited-power':
         return { as: 'owed', what: atom.deadToo ? 'fixed' : 'fixed-dead' };
+      case 'condition':
+        return must(`condition:${atom.id}`);
+      case 'photo':
+        return must(`photo:${atom.step}`);
       case 'settled':
         return atom.holds ? { as: 'always' } : { as: 'never' };
     }
   };
 
+  // what hardly a tree asks for has a bit only where this one does
+  const unasked = (op: Op) => (op.op === 'condition' || op.op === 'photo') && rareBits(op, names).length === 0;
+
   const effect = (ops: readonly Op[]): Effect => {
-    if (ops.every((op) => OWED_OPS.has(op.op))) return NO_EFFECT;
+    if (ops.every((op) => OWED_OPS.has(op.op) || unasked(op))) return NO_EFFECT;
     const gen = empty();
     const kill = empty();
     const copies: { raise: number; where0: number }[] = [];
@@ -126,13 +133,17 @@ export function encodingOf(graph: Graph, start: Facts): Encoding {
       putBit(kill, bit);
       unset(gen, bit);
     };
-    for (const op of ops) applyBits(op, names, set, clear, copies);
+    for (const op of ops) if (!unasked(op)) applyBits(op, names, set, clear, copies);
     return { gen, kill, copies };
   };
 
   const state = (facts: Facts): MayState => {
     const may1 = empty();
     for (const name of bitsOfFacts(facts)) putBit(may1, names.of(name));
+    for (const name of [...facts.conditions.map((id) => `condition:${id}`), ...facts.photos.map((step) => `photo:${step}`)]) {
+      const bit = names.known(name);
+      if (bit !== undefined) putBit(may1, bit);
+    }
     return { may0: Uint32Array.from(may1, (word) => ~word), may1 };
   };
   const free = (): MayState => ({ may0: empty().fill(0xffffffff), may1: empty().fill(0xffffffff) });
@@ -156,7 +167,15 @@ function nameAtom(names: BitNames, atom: Atom): void {
   if (atom.fact === 'feeds') names.of(`feeds:${atom.id}:${atom.node}`);
   if (atom.fact === 'fitted') names.of(`fitted:${atom.id}`);
   if (atom.fact === 'clip-on') names.of(`clip:${atom.point}`);
+  if (atom.fact === 'condition') names.of(`condition:${atom.id}`);
+  if (atom.fact === 'photo') names.of(`photo:${atom.step}`);
   if (atom.fact === 'trip') names.of(`trip:${atom.rail}`);
+}
+
+function rareBits(op: Extract<Op, { op: 'condition' | 'photo' }>, names: BitNames): readonly number[] {
+  if (op.op === 'photo' && op.step === 'all') return names.startingWith('photo:');
+  const bit = names.known(op.op === 'condition' ? `condition:${op.id}` : `photo:${op.step}`);
+  return bit === undefined ? [] : [bit];
 }
 
 function applyBits(op: Op, names: BitNames, set: (name: string) => void, clear: (bit: number) => void, copies: { raise: number; where0: number }[]): void {
@@ -223,6 +242,10 @@ function applyBits(op: Op, names: BitNames, set: (name: string) => void, clear: 
       return set('opened');
     case 'opened-lapses':
       return off('opened');
+    case 'condition':
+      return rareBits(op, names).forEach((bit) => (op.stands ? set(names.nameOf(bit)) : clear(bit)));
+    case 'photo':
+      return rareBits(op, names).forEach((bit) => (op.taken ? set(names.nameOf(bit)) : clear(bit)));
     case 'doubt':
     case 'lift-doubt':
     case 'fail':

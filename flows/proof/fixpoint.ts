@@ -97,7 +97,7 @@ function reentryState(graph: Graph, encoding: Encoding, key: string): MayState {
     clearBit(state.may0, encoding.names.of(name));
     putBit(state.may1, encoding.names.of(name));
   }
-  for (const bit of [encoding.names.of('live'), ...encoding.names.startingWith('src:'), ...encoding.names.startingWith('feeds:'), ...encoding.names.startingWith('clip:')]) {
+  for (const bit of [encoding.names.of('live'), ...encoding.names.startingWith('src:'), ...encoding.names.startingWith('feeds:'), ...encoding.names.startingWith('clip:'), ...encoding.names.startingWith('condition:')]) {
     clearBit(state.may1, bit);
     putBit(state.may0, bit);
   }

@@ -3,6 +3,7 @@ import { OUTCOMES_OF } from '../document/outcomes';
 import type { Exit, Step } from '../document/steps';
 import { after, entered } from '../facts/effects';
 import { needs } from '../facts/needs';
+import { insteadOf } from '../facts/opening';
 import type { Need } from '../facts/needs';
 import type { Op } from '../facts/ops';
 import { claimAtoms } from '../facts/claims';
@@ -66,7 +67,7 @@ export interface Graph {
 export function graphOf(layout: Layout): Graph {
   const nodes = new Map<string, PlaceNode>();
   for (const placed of layout.steps.values()) {
-    if (placed.builtIn || placed.step.kind === 'call' || endsCalledTree(placed)) continue;
+    if (placed.builtIn || placed.step.kind === 'call' || endsCalledTree(placed) || insteadOf(placed.step, layout.profile) !== null) continue;
     nodes.set(placed.key, { key: placed.key, placed, needs: needs(placed.step, placed.scope), entered: entered(placed.step, placed.scope), edges: edgesOf(layout, placed) });
   }
   const arriving = (key: string): Abort => {

@@ -23,6 +23,7 @@ interface Oddity {
   heatsink?: boolean;
   /** rails that need a least load; the first one where it is not said and the supply is switch-mode */
   least?: number;
+  hazards?: Profile['hazards'];
 }
 
 const big = { farads: 0.047, volts: 40, rebounds: true };
@@ -39,6 +40,7 @@ const ODDITIES: readonly Oddity[] = [
   { title: 'three rails, Class II', rails: THREE, returns: 2, stores: [big], protectiveClass: 'II' },
   { title: 'three rails, boards that cannot be parted', rails: THREE, returns: 4, stores: [big], outOfMachine: false, removable: false },
   { title: 'three rails from a raw rail, a battery besides', rails: THREE, returns: 4, stores: [big], supplyKind: 'switched-from-raw', battery: true },
+  { title: 'three rails, a part that may hold beryllium oxide', rails: THREE, returns: 4, stores: [big], supplyKind: 'switched-from-raw', hazards: ['beryllium-oxide'] },
   { title: 'six rails, two trips', rails: SIX, returns: 6, stores: [big, bulk] },
   { title: 'switch-mode with a bulk capacitor and a minimum load', rails: THREE, returns: 2, stores: [bulk], supplyKind: 'switch-mode' },
   { title: 'switch-mode, several stores, Class II, a battery, an isolating transformer, boards in', rails: THREE, returns: 3, stores: [bulk, bulk, housekeeping, small], supplyKind: 'switch-mode', protectiveClass: 'II', battery: true, isolated: true, outOfMachine: false, least: 2 },
@@ -69,7 +71,7 @@ function profileOf(o: Oddity): Profile {
     points: [point('zero'), point('raw'), ...o.rails.map((r) => point(`t-${r.id}`, r.id)), ...o.stores.map((_, i) => point(`c${i + 1}`))],
     zeroPoint: 'zero',
     minimumLoad: switcher ? o.rails.slice(0, o.least ?? 1).map((r) => ({ rail: r.id, amps: 1 })) : [],
-    hazards: [],
+    hazards: o.hazards ?? [],
     ownerLimits: [],
     outOfMachine: o.outOfMachine ?? true,
   };

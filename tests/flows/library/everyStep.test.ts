@@ -28,6 +28,9 @@ const WALKS: [string, string][] = [
   ['full-load', 'brindle-80'],
   ['fuse-switch-mode', 'brindle-80'],
   ['refit', 'wendle-5'],
+  ['cold-checks', 'ostrel-16'],
+  ['as-found-harness', 'corvane-12'],
+  ['as-found-harness', 'brindle-80'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

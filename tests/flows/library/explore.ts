@@ -4,7 +4,7 @@ import type { Refusal } from '@/flows/machine/arrive';
 import type { Program } from '@/flows/machine/compile';
 import type { ReadingRow, Row } from '@/flows/machine/rows';
 import { Bench } from '../support/bench';
-import { goodReading, move } from './walk';
+import { goodReading, move, NO_PHOTO } from './walk';
 import type { Choice } from './walk';
 
 export interface Arrival {
@@ -82,7 +82,8 @@ function take(bench: Bench, key: string, exit: Exit, outcome: string): Refusal |
       bench.do({ type: 'HOLD_REFUSED', step: key, by: 'sam', reason: 'not yet' });
     } else if (phase !== 'act' || step?.kind === 'hold') move(bench, {});
     else if (current === null) {
-      const advanced = bench.try({ type: 'ANSWER', step: key, answer: outcome === 'answer' ? exit.id : outcome });
+      const photo = step?.kind === 'photo' && outcome === 'done';
+      const advanced = bench.try(photo ? { type: 'PHOTO', step: key, photo: NO_PHOTO } : { type: 'ANSWER', step: key, answer: outcome === 'answer' ? exit.id : outcome });
       if (!advanced.ok) return advanced.refusal;
       return null; // a loop to itself has the same key
     } else {

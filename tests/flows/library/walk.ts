@@ -54,9 +54,13 @@ export function move(bench: Bench, choices: Choices): void {
     bench.row({ [current.row.id]: given ?? goodReading(current.row) });
   } else {
     const choice = choiceAt(choices, key);
-    bench.do({ type: 'ANSWER', step: key, answer: typeof choice === 'string' ? choice : (answers[0]?.answer ?? '') });
+    if (bench.view.step?.kind === 'photo' && typeof choice !== 'string') bench.do({ type: 'PHOTO', step: key, photo: NO_PHOTO });
+    else bench.do({ type: 'ANSWER', step: key, answer: typeof choice === 'string' ? choice : (answers[0]?.answer ?? '') });
   }
 }
+
+/** A photo that nobody took. */
+export const NO_PHOTO = '0'.repeat(64);
 
 /** Walks until the run has ended or `until` says so; a choice is made each time that its step comes. */
 export function walk(bench: Bench, choices: Choices = {}, until: (bench: Bench) => boolean = () => false): Bench {

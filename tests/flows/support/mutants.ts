@@ -43,6 +43,8 @@ function edits(tree: Tree): Edit[] {
     if (step.kind === 'observe' && step.lookOver === true) drop('drop the look-over');
     if (step.kind === 'do' && (step.removes?.length ?? 0) > 0) drop('forget to take out');
     if (step.kind === 'do' && (step.fits?.length ?? 0) > 0) drop('forget to fit');
+    if (step.kind === 'do' && step.confirms !== undefined) drop('forget to confirm the test conditions');
+    if (step.kind === 'photo' && tree.steps.some((s) => s.kind === 'observe' && s.opens?.photo === step.id)) drop('open a part without its photo');
     if (step.kind === 'connect-load') {
       drop('forget the load');
       list.push({ kind: 'boards in early', at, change: (steps, i) => Object.assign(steps[i] ?? {}, { load: 'boards' }) });

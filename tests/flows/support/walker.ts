@@ -97,6 +97,11 @@ export class Walker {
   }
 
   private enterCalls(): void {
+    // where a part may hold beryllium oxide, something else stands in the place of opening it
+    if (this.step.kind === 'observe' && this.step.opens?.instead !== undefined && this.profile.hazards.includes('beryllium-oxide')) {
+      const { instead } = this.step.opens;
+      this.step = this.top().tree.steps.find((s) => s.id === instead)!;
+    }
     if (this.step.kind !== 'call') return;
     const callee = this.callees.find((t) => this.step.kind === 'call' && t.id === this.step.tree)!;
     this.stack.push({ tree: callee, call: this.step, counts: new Map() });

@@ -1,5 +1,6 @@
 /** An entry of a record in words: what was done. */
 import { SHOWN } from '@/flows/document/outcomes';
+import { TEST_CONDITIONS } from '@/flows/document/testConditions';
 import type { Instrument } from '@/shared/contract/instruments';
 import type { RecordEntry } from '@/shared/record/recordEntry';
 import type { ReadingLine } from '@/shared/ui/screens/records/readingsOf';
@@ -40,7 +41,10 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'warning-read':
       return says('Warning read');
     case 'energised':
-      return says('Switched on', event?.type === 'GUARD_HELD' ? `guard held for ${(event.heldMs / 1000).toFixed(1)} s` : null);
+      return says(
+        'Switched on',
+        event?.type === 'GUARD_HELD' ? [`guard held for ${(event.heldMs / 1000).toFixed(1)} s`, ...conditionsOf(before)].join('; ') : null,
+      );
     case 'hold-asked':
       return says('Countersign asked for');
     case 'hold-given':
@@ -120,16 +124,29 @@ function reading(entry: RecordEntry, { readings, instruments }: Known): EntryWor
   };
 }
 
+/** Test conditions that a step confirms, or that it states as confirmed before. */
+function conditionsOf(before: ReplayedEntry['before']): string[] {
+  const step = before?.step;
+  const ids = step?.kind === 'do' ? step.confirms : step != null && 'asInService' in step ? step.asInService : undefined;
+  return (ids ?? []).map((id) => TEST_CONDITIONS[id].name.toLowerCase());
+}
+
 function answer({ event, before }: ReplayedEntry): EntryWords | null {
   if (event?.type === 'ROW') {
     const row = before?.rows.find((r) => r.row.id === event.row)?.row;
     const word = row?.ask === 'word' ? row.words.find((w) => w.word === event.word)?.label : undefined;
-    return { what: `${row?.label ?? event.row}: ${word ?? WORDS[event.word] ?? event.word}`, detail: null };
+    // what hangs on the row is worth its place only where the row is not as it should be
+    const good = before?.step?.exits.find((e) => e.id === event.word)?.verdict;
+    return {
+      what: `${row?.label ?? event.row}: ${word ?? WORDS[event.word] ?? event.word}`,
+      detail: good === 'fail' || good === 'find' ? (row?.note ?? null) : null,
+    };
   }
   if (event?.type === 'ANSWER') {
     const given = before?.answers.find((a) => a.answer === event.answer);
     const shows = given?.shows == null ? [] : [`${SHOWN[given.shows].name}: ${SHOWN[given.shows].say}`];
-    const detail = [...shows, ...(event.note === undefined ? [] : [event.note])].join(' ');
+    const confirmed = event.answer === 'done' ? conditionsOf(before) : [];
+    const detail = [...confirmed, ...shows, ...(event.note === undefined ? [] : [event.note])].join(' ');
     return { what: given?.label ?? WORDS[event.answer] ?? event.answer, detail: detail === '' ? null : detail };
   }
   if (event?.type === 'SECOND_PRESENT') return { what: 'Second person present', detail: null };

@@ -3,6 +3,7 @@ import { View } from 'react-native';
 
 import type { RowView } from '@/flows/machine/view';
 import type { Row } from '@/flows/machine/rows';
+import { BodyText } from '@/shared/ui/components/BodyText';
 import { Heading } from '@/shared/ui/components/Heading';
 import { Label } from '@/shared/ui/components/Label';
 
@@ -15,6 +16,7 @@ export function RowTitle({ rows, current }: { rows: readonly RowView[]; current:
       <Heading level={2} size="sub">
         {current.label}
       </Heading>
+      {current.note === undefined ? null : <BodyText size="small">{current.note}</BodyText>}
     </View>
   );
 }

@@ -1,6 +1,7 @@
 /** What is looked at and told before power. Pure. */
 import type { Profile } from '@/flows/document/profile';
 import type { Load } from '@/flows/document/steps';
+import { TEST_CONDITIONS } from '@/flows/document/testConditions';
 import type { PowerStep } from '@/flows/facts/power';
 import type { Program } from '@/flows/machine/compile';
 import { formatDuration, formatQuantity } from '@/shared/quantity/formatQuantity';
@@ -12,13 +13,14 @@ const LOADS: Readonly<Record<Load, string>> = {
   full: 'The full dummy load is on every rail',
 };
 
-/** Three things, each ticked by hand. */
+/** Each ticked by hand. */
 export function guardChecks(step: PowerStep, profile: Profile): { id: string; label: string }[] {
   const guarded =
     profile.mains.protection === 'rcd' ? 'through the RCD tried today' : 'through its isolating transformer, this one load only';
   return [
     { id: 'clear', label: 'Hands and tools are clear of the machine' },
     { id: 'load', label: step.node === 'part' ? 'Only the part itself is fed; its lead is lifted' : LOADS[step.load] },
+    ...(step.asInService ?? []).map((id) => ({ id, label: TEST_CONDITIONS[id].name })),
     {
       id: 'told',
       label: step.node === 'inlet' ? `Everybody here has been told; the plug goes in ${guarded}` : 'Everybody here has been told',

@@ -5,6 +5,8 @@ import { QUANTITIES } from '@/flows/document/ids';
 import { DEFAULT_VERDICT, SHOWN } from '@/flows/document/outcomes';
 import type { Kind, Outcome, Shown, Verdict } from '@/flows/document/outcomes';
 import type { Claim, Exit, Limit, Step } from '@/flows/document/steps';
+import { TEST_CONDITIONS } from '@/flows/document/testConditions';
+import type { TestCondition } from '@/flows/document/testConditions';
 import type { Suspect, Tree } from '@/flows/document/tree';
 import type { Unit } from '@/shared/quantity/units';
 import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
@@ -164,15 +166,21 @@ export function stepFacts(step: Step, tree: Pick<Tree, 'steps'>): string[] {
         ...(step.fits ?? []).map((f) => `Fits: ${f.name}`),
         ...(step.removes?.length ? [`Takes out: ${step.removes.map((id) => thingName(tree, id)).join(', ')}`] : []),
         ...(step.trims ? [`Trims: ${step.trims}`] : []),
+        ...(step.confirms ?? []).map((id) => `Confirms: ${conditionWords(id)}`),
       ];
     case 'observe':
-      return [`Asks: ${step.asks}`, ...(step.power === 'live' ? ['While live'] : [])];
+      return [
+        `Asks: ${step.asks}`,
+        ...(step.power === 'live' ? ['While live'] : []),
+        ...(step.opens ? [openingWords(step.opens, tree)] : []),
+      ];
     case 'measure':
     case 'soak':
       return [
         `Limit: ${limitWords(step.limit, step.quantity)}`,
         `Probe: ${{ clipped: 'clipped on while dead', hand: 'by hand, one insulated probe', none: 'no contact' }[step.probe]}`,
         ...(step.each ? [`For each of the ${step.each}`] : []),
+        ...(step.kind === 'soak' ? (step.asInService ?? []).map(conditionWords) : []),
         ...(step.kind === 'soak' ? [`Held ${formatNumber(step.holdMinutes)} min, read every ${formatNumber(step.everyMinutes)} min`] : []),
       ];
     case 'discharge':
@@ -191,6 +199,7 @@ export function stepFacts(step: Step, tree: Pick<Tree, 'steps'>): string[] {
         `Through ${{ lamp: `a lamp${step.lampWatts ? ` of ${formatQuantity(step.lampWatts, 'W')}` : ''}`, bench: 'the bench supply', mains: 'mains', 'limited-ac': 'a limited AC source' }[step.through]} into the ${step.node}${step.rail ? ` ${step.rail}` : ''}`,
         `At most ${formatQuantity(step.mostVolts, 'V')}, ${formatQuantity(step.mostAmps, 'A')}, for ${formatNumber(step.longestMinutes)} min`,
         `Load: ${step.load}`,
+        ...(step.asInService ?? []).map(conditionWords),
       ];
     case 'prove-rails':
       return [{ regulator: 'Regulator, on the bench supply', limited: 'On limited power', full: 'At full load' }[step.level]];
@@ -210,6 +219,19 @@ export function stepFacts(step: Step, tree: Pick<Tree, 'steps'>): string[] {
     case 'call':
       return [];
   }
+}
+
+function conditionWords(id: TestCondition): string {
+  return TEST_CONDITIONS[id].name.toLowerCase();
+}
+
+function openingWords(
+  { photo, instead }: NonNullable<Extract<Step, { kind: 'observe' }>['opens']>,
+  { steps }: Pick<Tree, 'steps'>,
+): string {
+  const title = (id: string) => `“${steps.find((s) => s.id === id)?.title ?? id}”`;
+  const otherwise = instead === undefined ? '' : `; where a part may hold beryllium oxide, ${title(instead)} in its place`;
+  return `Opens a part, after ${title(photo)}${otherwise}`;
 }
 
 function thingName({ steps }: Pick<Tree, 'steps'>, id: string): string {
