@@ -34,6 +34,8 @@ const anyFacts: fc.Arbitrary<Facts> = fc.record({
   cleared: fc.subarray(['diode', 'pass']),
   release: fc.constantFrom('none', 'valid'),
   opened: fc.boolean(),
+  conditions: fc.subarray(['cover-on', 'forced-air'] as const).map((c) => [...c]),
+  photos: fc.subarray(['photo']),
   powered: fc.subarray(['bench', 'limited', 'full'] as const).map((k) => [...k]),
 });
 
@@ -47,6 +49,7 @@ const noBetter = (a: Facts, b: Facts) =>
   b.sources.every((s, i) => s.state !== 'out' || a.sources[i]?.state === 'out') &&
   b.owed.doubts.length >= a.owed.doubts.length && b.owed.fails.length >= a.owed.fails.length && b.owed.killers.length >= a.owed.killers.length &&
   b.cleared.every((s) => a.cleared.includes(s)) &&
+  b.conditions.every((c) => a.conditions.includes(c)) && b.photos.every((p) => a.photos.includes(p)) &&
   (b.release === 'none' || a.release === 'valid');
 
 describe('entered', () => {

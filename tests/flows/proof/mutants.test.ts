@@ -57,6 +57,7 @@ const SAFE: Record<string, string> = {
   'refit: forget the load: reseat': 'the board is read again as it sits; all that boards ask still stands, and the returns are proved again',
   'refit: boards in early: reseat': 'the step fits boards as it is written: the same tree',
   'refit: an exit led past its check: reseat>unsure': 'a load step that is not sure counts as boards in, and the power that follows declares boards',
+  'rail-low: forget the load: loads-away': 'the readings that follow are made dead, and the light load says what is on the rails before any power',
   'cold-checks: forget the load: boards-apart': 'no power follows in this tree: the boards are parted for truer readings, and its good end claims no load',
   'cold-checks: drop prove-returns: returns-last': 'no power follows in this tree, and its good end claims no return',
   'drop prove-dead: prove': 'the tree claims nothing by itself; every tree that calls it is refused, which is tested below',
