@@ -53,7 +53,7 @@ function stepListChanges(before: Tree, newer: Tree): Change[] {
 function headChanges(before: Tree, newer: Tree): Change[] {
   const changes: Change[] = [];
   const add = (what: Change['what'], risk: Risk, say: string) => changes.push({ what, step: null, risk, say });
-  for (const key of ['title', 'symptom', 'about'] as const) if (before[key] !== newer[key]) add('reworded', 'text', `The ${key} is now ${shown(newer[key])}, it was ${shown(before[key])}.`);
+  for (const key of ['title', 'symptom', 'about', 'purpose'] as const) if (before[key] !== newer[key]) add('reworded', 'text', `The ${key} is now ${shown(newer[key])}, it was ${shown(before[key])}.`);
   if (!same(before.appliesTo, newer.appliesTo)) add('start', 'energy', `It now applies to: ${shown(newer.appliesTo)}; before: ${shown(before.appliesTo)}.`);
   if (!same([...before.needsAtStart].sort(), [...newer.needsAtStart].sort())) add('start', 'energy', `It now needs at its start: ${shown(newer.needsAtStart)}; before: ${shown(before.needsAtStart)}.`);
   changes.push(...listChanges(before.suspects, newer.suspects, 'suspect', 'order', (s) => `The suspect ${s.id} (${s.part}, ${s.mode})`));

@@ -16,6 +16,8 @@ export const treeShape = z.strictObject({
   title: text(80),
   symptom: text(200),
   about: text(600).optional(),
+  /** what it is for, where that does not follow from what it does */
+  purpose: z.enum(['checks', 'bring-up', 'fault-finding']).optional(),
   appliesTo: z.strictObject({
     protectiveClasses: z.array(z.enum(['I', 'II'])).min(1).max(2),
     supplyKinds: z.array(z.enum(['linear', 'switched-from-raw', 'switch-mode'])).min(1).max(3),

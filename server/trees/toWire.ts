@@ -1,4 +1,5 @@
 /** A version of a tree as the contract shows it. */
+import { purposeOf } from '@/flows/document/purpose';
 import type { TreeVersionRow } from '@/db/tables';
 import type { TreeVersion } from '@/shared/contract/trees';
 
@@ -9,6 +10,7 @@ export function treeVersionToWire(row: TreeVersionRow): TreeVersion {
     version: row.version,
     title: row.document.title,
     symptom: row.document.symptom,
+    purpose: purposeOf(row.document),
     state: row.state,
     hash: row.hash,
     steps: row.document.steps.length,

@@ -1,6 +1,8 @@
 /** Fault trees and their versions. */
 import { z } from 'zod';
 
+import { PURPOSE_IDS } from '@/flows/document/purpose';
+
 import { treeDocument } from './documents';
 import { hashSchema, instantSchema, personIdSchema, treeIdSchema, versionSchema } from './ids';
 
@@ -13,6 +15,7 @@ export const treeVersionSchema = z
     version: versionSchema,
     title: z.string(),
     symptom: z.string(),
+    purpose: z.enum(PURPOSE_IDS),
     state: versionStateSchema,
     hash: hashSchema,
     steps: z.number().int(),

@@ -1,11 +1,29 @@
 /** What the demo workshops hold: machines of makers that never were, their trees, and the runs that were done on them. */
 import { parseProfile, parseTree } from '@/flows/document/parseTree';
+import asFoundHarness from '@/flows/library/as-found-harness.json';
+import coldChecks from '@/flows/library/cold-checks.json';
+import diesTwice from '@/flows/library/dies-twice.json';
+import discharge from '@/flows/library/discharge.json';
+import earthInsulation from '@/flows/library/earth-insulation.json';
 import firstPower from '@/flows/library/first-power.json';
+import fullLoad from '@/flows/library/full-load.json';
+import fuseSwitchMode from '@/flows/library/fuse-switch-mode.json';
+import heatAndFan from '@/flows/library/heat-and-fan.json';
 import lampBright from '@/flows/library/lamp-bright.json';
+import lampFirst from '@/flows/library/lamp-first.json';
 import lookOver from '@/flows/library/look-over.json';
+import lostReturn from '@/flows/library/lost-return.json';
 import makeDead from '@/flows/library/make-dead.json';
+import railLow from '@/flows/library/rail-low.json';
+import rawOnRail from '@/flows/library/raw-on-rail.json';
+import refit from '@/flows/library/refit.json';
 import reformInPlace from '@/flows/library/reform-in-place.json';
+import reformLifted from '@/flows/library/reform-lifted.json';
+import regulatorBench from '@/flows/library/regulator-bench.json';
 import returnsMeasured from '@/flows/library/returns-measured.json';
+import ripple from '@/flows/library/ripple.json';
+import ticking from '@/flows/library/ticking.json';
+import tripFires from '@/flows/library/trip-fires.json';
 
 import type { DemoContent } from '../DemoContent';
 import { demoRuns } from './demoRuns';
@@ -39,6 +57,24 @@ export const demoContent: DemoContent = {
     { ...first, document: tree(returnsMeasured), version: 1, state: 'issued', author: 'senior3', daysAgo: 95 },
     { ...first, document: tree(reformInPlace), version: 1, state: 'withdrawn', author: 'senior2', checker: 'senior', daysAgo: 170 },
     { ...first, document: tree(lampBright), version: 1, state: 'draft', author: 'senior3', checker: null, daysAgo: 6 },
+    { ...first, document: tree(asFoundHarness), version: 1, state: 'issued', daysAgo: 88 },
+    { ...first, document: tree(coldChecks), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 84 },
+    { ...first, document: tree(diesTwice), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 80 },
+    { ...first, document: tree(discharge), version: 1, state: 'issued', daysAgo: 77 },
+    { ...first, document: tree(earthInsulation), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 74 },
+    { ...first, document: tree(fullLoad), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 70 },
+    { ...first, document: tree(fuseSwitchMode), version: 1, state: 'issued', daysAgo: 66 },
+    { ...first, document: tree(heatAndFan), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 63 },
+    { ...first, document: tree(lampFirst), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 60 },
+    { ...first, document: tree(lostReturn), version: 1, state: 'issued', daysAgo: 57 },
+    { ...first, document: tree(railLow), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 54 },
+    { ...first, document: tree(rawOnRail), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 50 },
+    { ...first, document: tree(refit), version: 1, state: 'issued', daysAgo: 46 },
+    { ...first, document: tree(reformLifted), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 42 },
+    { ...first, document: tree(regulatorBench), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 38 },
+    { ...first, document: tree(ripple), version: 1, state: 'issued', daysAgo: 33 },
+    { ...first, document: tree(ticking), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 27 },
+    { ...first, document: tree(tripFires), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 20 },
     { ...second, document: tree(makeDead), version: 1, state: 'issued', daysAgo: 90 },
     { ...second, document: tree(firstPower), version: 1, state: 'issued', daysAgo: 80 },
   ],

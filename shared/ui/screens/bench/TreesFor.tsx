@@ -19,6 +19,7 @@ import { EmptyState } from '@/shared/ui/components/EmptyState';
 import { Loading } from '@/shared/ui/components/Loading';
 import { Notice } from '@/shared/ui/components/Notice';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
+import { groupedByPurpose } from '@/shared/ui/screens/trees/groupedByPurpose';
 import { space } from '@/shared/ui/theme/space';
 
 /** Shows them once a machine is chosen. */
@@ -89,12 +90,15 @@ function Start({ machine, profile, issued }: Props) {
   };
   return (
     <View style={{ gap: space.m, alignSelf: 'stretch' }}>
-      <Choice
-        label="Fault tree"
-        value={version?.tree ?? null}
-        options={fitting.map((v) => ({ value: v.tree, label: v.title, detail: `${v.symptom}. Version ${v.version}, ${v.steps} steps` }))}
-        onChange={setChosen}
-      />
+      {groupedByPurpose(fitting).map(({ purpose, name, trees }) => (
+        <Choice
+          key={purpose}
+          label={`Fault tree: ${name.toLowerCase()}`}
+          value={version?.tree ?? null}
+          options={trees.map((v) => ({ value: v.tree, label: v.title, detail: `${v.symptom}. Version ${v.version}, ${v.steps} steps` }))}
+          onChange={setChosen}
+        />
+      ))}
       <BodyText size="small" tone="soft">
         Local electrical codes, the maker’s data and licensed practice come first. Where they and a tree differ, stop and follow them.
       </BodyText>

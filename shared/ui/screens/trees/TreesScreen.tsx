@@ -7,9 +7,12 @@ import { BodyText } from '@/shared/ui/components/BodyText';
 import { DataTable } from '@/shared/ui/components/DataTable';
 import type { Column } from '@/shared/ui/components/DataTable';
 import { EmptyState } from '@/shared/ui/components/EmptyState';
+import { Heading } from '@/shared/ui/components/Heading';
 import { Mono } from '@/shared/ui/components/Mono';
 import { Page } from '@/shared/ui/components/Page';
 import { Tag } from '@/shared/ui/components/Tag';
+import { groupedByPurpose } from '@/shared/ui/screens/trees/groupedByPurpose';
+import { space } from '@/shared/ui/theme/space';
 import { dateWords } from '@/shared/ui/screens/shell/dateWords';
 import { Fetched } from '@/shared/ui/screens/shell/Fetched';
 import { leadingVersion, VERSION_STATE_TAGS, VERSION_STATE_WORDS } from '@/shared/ui/screens/trees/versionShown';
@@ -38,27 +41,39 @@ const columns: Column<TreeVersion>[] = [
   },
 ];
 
-/** One row a tree, in the version that leads it. */
+/** One row a tree, in the version that leads it; grouped by what the trees are for. */
 export function TreesScreen() {
   const trees = useTrees();
   return (
     <Page title="Fault trees">
       <Fetched query={trees} what="the fault trees">
-        {({ trees: all }) => (
-          <DataTable
-            caption="Fault trees"
-            columns={columns}
-            rows={all.flatMap(({ versions }) => leadingVersion(versions) ?? [])}
-            rowKey={(v) => v.tree}
-            rowTarget={(v) => ({ name: `${v.title}, version ${v.version}, ${VERSION_STATE_WORDS[v.state]}`, href: `/trees/${v.tree}` })}
-            empty={
-              <EmptyState
-                title="No fault trees yet"
-                text="A senior writes the procedure of the workshop down as a tree; once it is checked and issued it stands here and can be run at the bench."
-              />
-            }
-          />
-        )}
+        {({ trees: all }) => {
+          const groups = groupedByPurpose(all.flatMap(({ versions }) => leadingVersion(versions) ?? []));
+          return groups.length === 0 ? (
+            <EmptyState
+              title="No fault trees yet"
+              text="A senior writes the procedure of the workshop down as a tree; once it is checked and issued it stands here and can be run at the bench."
+            />
+          ) : (
+            <View style={{ gap: space.xl }}>
+              {groups.map(({ purpose, name, trees: rows }) => (
+                <View key={purpose} style={{ gap: space.s }}>
+                  <Heading level={2}>{name}</Heading>
+                  <DataTable
+                    caption={name}
+                    columns={columns}
+                    rows={rows}
+                    rowKey={(v) => v.tree}
+                    rowTarget={(v) => ({
+                      name: `${v.title}, version ${v.version}, ${VERSION_STATE_WORDS[v.state]}`,
+                      href: `/trees/${v.tree}`,
+                    })}
+                  />
+                </View>
+              ))}
+            </View>
+          );
+        }}
       </Fetched>
     </Page>
   );
