@@ -10,45 +10,46 @@ import { railLimits } from '@/shared/workings/railLimits';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField, rowsField, textField } from '@/shared/workings/sheet';
 
-/** One step of one rail. Volts are signed as the meter shows them, amps and watts by size. */
-export interface LoadStep {
-  readonly percent: number;
-  readonly wantedAmps: number;
-  readonly amps: number;
+const loadStep = z.strictObject({
+  percent: z.number(),
+  wantedAmps: z.number(),
+  amps: z.number(),
   /** What draws it: of owned resistors, or as one resistor. */
-  readonly ohms: number;
+  ohms: z.number(),
   /** Owned resistors that make it, in words; null for an electronic load or where none do. */
-  readonly pieces: string | null;
-  readonly terminalVolts: number;
-  readonly loadVolts: number;
-  readonly loadWatts: number;
-  readonly leadWatts: number;
-  readonly minutes: number;
+  pieces: z.string().nullable(),
+  terminalVolts: z.number(),
+  loadVolts: z.number(),
+  loadWatts: z.number(),
+  leadWatts: z.number(),
+  minutes: z.number(),
   /** Why it cannot be done with what is there; null where it can. */
-  readonly trouble: string | null;
-}
+  trouble: z.string().nullable(),
+});
+
+/** One step of one rail. Volts are signed as the meter shows them, amps and watts by size. */
+export type LoadStep = z.output<typeof loadStep>;
+
+const railPlan = z.strictObject({
+  name: z.string(),
+  nominalVolts: z.number(),
+  /** Acceptance band at the sense point. */
+  lowVolts: z.number(),
+  highVolts: z.number(),
+  minimumAmps: z.number(),
+  steps: z.array(loadStep),
+  /** One resistor for full load: ohms from E24 and watts at twice its heat or more; null above the usual sizes. */
+  fullOhms: z.number(),
+  fullWatts: z.number().nullable(),
+});
 
 /** Plan of one rail. */
-export interface RailPlan {
-  readonly name: string;
-  readonly nominalVolts: number;
-  /** Acceptance band at the sense point. */
-  readonly lowVolts: number;
-  readonly highVolts: number;
-  readonly minimumAmps: number;
-  readonly steps: readonly LoadStep[];
-  /** One resistor for full load: ohms from E24 and watts at twice its heat or more; null above the usual sizes. */
-  readonly fullOhms: number;
-  readonly fullWatts: number | null;
-}
+export type RailPlan = z.output<typeof railPlan>;
+
+const output = z.strictObject({ rails: z.array(railPlan), fullWatts: z.number(), minutes: z.number(), troubles: z.number() });
 
 /** Result of the sheet; rails in the order in which they are loaded. */
-export interface RailLoadPlanResult {
-  readonly rails: readonly RailPlan[];
-  readonly fullWatts: number;
-  readonly minutes: number;
-  readonly troubles: number;
-}
+export type RailLoadPlanResult = z.output<typeof output>;
 
 /** Steps in percent of the rating. Common practice, no source. */
 export const PERCENTS: Readonly<Record<'careful' | 'usual', readonly number[]>> = { careful: [10, 25, 50, 75, 100], usual: [25, 50, 100] };
@@ -268,6 +269,7 @@ export const sheet = defineSheet({
   title: 'Rail load plan',
   question: 'In which order and by which steps is each rail loaded, with what, and what should I read?',
   inputs,
+  output,
   law,
   validity,
   source,

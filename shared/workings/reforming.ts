@@ -11,21 +11,51 @@ import { doneAmps, JIG_AMPS, reformResistor, reformStages, resistorOf, STOP_WATT
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField, rowsField } from '@/shared/workings/sheet';
 
-/** Result of the sheet; SI and minutes, nothing rounded. */
-export interface ReformingResult {
-  readonly limitAmps: number;
-  readonly targetVolts: number;
-  readonly resistor: ReformResistor;
+const output = z.strictObject({
+  limitAmps: z.number(),
+  targetVolts: z.number(),
+  resistor: z.strictObject({
+    ohms: z.number(),
+    /** Into a capacitor that is a short. */
+    shortAmps: z.number(),
+    shortWatts: z.number(),
+    /** Rated watts to take: twice the heat into a short. */
+    watts: z.number(),
+    /** Most heat that can arise inside the can, at half the volts. */
+    mostCanWatts: z.number(),
+    timeConstantSeconds: z.number(),
+  }),
   /** Empty where it needs none. */
-  readonly stages: readonly ReformStage[];
-  readonly minutes: number;
+  stages: z.array(
+    z.strictObject({
+      share: z.number(),
+      /** Set on the supply. */
+      volts: z.number(),
+      minutes: z.number(),
+      /** Leakage at or below which it is done. */
+      doneAmps: z.number(),
+    }),
+  ),
+  minutes: z.number(),
   /** Heat in the can at the limit and the full volts. */
-  readonly limitWatts: number;
-  readonly joules: number;
+  limitWatts: z.number(),
+  joules: z.number(),
   /** What is wrong with the resistor that was given; null where nothing is. */
-  readonly resistorTrouble: string | null;
-  readonly verdict: ReformVerdict | null;
-}
+  resistorTrouble: z.string().nullable(),
+  verdict: z
+    .strictObject({
+      says: z.enum(['too-early', 'falling', 'next-stage', 'formed', 'stalled', 'rising', 'too-hot']),
+      /** On the capacitor at the last reading. */
+      capacitorVolts: z.number(),
+      canWatts: z.number(),
+      /** Minutes from the last reading until it is done at this stage, if it goes on like this; null where that cannot be said. */
+      minutesToGo: z.number().nullable(),
+    })
+    .nullable(),
+});
+
+/** Result of the sheet; SI and minutes, nothing rounded. */
+export type ReformingResult = z.output<typeof output>;
 
 const reading = z.strictObject({
   minutes: numberField({ title: 'Minutes', description: 'Since the first volts', unit: null, min: 0, max: 100_000 }),
@@ -209,6 +239,7 @@ export const sheet = defineSheet({
   title: 'Reforming',
   question: 'How do I bring this electrolytic back to its volts, and is it forming?',
   inputs,
+  output,
   law,
   validity,
   source,
@@ -239,7 +270,7 @@ export const sheet = defineSheet({
       limitAmps,
       targetVolts,
       resistor,
-      stages,
+      stages: [...stages],
       minutes: stages.reduce((sum, stage) => sum + stage.minutes, 0),
       limitWatts: limitAmps * targetVolts,
       joules: (farads * targetVolts * targetVolts) / 2,

@@ -70,7 +70,7 @@ export interface Sheet<Inputs extends z.ZodObject = z.ZodObject, Result = unknow
   readonly question: string;
   readonly inputs: Inputs;
   /** The form of `result`, for the schemas in docs and whoever reads the command line's output. */
-  readonly output?: z.ZodType<Result>;
+  readonly output: z.ZodType<Result>;
   /** The formulas in symbols, one a line. */
   readonly law: readonly string[];
   readonly validity: string;

@@ -17,6 +17,7 @@ const sum = defineSheet({
   title: 'Sum',
   question: 'What do they add up to?',
   inputs,
+  output: z.strictObject({ volts: z.number(), amps: z.array(z.number().nullable()) }),
   law: [],
   validity: '',
   source: '',
