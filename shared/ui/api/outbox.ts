@@ -12,6 +12,7 @@ import { acknowledge, headSeq, joined, renumber, setAside, takeOver } from '@/sh
 import type { Ledger, Replays } from '@/shared/ui/api/ledger';
 import type { OutboxStore } from '@/shared/ui/api/outboxStore';
 import type { Queued } from '@/shared/ui/api/queued';
+import { recordPart } from '@/shared/ui/api/recordPart';
 import { retryDelayMs, standingOf } from '@/shared/ui/api/sendStanding';
 
 export interface Saved {
@@ -99,13 +100,14 @@ export function createOutbox(parts: Parts): Outbox {
   /** Makes `next` the ledger, writes the difference to the disk and tells about it. */
   const move = async (next: Ledger, change?: RecordChange) => {
     const before = [...ledger.waiting, ...ledger.notTaken];
+    const record = recordPart(run, ledger.held, next.held);
     const now = [...next.waiting, ...next.notTaken];
     ledger = next;
     tell(change);
     const put = now.filter((q) => !before.includes(q));
     const gone = before.filter((q) => !now.some((n) => n.id === q.id)).map((q) => q.id);
     // the memory is right already; a disk that is full must not stop the sending
-    if (store !== null && put.length + gone.length > 0) await store.write(put, gone).catch(() => undefined);
+    if (store !== null && (put.length + gone.length > 0 || record !== undefined)) await store.write(put, gone, record).catch(() => undefined);
   };
 
   const queued = (event: MachineEvent): Queued => ({

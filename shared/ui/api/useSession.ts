@@ -5,6 +5,7 @@ import type { Me } from '@/shared/contract/session';
 import type { Answer } from '@/shared/ui/api/answer';
 import { client } from '@/shared/ui/api/client';
 import { queryKeyOf } from '@/shared/ui/api/queries';
+import { forgetRuns } from '@/shared/ui/api/runStore';
 
 export interface Session {
   signIn(input: { mail: string; password: string }): Promise<Answer<Me>>;
@@ -26,7 +27,10 @@ export function useSession(): Session {
     },
     async signOut() {
       const answer = await client.call('signOut', {});
-      if (answer.kind === 'ok') queries.clear();
+      if (answer.kind === 'ok') {
+        queries.clear();
+        await forgetRuns();
+      }
       return answer;
     },
   };

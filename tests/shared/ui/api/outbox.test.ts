@@ -5,6 +5,8 @@ import type { Outbox, RecordChange } from '@/shared/ui/api/outbox';
 import type { ClientProblem } from '@/shared/ui/api/answer';
 import type { Replays } from '@/shared/ui/api/ledger';
 import type { OutboxStore } from '@/shared/ui/api/outboxStore';
+import { recordPart } from '@/shared/ui/api/recordPart';
+import type { Entry } from '@/shared/contract/entries';
 
 import { ANN, Disk, event, RUN, say, Shop, wordOf } from './shop';
 
@@ -109,6 +111,45 @@ describe('createOutbox', () => {
     await sent(shop, ['gone', 'fine', 'STOP', 'RESTART', 'STOP']);
     expect(box.saved().notTaken.map((q) => [wordOf(q.event), q.notTaken?.say])).toEqual([['here', 'The run has gone on.']]);
     expect([...disk.kept.values()].map((q) => wordOf(q.event))).toEqual(['here']);
+  });
+
+  it('keeps on the disk what the server has, in the same breath in which an answer no longer waits', async () => {
+    const [shop, disk] = [new Shop(), new Disk()];
+    const writes: [waiting: string[], record: number[]][] = [];
+    const write = disk.write.bind(disk);
+    disk.write = async (...args) => {
+      await write(...args);
+      writes.push([disk.words(), disk.record.map((e) => e.seq)]);
+    };
+    shop.put('before');
+    const box = outboxOf(shop, disk);
+    await box.open([...shop.entries]);
+    await box.add(say('one'));
+    await sent(shop, ['before', 'one']);
+    await vi.waitFor(() => expect(box.saved().waiting).toBe(0));
+    shop.put('from a senior');
+    await box.poll();
+    await vi.waitFor(() => expect(disk.record.map((e) => e.id)).toEqual(shop.entries.map((e) => e.id)));
+    // never a moment at which an answer is neither waiting nor held
+    expect(writes).toEqual([
+      [[], [1]],
+      [['one'], [1]],
+      [[], [1, 2]],
+      [[], [1, 2, 3]],
+    ]);
+  });
+
+  it('writes only what has changed of the record, and takes back what the server has lost', () => {
+    const entries = (...hashes: string[]) => hashes.map((hash, i) => ({ seq: i + 1, hash }) as Entry);
+    const part = (before: Entry[], next: Entry[]) => {
+      const got = recordPart('r', before, next);
+      return got === undefined ? null : [got.after, got.entries.map((e) => e.hash)];
+    };
+    expect(part(entries('a', 'b'), entries('a', 'b'))).toBeNull();
+    expect(part(entries('a'), entries('a', 'b', 'c'))).toEqual([1, ['b', 'c']]);
+    expect(part(entries('a', 'x', 'y'), entries('a', 'b'))).toEqual([1, ['b']]);
+    expect(part(entries('a', 'b', 'c'), entries('a'))).toEqual([1, []]);
+    expect(part([], [])).toBeNull();
   });
 
   it('sends no way to safety into a run that somebody else leads by now; what was done here is kept and shown', async () => {

@@ -3,7 +3,7 @@ import type { MachineEvent } from '@/flows/machine/events';
 import type { Entry } from '@/shared/contract/entries';
 import type { Answer, ClientProblem, ClientProblemCode } from '@/shared/ui/api/answer';
 import type { Client } from '@/shared/ui/api/client';
-import type { OutboxStore } from '@/shared/ui/api/outboxStore';
+import type { OutboxStore, RecordPart } from '@/shared/ui/api/outboxStore';
 import type { Queued } from '@/shared/ui/api/queued';
 
 export const RUN = '0198c0de-0000-7000-8000-00000000000a';
@@ -129,11 +129,15 @@ export class Disk implements OutboxStore {
     return [...this.kept.values()].filter((q) => q.run === run);
   }
 
-  async write(put: readonly Queued[], remove: readonly string[] = []) {
+  /** what it holds of the record */
+  record: Entry[] = [];
+
+  async write(put: readonly Queued[], remove: readonly string[] = [], record?: RecordPart) {
     await Promise.resolve();
     if (this.full) throw new Error('QuotaExceededError');
     for (const q of put) this.kept.set(q.id, q);
     for (const id of remove) this.kept.delete(id);
+    if (record !== undefined) this.record = [...this.record.filter((e) => e.seq <= record.after), ...record.entries];
   }
 
   words(): string[] {
