@@ -1,8 +1,8 @@
 /** What a tree document can get wrong beyond its shape: every fault at once, each with step and key. */
 import { DEAD_QUANTITIES, QUANTITIES } from './ids';
-import { DEFAULT_VERDICT, OUTCOMES_OF } from './outcomes';
+import { ACT_KINDS, DEFAULT_VERDICT, OUTCOMES_OF } from './outcomes';
 import type { Outcome } from './outcomes';
-import type { Exit, Step } from './steps';
+import type { Exit, FittedThing, Step } from './steps';
 import type { Tree } from './tree';
 
 export interface TreeFault {
@@ -20,7 +20,7 @@ interface Names {
   steps: Map<string, Step>;
   suspects: Set<string>;
   tools: Set<string>;
-  fitted: Set<string>;
+  fitted: Map<string, FittedThing>;
 }
 
 function names(tree: Tree): Names {
@@ -28,7 +28,7 @@ function names(tree: Tree): Names {
     steps: new Map(tree.steps.map((s) => [s.id, s])),
     suspects: new Set(tree.suspects.map((s) => s.id)),
     tools: new Set([...tree.opening.tools, ...tree.opening.instruments, ...tree.opening.parts].map((t) => t.id)),
-    fitted: new Set(tree.steps.flatMap((s) => (s.kind === 'do' ? (s.fits ?? []).map((f) => f.id) : []))),
+    fitted: new Map(tree.steps.flatMap((s) => (s.kind === 'do' ? (s.fits ?? []).map((f): [string, FittedThing] => [f.id, f]) : []))),
   };
 }
 
@@ -89,6 +89,7 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
         if (!known.fitted.has(id)) add(['removes', j], `nothing fits "${id}"`);
       });
       step.fits?.forEach((f, j) => {
+        if (!sameThing(f, known.fitted.get(f.id))) add(['fits', j, 'id'], `"${f.id}" is also fitted as something else: one name, one thing`);
         if (f.earthed === true && (f.area === 'primary' || f.area === 'earth')) add(['fits', j, 'area'], 'an earthed instrument is never clipped to the primary');
         if (f.class === 'clip' && f.point === undefined) add(['fits', j, 'point'], 'a clip names its point');
       });
@@ -115,6 +116,7 @@ function stepFaults(known: Names, step: Step, at: number): TreeFault[] {
       break;
     case 'prove-trip':
       if (!known.fitted.has(step.series)) add(['series'], `nothing fits "${step.series}"`);
+      else if (known.fitted.get(step.series)?.class !== 'series') add(['series'], `"${step.series}" is no series part`);
       break;
     case 'energise':
     case 'raise':
@@ -192,6 +194,7 @@ function powerFaults(known: Names, step: Extract<Step, { kind: 'energise' | 'rai
   });
   if (step.node === 'rail' && step.rail === undefined) add(['rail'], 'names no rail');
   if (step.node === 'part' && (step.lead === undefined || !known.fitted.has(step.lead))) add(['lead'], 'a part is fed with its lead lifted: name that lead');
+  if (step.node === 'part' && step.lead !== undefined && (known.fitted.get(step.lead)?.class ?? 'lifted') !== 'lifted') add(['lead'], `"${step.lead}" is no lifted lead: the part would not be parted from its circuit`);
   if (step.through === 'lamp' && step.lampWatts === undefined) add(['lampWatts'], 'names no lamp');
   const mains = step.through === 'lamp' || step.through === 'mains' || step.through === 'limited-ac';
   if (mains !== (step.node === 'inlet')) add(['node'], mains ? 'mains goes into the inlet' : 'a bench supply does not go into the inlet');
@@ -221,6 +224,7 @@ function partitionFaults(step: Step): string[] {
     if (step.kind === 'observe' && exit.on.includes('answer') && exit.label === undefined) faults.push(`the answer "${exit.id}" has no label`);
     if (exit.on.includes('answer') && exit.on.length > 1) faults.push(`the answer "${exit.id}" is mixed with other outcomes`);
     if (exit.verdict === 'pass' && exit.on.some((on) => DEFAULT_VERDICT[on as Outcome] === 'unsure')) faults.push(`"${exit.id}" calls an unsure answer a pass`);
+    if ((exit.verdict === 'find' || (exit.verdict === 'fail' && ACT_KINDS.includes(step.kind))) && exit.on.some((on) => DEFAULT_VERDICT[on as Outcome] === 'unsure')) faults.push(`"${exit.id}" calls an unsure answer a ${exit.verdict === 'find' ? 'find' : 'failure'}`);
     if (exit.verdict === 'pass' && step.kind !== 'observe' && exit.on.some((on) => DEFAULT_VERDICT[on as Outcome] === 'fail')) faults.push(`"${exit.id}" calls a failed reading a pass`);
   });
   return faults;
@@ -229,4 +233,9 @@ function partitionFaults(step: Step): string[] {
 function reentryFaults(tree: Tree): TreeFault[] {
   const ids = new Set(tree.steps.map((s) => s.id));
   return tree.reentries.flatMap((r, i) => (ids.has(r.step) ? [] : [{ path: ['reentries', i, 'step'], message: `no step "${r.step}"` }]));
+}
+
+/** Whether two fittings under one name are of the same thing; a later one would hide what the first has put in. */
+export function sameThing(a: FittedThing, b: FittedThing | undefined): boolean {
+  return b === undefined || (a.class === b.class && a.area === b.area && (a.earthed ?? false) === (b.earthed ?? false) && a.point === b.point);
 }

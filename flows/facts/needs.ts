@@ -1,6 +1,7 @@
 /** What must be true before a step may be entered: `needs(step, scope)`, each need under the house rule that asks it. */
 import { DEAD_QUANTITIES } from '../document/ids';
 import { resolvePoint, tripRails } from '../document/profile';
+import type { Profile } from '../document/profile';
 import type { Step, StepOf } from '../document/steps';
 import { TEST_CONDITIONS } from '../document/testConditions';
 import type { TestCondition } from '../document/testConditions';
@@ -10,6 +11,7 @@ import { staysShut } from './opening';
 import { powerClass, powerNode } from './power';
 import type { PowerStep } from './power';
 import { partsToDischarge } from './stores';
+import { isSupplyArea } from './voids';
 
 export type RuleId = `H${1 | 2 | 3 | 4 | 5 | 6 | 7 | 8 | 9 | 10 | 11 | 12 | 13 | 14 | 15 | 16 | 17 | 18 | 19 | 20 | 21}`;
 
@@ -47,7 +49,12 @@ function kindNeeds(step: Step, scope: StepScope): Need[] {
   const boardsOut: Need[] = profile.boards.removable ? [{ rule: 'H9', atom: { fact: 'load-not', is: 'boards' }, say: 'the boards are still in' }] : [];
   switch (step.kind) {
     case 'do':
-      return (step.fits?.length ?? 0) + (step.removes?.length ?? 0) > 0 ? dead() : [];
+      return [
+        ...((step.fits?.length ?? 0) + (step.removes?.length ?? 0) > 0 ? dead() : []),
+        ...(step.fits ?? []).flatMap((thing) => settled('H8', thing.earthed !== true || mayBeEarthed(thing.point, profile), 'an earthed instrument goes only to a rail or to 0 V of this supply')),
+        // a trimmed supply is no longer the one that was proved
+        ...(step.trims !== undefined && isSupplyArea(step.trims) ? boardsOut : []),
+      ];
     case 'observe':
       return [...powerNeeds(step.power), ...openingNeeds(step, scope)];
     case 'photo':
@@ -89,6 +96,8 @@ function kindNeeds(step: Step, scope: StepScope): Need[] {
       return [
         { rule: 'H5', atom: { fact: 'feeds', id: step.source, node: powerNode(step) }, say: 'that source is not in at this place' },
         ...settled('H9', step.load !== 'boards', 'boards are never raised, only energised'),
+        // the first full mains waits for a countersign, and nobody is waited for while live: it is energised, not raised to
+        ...(step.source === 'bench' ? [] : [{ rule: 'H20', atom: { fact: 'source', id: step.source, state: powerClass(step, profile, settings) }, say: 'a raise does not go from limited to full mains' } satisfies Need]),
         ...feedNeeds(step, scope),
         ...conditionNeeds(step.asInService),
       ];
@@ -113,6 +122,12 @@ function openingNeeds(step: StepOf<'observe'>, scope: StepScope): Need[] {
     { rule: 'H17', atom: { fact: 'photo', step: scope.check(step.opens.photo) }, say: 'the part has not been photographed before it is opened' },
     ...settled('H17', !staysShut(scope.profile), 'a part of this machine may hold beryllium oxide, so none is opened'),
   ];
+}
+
+/** A rail and 0 V are parted from the mains by the supply; on a switch-mode supply nothing else is known to be. */
+function mayBeEarthed(point: string | undefined, profile: Profile): boolean {
+  if (profile.supplyKind !== 'switch-mode' || point === 'each-rail' || point === 'zero' || point === profile.zeroPoint) return true;
+  return profile.points.some((p) => p.id === point && p.rail !== null);
 }
 
 function powerNeeds(power: 'live' | 'dead' | undefined): Need[] {
@@ -173,6 +188,7 @@ function feedNeeds(step: PowerStep, scope: StepScope): Need[] {
       needed.push(...settled('H6', cls === 'limited', 'a rail is fed from outside only by a limited supply'));
       needed.push({ rule: 'H9', atom: { fact: 'load', is: 'none' }, say: 'a load or a board is on the rail' });
       if (rail?.trip) needed.push(...settled('H9', step.mostVolts <= rail.trip.highVolts + 0.5, 'more volts than the trip test of this rail may see'));
+      else if (rail !== undefined) needed.push(...settled('H9', step.mostVolts <= Math.abs(rail.nominal) * (1 + rail.tolerance), 'more volts than this rail may have, and it has no trip'));
       break;
     }
     case 'part':

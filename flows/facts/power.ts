@@ -1,4 +1,6 @@
 /** What class and kind of power a step puts in (C5, A27). */
+import { lampFor } from '@/shared/workings/lamp';
+
 import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { StepOf } from '../document/steps';
@@ -12,9 +14,16 @@ export function benchLimitedAmps(profile: Profile, settings: Settings): number {
   return Math.max(settings.benchLimitedAmps, settings.benchLimitedShare * rated);
 }
 
-/** Limited mains is a lamp or an AC source with an amps limit; a bench supply by its amps; everything else is full. */
+/** Largest lamp in watts that still limits this machine: twice its plate's volt-amps, or what the series lamp sheet gives where that is more. */
+export function limitingLampWatts(profile: Profile): number {
+  const { voltAmps } = profile.mains;
+  return Math.max(2 * voltAmps, lampFor(voltAmps, profile.supplyKind === 'switch-mode' ? 'switch-mode' : 'linear').totalWatts);
+}
+
+/** Limited mains is a lamp that limits this machine or an AC source limited to as many amps; a bench supply by its amps; everything else is full. */
 export function powerClass(step: PowerStep, profile: Profile, settings: Settings): 'limited' | 'full' {
-  if (step.through === 'lamp' || step.through === 'limited-ac') return 'limited';
+  if (step.through === 'lamp') return (step.lampWatts ?? Infinity) <= limitingLampWatts(profile) ? 'limited' : 'full';
+  if (step.through === 'limited-ac') return step.mostAmps <= limitingLampWatts(profile) / profile.mains.volts ? 'limited' : 'full';
   if (step.through === 'bench') return step.mostAmps <= benchLimitedAmps(profile, settings) ? 'limited' : 'full';
   return 'full';
 }

@@ -15,7 +15,7 @@ import type { RunContext } from './context';
 import { SIGNED_EVENTS } from './events';
 import type { MachineEvent } from './events';
 import { offer, takeOver } from './handOver';
-import { SAFE } from './program';
+import { follow, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 import { afterLongGap, isLongGap, passTime } from './time';
 
@@ -126,8 +126,10 @@ export function reentriesOpen(layout: Layout, context: RunContext): string[] {
   const { facts } = context;
   const clean = facts.fitted.length === 0 && facts.owed.doubts.length === 0 && facts.owed.fails.length === 0 && facts.owed.killers.length === 0;
   return layout.tree.reentries.flatMap((r) => {
-    const placed = layout.steps.get(r.step);
-    if (!clean || placed === undefined || !context.visited.includes(r.step) || unmetClaims(r.needs, facts, layout.profile).length > 0) return [];
+    // a call is gone on from at the first step that it leads to
+    const { key } = follow(layout, r.step, () => false);
+    const placed = layout.steps.get(key);
+    if (!clean || placed === undefined || !context.visited.includes(key) || unmetClaims(r.needs, facts, layout.profile).length > 0) return [];
     return needs(placed.step, placed.scope).every((n) => holds(facts, n.atom)) ? [r.step] : [];
   });
 }

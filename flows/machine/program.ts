@@ -1,4 +1,5 @@
 /** A tree with its callees, laid out for one profile: every step under its key, with its rows, hazards and where its exits lead. */
+import { misfits } from '../document/admits';
 import { FIRST_CAUTION } from '../document/hazards';
 import type { HazardKind } from '../document/hazards';
 import type { DocumentFault } from '../document/parseTree';
@@ -6,6 +7,7 @@ import type { Profile } from '../document/profile';
 import type { Settings } from '../document/settings';
 import type { Claim, Exit, FittedThing, Step, StepOf } from '../document/steps';
 import type { Tree } from '../document/tree';
+import { sameThing } from '../document/treeFaults';
 import { hazardsOf } from '../facts/derivedHazards';
 import type { StepScope } from '../facts/effects';
 import { insteadOf } from '../facts/opening';
@@ -83,12 +85,17 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
     shown.set(written, known);
     return known;
   };
+  const things = new Map<string, FittedThing>();
   const add = (own: Tree, { call, chain }: Placing) => {
     const prefix = call === null ? '' : `${call.key}/`;
     const scope = scopeOf(own, prefix, profile, settings);
     // what is wrong with a tree by itself is said once, not at each of its calls
     const first = !laid.has(own.id);
     laid.add(own.id);
+    for (const thing of first ? scope.things.values() : []) {
+      if (!sameThing(thing, things.get(thing.id))) faults.push({ step: call?.key ?? null, key: 'tree', message: `H4: “${thing.id}” is fitted as one thing here and as another elsewhere: one name, one thing` });
+      things.set(thing.id, thing);
+    }
     own.steps.forEach((written, i) => {
       if (tooMany) return;
       if (steps.size >= MOST_STEPS) {
@@ -115,7 +122,7 @@ export function layOut(input: { tree: Tree; callees: readonly Tree[]; profile: P
     if (chain.includes(step.tree)) return refuse('tree', `H19: the calls go round: ${[...chain.slice(chain.indexOf(step.tree)), step.tree].join(' → ')}`);
     if (callee === undefined) return refuse('tree', `no issued tree "${step.tree}"`);
     if (other !== undefined && step.version !== null && step.version !== other.version) return refuse('version', `H19: calls version ${step.version} of "${step.tree}", and “${other.by}” calls version ${other.version}: a run is led by one version of it`);
-    if (first) faults.push(...callFaults(placed, step, callee));
+    if (first) faults.push(...callFaults(placed, step, callee), ...misfits(callee, profile).map((why) => ({ step: key, key: 'tree', message: `H19: the called tree does not apply here: ${why}` })));
     if (chain.length > MOST_DEPTH) {
       if (!tooDeep) faults.push({ step: key, key: 'tree', message: `H19: calls go more than ${MOST_DEPTH} deep: ${[...chain, step.tree].join(' → ')}` });
       tooDeep = true;

@@ -1,5 +1,6 @@
 /** H11, H16, H18, H19: what speaks of whole paths and not of one place. Each is a finding with the place that shows it. */
 import { DEAD_QUANTITIES } from '../document/ids';
+import { verdictOf } from '../facts/effects';
 import type { RuleId } from '../facts/needs';
 import type { Layout } from '../machine/program';
 import type { Edge, Graph, PlaceNode } from './graph';
@@ -16,9 +17,13 @@ export function reachFindings(graph: Graph): PathFinding[] {
   const ends = [...graph.nodes.values()].filter((n) => n.edges.length === 0).map((n) => n.key);
   const ending = backward(graph, ends);
   const found: PathFinding[] = [];
+  // a retry has the workshop's limit; a passing answer that comes back is a walk over rows, as long as its author counts
+  const { retries } = graph.layout.settings;
   for (const node of graph.nodes.values()) {
     if (!reached.has(node.key)) found.push({ rule: 'H16', key: node.key, say: 'no way leads to this step' });
     else if (!ending.has(node.key)) found.push({ rule: 'H16', key: node.key, say: 'no way leads from this step to an end' });
+    const tooOften = node.edges.find((e) => (e.exit.atMost ?? 0) > retries && verdictOf(e.exit, e.exit.on.includes('answer') ? 'answer' : e.outcome) !== 'pass');
+    if (tooOften !== undefined) found.push({ rule: 'H16', key: node.key, say: `“${tooOften.exit.label ?? tooOften.exit.id}” may be tried ${tooOften.exit.atMost ?? 0} times; a retry is taken at most ${retries} times` });
     for (const edge of node.edges) {
       if (edge.spent && !leadsOut(graph, edge.to)) found.push({ rule: 'H16', key: node.key, say: `when “${edge.exit.label ?? edge.exit.id}” has been taken too often, it must lead to isolation, a hold or an end` });
     }
@@ -115,6 +120,8 @@ export function callFindings(graph: Graph): PathFinding[] {
   for (const call of graph.layout.calleeFirst.keys()) {
     const callStep = graph.layout.steps.get(call)?.step;
     if (callStep?.kind === 'call' && callStep.version === null) found.push({ rule: 'H19', key: call, say: 'the called tree has no pinned version' });
+    const raised = raisedFromOutside(graph, call);
+    if (raised !== null) found.push({ rule: 'H19', key: raised, say: 'a called tree only reads a source that was in at its call, and this raises it' });
     // follow "out" alone through the called tree: it may be lost inside, but not at a way back
     const lost = new Set<string>();
     const stack: { key: string; out: boolean }[] = [{ key: graph.land(call), out: true }];
@@ -136,6 +143,20 @@ export function callFindings(graph: Graph): PathFinding[] {
     for (const key of lost) found.push({ rule: 'H19', key: call, say: `a source that was out at the call may be in when it comes back to “${graph.nodes.get(key)?.placed.step.title ?? key}”` });
   }
   return found;
+}
+
+/** A raise in a called tree that no energise of the same tree stands before, or null. */
+function raisedFromOutside(graph: Graph, call: string): string | null {
+  const seen = new Set<string>();
+  const stack = [graph.land(call)];
+  for (let key = stack.pop(); key !== undefined; key = stack.pop()) {
+    const node = graph.nodes.get(key);
+    if (node === undefined || seen.has(key) || !key.startsWith(`${call}/`)) continue;
+    seen.add(key);
+    if (node.placed.step.kind === 'raise') return key;
+    if (node.placed.step.kind !== 'energise') stack.push(...node.edges.map((edge) => edge.to));
+  }
+  return null;
 }
 
 function forward(graph: Graph, from: readonly string[], take: (edge: Edge) => boolean, aborting = true): Set<string> {

@@ -54,8 +54,12 @@ async function startOnce(tx: Tx, parts: Parts, who: Starter, wish: Wish): Promis
   if (against.length > 0) throw new ProblemError('not-startable', `“${version.document.title}” does not apply to ${machine.name}: ${against.join('; ')}.`);
 
   const { settings, hash: settingsHash } = await getSettings(tx);
-  const { found, missing } = await findCallees(tx, version.document);
+  const { found, missing, withdrawn } = await findCallees(tx, version.document);
   if (missing.length > 0) throw new ProblemError('not-startable', `The called tree ${missing.join(', ')} has no issued version.`);
+  if (withdrawn.length > 0) {
+    const faults = withdrawn.map((fault) => ({ path: `${fault.step ?? ''}.${fault.key}`, message: fault.message }));
+    throw new ProblemError('not-startable', `“${version.document.title}” calls a tree that may lead nobody any more: ${withdrawn[0]?.message ?? ''}.`, { faults });
+  }
   const pair = { tree: version.document, callees: found.map((row) => row.document), profile: machine.profile, settings };
   const compiled = compile(pair);
   if (!compiled.ok) {

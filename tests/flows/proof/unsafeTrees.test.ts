@@ -1,6 +1,7 @@
 /** Trees that could lead a hand to a live circuit, each in one line: every one is refused, with the rule that it breaks and a path to it. */
 import { describe, expect, it } from 'vitest';
 
+import { parseTree } from '@/flows/document/parseTree';
 import { defaultSettings } from '@/flows/document/settings';
 import type { Profile } from '@/flows/document/profile';
 import type { Tree } from '@/flows/document/tree';
@@ -8,7 +9,7 @@ import { prove } from '@/flows/proof/prove';
 import type { Proof } from '@/flows/proof/prove';
 
 import { benchProfile, makeDeadTree } from '../support/bench';
-import { bench, clip, connect, dead, earth, end, fit, hands, insulation, lamp, look, mains, observe, rails, remove, returns, step, treeOf, work } from '../support/steps';
+import { bench, clip, connect, dead, earth, end, fit, hands, insulation, lamp, look, mains, observe, rails, remove, returns, step, treeJson, treeOf, work } from '../support/steps';
 
 type Step = Record<string, unknown>;
 const proofOf = (tree: Tree, profile: Profile = benchProfile, callees = [makeDeadTree]): Proof => prove({ tree, callees, profile, settings: defaultSettings });
@@ -130,5 +131,83 @@ describe('unsafe trees', () => {
     const h1 = proofOf(tree).rules.find((r) => r.id === 'H1');
     expect(h1?.story).toBe('You could reach “Swap the reservoir capacitor” although a source is in, or nobody knows that it is out; stored charge is not proved dead, by answering “dim” at “Look at the lamp”.');
     expect(h1?.path.at(-1)).toBe('swap');
+  });
+});
+
+describe('trees that look safe by their labels alone', () => {
+  const documentSays = (steps: Step[]) => {
+    const parsed = parseTree(treeJson(steps));
+    return parsed.ok ? '' : parsed.faults.map((f) => `${f.step ?? 'head'}|${f.key}|${f.message}`).join('\n');
+  };
+  it('fit a clip under the name of a link that is still in', () => {
+    const link = fit('link', { id: 'wire', name: 'link', class: 'link', area: 'part' }, 'clip');
+    const clipped = fit('clip', { id: 'wire', name: 'clip', class: 'clip', area: 'clip', point: 'each-rail' }, 'lamp');
+    expect(documentSays([...ready('link'), link, clipped, lamp('lamp', 'abort')])).toMatch(/link\|fits\.0\.id\|"wire" is also fitted as something else/);
+  });
+  it('fit it in a called tree', () => {
+    const inner = treeOf([dead('safe', 'clip'), fit('clip', { id: 'wire', name: 'clip', class: 'clip', area: 'clip', point: 'each-rail' }, 'done')], { id: 'inner' });
+    const tree = treeOf([look('d1'), dead('d1', 'link'), fit('link', { id: 'wire', name: 'link', class: 'link', area: 'part' }, 'go'), { ...dead('go', 'done'), tree: 'inner', exits: [{ id: 'both', on: ['done', 'refer'], to: 'done' }] }]);
+    expect(proofOf(tree, benchProfile, [makeDeadTree, inner]).rules.find((r) => r.id === 'H4')?.story).toMatch(/“wire” is fitted as one thing here and as another elsewhere/);
+  });
+  it('feed a part “alone” behind a lead that is no lead', () => {
+    const fed = bench('feed', 'abort', { node: 'part', lead: 'rail-clips', mostVolts: 5 });
+    expect(documentSays([look('d1'), dead('d1', 'clip'), clip('feed'), fed])).toMatch(/feed\|lead\|"rail-clips" is no lifted lead/);
+  });
+  it('test a trip through a part that is no series part', () => {
+    expect(documentSays([...ready('clip'), clip('bench'), bench('bench', 'trip', { node: 'rail', rail: 'p5', mostVolts: 6.8 }), step('prove-trip', 'trip', 'abort', { contact: 'probe', probe: 'hand', rail: 'p5', series: 'rail-clips', ceilingVolts: 6.8 }, 'abort')])).toMatch(/trip\|series\|"rail-clips" is no series part/);
+  });
+  it.each([
+    ['a check', step('measure', 'm', 'done', { contact: 'probe', probe: 'hand', quantity: 'volts-dc', limit: { is: 'below', high: 4 }, exits: [{ id: 'in', on: ['in', 'low', 'high', 'reversed'], to: 'done', verdict: 'find', reason: 'A question' }, { id: 'what', on: ['close', 'not-sure', 'cannot'], to: 'done', verdict: 'find', reason: 'A question' }] }), /"what" calls an unsure answer a find/],
+    ['an act', hands('m', 'done', { exits: [{ id: 'good', on: ['done'], to: 'done' }, { id: 'other', on: ['not-sure', 'cannot'], to: 'done', verdict: 'fail' }] }), /"other" calls an unsure answer a failure/],
+  ])('call an unsure answer of %s something else', (_, unsure, message) => {
+    expect(documentSays([look('d1'), dead('d1', 'm'), unsure])).toMatch(message);
+  });
+  it('raise the lamp to full mains, past the countersign of the first full power', () => {
+    const up = step('raise', 'up', 'abort', { contact: 'none', source: 'mains', through: 'mains', node: 'inlet', load: 'none', mostVolts: 230, mostAmps: 2, longestMinutes: 10, abort: 'abort' }, 'abort');
+    const proof = proofOf(treeOf([...passed('again'), lamp('again', 'up'), up]));
+    expect(proof.rules.filter((r) => !r.holds).map((r) => r.id)).toEqual(['H20']);
+  });
+  it('call a lamp that limits nothing a limited first power', () => {
+    // 120 VA on the plate: a lamp of up to 240 W limits it (series lamp sheet, common practice, no source)
+    const through = (watts: number) => rulesOf(treeOf([...ready('lamp'), lamp('lamp', 'abort', { lampWatts: watts })]));
+    expect(through(240)).toEqual([]);
+    expect(through(1000)).toEqual(['H6']);
+  });
+  it('feed a rail that has no trip with more than it may have', () => {
+    const bare: Profile = { ...benchProfile, rails: benchProfile.rails.map((r) => ({ ...r, trip: null })) };
+    const feed = (volts: number) => rulesOf(treeOf([...ready('feed'), bench('feed', 'abort', { node: 'rail', rail: 'p5', mostVolts: volts })]), bare);
+    expect(feed(6.6)).toEqual(['H9']);
+    expect(feed(5.2)).toEqual([]);
+  });
+  it('trim the regulator with the boards in', () => {
+    const boards: Profile = { ...benchProfile, outOfMachine: false };
+    const trim = step('do', 'trim', 'done', { contact: 'probe', trims: 'regulator' });
+    expect(rulesOf(treeOf([look('d1'), dead('d1', 'trim'), trim]), boards)).toContain('H9');
+    expect(rulesOf(treeOf([look('d1'), dead('d1', 'trim'), trim]))).toEqual([]);
+  });
+  it('clip an earthed scope to the bulk capacitor of a switch-mode supply', () => {
+    const switcher: Profile = { ...benchProfile, supplyKind: 'switch-mode' };
+    const scope = (point: string) => fit('scope', { id: 'scope', name: 'scope', class: 'clip', area: 'clip', earthed: true, point }, 'done');
+    const onScope = (point: string, profile: Profile) => rulesOf(treeOf([look('d1'), dead('d1', 'scope'), scope(point)]), profile);
+    expect(onScope('raw', switcher)).toEqual(['H8']);
+    expect(onScope('each-store', switcher)).toEqual(['H8']);
+    expect(onScope('t5', switcher)).toEqual([]);
+    expect(onScope('raw', benchProfile)).toEqual([]);
+  });
+  it('try again and again', () => {
+    const again = (n: number) => rulesOf(treeOf([look('see'), observe('see', 'done', { exits: [{ id: 'good', label: 'Good', on: ['answer'], to: 'done' }, { id: 'unsure', on: ['not-sure', 'cannot'], to: 'see', atMost: n, then: 'refer' }] })]));
+    expect(again(4)).toEqual(['H16']);
+    expect(again(3)).toEqual([]);
+  });
+  it('raise in a called tree what its caller has put in', () => {
+    const up = step('raise', 'up', 'done', { contact: 'none', source: 'bench', through: 'bench', node: 'raw', load: 'none', mostVolts: 12, mostAmps: 1, longestMinutes: 5, abort: 'abort' }, 'abort');
+    const inner = treeOf([up], { id: 'inner' });
+    const tree = treeOf([...ready('feed'), bench('feed', 'go'), { ...dead('go', 'abort'), tree: 'inner', exits: [{ id: 'both', on: ['done', 'refer'], to: 'abort' }] }]);
+    expect(proofOf(tree, benchProfile, [makeDeadTree, inner]).rules.find((r) => r.id === 'H19')?.story).toMatch(/only reads a source that was in at its call/);
+  });
+  it('call a tree that is not for this machine', () => {
+    const other = treeOf([dead('safe', 'done')], { id: 'other', appliesTo: { protectiveClasses: ['II'], supplyKinds: ['linear'], fewestRails: 1, mostRails: 6 } });
+    const tree = treeOf([look('go'), { ...dead('go', 'done'), tree: 'other', exits: [{ id: 'done', on: ['done'], to: 'done' }] }]);
+    expect(proofOf(tree, benchProfile, [makeDeadTree, other]).rules.find((r) => r.id === 'H19')?.story).toMatch(/does not apply here: it is for protective class II/);
   });
 });

@@ -94,6 +94,20 @@ describe('starting a run', () => {
     });
   });
 
+  it('refuses a call of a version that has been withdrawn, with step and key, however deep it stands', async () => {
+    await addTree(server.database.ownerUrl, workshop, makeDeadTree, { version: 2, state: 'withdrawn' });
+    const pins = (id: string, tree: string, version: number) => must(parseTree({ ...lampTreeJson, id, steps: lampTreeJson.steps.map((step) => (step.kind === 'call' ? { ...step, tree, version, ...(tree === 'old' ? { exits: [{ id: 'dead', on: ['done', 'refer'], to: step.exits[0]?.to }] } : {}) } : step)) }));
+    await addTree(server.database.ownerUrl, workshop, pins('old', 'make-dead', 2));
+    await addTree(server.database.ownerUrl, workshop, pins('above', 'old', 1));
+    const refused = async (tree: string) => {
+      const { status, body } = await restorer.post('/api/runs', wish({ tree }));
+      expect([status, body['code']]).toEqual([422, 'not-startable']);
+      return body['faults'];
+    };
+    expect(await refused('old')).toEqual([{ path: 'dead1.version', message: 'version 2 of “Make dead” has been withdrawn' }]);
+    expect(await refused('above')).toEqual([{ path: 'old/dead1.version', message: 'version 2 of “Make dead” has been withdrawn' }]);
+  });
+
   it('refuses a machine and a version that are not there, or that belong to another workshop', async () => {
     const other = await makeWorkshop(server.database.ownerUrl);
     for (const change of [{ machine: other.machine }, { machine: crypto.randomUUID() }, { tree: 'nothing' }, { version: 9 }]) {
