@@ -104,7 +104,12 @@ function machineOf(layout: Layout): RunMachine {
 
   const placed = [...layout.steps.values()];
   const below = new Map<string | null, ProgramStep[]>();
-  for (const p of placed) if (!p.builtIn && p.step.kind !== 'end') below.set(p.caller, [...(below.get(p.caller) ?? []), p]);
+  for (const p of placed) {
+    if (p.builtIn || p.step.kind === 'end') continue;
+    const known = below.get(p.caller);
+    if (known === undefined) below.set(p.caller, [p]);
+    else known.push(p);
+  }
   // a call is a state with the states of the called tree in it, and so on down
   const statesOf = (call: string | null): Record<string, Node> =>
     Object.fromEntries((below.get(call) ?? []).map((p): [string, Node] => [p.step.id, p.step.kind === 'call' ? { initial: below.get(p.key)?.[0]?.step.id ?? '', states: statesOf(p.key) } : stepNode(p)]));
