@@ -48,6 +48,27 @@ const FILLS: Readonly<Record<string, Fill>> = {
       return part === undefined ? null : { farads: part.farads, volts: part.voltsWorked, safeVolts: known.settings.deadVolts, bleederOhms: part.bleederOhms };
     },
   },
+  reforming: {
+    of: 'part',
+    inputs: (known, id) => {
+      const part = store(known, id);
+      return part === undefined ? null : { farads: part.farads, ratedVolts: part.voltsRated, targetVolts: part.voltsWorked };
+    },
+  },
+  'rail-load-plan': {
+    of: 'machine',
+    inputs: ({ profile: { rails, minimumLoad, boards } }) => ({
+      rails: rails.map((of) => ({
+        name: of.name,
+        nominalVolts: of.nominal,
+        tolerancePercent: percent(of.tolerance),
+        maxAmps: of.maxAmps,
+        minimumAmps: minimumLoad.find((least) => least.rail === of.id)?.amps ?? 0,
+        sense: of.sense,
+        first: boards.fitted.some((board) => board.biasFirst === of.id) ? 'yes' : 'no',
+      })),
+    }),
+  },
   'rail-limits': {
     of: 'rail',
     inputs: (known, id) => {
@@ -71,7 +92,60 @@ const FILLS: Readonly<Record<string, Fill>> = {
       return wire === undefined ? null : { awg: null, squareMillimetres: wire.squareMillimetres, metres: wire.metres, path: 'one-way' };
     },
   },
+  'pass-element': {
+    of: 'rail',
+    inputs: (known, id) => {
+      const [of, { raw, supplyKind }] = [rail(known, id), known.profile];
+      // a primary switch works on the mains side: that is no pass element between raw and rail
+      if (of === undefined || raw === null || supplyKind === 'switch-mode') return null;
+      return { inputVolts: raw.volts, outputVolts: Math.abs(of.nominal), amps: of.maxAmps, style: supplyKind === 'linear' ? 'linear' : 'switching' };
+    },
+  },
+  'switching-regulator': {
+    of: 'rail',
+    inputs: (known, id) => {
+      const [of, { raw, supplyKind, devices }] = [rail(known, id), known.profile];
+      if (of === undefined || raw === null || supplyKind !== 'switched-from-raw') return null;
+      const diode = devices.find((d) => d.rail === id && (d.kind === 'diode' || d.kind === 'schottky'));
+      return { inputVolts: raw.volts, outputVolts: Math.abs(of.nominal), amps: of.maxAmps, diodeAmps: diode?.ratedAmps ?? null };
+    },
+  },
+  'smoothing-ripple': {
+    of: 'part',
+    inputs: (known, id) => {
+      const part = store(known, id);
+      return part === undefined ? null : { mainsHertz: known.profile.mains.hertz, farads: part.farads };
+    },
+  },
+  'fuse-inrush': {
+    of: 'machine',
+    inputs: ({ profile: { mains } }) => ({ speed: mains.fuse.kind, ratedAmps: mains.fuse.amps, loadAmps: Number((mains.voltAmps / mains.volts).toPrecision(6)) }),
+  },
+  'over-voltage-trip': {
+    of: 'rail',
+    inputs: (known, id) => {
+      const of = rail(known, id);
+      if (of === undefined || of.trip === null) return null;
+      const { lowVolts, highVolts } = of.trip;
+      const middle = (lowVolts + highVolts) / 2;
+      return {
+        nominalVolts: of.nominal,
+        tolerancePercent: percent(of.tolerance),
+        kind: 'set-point',
+        tripVolts: Number(middle.toPrecision(12)),
+        tripTolerancePercent: percent((highVolts - lowVolts) / 2 / middle),
+        limitAmps: of.limitAmps,
+      };
+    },
+  },
   'lost-return': { of: 'machine', inputs: ({ profile }) => lostReturnOf(profile) },
+  'refit-trip': {
+    of: 'rail',
+    inputs: (known, id) => {
+      const of = rail(known, id);
+      return of === undefined ? null : { nominalVolts: of.nominal, railAmps: of.maxAmps, ownLimitAmps: of.limitAmps };
+    },
+  },
 };
 
 /** True where the sheet has inputs that a machine's profile knows. */

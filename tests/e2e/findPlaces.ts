@@ -41,6 +41,10 @@ export async function findPlaces(ownerUrl: string, who: DemoPersonKey): Promise<
         ...records,
         { path: '/workings', heading: 'Workings' },
         { path: '/workings/series-lamp', heading: /lamp/i, picture: 'workings' },
+        { path: '/workings/smoothing-ripple', heading: 'Smoothing ripple' },
+        { path: '/workings/lost-return', heading: 'Lost return', picture: 'lost-return' },
+        // a link with a fault in it
+        { path: '/workings/bleed-down?volts=1,234', heading: 'Bleed-down' },
         { path: '/workshop', heading: demoWorkshops.first.name, picture: 'workshop' },
         { path: '/workshop/instruments', heading: 'Instruments' },
         { path: '/workshop/people', heading: 'People and roles' },

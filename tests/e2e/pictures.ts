@@ -1,4 +1,4 @@
-/** Makes the pictures of the documentation from a fresh demo: `npm run pictures`. A few minutes; needs Chromium. */
+/** Makes the pictures of the documentation from a fresh demo: `npm run pictures`, or only some: `npm run pictures -- record workings`. A few minutes; needs Chromium. */
 import { mkdirSync } from 'node:fs';
 
 import { chromium, expect, type Browser, type Page } from '@playwright/test';
@@ -19,10 +19,13 @@ const sizes = [
   { width: 1440, height: 900 },
 ];
 const schemes = ['light', 'dark'] as const;
+/** names of the pictures that are asked for; none asks for all */
+const only = process.argv.slice(2);
 const TREE = 'Dormant three-rail supply: first power';
 
 /** The page as it stands, from its top, in both sizes and by day and by night. */
 async function take(page: Page, what: string): Promise<void> {
+  if (only.length > 0 && !only.includes(what)) return;
   for (const size of sizes) {
     for (const colorScheme of schemes) {
       await page.setViewportSize(size);
@@ -58,7 +61,7 @@ async function still(browser: Browser, stack: Stack): Promise<void> {
   await take(door, 'sign-in');
   const page = await openPage(browser, stack, 'reviewer', false);
   for (const { path, heading, picture } of await findPlaces(stack.ownerUrl, 'reviewer')) {
-    if (picture === undefined) continue;
+    if (picture === undefined || (only.length > 0 && !only.includes(picture))) continue;
     await page.goto(path);
     await page.getByRole('heading', { level: 1, name: heading }).waitFor();
     await take(page, picture);
@@ -112,7 +115,7 @@ const browser = await chromium.launch({
 try {
   // the places first, as a new workshop finds them
   await still(browser, stack);
-  await run(browser, stack);
+  if (only.length === 0 || only.some((name) => name === 'bench' || name === 'holds' || name.startsWith('run-'))) await run(browser, stack);
 } finally {
   await browser.close();
   await stack.stop();

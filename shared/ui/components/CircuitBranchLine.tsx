@@ -13,18 +13,19 @@ const LEAST_AMPS = 1e-6;
 /** The lit way is thick and in brass with arrows; an opened wire has a gap with a cross; nothing is told by colour alone. */
 export function CircuitBranchLine({ placed }: { placed: PlacedBranch }) {
   const { colors } = useTheme();
-  const { branch, number, x1, y1, x2, y2, drops } = placed;
+  const { branch, number, x1, y1, x2, y2, share, numberAt, drops } = placed;
   const lit = branch.lit === true;
   const opened = branch.mark === 'opened';
   const stroke = lit ? colors.brass : colors.ink;
   const width = lit ? 4.5 : 1.8;
   const length = Math.hypot(x2 - x1, y2 - y1);
   const turn = (Math.atan2(y2 - y1, x2 - x1) * 180) / Math.PI;
-  const half = Math.max(0, (length - SYMBOL_LENGTH) / 2);
+  // where the symbol begins
+  const begin = Math.max(0, length * share - SYMBOL_LENGTH / 2);
   const symbol = CIRCUIT_SYMBOLS[branch.kind];
   const level = Math.abs(y2 - y1) < 1;
-  const [mx, my] = [(x1 + x2) / 2, (y1 + y2) / 2];
-  const [sx, sy] = level ? [mx, my - 21] : [mx + 24, my];
+  const [mx, my] = [x1 + (x2 - x1) * share, y1 + (y2 - y1) * share];
+  const [sx, sy] = level ? [mx, my - 21] : [mx + (numberAt === 'right' ? 24 : -24), my];
   const backwards = (branch.amps ?? 0) < 0;
   const flows = !opened && branch.amps !== null && Math.abs(branch.amps) > LEAST_AMPS;
   return (
@@ -37,27 +38,27 @@ export function CircuitBranchLine({ placed }: { placed: PlacedBranch }) {
       <G transform={`translate(${x1} ${y1}) rotate(${turn})`}>
         {opened ? (
           <G>
-            <Path d={`M0 0H${half}M${half + SYMBOL_LENGTH} 0H${length}`} stroke={colors.ink} strokeWidth={1.8} strokeDasharray="5 4" />
-            <Path d={`M${half + 9} -8 ${half + 25} 8M${half + 9} 8 ${half + 25} -8`} stroke={colors.ink} strokeWidth={3.5} />
+            <Path d={`M0 0H${begin}M${begin + SYMBOL_LENGTH} 0H${length}`} stroke={colors.ink} strokeWidth={1.8} strokeDasharray="5 4" />
+            <Path d={`M${begin + 9} -8 ${begin + 25} 8M${begin + 9} 8 ${begin + 25} -8`} stroke={colors.ink} strokeWidth={3.5} />
           </G>
         ) : (
           <G>
-            <Path d={`M0 0H${half}M${half + SYMBOL_LENGTH} 0H${length}`} stroke={stroke} strokeWidth={width} />
-            <G transform={`translate(${half} 0)`}>
+            <Path d={`M0 0H${begin}M${begin + SYMBOL_LENGTH} 0H${length}`} stroke={stroke} strokeWidth={width} />
+            <G transform={`translate(${begin} 0)`}>
               {symbol.body === undefined ? null : <Path d={symbol.body} fill={colors.raised} stroke={stroke} strokeWidth={lit ? 3 : 1.8} />}
               {symbol.line === '' ? null : <Path d={symbol.line} fill="none" stroke={stroke} strokeWidth={lit ? 3.5 : 1.8} />}
               {symbol.solid === undefined ? null : <Path d={symbol.solid} fill={stroke} />}
             </G>
-            {branch.kind === 'source' ? <Plus at={half} turn={turn} color={colors.ink} /> : null}
+            {branch.kind === 'source' ? <Plus at={begin} turn={turn} color={colors.ink} /> : null}
             {flows ? (
               <Path
-                d={backwards ? `M${half - 3} -6L${half - 13} 0 ${half - 3} 6z` : `M${half + SYMBOL_LENGTH + 3} -6l10 6 -10 6z`}
+                d={backwards ? `M${begin - 3} -6L${begin - 13} 0 ${begin - 3} 6z` : `M${begin + SYMBOL_LENGTH + 3} -6l10 6 -10 6z`}
                 fill={stroke}
               />
             ) : null}
             {branch.mark === 'accused' ? (
               <Path
-                d={`M${half - 2} -13H${half + 36}V13H${half - 2}z`}
+                d={`M${begin - 2} -13H${begin + 36}V13H${begin - 2}z`}
                 fill="none"
                 stroke={colors.ink}
                 strokeWidth={2}

@@ -19,6 +19,10 @@ export interface PlacedBranch {
   y1: number;
   x2: number;
   y2: number;
+  /** where its symbol stands, as a share of the way, clear of rules that it crosses */
+  share: number;
+  /** on which side of an upright its number stands */
+  numberAt: 'left' | 'right';
   /** level branches reach a node of another height by these uprights */
   drops: { x: number; y1: number; y2: number }[];
 }
@@ -90,7 +94,7 @@ function levels({ nodes }: Circuit, across: readonly CircuitBranch[]) {
     next += LEVEL / 3;
   }
   for (const node of nodes) place(node.id);
-  return { y, lanes, bottom: next };
+  return { y, lanes, bottom: Math.max(TOP, ...lanes.values()) };
 }
 
 /** Puts uprights into as few columns as they fit in without touching: columns of their heights. */
@@ -106,6 +110,18 @@ function columnsOf(branches: readonly CircuitBranch[], y: ReadonlyMap<string, nu
     column.set(branch.id, at);
   }
   return { column, count: taken.length };
+}
+
+/** The middle of the widest gap between the rules that an upright crosses, as a share of its way. */
+function clearShare(y1: number, y2: number, rules: readonly number[]): number {
+  const [top, bottom] = [Math.min(y1, y2), Math.max(y1, y2)];
+  const stops = [...new Set([top, ...rules.filter((y) => y > top && y < bottom), bottom])].sort((a, b) => a - b);
+  let best = [top, bottom] as readonly [number, number];
+  stops.slice(1).forEach((to, i) => {
+    const from = stops[i] ?? top;
+    if (i === 0 || to - from > best[1] - best[0]) best = [from, to];
+  });
+  return bottom === top ? 0.5 : ((best[0] + best[1]) / 2 - y1) / (y2 - y1);
 }
 
 /**
@@ -142,10 +158,29 @@ export function circuitModel(circuit: Circuit, least: number): CircuitModel {
     x1: node.side === 'supply' ? leftGutter : upright(node.id),
     x2: node.side === 'supply' ? upright(node.id) : width - rightGutter,
   }));
-  const upRights = (list: readonly CircuitBranch[], columns: Map<string, number>, x0: number, step: number): PlacedBranch[] =>
+  const rules = (side: 'supply' | 'load') => circuit.nodes.filter((n) => n.side === side).map((n) => heightOf(n.id));
+  const upRights = (
+    side: 'supply' | 'load',
+    list: readonly CircuitBranch[],
+    columns: Map<string, number>,
+    x0: number,
+    step: number,
+  ): PlacedBranch[] =>
     list.map((branch) => {
       const x = x0 + (columns.get(branch.id) ?? 0) * step;
-      return { branch, number: numberOf.get(branch.id) ?? 0, x1: x, x2: x, y1: heightOf(branch.from), y2: heightOf(branch.to), drops: [] };
+      const [y1, y2] = [heightOf(branch.from), heightOf(branch.to)];
+      const share = clearShare(y1, y2, rules(side));
+      return {
+        branch,
+        number: numberOf.get(branch.id) ?? 0,
+        x1: x,
+        x2: x,
+        y1,
+        y2,
+        share,
+        numberAt: side === 'supply' ? 'right' : 'left',
+        drops: [],
+      };
     });
   const level = across.map((branch): PlacedBranch => {
     const lane = lanes.get(branch.id) ?? heightOf(branch.from);
@@ -158,17 +193,19 @@ export function circuitModel(circuit: Circuit, least: number): CircuitModel {
       x2: to?.x ?? 0,
       y1: lane,
       y2: lane,
+      share: 0.5,
+      numberAt: 'right',
       drops: ends.filter(({ y1, y2 }) => y1 !== y2),
     };
   });
   return {
     width,
-    height: bottom + 12,
+    height: Math.max(bottom, ...circuit.nodes.map((n) => heightOf(n.id))) + 38,
     nodes,
     branches: [
-      ...upRights(supply, left.column, leftGutter + 20, COLUMN),
+      ...upRights('supply', supply, left.column, leftGutter + 20, COLUMN),
       ...level,
-      ...upRights(load, right.column, width - rightGutter - 20, -COLUMN),
+      ...upRights('load', load, right.column, width - rightGutter - 20, -COLUMN),
     ],
   };
 }

@@ -92,8 +92,11 @@ interface Drawn {
 
 function drawnAxis(axis: PlotAxis, values: readonly number[], count: number): Drawn {
   const scale = axis.scale === 'log' ? scaleLog<number, number>() : scaleLinear<number, number>();
-  scale.domain(extentOf(axis, values));
-  if (axis.from === undefined && axis.to === undefined) scale.nice(count);
+  const [low, high] = extentOf(axis, values);
+  scale.domain([low, high]).nice(count);
+  const [roundLow = low, roundHigh = high] = scale.domain();
+  // an end that the sheet gives stays; the other one is rounded, so that no curve runs along the edge
+  scale.domain([axis.from ?? roundLow, axis.to ?? roundHigh]);
   const [from = 0, to = 1] = scale.domain();
   const prefix = axis.scale === 'log' ? '' : prefixOf(axis, from, to);
   const unit = axis.scale === 'log' ? '' : `${prefix}${axis.unit}`;

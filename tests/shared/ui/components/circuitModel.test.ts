@@ -43,6 +43,14 @@ describe('circuitModel', () => {
     expect(at(model, 'd5').x1).not.toBe(at(model, 's5').x1);
   });
 
+  it('keeps the symbol of an upright clear of the rules that it crosses', () => {
+    const long: Circuit = { ...lostReturnCircuit, branches: [{ id: 'x', kind: 'source', label: 'x', from: 'p5', to: 'n12', amps: 1 }] };
+    const drawn = circuitModel(long, 358);
+    const [x] = drawn.branches;
+    const symbol = (x?.y1 ?? 0) + ((x?.y2 ?? 0) - (x?.y1 ?? 0)) * (x?.share ?? 0);
+    for (const node of drawn.nodes) expect(Math.abs(node.y - symbol)).toBeGreaterThan(20);
+  });
+
   it('puts no two branches on one another, however many there are', () => {
     const nodes = ['a', 'b', 'c'].flatMap((id) => [
       { id, label: id, volts: 1, side: 'supply' as const },
@@ -54,7 +62,7 @@ describe('circuitModel', () => {
     );
     const big: Circuit = { title: 'all to all', nodes, branches, words: 'all' };
     const drawn = circuitModel(big, 300).branches;
-    const middles = drawn.map((b) => `${Math.round((b.x1 + b.x2) / 2)},${Math.round((b.y1 + b.y2) / 2)}`);
+    const middles = drawn.map((b) => `${Math.round(b.x1 + (b.x2 - b.x1) * b.share)},${Math.round(b.y1 + (b.y2 - b.y1) * b.share)}`);
     expect(new Set(middles).size).toBe(branches.length);
   });
 });
