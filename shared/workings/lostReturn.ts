@@ -1,21 +1,17 @@
 /** Lost return: what happens to rails, boards and diodes when a ground wire comes off, and which wire readings accuse. */
-import { statesOf } from '@/shared/workings/lostReturnCases';
 import { lostReturnExample } from '@/shared/workings/lostReturnExample';
 import { findFault } from '@/shared/workings/lostReturnFault';
+import { faultInWords, lostReturnFormula } from '@/shared/workings/lostReturnFormula';
 import { lostReturnInputs } from '@/shared/workings/lostReturnInputs';
-import type { LostReturnModel } from '@/shared/workings/lostReturnModel';
-import { LIMIT_VOLTS_SHARE, lostReturnModel, shortAmps, shortOhms, shortVolts } from '@/shared/workings/lostReturnModel';
-import type { JudgedOpenings } from '@/shared/workings/lostReturnOpenings';
+import { LIMIT_VOLTS_SHARE, lostReturnModel } from '@/shared/workings/lostReturnModel';
 import { judgeOpenings } from '@/shared/workings/lostReturnOpenings';
 import { lostReturnDrawing } from '@/shared/workings/lostReturnDrawing';
 import { openingResult } from '@/shared/workings/lostReturnReport';
-import type { LostReturnResult, OpeningResult, OpeningVerdict, ReturnFault } from '@/shared/workings/lostReturnResult';
-import { lostReturnResult } from '@/shared/workings/lostReturnResult';
+import type { LostReturnResult, OpeningResult } from '@/shared/workings/lostReturnResult';
+import { lostReturnResult, VERDICTS } from '@/shared/workings/lostReturnResult';
 import { andList } from '@/shared/workings/lostReturnWords';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { defineSheet } from '@/shared/workings/sheet';
-
-const VERDICTS: readonly OpeningVerdict[] = ['harmless', 'out of tolerance', 'destructive'];
 
 function worstOf(openings: readonly OpeningResult[]): OpeningResult | null {
   const worst = openings.reduce<OpeningResult | null>(
@@ -25,45 +21,9 @@ function worstOf(openings: readonly OpeningResult[]): OpeningResult | null {
   return worst === null || worst.verdict === 'harmless' ? null : worst;
 }
 
-function faultInWords({ says, suspects, asItStandsVolts }: ReturnFault): string {
-  const [first] = suspects;
-  const named = andList(suspects.map(({ name, ohms }) => `${name} at ${shortOhms(ohms)}`));
-  if (says === 'nothing amiss') return 'The readings fit good wires throughout.';
-  if (says === 'no single wire' || first === undefined)
-    return `No single wire explains the readings, which are ${shortVolts(asItStandsVolts)} off: suspect more than one wire, the loads as entered, or the meter’s leads.`;
-  if (says === 'one wire') return `${first.name} is at fault: about ${shortOhms(first.ohms)}, where ${shortOhms(first.goodOhms)} belongs.`;
-  return `The readings cannot tell ${named} apart: measure each dead, end to end.`;
-}
-
 function headlineOf(result: LostReturnResult): string {
   if (result.fault !== null) return faultInWords(result.fault);
   return result.worst?.sentence ?? 'No return, and no pair of them, takes a rail or a board out of tolerance when it opens.';
-}
-
-function formulaOf(model: LostReturnModel, judged: JudgedOpenings, result: LostReturnResult): readonly string[] {
-  const { network, returns, diodes } = model;
-  const states = statesOf(model).length;
-  const lines = [
-    `${String(result.openings.length + 1)} openings × ${String(states)} states of ${String(model.rails.length)} rails = ${String(judged.solved)} cases of ${String(network.nodes)} nodes, all settled; power balances to ${judged.imbalance < 1e-9 ? 'better than 10⁻⁹' : judged.imbalance.toPrecision(1)}`,
-    ...returns.map(({ name, resistor }) => `${name}: ${shortOhms(network.resistors[resistor]?.ohms ?? 0)}`),
-    ...diodes.map(({ name }, k) => {
-      const card = network.diodes[k];
-      return `${name}: IS ${shortAmps(card?.saturationAmps ?? 0)}, N ${String(card?.emission ?? 0)}, ${shortOhms(card?.seriesOhms ?? 0)}`;
-    }),
-  ];
-  if (judged.closed.verdict !== 'harmless') {
-    const { occurrences } = judged.closed;
-    const boards = occurrences.flatMap(({ kind, at, worst }) =>
-      kind === 'load-out' ? [`${model.loads[at]?.name ?? ''} ${shortVolts(worst.value)}`] : [],
-    );
-    if (boards.length > 0) lines.push(`before anything opens, out of tolerance: ${andList(boards)}`);
-  }
-  for (const { sentence, verdict, exposedBoards: boards } of result.openings) {
-    if (verdict === 'harmless') continue;
-    lines.push(boards.length === 0 ? sentence : `${sentence} Exposed: ${andList(boards.map(({ name }) => name))}.`);
-  }
-  if (result.fault !== null) lines.push(faultInWords(result.fault));
-  return lines;
 }
 
 const validity =
@@ -135,7 +95,7 @@ export const sheet = defineSheet({
       ok: true,
       result,
       headline: headlineOf(result),
-      formula: formulaOf(model, judged, result),
+      formula: lostReturnFormula(model, judged, shown, result),
       drawing,
       caution,
       validity,

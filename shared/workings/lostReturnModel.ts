@@ -30,6 +30,8 @@ export interface LostReturnModel {
   readonly network: Network;
   readonly rails: LostReturnInputs['rails'];
   readonly returns: readonly ModelWire[];
+  /** The rows of the returns, in the same order. */
+  readonly returnRows: LostReturnInputs['returns'];
   readonly feeds: readonly ModelWire[];
   readonly loads: readonly ModelLoad[];
   readonly diodes: LostReturnInputs['diodes'];
@@ -224,7 +226,18 @@ export function lostReturnModel(given: LostReturnInputs): LostReturnModel | Shee
       outputOhms: rail.outputOhms,
     })),
   };
-  return { nodeNames, network, rails: given.rails, returns, feeds, loads, diodes: given.diodes, shortedAmps, overloads };
+  return {
+    nodeNames,
+    network,
+    rails: given.rails,
+    returns,
+    returnRows: given.returns,
+    feeds,
+    loads,
+    diodes: given.diodes,
+    shortedAmps,
+    overloads,
+  };
 }
 
 /** Printed volts, two figures and no milli: `−0.74 V` reads at a bench, `−740 mV` does not. */

@@ -1,7 +1,10 @@
 /** The form of what the lost-return sheet answers; SI, nothing rounded. */
 import { z } from 'zod';
 
-const verdict = z.enum(['harmless', 'out of tolerance', 'destructive']);
+/** From best to worst. */
+export const VERDICTS = ['harmless', 'out of tolerance', 'destructive'] as const;
+
+const verdict = z.enum(VERDICTS);
 const named = z.strictObject({ name: z.string(), volts: z.number() });
 
 const opening = z.strictObject({
