@@ -62,7 +62,7 @@ describe('the notes of a run that is not on the screen', () => {
   it('leave waiting answers of the run to the run', async () => {
     const [shop, disk] = [new Shop(), new Disk()];
     shop.away = true;
-    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, replays: () => null, toSafety: () => [], pause });
+    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
     await own.open([]);
     await own.add(say('answered offline'));
     own.close();
