@@ -9,6 +9,7 @@ import * as firstRun from './migrations/20260301T090000-first-run';
 import * as jobQueue from './migrations/20260301T093000-job-queue';
 import * as handOver from './migrations/20260302T090000-hand-over';
 import * as files from './migrations/20261201T100000-files';
+import * as ownAccount from './migrations/20261201T110000-own-account';
 
 /** Every migration by name; a name starts with its time, so that two branches cannot take the same place. */
 export const migrations = {
@@ -16,6 +17,7 @@ export const migrations = {
   '20260301T093000-job-queue': jobQueue,
   '20260302T090000-hand-over': handOver,
   '20261201T100000-files': files,
+  '20261201T110000-own-account': ownAccount,
 };
 
 const provider: MigrationProvider = { getMigrations: () => Promise.resolve(migrations) };

@@ -56,6 +56,8 @@ export interface SessionsTable {
   expires_at: Time;
   revoked_at: TimeOrNull;
   revoked_why: string | null;
+  /** what its browser called itself */
+  device: Generated<string>;
 }
 
 export interface SettingsTable {

@@ -6,6 +6,7 @@ import type { Express } from 'express';
 import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 
+import { addAccountRoutes } from './account/routes';
 import { addEntryRoutes } from './entries/routes';
 import { addHandOverRoutes } from './handOver/routes';
 import { addFileRoutes } from './files/routes';
@@ -78,6 +79,7 @@ export function createApp(parts: Parts): Express {
   const router = Router();
   addHealthRoutes(router, parts);
   addSessionRoutes(router, parts);
+  addAccountRoutes(router, parts, confirm);
   addFileRoutes(router, parts);
   addMachineRoutes(router, parts);
   addTreeRoutes(router, parts);

@@ -8,8 +8,11 @@ import type { Db } from '@/db/createDb';
 import type { Mailer } from '../adapters/mail';
 import { COUNTERSIGN_WANTED } from './askForCountersign';
 import { countersignWanted } from './countersignWanted';
+import { PASSWORD_CHANGED, passwordChanged } from './passwordChanged';
 
 const jobSchema = z.object({ workshop: z.uuid(), run: z.uuid(), entry: z.uuid(), step: z.string(), to: z.uuid() });
+
+const passwordJobSchema = z.object({ person: z.uuid(), workshop: z.uuid(), at: z.iso.datetime() });
 
 /** The tasks of the job queue by name. One that throws is tried again later. */
 export function mailTasks({ db, mailer, publicUrl }: { db: Db; mailer: Mailer; publicUrl: string }): TaskList {
@@ -39,6 +42,15 @@ export function mailTasks({ db, mailer, publicUrl }: { db: Db; mailer: Mailer; p
           link: `${publicUrl}/bench/${job.run}`,
         }),
       );
+    },
+    [PASSWORD_CHANGED]: async (payload) => {
+      const job = passwordJobSchema.parse(payload);
+      const facts = await inWorkshop(db, job.workshop, async (tx) => ({
+        to: await tx.selectFrom('people').select(['name', 'mail']).where('id', '=', job.person).executeTakeFirst(),
+        workshop: await tx.selectFrom('workshops').select('name').where('id', '=', job.workshop).executeTakeFirst(),
+      }));
+      if (facts.to === undefined || facts.workshop === undefined) return;
+      await mailer.send(passwordChanged({ to: { name: facts.to.name, address: facts.to.mail }, workshop: facts.workshop.name, at: new Date(job.at) }));
     },
   };
 }

@@ -45,6 +45,37 @@ export function findLiveSession(tx: Tx, session: string, person: string, now: Da
     .executeTakeFirst();
 }
 
+/** Own sessions that still count, the last used first. */
+export function findOwnSessions(tx: Tx, person: string, now: Date) {
+  return tx
+    .selectFrom('sessions')
+    .select(['id', 'device', 'created_at', 'rotated_at'])
+    .where('person', '=', person)
+    .where('revoked_at', 'is', null)
+    .where('expires_at', '>', now)
+    .orderBy('rotated_at', 'desc')
+    .orderBy('id')
+    .execute();
+}
+
+/** Ends sessions of a person: one, or all but one. Gives back how many. */
+export async function revokeOwnSessions(tx: Tx, person: string, which: { only: string } | { but: string }, now: Date, why: string): Promise<number> {
+  const rows = await tx
+    .updateTable('sessions')
+    .set({ revoked_at: now, revoked_why: why })
+    .where('person', '=', person)
+    .where('revoked_at', 'is', null)
+    .where('id', 'only' in which ? '=' : '!=', 'only' in which ? which.only : which.but)
+    .returning('id')
+    .execute();
+  return rows.length;
+}
+
+/** Only inside `asPerson({ id })`. */
+export async function updatePassword(tx: Tx, person: string, passwordHash: string, now: Date): Promise<void> {
+  await tx.updateTable('credentials').set({ password_hash: passwordHash, changed_at: now }).where('person', '=', person).execute();
+}
+
 /** Stores a new session. */
 export async function insertSession(tx: Tx, row: InsertableSessionRow): Promise<void> {
   await tx.insertInto('sessions').values(row).execute();

@@ -14,8 +14,8 @@ export function addSessionRoutes(router: Router, parts: Parts): void {
   const secure = parts.config.publicUrl?.startsWith('https:') === true;
 
   router.post(routes.signIn.path, limitSignIn(parts.config.signInTries));
-  bindRoute(router, parts, routes.signIn, async ({ body, res }) => {
-    const { me, tokens } = await signIn(parts, body);
+  bindRoute(router, parts, routes.signIn, async ({ body, req, res }) => {
+    const { me, tokens } = await signIn(parts, body, deviceOf(req));
     setSessionCookies(res, secure, tokens);
     return me;
   });
@@ -35,6 +35,11 @@ export function addSessionRoutes(router: Router, parts: Parts): void {
     return { done: true as const };
   });
   bindRoute(router, parts, routes.me, ({ who }) => readMe(parts, who));
+}
+
+/** What the browser calls itself, for its person to tell one session from another; never trusted for anything. */
+function deviceOf(req: Request): string {
+  return (req.headers['user-agent'] ?? '').replace(/[^\x20-\x7e]/g, '').slice(0, 200);
 }
 
 function refreshCookie(req: Request): string | undefined {

@@ -24,7 +24,7 @@ export interface Tokens {
 export const GRACE_MS = 60_000;
 
 /** Opens a session. An unknown address and a wrong password are one answer, in the same time. */
-export async function signIn(parts: Parts, input: { mail: string; password: string; workshop?: string | undefined }): Promise<{ me: Me; tokens: Tokens }> {
+export async function signIn(parts: Parts, input: { mail: string; password: string; workshop?: string | undefined }, device: string): Promise<{ me: Me; tokens: Tokens }> {
   const found = await asPerson(parts.db, { mail: input.mail }, (tx) => findSignIn(tx, input.mail));
   const fits = await checkPassword(input.password, found?.password_hash, parts.config.bcryptCost);
   if (found === undefined || !fits) throw new ProblemError('sign-in-failed');
@@ -37,7 +37,7 @@ export async function signIn(parts: Parts, input: { mail: string; password: stri
   return inWorkshop(parts.db, workshop.id, async (tx) => {
     await insertSession(tx, {
       id: session, workshop: workshop.id, person: found.id, generation: 1, token_hash: hashToken(refresh),
-      rotated_at: new Date(now), created_at: new Date(now), expires_at: new Date(now + REFRESH_MS),
+      rotated_at: new Date(now), created_at: new Date(now), expires_at: new Date(now + REFRESH_MS), device,
     });
     return openWith(parts, tx, { session, person: found.id, workshop: workshop.id }, refresh, workshops, now);
   });

@@ -34,6 +34,7 @@ export const PROBLEMS = {
   'bad-range': { status: 416, retryable: false, say: 'The file has no such part.' },
   'bad-file': { status: 422, retryable: false, say: 'This file cannot be kept.' },
   'bad-input': { status: 422, retryable: false, say: 'Something in the request does not fit.' },
+  'weak-password': { status: 422, retryable: false, say: 'This password is too weak.' },
   'wrong-password': { status: 422, retryable: false, say: 'The password is not right. Nothing was signed.' },
   refused: { status: 422, retryable: false, say: 'A house rule refuses this step. The run is as it was.' },
   'not-startable': { status: 422, retryable: false, say: 'This run cannot start.' },

@@ -1,6 +1,7 @@
 /** Every route of the server: it validates with this table, the client calls with it, and the OpenAPI document is made from it. */
 import { z } from 'zod';
 
+import { changePasswordBody, ownSessionsSchema, sessionParams } from './account';
 import { defineRoute } from './defineRoute';
 import { entriesQuery, entriesSchema, postedEntriesSchema, postEntriesBody } from './entries';
 import { handOverBody, takeOverBody } from './handOver';
@@ -28,6 +29,10 @@ export const routes = {
   refreshSession: defineRoute({ method: 'post', path: '/api/session/refresh', summary: 'Renew the session with its refresh cookie', who: 'anyone', status: 200, answer: meSchema, problems: ['signed-out', 'session-expired'] }),
   signOut: defineRoute({ method: 'delete', path: '/api/session', summary: 'Sign out', who: 'anyone', status: 200, answer: done, problems: [] }),
   me: defineRoute({ method: 'get', path: '/api/me', summary: 'Who is signed in', who: 'member', status: 200, answer: meSchema, problems: [] }),
+
+  sessions: defineRoute({ method: 'get', path: '/api/sessions', summary: 'Own sessions of this workshop', who: 'member', status: 200, answer: ownSessionsSchema, problems: [] }),
+  endSession: defineRoute({ method: 'delete', path: '/api/sessions/:session', summary: 'End one of the own sessions', who: 'member', params: sessionParams, status: 200, answer: done, problems: ['not-found'] }),
+  changePassword: defineRoute({ method: 'post', path: '/api/password', summary: 'Change the own password; every other session ends', who: 'member', body: changePasswordBody, status: 201, answer: done, problems: ['wrong-password', 'weak-password', 'too-many'] }),
 
   machines: defineRoute({ method: 'get', path: '/api/machines', summary: 'Machines of the workshop', who: 'member', status: 200, answer: machinesSchema, problems: [] }),
   machine: defineRoute({ method: 'get', path: '/api/machines/:machine', summary: 'One machine with its profile, runs, releases and what stays fitted', who: 'member', params: z.strictObject({ machine: machineIdSchema }), status: 200, answer: dossierSchema, problems: ['not-found'] }),

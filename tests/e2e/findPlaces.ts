@@ -48,6 +48,7 @@ export async function findPlaces(ownerUrl: string, who: DemoPersonKey): Promise<
         { path: '/workshop', heading: demoWorkshops.first.name, picture: 'workshop' },
         { path: '/workshop/instruments', heading: 'Instruments' },
         { path: '/workshop/people', heading: 'People and roles' },
+        { path: '/workshop/account', heading: 'My account' },
         { path: '/workshop/settings', heading: 'Settings of the workshop' },
         { path: '/nowhere', heading: 'No such page' },
       ];

@@ -51,10 +51,10 @@ describe('the catalogue of the database', () => {
       profile_revisions: 'select', release_voids: 'insert select', releases: 'insert select', run_heads: 'insert select update', runs: 'insert select',
       sessions: 'insert select update', settings: 'select', snapshots: 'delete insert select update', tree_versions: 'select', trees: 'select', workshops: 'select',
     });
-    const columns = await rows<{ column_name: string }>(
-      `select column_name from information_schema.column_privileges where grantee = 'lampstep_server' and table_name = 'runs' and privilege_type = 'UPDATE' order by column_name`,
-    );
-    expect(columns.map(({ column_name }) => column_name)).toEqual(['closed_at', 'ended', 'former', 'restorer', 'restorer_roles', 'state']);
+    const columnsOf = async (table: string) =>
+      (await rows<{ column_name: string }>(`select column_name from information_schema.column_privileges where grantee = 'lampstep_server' and table_name = '${table}' and privilege_type = 'UPDATE' order by column_name`)).map(({ column_name }) => column_name);
+    expect(await columnsOf('credentials')).toEqual(['changed_at', 'password_hash']);
+    expect(await columnsOf('runs')).toEqual(['closed_at', 'ended', 'former', 'restorer', 'restorer_roles', 'state']);
   });
 
   it('gives the keeper no right on any table, and nobody a right as PUBLIC', async () => {

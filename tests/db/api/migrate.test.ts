@@ -18,6 +18,7 @@ const FROZEN: Record<string, string> = {
   '20260301T093000-job-queue': '47e662b96a5f664dbd28a26ef86de88ac188d0a722f828e8eb957149427ed55c',
   '20260302T090000-hand-over': '97083a44d52f8beeed4cbca9696b7e1a2ef6ceaf565b7f7eb55b5fb5b21cbac7',
   '20261201T100000-files': '66fdea06ecb1cdd33101bc01dc2f5a497c44a7933e102fba472d6e932a2fc2f0',
+  '20261201T110000-own-account': '9e56838527983232807e0a89a98817d6c11568d4aa8b255d9adf35235685aa3b',
 };
 
 describe('migrations', () => {

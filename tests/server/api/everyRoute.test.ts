@@ -32,6 +32,8 @@ describe('every route', () => {
   let paper: string;
   let closed: string;
   const clients = new Map<string, HttpClient>();
+  /** one more session of each role's person, to be ended */
+  const spare = new Map<string, string>();
 
   beforeAll(async () => {
     store = await openObjectStore();
@@ -40,6 +42,9 @@ describe('every route', () => {
     for (const role of ROLES) {
       clients.set(role, await server.as(here[role]));
       clients.set(`other ${role}`, await server.as(there[role]));
+      await server.as(here[role]);
+      const own = (await client(role).get('/api/sessions')).body['sessions'] as { id: string; current: boolean }[];
+      spare.set(role, own.find((session) => !session.current)?.id ?? '');
     }
     const restorer = client('restorer');
     const first = await BenchDevice.start(restorer, server, { machine: here.machine }, here.instruments.tester);
@@ -64,11 +69,12 @@ describe('every route', () => {
     return found;
   };
   const pathOf = (name: RouteName, change: Record<string, string> = {}) => {
-    const values: Record<string, string> = { run: name === 'submit' ? closed : run, record: closed, machine: here.machine, tree: 'only-here', version: '1', hash: paper, ...change };
+    const values: Record<string, string> = { run: name === 'submit' ? closed : run, record: closed, machine: here.machine, tree: 'only-here', version: '1', hash: paper, session: spare.get('keeper') ?? '', ...change };
     return routes[name].path.replace(/:(\w+)/g, (_, key: string) => encodeURIComponent(values[key] ?? ''));
   };
   const bodies: Partial<Record<RouteName, () => object>> = {
     signIn: () => ({ mail: here.keeper.mail, password }),
+    changePassword: () => ({ password, next: 'kettle plank ruby fog' }),
     startRun: () => ({ id: uuidv7(), machine: here.machine, tree: 'only-here', version: 1, monotonic: 0 }),
     postEntries: () => ({ entries: [{ id: uuidv7(), seq: 2, event: { type: 'TICK', at: 0, monotonic: 0, boot: 'b' } }] }),
     answerHold: () => ({ id: uuidv7(), seq: 2, answer: 'given', password }),
@@ -110,7 +116,7 @@ describe('every route', () => {
     const allowed = who === 'member' || (Array.isArray(who) && who.includes(role));
     // A body that fits nothing: who may come in is told so, nobody writes anything.
     await nothingWritten(async () => {
-      const answer = await send(client(role), name, pathOf(name), withBody.includes(name) ? { nothing: 'fits' } : undefined);
+      const answer = await send(client(role), name, pathOf(name, { session: spare.get(role) ?? '' }), withBody.includes(name) ? { nothing: 'fits' } : undefined);
       if (!allowed) refused(answer, 403, 'role-missing');
       else if (withBody.includes(name)) refused(answer, 422, 'bad-input');
       // who may add what is asked before the form is read: no role but these two adds to the workshop itself
@@ -139,7 +145,7 @@ describe('every route', () => {
     const role = who === 'member' || who === 'anyone' ? 'keeper' : (who[0] ?? 'keeper');
     await nothingWritten(async () => {
       for (const bad of ['x', '1', '%00', "' or 1=1 --", '../../etc', '😀', '9'.repeat(400), crypto.randomUUID(), uuidv7()]) {
-        refused(await send(client(role), name, pathOf(name, { run: bad, record: bad, machine: bad, tree: bad, version: bad, hash: bad })), 404, 'not-found');
+        refused(await send(client(role), name, pathOf(name, { run: bad, record: bad, machine: bad, tree: bad, version: bad, hash: bad, session: bad })), 404, 'not-found');
       }
       const undecodable = routes[name].path.replace(/:\w+/g, '%E0%A4%A');
       const answer = await send(client(role), name, undecodable);

@@ -75,6 +75,7 @@ function SignedInAs({ me }: { me: Me }) {
           { name: 'Roles here', value: me.roles.join(', ') || 'none' },
         ]}
       />
+      <LinkRows caption="Account" rows={[{ href: '/workshop/account', title: 'My account', about: 'Where you are signed in, and your password' }]} />
       <View style={{ alignItems: 'flex-start' }}>
         <Button label="Sign out" onPress={() => void leave()} />
       </View>

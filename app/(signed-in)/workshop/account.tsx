@@ -1,0 +1,5 @@
+import { AccountScreen } from '@/shared/ui/screens/workshop/AccountScreen';
+
+export default function Account() {
+  return <AccountScreen />;
+}
