@@ -6,7 +6,6 @@ import { v7 as uuidv7 } from 'uuid';
 import { createDb, inWorkshop } from '@/db/createDb';
 import type { Db, Tx } from '@/db/createDb';
 import { ENGINE } from '@/flows/machine/compile';
-import { createObjectStore } from '@/server/adapters/objectStore';
 import { readConfig } from '@/server/config';
 import type { Parts } from '@/server/parts';
 import { hashOf } from '@/server/program/hashOf';
@@ -20,6 +19,13 @@ import { demoInstruments } from './demoInstruments';
 import { DEMO_PASSWORD, demoPeople, demoWorkshops } from './demoPeople';
 import { playReview } from './playReview';
 import { playRun } from './playRun';
+
+/** No run of the demo has a photo, so none is kept and none is looked for. */
+const NO_PHOTOS: Parts['objects'] = {
+  put: () => Promise.reject(new Error('the demo keeps no photos')),
+  get: () => Promise.resolve(null),
+  close: () => undefined,
+};
 
 export type DemoResult = 'loaded' | 'kept' | 'rebuilt';
 
@@ -86,7 +92,7 @@ async function load(db: Db, content: DemoContent, now: number, bcryptCost: numbe
   }
   const time = { now };
   const config = { ...readConfig({ NODE_ENV: 'development', DATABASE_URL: ownerUrl }), bcryptCost };
-  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache(), objects: createObjectStore(config) };
+  const parts: Parts = { db, config, clock: () => time.now, log: pino({ level: 'silent' }), programs: createProgramCache(), objects: NO_PHOTOS };
   for (const run of content.runs) {
     try {
       await loadRun(parts, time, run, now, machineIds);

@@ -1,7 +1,6 @@
 /** A Class II machine has no earth to prove: the step that proves one asks there whether that is so. */
 import type { Profile } from '../document/profile';
 import type { Step } from '../document/steps';
-import type { WordRow } from './rows';
 
 /** The step as this machine needs it: on Class II an earth step looks for the double square and for earth that should not be there. */
 export function forClass(step: Step, profile: Profile): Step {
@@ -16,15 +15,15 @@ export function forClass(step: Step, profile: Profile): Step {
 }
 
 /** How a Class II machine answers it: anything but a clean "so it is" counts as an earth that does not stand. */
-export const NO_EARTH: WordRow = {
+export const NO_EARTH = {
   id: 'earth',
   label: 'Double square on the plate, two-wire lead, nothing earthed that a hand can reach',
-  ask: 'word',
+  ask: 'word' as const,
   wait: null,
   words: [
-    { word: 'in', label: 'So it is', result: 'in' },
-    { word: 'high', label: 'Not so', result: 'high' },
-    { word: 'not-sure', label: 'Not sure', result: 'not-sure' },
-    { word: 'cannot', label: 'Cannot see', result: 'cannot' },
+    { word: 'in' as const, label: 'So it is', result: 'in' as const },
+    { word: 'high' as const, label: 'Not so', result: 'high' as const },
+    { word: 'not-sure' as const, label: 'Not sure', result: 'not-sure' as const },
+    { word: 'cannot' as const, label: 'Cannot see', result: 'cannot' as const },
   ],
 };

@@ -38,6 +38,9 @@ test('a photo is taken with no network, sent when it is back, and shown in the r
   await expect(page.getByRole('heading', { level: 1, name: 'The connectors as found' })).toBeHidden();
   await page.context().setOffline(false);
   await bench.allSaved();
+  await bench.answer('Close the record');
+  await expect(page.getByRole('link', { name: 'To the record' })).toBeVisible();
+  await bench.allSaved();
 
   await page.goto(`/records/${bench.run}`);
   const shown = page.getByRole('img', { name: /^Photo of entry/ });
