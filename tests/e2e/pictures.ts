@@ -23,11 +23,13 @@ const schemes = ['light', 'dark'] as const;
 const only = process.argv.slice(2);
 const TREE = 'Dormant three-rail supply: first power';
 
-/** The page as it stands, from its top, in both sizes and by day and by night. */
-async function take(page: Page, what: string): Promise<void> {
+/** The page as it stands, from its top, in both sizes and by day and by night; `open` opens it anew for each scheme, which it then has from its first line on. */
+async function take(page: Page, what: string, open: () => Promise<unknown> = () => Promise.resolve()): Promise<void> {
   if (only.length > 0 && !only.includes(what)) return;
-  for (const size of sizes) {
-    for (const colorScheme of schemes) {
+  for (const colorScheme of schemes) {
+    await page.emulateMedia({ colorScheme });
+    await open();
+    for (const size of sizes) {
       await page.setViewportSize(size);
       await settle(page, colorScheme);
       await page.screenshot({ path: `${folder}/${what}-${size.width}-${colorScheme}.png`, caret: 'hide', animations: 'disabled' });
@@ -62,9 +64,10 @@ async function still(browser: Browser, stack: Stack): Promise<void> {
   const page = await openPage(browser, stack, 'reviewer', false);
   for (const { path, heading, picture } of await findPlaces(stack.ownerUrl, 'reviewer')) {
     if (picture === undefined || (only.length > 0 && !only.includes(picture))) continue;
-    await page.goto(path);
-    await page.getByRole('heading', { level: 1, name: heading }).waitFor();
-    await take(page, picture);
+    await take(page, picture, async () => {
+      await page.goto(path);
+      await page.getByRole('heading', { level: 1, name: heading }).waitFor();
+    });
   }
   await page.context().close();
 }

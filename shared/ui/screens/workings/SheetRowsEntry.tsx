@@ -92,7 +92,7 @@ function Row({ list, row, shown, mayGo, onTurn, onRemove, onChange, ...standing 
   const { colors } = useTheme();
   const within = `${list.rowName} ${row + 1}`;
   const own = standing.errors[`${list.name}.${row}`];
-  const words = rowWords(list, row, standing.texts);
+  const words = rowWords(list, row, standing.texts, standing.echoes);
   return (
     <View role="group" aria-label={within} style={{ borderWidth: line.hair, borderColor: colors.rule, backgroundColor: colors.raised }}>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.s, paddingLeft: space.m, minHeight: target.control }}>

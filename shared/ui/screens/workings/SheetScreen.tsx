@@ -38,11 +38,15 @@ export function SheetScreen({ sheetId, given }: Props) {
 function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Given }) {
   const form = useSheetForm(sheet, given);
   const { answer } = form;
+  // below a form of lists nobody would find them
+  const drawingsFirst = form.parts.some((part) => part.kind === 'rows');
+  const drawings = answer === null ? null : <SheetDrawings answer={answer} />;
   return (
     <Page title={sheet.title} eyebrow="Workings" maxWidth={860}>
       <SheetHeadline sheet={sheet} answer={answer} fault={faultWords(form)} sticks />
       <SheetCaution sheet={sheet} answer={answer} />
       <SheetTools sheet={sheet} form={form} />
+      {drawingsFirst ? drawings : null}
       <SheetForm
         parts={form.parts}
         texts={form.texts}
@@ -52,7 +56,7 @@ function KnownSheet({ sheet, given }: { sheet: AnySheet; given: Given }) {
         onChange={form.type}
         onReplace={form.replace}
       />
-      {answer === null ? null : <SheetDrawings answer={answer} />}
+      {drawingsFirst ? null : drawings}
       <SheetGrounds sheet={sheet} answer={answer} />
       <LinkText label="All workings" href="/workings" />
     </Page>

@@ -4,10 +4,14 @@ import type { SheetList, SheetTexts } from '@/shared/ui/screens/workings/sheetPa
 import { cellName } from '@/shared/ui/screens/workings/sheetRows';
 
 /** Its name, or its place where it has none, and what else is typed, each with its unit. */
-export function rowWords(list: SheetList, row: number, texts: SheetTexts): { title: string; detail: string } {
+export function rowWords(list: SheetList, row: number, texts: SheetTexts, echoes: SheetTexts = {}): { title: string; detail: string } {
   const filled = list.columns.flatMap((column) => {
-    const text = (texts[cellName(list, row, column)] ?? '').trim();
+    const key = cellName(list, row, column);
+    const text = (texts[key] ?? '').trim();
     if (text === '') return [];
+    // as it was understood, where it was
+    const echo = echoes[key];
+    if (echo !== undefined && echo !== '') return [{ column, words: echo }];
     const words =
       column.choices === null ? `${text}${column.unit === null || text.endsWith(column.unit) ? '' : ` ${column.unit}`}` : choiceWords(text);
     return [{ column, words }];

@@ -93,7 +93,8 @@ function textOf(value: unknown, unit: Unit | null): string {
   if (typeof value === 'string') return value;
   if (typeof value !== 'number') return '';
   if (unit === null) return formatNumber(value, 15).replace('−', '-');
-  // the prefix that leaves the fewest figures, so that 0.0047 F stands as 4.7m
+  // the prefix that leaves the fewest figures, so that 0.0047 F stands as 4.7m; 0.9 V stands as it is said
+  if (Math.abs(value) >= 0.1 && Math.abs(value) < 1) return String(Number(value.toPrecision(12)));
   const prefix =
     [...UNITS[unit].prefixes].reverse().find((p) => value !== 0 && Math.abs(value) >= Number(`1e${PREFIXES[p].exponent}`)) ?? '';
   const shifted = Number((value / Number(`1e${PREFIXES[prefix].exponent}`)).toPrecision(12));

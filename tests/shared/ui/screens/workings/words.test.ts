@@ -58,6 +58,7 @@ describe('a row on a line', () => {
   it('stands under its place while it has no name', () => {
     expect(rowWords(rails, 1, { 'rails.1.volts': '4,97' })).toEqual({ title: 'rail 2', detail: 'volts 4,97 V' });
     expect(rowWords(rails, 2, {})).toEqual({ title: 'rail 3', detail: '' });
+    expect(rowWords(rails, 1, { 'rails.1.volts': '400m' }, { 'rails.1.volts': '400 mV' }).detail).toBe('volts 400 mV');
   });
 });
 
