@@ -25,6 +25,11 @@ export function openDevice(): Promise<IDBPDatabase<Device> | null> {
 
 function open(): Promise<IDBPDatabase<Device> | null> {
   return new Promise((resolve) => {
+    // where the browser has no database at all, asking for it throws
+    if (typeof indexedDB === 'undefined') {
+      resolve(null);
+      return;
+    }
     openDB<Device>('lampstep', 3, {
       upgrade(db, before) {
         if (before < 1) db.createObjectStore('answers', { keyPath: 'id' }).createIndex('run', 'run');

@@ -40,6 +40,7 @@ describe('the notes of a run that is not on the screen', () => {
     const box = await open(shop, disk);
     await box.add(note('kept'));
     expect(box.saved().waiting).toBe(1);
+    await vi.waitFor(() => expect(box.saved().trouble?.code).toBe('no-network'));
     box.close();
     shop.away = false;
     const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
@@ -65,6 +66,8 @@ describe('the notes of a run that is not on the screen', () => {
     const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
     await own.open([]);
     await own.add(say('answered offline'));
+    // its try to send is over before the network is back
+    await vi.waitFor(() => expect(own.saved().trouble?.code).toBe('no-network'));
     own.close();
     shop.away = false;
     const box = await open(shop, disk);
