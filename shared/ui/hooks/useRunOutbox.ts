@@ -9,6 +9,8 @@ import type { Ledger } from '@/shared/ui/api/ledger';
 import { createOutbox } from '@/shared/ui/api/outbox';
 import type { Outbox } from '@/shared/ui/api/outbox';
 import { openOutboxStore } from '@/shared/ui/api/outboxStore';
+import { longerOf } from '@/shared/ui/api/recordPart';
+import { readKeptRun } from '@/shared/ui/api/runStore';
 import { photoKeep } from '@/shared/ui/api/photoKeep';
 import { makeSendPhoto } from '@/shared/ui/api/sendPhoto';
 import { BOOT, stamp } from '@/shared/ui/hooks/benchClock';
@@ -47,7 +49,9 @@ export function useRunOutbox(bundle: RunBundle, program: Program, person: string
         ...engineOf(first.current.program, first.current.bundle),
         pause,
       });
-      await box.open(first.current.bundle.entries);
+      // a copy of the run that the page had from before may be older than what this device has heard since
+      const kept = await readKeptRun(first.current.bundle.run.id);
+      await box.open(longerOf(first.current.bundle.entries, kept?.bundle.entries ?? []));
       await comeBack(box, first.current.program, first.current.bundle);
       if (opened.over) {
         box.close();

@@ -5,7 +5,7 @@ import type { Outbox, RecordChange } from '@/shared/ui/api/outbox';
 import type { ClientProblem } from '@/shared/ui/api/answer';
 import type { Replays } from '@/shared/ui/api/ledger';
 import type { OutboxStore } from '@/shared/ui/api/outboxStore';
-import { recordPart } from '@/shared/ui/api/recordPart';
+import { longerOf, recordPart } from '@/shared/ui/api/recordPart';
 import type { Entry } from '@/shared/contract/entries';
 
 import { ANN, Disk, event, RUN, say, Shop, wordOf } from './shop';
@@ -150,6 +150,12 @@ describe('createOutbox', () => {
     expect(part(entries('a', 'x', 'y'), entries('a', 'b'))).toEqual([1, ['b']]);
     expect(part(entries('a', 'b', 'c'), entries('a'))).toEqual([1, []]);
     expect(part([], [])).toBeNull();
+    // a page's own copy of a run gives way to what the device has heard since, where the two agree
+    const words = (got: readonly Entry[]) => got.map((e) => e.hash).join('');
+    expect(words(longerOf(entries('a'), entries('a', 'b', 'c')))).toBe('abc');
+    expect(words(longerOf(entries('a', 'b'), entries('a')))).toBe('ab');
+    expect(words(longerOf(entries('a', 'x'), entries('a', 'b', 'c')))).toBe('ax');
+    expect(words(longerOf([], entries('a')))).toBe('');
   });
 
   it('sends no way to safety into a run that somebody else leads by now; what was done here is kept and shown', async () => {
