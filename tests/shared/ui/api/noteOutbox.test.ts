@@ -43,7 +43,16 @@ describe('the notes of a run that is not on the screen', () => {
     await vi.waitFor(() => expect(box.saved().trouble?.code).toBe('no-network'));
     box.close();
     shop.away = false;
-    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
+    const own = createOutbox({
+      run: RUN,
+      person: ANN,
+      store: disk,
+      client: shop.client,
+      sendPhoto: () => Promise.resolve(null),
+      replays: () => null,
+      toSafety: () => [],
+      pause,
+    });
     await own.open([]);
     await vi.waitFor(() => expect(types(shop)).toEqual(['NOTE']));
   });
@@ -63,7 +72,16 @@ describe('the notes of a run that is not on the screen', () => {
   it('leave waiting answers of the run to the run', async () => {
     const [shop, disk] = [new Shop(), new Disk()];
     shop.away = true;
-    const own = createOutbox({ run: RUN, person: ANN, store: disk, client: shop.client, sendPhoto: () => Promise.resolve(null), replays: () => null, toSafety: () => [], pause });
+    const own = createOutbox({
+      run: RUN,
+      person: ANN,
+      store: disk,
+      client: shop.client,
+      sendPhoto: () => Promise.resolve(null),
+      replays: () => null,
+      toSafety: () => [],
+      pause,
+    });
     await own.open([]);
     await own.add(say('answered offline'));
     // its try to send is over before the network is back
