@@ -60,7 +60,9 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'lapsed':
       return says(event?.type === 'RESTART' ? 'The page was loaded anew' : 'Time passed: what had lapsed was taken back');
     case 'closed':
-      return body['by'] === 'senior' ? says('Closed as stopped by a senior, signed', `${String(body['reason'])}\n${String(body['meaning'])}`) : says('Run closed');
+      return body['by'] === 'senior'
+        ? says('Closed as stopped by a senior, signed', `${String(body['reason'])}\n${String(body['meaning'])}`)
+        : says('Run closed');
     case 'submitted':
       return says('Submitted for review', body['remark']);
     case 'returned':
@@ -86,7 +88,12 @@ export function entryWords({ entry, event, before }: ReplayedEntry, known: Known
     case 'isolated':
       return answer({ entry, event, before, after: null }) ?? says(entry.kind === 'isolated' ? 'Isolated' : 'Answered');
     case 'handed-over':
-      return says('Handed over, signed', event?.type === 'HANDED_OVER' ? [event.meaning, ...(event.note === undefined ? [] : [`Left word: ${event.note}`])].join('\n') : body['text']);
+      return says(
+        'Handed over, signed',
+        event?.type === 'HANDED_OVER'
+          ? [event.meaning, ...(event.note === undefined ? [] : [`Left word: ${event.note}`])].join('\n')
+          : body['text'],
+      );
     case 'taken-over':
       return says('Taken over, signed', event?.type === 'TAKEN_OVER' ? event.meaning : body['text']);
     case 'part':
@@ -146,7 +153,7 @@ function answer({ event, before }: ReplayedEntry): EntryWords | null {
     const given = before?.answers.find((a) => a.answer === event.answer);
     const shows = given?.shows == null ? [] : [`${SHOWN[given.shows].name}: ${SHOWN[given.shows].say}`];
     const confirmed = event.answer === 'done' ? conditionsOf(before) : [];
-    const detail = [...confirmed, ...shows, ...(event.note === undefined ? [] : [event.note])].join(' ');
+    const detail = [...confirmed, ...shows, ...(event.note === undefined ? [] : [event.note])].join('\n');
     return { what: given?.label ?? WORDS[event.answer] ?? event.answer, detail: detail === '' ? null : detail };
   }
   if (event?.type === 'SECOND_PRESENT') return { what: 'Second person present', detail: null };
