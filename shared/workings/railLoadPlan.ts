@@ -52,7 +52,7 @@ const output = z.strictObject({ rails: z.array(railPlan), fullWatts: z.number(),
 export type RailLoadPlanResult = z.output<typeof output>;
 
 /** Steps in percent of the rating. Common practice, no source. */
-export const PERCENTS: Readonly<Record<'careful' | 'usual', readonly number[]>> = { careful: [10, 25, 50, 75, 100], usual: [25, 50, 100] };
+export const PERCENTS: Readonly<Record<'careful' | 'usual', readonly number[]>> = { careful: [10, 25, 50, 80, 100], usual: [25, 50, 100] };
 /** Owned resistors must come this near to the step that is wanted. Common practice, no source. */
 const NEAR_ENOUGH = 0.25;
 
@@ -83,7 +83,7 @@ const resistor = z.strictObject({
 const inputs = z.strictObject({
   rails: rowsField({ title: 'Rails', description: 'Of the supply, in any order', rowName: 'rail', row: rail, fewest: 1, most: 12 }),
   load: choiceField('Load', 'What draws the amps', ['electronic', 'resistors']),
-  steps: choiceField('Steps', 'Careful: 10, 25, 50, 75, 100 % of the rating; usual: 25, 50, 100 %', ['careful', 'usual']).default(
+  steps: choiceField('Steps', 'Careful: 10, 25, 50, 80, 100 % of the rating; usual: 25, 50, 100 %', ['careful', 'usual']).default(
     'careful',
   ),
   loadWatts: numberField({ title: 'Load rating', description: 'Most watts of the electronic load', unit: 'W', min: 1, max: 100_000 })

@@ -50,45 +50,62 @@ interface Slope {
   readonly perSecond: number;
 }
 
-/** ∫ of the linear circuit v' = −a v + (b + c t) over a time, without loss for small a. */
-function linearStep(volts: number, a: number, b: number, c: number, seconds: number): number {
-  const x = a * seconds;
-  if (x < 1e-4) {
-    const first = seconds * (1 - x / 2 + (x * x) / 6);
-    const second = seconds * seconds * (1 / 2 - x / 6 + (x * x) / 24);
-    return volts * Math.exp(-x) + b * first + c * second;
-  }
-  const fallen = -Math.expm1(-x);
-  return volts * Math.exp(-x) + (b * fallen) / a + (c * (seconds - fallen / a)) / a;
+/** What a time does to the linear circuit v' = −a v + (b + c t): v becomes v × decay + b × first + c × second. */
+interface Propagator {
+  readonly decay: number;
+  readonly first: number;
+  readonly second: number;
 }
+
+/** Without loss of figures for small a. */
+function propagator(a: number, seconds: number): Propagator {
+  const x = a * seconds;
+  const decay = Math.exp(-x);
+  if (x < 1e-4) {
+    return { decay, first: seconds * (1 - x / 2 + (x * x) / 6), second: seconds * seconds * (1 / 2 - x / 6 + (x * x) / 24) };
+  }
+  const first = -Math.expm1(-x) / a;
+  return { decay, first, second: (seconds - first) / a };
+}
+
+const coasting = ({ loadSiemens, farads }: ReservoirCircuit, seconds: number): Propagator => propagator(loadSiemens / farads, seconds);
+const charging = ({ sourceOhms, loadSiemens, farads }: ReservoirCircuit, seconds: number): Propagator =>
+  propagator((1 / sourceOhms + loadSiemens) / farads, seconds);
 
 /** Reservoir alone with its load; stops at nothing. */
-function coast(circuit: ReservoirCircuit, volts: number, seconds: number): number {
-  const next = linearStep(volts, circuit.loadSiemens / circuit.farads, -circuit.loadAmps / circuit.farads, 0, seconds);
-  return Math.max(0, next);
+const coast = (circuit: ReservoirCircuit, volts: number, over: Propagator): number =>
+  Math.max(0, volts * over.decay - (circuit.loadAmps / circuit.farads) * over.first);
+
+/** Diodes conducting from a source that rises or falls straight. A load that wants more than the source gives pulls the reservoir to nothing, not below. */
+function charge(circuit: ReservoirCircuit, volts: number, source: Slope, over: Propagator): number {
+  const { sourceOhms, farads, loadAmps } = circuit;
+  const steady = (source.from / sourceOhms - loadAmps) / farads;
+  return Math.max(0, volts * over.decay + steady * over.first + (source.perSecond / sourceOhms / farads) * over.second);
 }
 
-/** Diodes conducting from a source that rises or falls straight. */
-function charge(circuit: ReservoirCircuit, volts: number, source: Slope, seconds: number): number {
-  const { sourceOhms, farads, loadAmps, loadSiemens } = circuit;
-  const a = (1 / sourceOhms + loadSiemens) / farads;
-  // A load that wants more than the source gives pulls the reservoir to nothing, not below.
-  return Math.max(0, linearStep(volts, a, (source.from / sourceOhms - loadAmps) / farads, source.perSecond / sourceOhms / farads, seconds));
+/** The two ways over a whole step, worked out once. */
+interface WholeStep {
+  readonly seconds: number;
+  readonly coasting: Propagator;
+  readonly charging: Propagator;
 }
 
 /** One step, split where the diodes begin or cease to conduct. */
-function step(circuit: ReservoirCircuit, volts: number, source: Slope, seconds: number): number {
-  const at = (time: number): number => source.from + source.perSecond * time;
-  const conducts = at(0) > volts || (at(0) === volts && source.perSecond > 0);
-  const move = (time: number): number => (conducts ? charge(circuit, volts, source, time) : coast(circuit, volts, time));
-  const end = move(seconds);
-  const turned = conducts ? at(seconds) < end : at(seconds) > end;
-  if (!turned) return end;
-  const ahead = (time: number): number => (conducts ? move(time) - at(time) : at(time) - move(time));
-  const turn = bisect(ahead, 0, seconds);
+function step(circuit: ReservoirCircuit, volts: number, source: Slope, whole: WholeStep): number {
+  const { seconds } = whole;
+  const { from, perSecond } = source;
+  const conducts = from > volts || (from === volts && perSecond > 0);
+  const end = conducts ? charge(circuit, volts, source, whole.charging) : coast(circuit, volts, whole.coasting);
+  const last = from + perSecond * seconds;
+  if (conducts ? last >= end : last <= end) return end;
+  const move = (time: number): number =>
+    conducts ? charge(circuit, volts, source, charging(circuit, time)) : coast(circuit, volts, coasting(circuit, time));
+  const above = (time: number): number => from + perSecond * time - move(time);
+  const turn = bisect((time) => (conducts ? -above(time) : above(time)), 0, seconds);
   const there = move(turn);
   const rest = seconds - turn;
-  return conducts ? coast(circuit, there, rest) : charge(circuit, there, { from: at(turn), perSecond: source.perSecond }, rest);
+  if (conducts) return coast(circuit, there, coasting(circuit, rest));
+  return charge(circuit, there, { from: from + perSecond * turn, perSecond }, charging(circuit, rest));
 }
 
 const sourceTable = (circuit: ReservoirCircuit): readonly number[] =>
@@ -103,11 +120,12 @@ export const pulseSeconds = (circuit: Pick<ReservoirCircuit, 'mainsHertz' | 'ful
 
 function walk(circuit: ReservoirCircuit, source: readonly number[], start: number, note?: (volts: number, i: number) => void): number {
   const seconds = pulseSeconds(circuit) / STEPS;
+  const whole: WholeStep = { seconds, coasting: coasting(circuit, seconds), charging: charging(circuit, seconds) };
   let volts = start;
   for (let i = 0; i < STEPS; i += 1) {
     note?.(volts, i);
     const from = source[i] ?? 0;
-    volts = step(circuit, volts, { from, perSecond: ((source[i + 1] ?? 0) - from) / seconds }, seconds);
+    volts = step(circuit, volts, { from, perSecond: ((source[i + 1] ?? 0) - from) / seconds }, whole);
   }
   return volts;
 }

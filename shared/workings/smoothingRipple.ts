@@ -5,7 +5,6 @@ import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { Plot, PlotPair } from '@/shared/workings/plot';
 import type { ReservoirCircuit, ReservoirState } from '@/shared/workings/reservoir';
 import { pulseSeconds, settledReservoir } from '@/shared/workings/reservoir';
-import type { RippleFrom } from '@/shared/workings/rippleAccuses';
 import { accusedByFrequency, accusedBySize, rippleFrom } from '@/shared/workings/rippleAccuses';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField } from '@/shared/workings/sheet';
