@@ -42,6 +42,7 @@ const ODDITIES: readonly Oddity[] = [
   { title: 'three rails from a raw rail, a battery besides', rails: THREE, returns: 4, stores: [big], supplyKind: 'switched-from-raw', battery: true },
   { title: 'three rails, a part that may hold beryllium oxide', rails: THREE, returns: 4, stores: [big], supplyKind: 'switched-from-raw', hazards: ['beryllium-oxide'] },
   { title: 'six rails, two trips', rails: SIX, returns: 6, stores: [big, bulk] },
+  { title: 'two rails without a trip', rails: [rail('p5', 5), rail('p12', 12)], returns: 2, stores: [big] },
   { title: 'switch-mode with a bulk capacitor and a minimum load', rails: THREE, returns: 2, stores: [bulk], supplyKind: 'switch-mode' },
   { title: 'switch-mode, several stores, Class II, a battery, an isolating transformer, boards in', rails: THREE, returns: 3, stores: [bulk, bulk, housekeeping, small], supplyKind: 'switch-mode', protectiveClass: 'II', battery: true, isolated: true, outOfMachine: false, least: 2 },
   { title: 'switched from raw volts, one negative rail without a trip, Class II, a battery, boards in', rails: [rail('m15', -15)], returns: 1, stores: [big, small, small], supplyKind: 'switched-from-raw', protectiveClass: 'II', battery: true, outOfMachine: false },

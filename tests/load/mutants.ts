@@ -4,6 +4,7 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { parseProfile, parseTree } from '@/flows/document/parseTree';
 import { misfits } from '@/flows/document/admits';
 import { defaultSettings } from '@/flows/document/settings';
+import { oddProfiles } from '@/flows/proof/oddProfiles';
 import { prove } from '@/flows/proof/prove';
 
 import { must } from '../flows/support/bench';
@@ -11,7 +12,7 @@ import { mutantsOf } from '../flows/support/mutants';
 
 const read = (folder: string) => readdirSync(folder).filter((f) => f.endsWith('.json')).sort().map((f) => JSON.parse(readFileSync(`${folder}/${f}`, 'utf8')) as unknown);
 const trees = read('flows/library').map((json) => must(parseTree(json)));
-const profiles = read('db/seeds/demo/profiles').map((json) => must(parseProfile(json)));
+const profiles = read('db/seeds/demo/profiles').map((json) => must(parseProfile(json))).concat(oddProfiles);
 
 for (const tree of trees) {
   const profile = profiles.find((p) => misfits(tree, p).length === 0);

@@ -31,6 +31,9 @@ const WALKS: [string, string][] = [
   ['cold-checks', 'ostrel-16'],
   ['as-found-harness', 'corvane-12'],
   ['as-found-harness', 'brindle-80'],
+  ['refit-no-trip', 'switch-mode, one rail, Class II'],
+  ['prove-supply', 'brindle-80'],
+  ['prove-supply-no-trip', 'switched from raw volts, one negative rail without a trip, Class II, a battery, boards in'],
 ];
 
 describe.each(WALKS)('every step of %s on %s', (id, profile) => {

@@ -6,6 +6,7 @@ import type { Profile } from '@/flows/document/profile';
 import type { Tree } from '@/flows/document/tree';
 import type { Program } from '@/flows/machine/compile';
 import type { Row } from '@/flows/machine/rows';
+import { oddProfiles } from '@/flows/proof/oddProfiles';
 import { Bench, must, program } from '../support/bench';
 
 const json = (path: string): unknown => JSON.parse(readFileSync(new URL(`../../../${path}`, import.meta.url), 'utf8'));
@@ -18,7 +19,9 @@ export const libraryJson = (id: string): { steps: Record<string, unknown>[] } & 
 export const demoProfile = (name: string): Profile => must(parseProfile(json(`db/seeds/demo/profiles/${name}.json`)));
 
 export const makeDead = libraryTree('make-dead');
-export const programOf = (tree: Tree, profile: string): Program => program(tree, demoProfile(profile), [makeDead]);
+/** A machine of the demo by its file's name, or an odd one by its title. */
+export const machineNamed = (name: string): Profile => oddProfiles.find((profile) => profile.title === name) ?? demoProfile(name);
+export const programOf = (tree: Tree, machine: string): Program => program(tree, machineNamed(machine), [makeDead]);
 
 /** What a person answers at a step: an answer's id, or readings and words by row (`*` for every row). */
 export type Choice = string | Record<string, number | 'over' | string>;
