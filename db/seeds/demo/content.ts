@@ -14,8 +14,11 @@ import lampFirst from '@/flows/library/lamp-first.json';
 import lookOver from '@/flows/library/look-over.json';
 import lostReturn from '@/flows/library/lost-return.json';
 import makeDead from '@/flows/library/make-dead.json';
+import proveSupplyNoTrip from '@/flows/library/prove-supply-no-trip.json';
+import proveSupply from '@/flows/library/prove-supply.json';
 import railLow from '@/flows/library/rail-low.json';
 import rawOnRail from '@/flows/library/raw-on-rail.json';
+import refitNoTrip from '@/flows/library/refit-no-trip.json';
 import refit from '@/flows/library/refit.json';
 import reformInPlace from '@/flows/library/reform-in-place.json';
 import reformLifted from '@/flows/library/reform-lifted.json';
@@ -70,6 +73,9 @@ export const demoContent: DemoContent = {
     { ...first, document: tree(railLow), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 54 },
     { ...first, document: tree(rawOnRail), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 50 },
     { ...first, document: tree(refit), version: 1, state: 'issued', daysAgo: 46 },
+    { ...first, document: tree(refitNoTrip), version: 1, state: 'issued', daysAgo: 46 },
+    { ...first, document: tree(proveSupply), version: 1, state: 'issued', daysAgo: 46 },
+    { ...first, document: tree(proveSupplyNoTrip), version: 1, state: 'issued', daysAgo: 46 },
     { ...first, document: tree(reformLifted), version: 1, state: 'issued', author: 'senior2', checker: 'senior', daysAgo: 42 },
     { ...first, document: tree(regulatorBench), version: 1, state: 'issued', author: 'senior3', checker: 'senior', daysAgo: 38 },
     { ...first, document: tree(ripple), version: 1, state: 'issued', daysAgo: 33 },
