@@ -61,8 +61,8 @@ export const PASSING: Record<Kind, Outcome | null> = {
 /** Kinds whose exits lift or leave doubts (H13, H14). Dead-making steps are left out: their doubt is the bench fact itself. */
 export const CHECK_KINDS: readonly Kind[] = ['observe', 'measure', 'soak', 'prove-earth', 'prove-insulation', 'prove-returns', 'prove-trip', 'prove-rails'];
 
-/** Acts whose unsure answer is a doubt too: what is perhaps not fitted, or perhaps not mended, bars power like an unsure reading. */
-export const ACT_KINDS: readonly Kind[] = ['do', 'work'];
+/** Acts whose unsure answer is a doubt too: what is perhaps not fitted or not mended, or was not photographed when it was asked for, bars power like an unsure reading. */
+export const ACT_KINDS: readonly Kind[] = ['do', 'photo', 'work'];
 
 /** What an answer of a look shows about a part, beside which answer it was. */
 export const SHOWN = {

@@ -15,7 +15,7 @@ import { landingsOf, layOut, SAFE } from './program';
 import type { Layout, ProgramStep } from './program';
 
 /** Changes whenever the same entries could lead to another state; snapshots of another engine are dropped. */
-export const ENGINE = 'lampstep-engine-5';
+export const ENGINE = 'lampstep-engine-6';
 
 interface Args {
   context: RunContext;

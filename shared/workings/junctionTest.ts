@@ -2,8 +2,10 @@
 import { z } from 'zod';
 
 import { formatQuantity } from '@/shared/quantity/formatQuantity';
+import { junctionDrawing } from '@/shared/workings/junctionDrawing';
 import type { JunctionKind, JunctionReading } from '@/shared/workings/junctionReading';
 import { junctionKind, readJunction } from '@/shared/workings/junctionReading';
+import type { Circuit } from '@/shared/workings/plot';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { choiceField, defineSheet, numberField, rowsField, textField } from '@/shared/workings/sheet';
 
@@ -236,6 +238,17 @@ function formulaOf(all: readonly Read[]): readonly string[] {
   return all.map((read) => `red on ${read.red}, black on ${read.black}: ${shownWords(read)}: ${kind[read.is]}; ${wanted[read.wants]}`);
 }
 
+function drawingOf(given: Inputs, all: readonly Read[], result: JunctionTestResult, finding: string): Circuit {
+  const expected = EXPECTED[given.part];
+  const ways = expected.map(([red, black, wants]) => {
+    const read = all.find((one) => one.red === red && one.black === black);
+    const found = result.red === red && result.black === black && result.says !== 'incomplete';
+    return { red, black, conducts: wants === 'conducts', shown: read === undefined ? null : shownWords(read), accused: found };
+  });
+  const leads = [...new Set(expected.flatMap(([red, black]) => [red, black]))];
+  return junctionDrawing(`The junctions of a ${words(given.part)}`, leads, ways, finding);
+}
+
 /** Junction test. */
 export const sheet = defineSheet({
   id: 'junction-test',
@@ -271,6 +284,7 @@ export const sheet = defineSheet({
     };
     // The law stands below a single reading too, so that its limits are seen.
     const formula = [...formulaOf(all), ...(all.length === 1 ? law.slice(0, 1) : [])];
-    return { ok: true, result, headline: headlineOf(given, all, result), formula, caution, validity, source };
+    const headline = headlineOf(given, all, result);
+    return { ok: true, result, headline, formula, caution, validity, source, drawing: drawingOf(given, all, result, headline) };
   },
 });

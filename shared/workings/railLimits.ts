@@ -4,6 +4,8 @@ import { z } from 'zod';
 import { formatNumber, formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { Decision } from '@/shared/workings/readingLimit';
 import { decide } from '@/shared/workings/readingLimit';
+import type { Plot } from '@/shared/workings/plot';
+import { sampleCurve } from '@/shared/workings/plot';
 import type { SheetAnswer, SheetRefusal } from '@/shared/workings/sheet';
 import { defineSheet, numberField } from '@/shared/workings/sheet';
 
@@ -89,6 +91,40 @@ const inputs = z.strictObject({
     .default(null),
 });
 
+/** How far a reading is off nominal, with the limits, the guard bands and the side where the sign is wrong. */
+function plotOf(nominalVolts: number, guardVolts: number, result: RailLimitsResult, readingVolts: number | null): Plot {
+  const { lowVolts, highVolts, acceptLowVolts, acceptHighVolts } = result;
+  const sign = Math.sign(nominalVolts);
+  const size = Math.abs(nominalVolts);
+  const far = Math.max(1.3 * size, 1.1 * Math.abs(highVolts), readingVolts === null ? 0 : sign * readingVolts);
+  const near = Math.min(-0.2 * size, readingVolts === null ? 0 : sign * readingVolts);
+  const [from, to] = sign > 0 ? [near, far] : [-far, -near];
+  const off = (volts: number): number => (100 * Math.abs(volts - nominalVolts)) / size;
+  const between = (a: number, b: number) => ({ axis: 'x' as const, from: Math.min(a, b), to: Math.max(a, b) });
+  const wrongSide = -sign * reversedAboveVolts(nominalVolts, guardVolts);
+  return {
+    title: 'Where the rail may be',
+    x: { title: 'Reading', unit: 'V', scale: 'linear', from, to },
+    y: { title: 'Off nominal', unit: '%', scale: 'linear', from: 0 },
+    curves: [{ label: 'off nominal', points: sampleCurve(off, from, to), role: 'main' }],
+    points: [
+      { label: formatQuantity(nominalVolts, 'V', { digits: 4 }), x: nominalVolts, y: 0, role: 'answer' },
+      ...(readingVolts === null ? [] : [{ label: formatQuantity(readingVolts, 'V', { digits: 4 }), x: readingVolts, y: off(readingVolts), role: 'reading' as const }]),
+    ],
+    bands: [
+      ...(acceptLowVolts === null || acceptHighVolts === null
+        ? [{ label: 'not beyond doubt', ...between(lowVolts, highVolts), role: 'close' as const }]
+        : [{ label: 'good beyond doubt', ...between(acceptLowVolts, acceptHighVolts), role: 'good' as const }]),
+      { label: 'reversed', axis: 'x', from: sign > 0 ? null : wrongSide, to: sign > 0 ? wrongSide : null, role: 'bad' },
+    ],
+    limits: [
+      { label: 'low', axis: 'x', at: lowVolts },
+      { label: 'high', axis: 'x', at: highVolts },
+    ],
+    words: `The rail may lie from ${formatQuantity(lowVolts, 'V', { digits: 4 })} to ${formatQuantity(highVolts, 'V', { digits: 4 })}; on the other side of zero it is reversed.${result.reading === null || readingVolts === null ? '' : ` ${formatQuantity(readingVolts, 'V', { digits: 4 })} is ${WORDS[result.reading]}.`}`,
+  };
+}
+
 const law = [
   'low = nominal × (1 − tolerance),  high = nominal × (1 + tolerance); by size, so that low is the one nearer to zero',
   'good beyond doubt: low + guard … high − guard, by size',
@@ -130,15 +166,17 @@ export const sheet = defineSheet({
         : `The guard band of ${print(guardVolts)} is wider than the tolerance: no reading with this meter is beyond doubt.`,
     ];
     const verdict = reading === null || readingVolts === null ? '' : `; ${print(readingVolts)} is ${WORDS[reading]}`;
+    const result: RailLimitsResult = {
+      lowVolts,
+      highVolts,
+      acceptLowVolts: roomy ? lowVolts + guard : null,
+      acceptHighVolts: roomy ? highVolts - guard : null,
+      reading,
+    };
     return {
       ok: true,
-      result: {
-        lowVolts,
-        highVolts,
-        acceptLowVolts: roomy ? lowVolts + guard : null,
-        acceptHighVolts: roomy ? highVolts - guard : null,
-        reading,
-      },
+      result,
+      plot: plotOf(nominalVolts, guardVolts, result, readingVolts),
       headline: `${print(lowVolts)} to ${print(highVolts)}${verdict}.`,
       formula,
       ...(reading === 'reversed' && {

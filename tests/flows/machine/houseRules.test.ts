@@ -211,6 +211,10 @@ describe('H13 and H14: unsure and failed', () => {
     expect(play(tree, { see: 'bad' }).rule).toBe('H14');
     expect(play(tree).rule).toBeNull();
   });
+  it('gives no power after a photo that was wanted and not taken', () => {
+    const seen = treeOf([...ready('seen'), step('photo', 'seen', 'lamp', { of: 'connectors', power: 'dead' }, 'lamp'), lamp('lamp', 'abort')]);
+    expect(play(seen, { seen: 'cannot' }).rule).toBe('H13');
+  });
   it('gives power again when a senior has lifted the doubt at a hold that names it', () => {
     const held = treeOf([...ready('see'), observe('see', 'hold', {}, 'hold'), step('hold', 'hold', 'lamp', { asks: 'Go on?', names: ['see'] }), lamp('lamp', 'abort')]);
     expect(play(held, { see: 'not-sure' }).rule).toBeNull();
