@@ -6,12 +6,13 @@ export async function up(db: Kysely<unknown>): Promise<void> {
   await sql
     .raw(
       `alter table sessions add column device text not null default '' check (length(device) <= 200);
-       -- the policy of the table leaves a person their own row alone
+       -- reading a row to sign in goes by mail address; changing one wants the person
+       create policy credentials_change on credentials as restrictive for update using (person = current_person()) with check (person = current_person());
        grant update (password_hash, changed_at) on credentials to lampstep_server;`,
     )
     .execute(db);
 }
 
 export async function down(db: Kysely<unknown>): Promise<void> {
-  await sql.raw('revoke update (password_hash, changed_at) on credentials from lampstep_server; alter table sessions drop column device;').execute(db);
+  await sql.raw('revoke update (password_hash, changed_at) on credentials from lampstep_server; drop policy credentials_change on credentials; alter table sessions drop column device;').execute(db);
 }

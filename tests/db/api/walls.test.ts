@@ -77,7 +77,7 @@ describe('raw SQL', () => {
     ['deletes no run', 'delete from runs'],
     ['changes no tree', `update tree_versions set document = '{}'`],
     ['makes nobody a senior', `update members set roles = '{senior}'`],
-    ['changes no password', `update credentials set password_hash = 'x'`],
+    ['moves no password to another person', `update credentials set person = gen_random_uuid()`],
     ['takes no wall down', 'alter table entries disable row level security'],
     ['takes no trigger off', 'alter table entries disable trigger all'],
     ['makes no function', 'create function public.f() returns int language sql as $$ select 1 $$'],
@@ -85,6 +85,21 @@ describe('raw SQL', () => {
     ['purges nothing', `select purge_records(gen_random_uuid(), now())`],
   ])('as the server %s', async (_, text) => {
     await expect(inWorkshop(raw, here.id, text)).rejects.toThrow(/permission denied|must be owner/);
+  });
+
+  it('as the server changes the password of the person in whose name it works, and of nobody by their mail address', async () => {
+    const changed = async (setting: 'person' | 'mail' | null, value: string) => {
+      await raw.query('begin');
+      try {
+        if (setting !== null) await raw.query(`select set_config('lampstep.${setting}', $1, true)`, [value]);
+        return (await raw.query<{ person: string }>(`update credentials set password_hash = 'x' returning person`)).rows.map(({ person }) => person);
+      } finally {
+        await raw.query('rollback');
+      }
+    };
+    expect(await changed('person', here.senior.id)).toEqual([here.senior.id]);
+    expect(await changed('mail', here.senior.mail)).toEqual([]);
+    expect(await changed(null, '')).toEqual([]);
   });
 
   it('changes no entry even as the owner', async () => {
