@@ -89,7 +89,7 @@ function machineOf(layout: Layout): RunMachine {
       warning: { entry: phase('warning'), on: { WARNING_READ: onward(taken, [apply]) } },
       act: {
         entry: phase('act'),
-        on: { ROW: answers, READING: answers, ANSWER: answers, PHOTO: answers, ...(step.kind === 'hold' ? { HOLD_ASKED: [{ guard: taken, actions: apply, target: 'hold-wait' }] } : {}), ...(placed.key === SAFE.choose ? { REENTER: away, CLOSE: away } : {}) },
+        on: { ROW: answers, READING: answers, ANSWER: answers, ...(step.kind === 'photo' ? { PHOTO: answers } : {}), ...(step.kind === 'hold' ? { HOLD_ASKED: [{ guard: taken, actions: apply, target: 'hold-wait' }] } : {}), ...(placed.key === SAFE.choose ? { REENTER: away, CLOSE: away } : {}) },
       },
     };
     if (power || step.kind === 'hold') {
@@ -115,7 +115,7 @@ function machineOf(layout: Layout): RunMachine {
     Object.fromEntries((below.get(call) ?? []).map((p): [string, Node] => [p.step.id, p.step.kind === 'call' ? { initial: below.get(p.key)?.[0]?.step.id ?? '', states: statesOf(p.key) } : stepNode(p)]));
   const tree = statesOf(null);
   const safe = Object.fromEntries(placed.filter((p) => p.builtIn).map((p) => [p.key, stepNode(p)]));
-  const reachable = placed.filter((p) => p.step.kind !== 'call' && p.step.kind !== 'end').map((p) => p.key);
+  const reachable = [...placed].sort((a, b) => Number(b.builtIn) - Number(a.builtIn)).filter((p) => p.step.kind !== 'call' && p.step.kind !== 'end').map((p) => p.key);
   const opening: Move[] = [{ guard: goes(null), actions: apply }, ...away];
 
   const config: Node & { context: unknown } = {
@@ -138,7 +138,7 @@ function machineOf(layout: Layout): RunMachine {
       [SAFE.opening]: { id: SAFE.opening, entry: [arrive(SAFE.opening), phase('opening')], on: { ROW: opening } },
       tree: { initial: Object.keys(tree)[0] ?? '', states: tree },
       safe: { initial: SAFE.isolate, states: safe },
-      '~route': { id: '~route', always: [...reachable, SAFE.opening, SAFE.ended].map((key) => ({ guard: ({ context }: Args) => context.goto === key, target: `#${key}` })) },
+      '~route': { id: '~route', always: [SAFE.opening, SAFE.ended, ...reachable].map((key) => ({ guard: ({ context }: Args) => context.goto === key, target: `#${key}` })) },
       '~paused': { id: '~paused', entry: phase('paused') },
       [SAFE.ended]: { id: SAFE.ended, entry: [arrive(SAFE.ended), phase('ended')], on: { CLOSE: [{ guard: taken, actions: apply, target: '#~closed' }] } },
       '~closed': { id: '~closed', type: 'final', entry: phase('closed') },
@@ -168,7 +168,8 @@ function leadsOf(layout: Layout, placed: ProgramStep): string[] {
     const kind = layout.steps.get(key)?.step.kind;
     return kind !== undefined && kind !== 'end' && kind !== 'call';
   });
-  return [...new Set([...landed, SAFE.isolate, SAFE.takeOut, SAFE.ended])];
+  // to safety it goes by way of the route, which knows every key
+  return [...new Set(landed)];
 }
 
 /** Asks `judge` once for each event and context: guards and actions of one transition share the answer. */
