@@ -15,6 +15,8 @@ import { webProps } from '@/shared/ui/theme/webStyle';
 import type { Circuit } from '@/shared/workings/plot';
 
 const FIRST_WIDTH = 358;
+/** Narrower than this there is no room for the axes. */
+const LEAST_WIDTH = 120;
 
 /** Fills the width that it is given; a larger circuit scrolls sideways in its own frame. */
 export function CircuitFigure({ circuit }: { circuit: Circuit }) {
@@ -28,7 +30,8 @@ export function CircuitFigure({ circuit }: { circuit: Circuit }) {
       <Label level={3}>{circuit.title}</Label>
       <View
         style={{ alignSelf: 'stretch', backgroundColor: colors.raised, borderWidth: line.hair, borderColor: colors.rule }}
-        onLayout={(e) => setGiven(Math.floor(e.nativeEvent.layout.width - 2 * line.hair) || FIRST_WIDTH)}
+        // a page on its way out is laid out with no width at all
+        onLayout={({ nativeEvent: { layout } }) => setGiven(layout.width > LEAST_WIDTH ? Math.floor(layout.width - 2 * line.hair) : FIRST_WIDTH)}
       >
         <ScrollView
           horizontal

@@ -15,6 +15,8 @@ import type { Plot } from '@/shared/workings/plot';
 
 /** A phone's sheet; the first drawing before the real width is known. */
 const FIRST_WIDTH = 358;
+/** Narrower than this there is no room for the axes. */
+const LEAST_WIDTH = 120;
 const [LOWEST, TALLEST] = [270, 400];
 
 /** Takes the width that it is given. */
@@ -32,7 +34,8 @@ export function PlotFigure({ plot }: { plot: Plot }) {
         aria-label={plot.title}
         aria-describedby={id}
         style={{ height, alignSelf: 'stretch', backgroundColor: colors.raised, borderWidth: line.hair, borderColor: colors.rule }}
-        onLayout={(e) => setWidth(Math.floor(e.nativeEvent.layout.width - 2 * line.hair) || FIRST_WIDTH)}
+        // a page on its way out is laid out with no width at all
+        onLayout={({ nativeEvent: { layout } }) => setWidth(layout.width > LEAST_WIDTH ? Math.floor(layout.width - 2 * line.hair) : FIRST_WIDTH)}
       >
         <Svg width={width} height={height} aria-hidden>
           <PlotAxes model={model} width={width} height={height} />
