@@ -3,8 +3,9 @@ import { createHash } from 'node:crypto';
 
 import type { Sharp } from 'sharp';
 
+import { isPlainJpeg } from '@/shared/contract/plainJpeg';
+
 import { ProblemError } from '../problems';
-import { isPlainJpeg } from './isPlainJpeg';
 import { mediaOf } from './mediaOf';
 
 /** Longest side of a photo that is kept. */

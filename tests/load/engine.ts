@@ -16,15 +16,13 @@ import type { Called } from './manyCalls';
 
 const pair = (size: number) => ({ tree: bigTree(size, 7), callees: [makeDeadTree], profile: benchProfile, settings: defaultSettings });
 
-/** Best of several, in milliseconds: of the wall and of this process's own processor time the smaller, so that other work on the machine counts for less. */
+/** Best of several, in milliseconds of the wall: on a machine that does nothing else. */
 function best(times: number, run: () => void): number {
   let least = Infinity;
   for (let i = 0; i < times; i += 1) {
     const from = performance.now();
-    const before = process.cpuUsage();
     run();
-    const { user, system } = process.cpuUsage(before);
-    least = Math.min(least, performance.now() - from, (user + system) / 1000);
+    least = Math.min(least, performance.now() - from);
   }
   return least;
 }

@@ -6,7 +6,7 @@ import { coldOhms, hotOhms, lampOhms } from '@/shared/workings/lamp';
 import type { LampLoad } from '@/shared/workings/lampPoints';
 import { operatingPoints, reservoirOhms } from '@/shared/workings/lampPoints';
 
-import { spiceMeasures } from './spiceMeasures';
+import { spiceMeasures } from './ngspice/measures';
 
 interface Network {
   lamp: Lamp;
@@ -57,11 +57,11 @@ function branch({ lamp: one, supplyVolts, load }: Network, n: number): readonly 
 }
 
 describe('operating points against ngspice, every node within 1 mV or 0.1 %', { timeout: 120_000 }, () => {
-  it('holds for 120 generated networks of resistance, constant power and dead short', async () => {
+  it('holds for 120 generated networks of resistance, constant power and dead short', () => {
     const drawn = fc.sample(networks, { numRuns: 120, seed: 4 });
     expect(new Set(drawn.map(({ load }) => load.kind)).size).toBe(3);
     const deck = [...drawn.flatMap(branch), '.options reltol=1e-6 abstol=1e-10 itl1=500', '.op'];
-    const spice = await spiceMeasures(
+    const spice = spiceMeasures(
       deck,
       drawn.map((_, n) => `print v(n${String(n)})`),
     );
@@ -83,7 +83,7 @@ describe('rectifier and reservoir behind the lamp against ngspice by transient a
     [60, 200],
     [150, 20],
     [40, 40],
-  ])('%d W lamp, %d W plate', async (ratedWatts, watts) => {
+  ])('%d W lamp, %d W plate', (ratedWatts, watts) => {
     const one: Lamp = { ratedVolts: 120, ratedWatts, coldRatio: 15 };
     const [point] = operatingPoints(one, 120, { kind: 'reservoir', watts });
     if (point === undefined) throw new Error('no point');
@@ -107,7 +107,7 @@ describe('rectifier and reservoir behind the lamp against ngspice by transient a
       '.options reltol=1e-4 method=gear',
       '.tran 40u 1.2 1 40u uic',
     ];
-    const spice = await spiceMeasures(deck, [
+    const spice = spiceMeasures(deck, [
       'meas tran lamp rms v(lampvolts) from=1 to=1.2',
       'meas tran dc avg v(out) from=1 to=1.2',
       'meas tran inlet rms v(inletvolts) from=1 to=1.2',

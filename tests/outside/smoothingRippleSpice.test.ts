@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { sheet } from '@/shared/workings/smoothingRipple';
 import { runSheet } from '@/shared/workings/sheet';
 
-import { spiceMeasures } from './spiceMeasures';
+import { spiceMeasures } from './ngspice/measures';
 
 interface Supply {
   secondaryVolts: number;
@@ -74,11 +74,11 @@ function deckOf(given: Supply, peakAmps: number, real: boolean): readonly string
 
 const MEASURES = ['high max', 'low min', 'mean avg'].map((pair) => `meas tran ${pair} v(out) from=0.5 to=0.6`);
 
-async function compare(given: Supply, real: boolean): Promise<void> {
+function compare(given: Supply, real: boolean): void {
   const answer = runSheet(sheet, given);
   if (!answer.ok) throw new Error(answer.say);
   const { exact } = answer.result;
-  const spice = await spiceMeasures(deckOf(given, exact.peakDiodeAmps, real), MEASURES);
+  const spice = spiceMeasures(deckOf(given, exact.peakDiodeAmps, real), MEASURES);
   const [high, low, mean] = ['high', 'low', 'mean'].map((name) => spice.get(name) ?? Number.NaN) as [number, number, number];
   const about = `${JSON.stringify(given)}: ${String(exact.rippleVolts)} against ${String(high - low)}`;
   expect(Math.abs(exact.rippleVolts / (high - low) - 1), about).toBeLessThan(0.01);
@@ -86,14 +86,14 @@ async function compare(given: Supply, real: boolean): Promise<void> {
 }
 
 describe('stepped reservoir against ngspice by transient analysis, within 1 %', { timeout: 300_000 }, () => {
-  it('holds for generated supplies of all three rectifiers and both loads', async () => {
+  it('holds for generated supplies of all three rectifiers and both loads', () => {
     const drawn = fc.sample(supplies, { numRuns: 24, seed: 20 });
     expect(new Set(drawn.map(({ rectifier }) => rectifier)).size).toBe(3);
-    for (const given of drawn) await compare(given, false);
+    for (const given of drawn) compare(given, false);
   });
 
-  it('holds with silicon diodes that drop the entered volts at the peak current', async () => {
+  it('holds with silicon diodes that drop the entered volts at the peak current', () => {
     for (const given of fc.sample(supplies, { numRuns: 6, seed: 7 }))
-      await compare({ ...given, secondaryVolts: given.secondaryVolts + 20 }, true);
+      compare({ ...given, secondaryVolts: given.secondaryVolts + 20 }, true);
   });
 });

@@ -12,7 +12,7 @@ import { face } from '@/shared/ui/theme/type';
 import { useTheme } from '@/shared/ui/theme/useTheme';
 import { webProps } from '@/shared/ui/theme/webStyle';
 
-interface Props {
+export interface FieldProps {
   label: string;
   /** what it belongs to where several have the same label; a reader says it before the label */
   within?: string | undefined;
@@ -47,7 +47,7 @@ export function Field({
   lines = 1,
   inputMode,
   autoComplete,
-}: Props) {
+}: FieldProps) {
   const { colors } = useTheme();
   const id = useId();
   const described = [error ? `${id}e` : null, hint ? `${id}h` : null].filter(Boolean).join(' ');

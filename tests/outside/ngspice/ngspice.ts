@@ -1,11 +1,11 @@
 /** Runs Debian's ngspice on many small decks in one process and reads the node volts back. */
-import { execFileSync } from 'node:child_process';
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 
 import type { Network, Variation } from '@/shared/workings/network/network';
 import { OUTPUT_BLEED_OHMS } from '@/shared/workings/network/network';
+
+import { runBatch } from './batch';
 
 const TIGHT = '.options reltol=1e-7 abstol=1e-13 vntol=1e-9 gmin=1e-12 itl1=500';
 
@@ -46,26 +46,19 @@ export function networkDeck(network: Network, { off, open, added }: Variation): 
  * @returns volts by node name of each; a deck that ngspice did not settle has no entry
  */
 export function operatingPoints(decks: readonly string[], timeoutMs = 120_000): ReadonlyMap<number, ReadonlyMap<string, number>> {
-  const folder = mkdtempSync(join(tmpdir(), 'ngspice-'));
-  try {
-    const control = ['* every deck in turn', '.control', 'set numdgt=12', 'set noaskquit'];
-    decks.forEach((deck, k) => {
-      const file = join(folder, `${String(k)}.cir`);
-      writeFileSync(file, deck);
-      control.push(`source ${file}`, 'op', `echo deck ${String(k)}`, 'print all', 'destroy all', 'remcirc');
-    });
-    const main = join(folder, 'main.cir');
-    writeFileSync(main, [...control, 'quit', '.endc', '.end', ''].join('\n'));
-    const output = execFileSync('ngspice', ['-b', main], {
-      encoding: 'utf8',
-      timeout: timeoutMs,
-      maxBuffer: 1 << 28,
-      stdio: ['ignore', 'pipe', 'ignore'],
-    });
-    return readPoints(output);
-  } finally {
-    rmSync(folder, { recursive: true, force: true });
-  }
+  return runBatch(
+    (folder) => {
+      const control = ['* every deck in turn', '.control', 'set numdgt=12', 'set noaskquit'];
+      decks.forEach((deck, k) => {
+        const file = join(folder, `${String(k)}.cir`);
+        writeFileSync(file, deck);
+        control.push(`source ${file}`, 'op', `echo deck ${String(k)}`, 'print all', 'destroy all', 'remcirc');
+      });
+      return [...control, 'quit', '.endc', '.end', ''].join('\n');
+    },
+    readPoints,
+    timeoutMs,
+  );
 }
 
 function readPoints(output: string): ReadonlyMap<number, ReadonlyMap<string, number>> {

@@ -1,8 +1,8 @@
 /** Runs a transient analysis in ngspice and reads one curve back. */
-import { execFileSync } from 'node:child_process';
-import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
+
+import { runBatch } from './batch';
 
 /** One curve: seconds and volts, as many of each. */
 export interface Curve {
@@ -20,31 +20,31 @@ export function transient(
   node: string,
   step: { stepSeconds: number; endSeconds: number; fromSeconds?: number },
 ): Curve {
-  const folder = mkdtempSync(join(tmpdir(), 'ngspice-'));
-  try {
-    const [main, data] = [join(folder, 'main.cir'), join(folder, 'curve.txt')];
-    const { stepSeconds, endSeconds, fromSeconds = 0 } = step;
-    const control = [
-      '.control',
-      'set wr_singlescale',
-      'set numdgt=10',
-      `tran ${String(stepSeconds)} ${String(endSeconds)} ${String(fromSeconds)} ${String(stepSeconds)} uic`,
-      `wrdata ${data} V(${node})`,
-      'quit',
-      '.endc',
-      '.end',
-      '',
-    ];
-    writeFileSync(main, [...deck, '.options reltol=1e-5', ...control].join('\n'));
-    execFileSync('ngspice', ['-b', main], { timeout: 60_000, stdio: 'ignore' });
-    const rows = readFileSync(data, 'utf8')
-      .trim()
-      .split('\n')
-      .map((line) => line.trim().split(/\s+/).map(Number));
-    return { seconds: rows.map(([at]) => at ?? Number.NaN), volts: rows.map(([, value]) => value ?? Number.NaN) };
-  } finally {
-    rmSync(folder, { recursive: true, force: true });
-  }
+  const { stepSeconds, endSeconds, fromSeconds = 0 } = step;
+  const file = (folder: string): string => join(folder, 'curve.txt');
+  return runBatch(
+    (folder) => {
+      const control = [
+        '.control',
+        'set wr_singlescale',
+        'set numdgt=10',
+        `tran ${String(stepSeconds)} ${String(endSeconds)} ${String(fromSeconds)} ${String(stepSeconds)} uic`,
+        `wrdata ${file(folder)} V(${node})`,
+        'quit',
+        '.endc',
+        '.end',
+        '',
+      ];
+      return [...deck, '.options reltol=1e-5', ...control].join('\n');
+    },
+    (_, folder) => {
+      const rows = readFileSync(file(folder), 'utf8')
+        .trim()
+        .split('\n')
+        .map((line) => line.trim().split(/\s+/).map(Number));
+      return { seconds: rows.map(([at]) => at ?? Number.NaN), volts: rows.map(([, value]) => value ?? Number.NaN) };
+    },
+  );
 }
 
 /** When a falling curve first reaches some volts, between its points by a straight line; NaN when it never does. */

@@ -8,7 +8,7 @@ import type { RecordView } from '@/shared/contract/records';
 import { useReview } from '@/shared/ui/api/useReview';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Checkbox } from '@/shared/ui/components/Checkbox';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { Notice } from '@/shared/ui/components/Notice';
 import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
@@ -49,21 +49,13 @@ export function AcceptDialog({ record, release, onClose }: Props) {
       onClose={onClose}
     >
       <BodyText>{`Record of ${machine.name}, serial ${machine.serial}, ${record.head.seq} entries. Afterwards nothing in it can be changed.`}</BodyText>
-      <Controller
+      <FormField
         control={control}
         name="meaning"
-        render={({ field, fieldState }) => (
-          <Field
-            label="Your signature means"
-            required
-            lines={4}
-            value={field.value}
-            onChangeText={field.onChange}
-            onBlur={field.onBlur}
-            error={fieldState.error?.message}
-            hint="It is written into the record under your name, with the time."
-          />
-        )}
+        label="Your signature means"
+        required
+        lines={4}
+        hint="It is written into the record under your name, with the time."
       />
       {release ? (
         <Controller
@@ -81,22 +73,14 @@ export function AcceptDialog({ record, release, onClose }: Props) {
       ) : (
         <Notice kind="note">No release goes with it: that rests only on a run that ended with the supply proven.</Notice>
       )}
-      <Controller
+      <FormField
         control={control}
         name="password"
-        render={({ field, fieldState }) => (
-          <Field
-            label="Your password"
-            required
-            secret
-            value={field.value}
-            onChangeText={field.onChange}
-            onBlur={field.onBlur}
-            onSubmit={() => void act()}
-            error={fieldState.error?.message}
-            autoComplete="current-password"
-          />
-        )}
+        label="Your password"
+        required
+        secret
+        onSubmit={() => void act()}
+        autoComplete="current-password"
       />
     </ActDialog>
   );

@@ -7,7 +7,7 @@ import { findingBody } from '@/shared/contract/records';
 import type { RecordView } from '@/shared/contract/records';
 import { useReview } from '@/shared/ui/api/useReview';
 import { Choice } from '@/shared/ui/components/Choice';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
 
@@ -53,21 +53,7 @@ export function FindingDialog({ record, entry, onClose }: Props) {
         name="grade"
         render={({ field }) => <Choice label="Grade" options={grades} value={field.value} onChange={field.onChange} />}
       />
-      <Controller
-        control={control}
-        name="text"
-        render={({ field, fieldState }) => (
-          <Field
-            label="What you found"
-            required
-            lines={4}
-            value={field.value}
-            onChangeText={field.onChange}
-            onBlur={field.onBlur}
-            error={fieldState.error?.message}
-          />
-        )}
-      />
+      <FormField control={control} name="text" label="What you found" required lines={4} />
     </ActDialog>
   );
 }

@@ -1,13 +1,13 @@
 /** The restorer's answer to a returned record. */
 import { zodResolver } from '@hookform/resolvers/zod';
-import { Controller, useForm } from 'react-hook-form';
+import { useForm } from 'react-hook-form';
 import { View } from 'react-native';
 
 import { replyBody } from '@/shared/contract/records';
 import type { RecordView } from '@/shared/contract/records';
 import { useReview } from '@/shared/ui/api/useReview';
 import { BodyText } from '@/shared/ui/components/BodyText';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
 
@@ -37,21 +37,7 @@ export function ReplyDialog({ record, onClose }: Props) {
       onClose={onClose}
     >
       <View>{Array.isArray(asked) ? asked.map((q, i) => <BodyText key={String(q)}>{`${i + 1}. ${String(q)}`}</BodyText>) : null}</View>
-      <Controller
-        control={control}
-        name="text"
-        render={({ field, fieldState }) => (
-          <Field
-            label="Your answer"
-            required
-            lines={5}
-            value={field.value}
-            onChangeText={field.onChange}
-            onBlur={field.onBlur}
-            error={fieldState.error?.message}
-          />
-        )}
-      />
+      <FormField control={control} name="text" label="Your answer" required lines={5} />
     </ActDialog>
   );
 }

@@ -1,6 +1,6 @@
 /** Sending a record back with questions. */
 import { zodResolver } from '@hookform/resolvers/zod';
-import { Controller, useFieldArray, useForm } from 'react-hook-form';
+import { useFieldArray, useForm } from 'react-hook-form';
 import { z } from 'zod';
 
 import { sentence } from '@/shared/contract/ids';
@@ -8,7 +8,7 @@ import type { RecordView } from '@/shared/contract/records';
 import { useReview } from '@/shared/ui/api/useReview';
 import { BodyText } from '@/shared/ui/components/BodyText';
 import { Button } from '@/shared/ui/components/Button';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
 
@@ -45,22 +45,7 @@ export function ReturnDialog({ record, onClose }: Props) {
     >
       <BodyText>The restorer answers, and the record is under review again. Nothing that stands in it is changed.</BodyText>
       {fields.map((row, at) => (
-        <Controller
-          key={row.id}
-          control={control}
-          name={`questions.${at}.text`}
-          render={({ field, fieldState }) => (
-            <Field
-              label={`Question ${at + 1}`}
-              required
-              lines={2}
-              value={field.value}
-              onChangeText={field.onChange}
-              onBlur={field.onBlur}
-              error={fieldState.error?.message}
-            />
-          )}
-        />
+        <FormField key={row.id} control={control} name={`questions.${at}.text`} label={`Question ${at + 1}`} required lines={2} />
       ))}
       {fields.length < MOST ? <Button kind="quiet" icon="plus" label="Another question" onPress={() => append({ text: '' })} /> : null}
       {fields.length > 1 ? (

@@ -1,12 +1,12 @@
 /** Handing a closed run in for review. */
 import { zodResolver } from '@hookform/resolvers/zod';
-import { Controller, useForm } from 'react-hook-form';
+import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 
 import type { RecordView } from '@/shared/contract/records';
 import { useReview } from '@/shared/ui/api/useReview';
 import { BodyText } from '@/shared/ui/components/BodyText';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { ActDialog } from '@/shared/ui/screens/records/ActDialog';
 import { useAct } from '@/shared/ui/screens/records/useAct';
 
@@ -36,20 +36,7 @@ export function SubmitDialog({ record, onClose }: Props) {
       onClose={onClose}
     >
       <BodyText>A reviewer who took no part in the run reads it, and accepts it or returns it with questions.</BodyText>
-      <Controller
-        control={control}
-        name="remark"
-        render={({ field, fieldState }) => (
-          <Field
-            label="Remark"
-            lines={3}
-            value={field.value}
-            onChangeText={field.onChange}
-            onBlur={field.onBlur}
-            error={fieldState.error?.message}
-          />
-        )}
-      />
+      <FormField control={control} name="remark" label="Remark" lines={3} />
     </ActDialog>
   );
 }

@@ -2,7 +2,7 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex } from '@noble/hashes/utils.js';
 
-import { plainJpeg } from '@/shared/ui/screens/run/plainJpeg';
+import { plainJpeg } from '@/shared/contract/plainJpeg';
 
 /** Longest side of a photo on its way to the server; enough to read a part's marking. */
 const LONGEST_PX = 2400;

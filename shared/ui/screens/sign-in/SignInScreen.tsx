@@ -3,7 +3,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useRouter } from 'expo-router';
 import type { Href } from 'expo-router';
 import { useState } from 'react';
-import { Controller, useForm } from 'react-hook-form';
+import { useForm } from 'react-hook-form';
 import { View } from 'react-native';
 
 import { FIRST_CAUTION } from '@/flows/document/hazards';
@@ -11,7 +11,7 @@ import { signInBody } from '@/shared/contract/session';
 import { useSession } from '@/shared/ui/api/useSession';
 import { BigAnswer } from '@/shared/ui/components/BigAnswer';
 import { BodyText } from '@/shared/ui/components/BodyText';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { Notice } from '@/shared/ui/components/Notice';
 import { Page } from '@/shared/ui/components/Page';
 import { returnPath } from '@/shared/ui/screens/sign-in/returnPath';
@@ -63,39 +63,23 @@ export function SignInScreen({ from, expired }: Props) {
         </Notice>
       ) : null}
       <View style={{ gap: space.l }}>
-        <Controller
+        <FormField
           control={control}
           name="mail"
-          render={({ field, fieldState }) => (
-            <Field
-              label="Mail address"
-              required
-              value={field.value}
-              onChangeText={field.onChange}
-              onBlur={field.onBlur}
-              onSubmit={() => void submit()}
-              error={fieldState.error?.message}
-              inputMode="email"
-              autoComplete="username"
-            />
-          )}
+          label="Mail address"
+          required
+          onSubmit={() => void submit()}
+          inputMode="email"
+          autoComplete="username"
         />
-        <Controller
+        <FormField
           control={control}
           name="password"
-          render={({ field, fieldState }) => (
-            <Field
-              label="Password"
-              required
-              secret
-              value={field.value}
-              onChangeText={field.onChange}
-              onBlur={field.onBlur}
-              onSubmit={() => void submit()}
-              error={fieldState.error?.message}
-              autoComplete="current-password"
-            />
-          )}
+          label="Password"
+          required
+          secret
+          onSubmit={() => void submit()}
+          autoComplete="current-password"
         />
         <BigAnswer
           kind="primary"

@@ -2,14 +2,14 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { Controller, useForm } from 'react-hook-form';
+import { useForm } from 'react-hook-form';
 import { View } from 'react-native';
 
 import { changePasswordBody, PASSWORD_LEAST } from '@/shared/contract/account';
 import { client } from '@/shared/ui/api/client';
 import { queryKeyOf } from '@/shared/ui/api/queries';
 import { Button } from '@/shared/ui/components/Button';
-import { Field } from '@/shared/ui/components/Field';
+import { FormField } from '@/shared/ui/components/FormField';
 import { Notice } from '@/shared/ui/components/Notice';
 import { Section } from '@/shared/ui/screens/shell/Section';
 import { space } from '@/shared/ui/theme/space';
@@ -35,30 +35,16 @@ export function ChangePassword() {
   return (
     <Section title="Change of password">
       <View style={{ gap: space.l, maxWidth: 520 }}>
-        <Controller
-          control={control}
-          name="password"
-          render={({ field, fieldState }) => (
-            <Field label="Password of now" required secret value={field.value} onChangeText={field.onChange} onBlur={field.onBlur} error={fieldState.error?.message} autoComplete="current-password" />
-          )}
-        />
-        <Controller
+        <FormField control={control} name="password" label="Password of now" required secret autoComplete="current-password" />
+        <FormField
           control={control}
           name="next"
-          render={({ field, fieldState }) => (
-            <Field
-              label="New password"
-              hint={`At least ${PASSWORD_LEAST} characters. Four words that do not belong together are easier to type in gloves than signs and figures.`}
-              required
-              secret
-              value={field.value}
-              onChangeText={field.onChange}
-              onBlur={field.onBlur}
-              onSubmit={() => void submit()}
-              error={fieldState.error?.message}
-              autoComplete="new-password"
-            />
-          )}
+          label="New password"
+          hint={`At least ${PASSWORD_LEAST} characters. Four words that do not belong together are easier to type in gloves than signs and figures.`}
+          required
+          secret
+          onSubmit={() => void submit()}
+          autoComplete="new-password"
         />
         <View style={{ alignItems: 'flex-start' }}>
           <Button kind="primary" label={formState.isSubmitting ? 'Changing …' : 'Change the password'} disabled={formState.isSubmitting} onPress={() => void submit()} />
