@@ -26,7 +26,7 @@ export function junctionDrawing(title: string, leads: readonly string[], ways: r
   const drawn = ways.filter((way) => way.conducts || way.accused);
   return {
     title,
-    nodes: leads.map((lead) => ({ id: lead, label: lead, volts: null, side: isLeft(lead) ? ('supply' as const) : ('load' as const) })),
+    nodes: leads.map((lead) => ({ id: lead, label: lead, side: isLeft(lead) ? ('supply' as const) : ('load' as const) })),
     branches: drawn.map(
       (way): CircuitBranch => ({
         id: `${way.red}-${way.black}`,
@@ -34,7 +34,6 @@ export function junctionDrawing(title: string, leads: readonly string[], ways: r
         label: `${way.red} to ${way.black}: ${way.shown ?? unread}`,
         from: way.red,
         to: way.black,
-        amps: null,
         lit: way.shown !== null && !way.accused,
         ...(way.accused ? { mark: 'accused' as const } : {}),
       }),

@@ -65,8 +65,8 @@ export interface Plot {
 export interface CircuitNode {
   readonly id: string;
   readonly label: string;
-  /** Against the reference; null where it is not known. */
-  readonly volts: number | null;
+  /** Against the reference; null where it is not known, absent where the drawing is not about volts. */
+  readonly volts?: number | null;
   /** At the supply it is drawn left, at the load right. Nodes are drawn from top to bottom in the order given. */
   readonly side: 'supply' | 'load';
   /** What is wrong with it, in a word or two, such as "reversed". */
@@ -84,8 +84,8 @@ export interface CircuitBranch {
   /** A diode's anode, a source's plus. */
   readonly from: string;
   readonly to: string;
-  /** Inside the branch from `from` to `to`, negative the other way; null where it is not known. */
-  readonly amps: number | null;
+  /** Inside the branch from `from` to `to`, negative the other way; null where it is not known, absent where the drawing is not about amps. */
+  readonly amps?: number | null;
   /** The branch that was taken out, or that a search accuses. */
   readonly mark?: 'opened' | 'accused';
   /** What is wrong with it, in a few words, such as "3 times its rating" or "in limit". */
@@ -156,9 +156,9 @@ export function circuitFaults(circuit: Circuit): readonly string[] {
   if (circuit.words.trim() === '') faults.push('It has no words.');
   for (const branch of circuit.branches) {
     for (const end of [branch.from, branch.to]) if (!ids.has(end)) faults.push(`${branch.label}: there is no node ${end}.`);
-    if (branch.amps !== null && !Number.isFinite(branch.amps)) faults.push(`${branch.label}: amps are not a finite number.`);
+    if (!Number.isFinite(branch.amps ?? 0)) faults.push(`${branch.label}: amps are not a finite number.`);
   }
   for (const node of circuit.nodes)
-    if (node.volts !== null && !Number.isFinite(node.volts)) faults.push(`${node.label}: volts are not a finite number.`);
+    if (!Number.isFinite(node.volts ?? 0)) faults.push(`${node.label}: volts are not a finite number.`);
   return faults;
 }

@@ -108,8 +108,8 @@ function plotOf(nominalVolts: number, guardVolts: number, result: RailLimitsResu
     y: { title: 'Off nominal', unit: '%', scale: 'linear', from: 0 },
     curves: [{ label: 'off nominal', points: sampleCurve(off, from, to), role: 'main' }],
     points: [
-      { label: formatQuantity(nominalVolts, 'V', { digits: 4 }), x: nominalVolts, y: 0, role: 'answer' },
-      ...(readingVolts === null ? [] : [{ label: formatQuantity(readingVolts, 'V', { digits: 4 }), x: readingVolts, y: off(readingVolts), role: 'reading' as const }]),
+      { label: 'nominal', x: nominalVolts, y: 0, role: 'answer' },
+      ...(readingVolts === null ? [] : [{ label: 'reading', x: readingVolts, y: off(readingVolts), role: 'reading' as const }]),
     ],
     bands: [
       ...(acceptLowVolts === null || acceptHighVolts === null

@@ -27,7 +27,7 @@ export function CircuitBranchLine({ placed }: { placed: PlacedBranch }) {
   const [mx, my] = [x1 + (x2 - x1) * share, y1 + (y2 - y1) * share];
   const [sx, sy] = level ? [mx, my - 21] : [mx + (numberAt === 'right' ? 24 : -24), my];
   const backwards = (branch.amps ?? 0) < 0;
-  const flows = !opened && branch.amps !== null && Math.abs(branch.amps) > LEAST_AMPS;
+  const flows = !opened && Math.abs(branch.amps ?? 0) > LEAST_AMPS;
   return (
     <G>
       {drops.map((drop) => (

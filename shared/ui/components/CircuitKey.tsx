@@ -10,9 +10,10 @@ import { space } from '@/shared/ui/theme/space';
 import { formatQuantity } from '@/shared/quantity/formatQuantity';
 import type { Circuit, CircuitBranch } from '@/shared/workings/plot';
 
-/** What a branch carries, or that it carries nothing because it is open. */
+/** What a branch carries, or that it carries nothing because it is open; nothing in a drawing that is not about amps. */
 export function currentWords({ amps, mark }: Pick<CircuitBranch, 'amps' | 'mark'>): string {
   if (mark === 'opened') return 'opened';
+  if (amps === undefined) return '';
   return amps === null ? 'not known' : formatQuantity(Math.abs(amps), 'A', { digits: 3 });
 }
 
@@ -33,10 +34,12 @@ export function CircuitKey({ circuit }: { circuit: Circuit }) {
           </View>
           <View style={{ flex: 1, minWidth: 0 }}>
             <BodyText size="small" bold={branch.trouble !== undefined || branch.mark !== undefined}>
-              {`${branch.label}${branch.label.toLowerCase().includes(CIRCUIT_KIND_WORDS[branch.kind]) ? '' : `, ${CIRCUIT_KIND_WORDS[branch.kind]}`}: `}
-              <Mono inline whole>
-                {currentWords(branch)}
-              </Mono>
+              {`${branch.label}${branch.label.toLowerCase().includes(CIRCUIT_KIND_WORDS[branch.kind]) ? '' : `, ${CIRCUIT_KIND_WORDS[branch.kind]}`}${currentWords(branch) === '' ? '' : ': '}`}
+              {currentWords(branch) === '' ? null : (
+                <Mono inline whole>
+                  {currentWords(branch)}
+                </Mono>
+              )}
               {branch.mark === 'accused' ? ', accused' : ''}
               {branch.trouble === undefined ? '' : `, ${branch.trouble}`}
             </BodyText>

@@ -43,8 +43,9 @@ const TOP = 34;
 const LETTER = 8.6;
 const FIGURE = 9.8;
 
-/** What stands at a node's rule, below its name. */
+/** What stands at a node's rule, below its name; nothing in a drawing that is not about volts. */
 export function voltsOf({ volts }: CircuitNode): string {
+  if (volts === undefined) return '';
   return volts === null ? 'not known' : formatQuantity(volts, 'V', { digits: 3 });
 }
 

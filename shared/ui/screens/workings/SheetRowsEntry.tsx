@@ -97,7 +97,7 @@ function Row({ list, row, shown, mayGo, onTurn, onRemove, onChange, ...standing 
     <View role="group" aria-label={within} style={{ borderWidth: line.hair, borderColor: colors.rule, backgroundColor: colors.raised }}>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.s, paddingLeft: space.m, minHeight: target.control }}>
         <View style={{ flex: 1, minWidth: 0, paddingVertical: space.xs }}>
-          <BodyText bold>{`${row + 1}  ${words.title}`}</BodyText>
+          <BodyText bold>{words.title === within ? within : `${row + 1}  ${words.title}`}</BodyText>
           {shown || words.detail === '' ? null : (
             <BodyText size="small" tone="soft">
               {words.detail}
